@@ -1,0 +1,68 @@
+import type { ColumnType, Generated, JSONColumnType } from 'kysely';
+import type { Role } from '@oriel/shared/contracts/role';
+import type { LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
+
+type Moment = ColumnType<Date, Date | string, Date | string>;
+type MomentByDefault = ColumnType<Date, Date | string | undefined, Date | string>;
+
+export interface Tables {
+  account: { id: Generated<string>; email: string; name: string; password_hash: string; created_at: MomentByDefault };
+  session: { sid: string; sess: JSONColumnType<Record<string, unknown>>; expire: Moment };
+  household: { id: Generated<string>; name: string; created_at: MomentByDefault };
+  membership: { household_id: string; account_id: string; role: Role; joined_at: MomentByDefault };
+  sign_up: {
+    token_hash: Buffer;
+    email: string;
+    name: string;
+    password_hash: string;
+    household_name: string;
+    expires_at: Moment;
+  };
+  password_reset: { token_hash: Buffer; account_id: string; expires_at: Moment };
+  invitation: {
+    id: Generated<string>;
+    token_hash: Buffer;
+    household_id: string;
+    email: string;
+    role: Role;
+    invited_by: string;
+    expires_at: Moment;
+  };
+  photo: {
+    id: Generated<string>;
+    household_id: string;
+    sha256: string;
+    name: string;
+    mime: string;
+    bytes: ColumnType<string, number, number>;
+    width: number;
+    height: number;
+    has_alpha: boolean;
+    taken_at: Moment;
+    uploaded_at: MomentByDefault;
+    uploaded_by: string | null;
+    state: ColumnType<'waiting' | 'ready' | 'failed', 'waiting' | 'ready' | 'failed' | undefined>;
+    problem: string | null;
+    placeholder: string | null;
+    binned_at: Moment | null;
+  };
+  layer_image: {
+    id: Generated<string>;
+    household_id: string;
+    sha256: string;
+    width: number;
+    height: number;
+    trim: JSONColumnType<LayerImage['trim']>;
+    created_at: MomentByDefault;
+  };
+  scene: {
+    id: Generated<string>;
+    household_id: string;
+    document: JSONColumnType<SceneDocument>;
+    revision: Generated<number>;
+    saved_at: MomentByDefault;
+    saved_by: string | null;
+    created_at: MomentByDefault;
+    binned_at: Moment | null;
+  };
+}
