@@ -1,0 +1,48 @@
+import { scaleRectangle } from './grow-to-cover';
+import { requireGlass } from './requirements';
+import type { PlacedLayer, SceneGeometry } from './scene-geometry';
+import type { Glass, Point3, ViewingZone } from './types';
+
+/** A scene carried to another glass: the factor, and the fitted glass, which is the part of the other glass it fills. */
+export interface Retargeted<L extends PlacedLayer = PlacedLayer> {
+  readonly factor: number;
+  readonly glass: Glass;
+  readonly homeEye: Point3;
+  readonly zone: ViewingZone;
+  readonly layers: L[];
+}
+
+/**
+ * A scene on another screen: glass, home eye, zone, layers and depths all scaled by one factor, which leaves every angle
+ * and so the whole appearance as it was. The factor is that of the largest glass of the scene's own shape that fits
+ * within the other one: the ratio of widths where the shapes agree ("scales with the width of the glass"), and of heights
+ * where the other glass is the wider in shape. What remains of the other glass is outside the scene and is left dark.
+ * Other properties of the layers are kept.
+ */
+export function retarget<L extends PlacedLayer>(
+  scene: Omit<SceneGeometry, 'layers'> & { readonly layers: readonly L[] },
+  otherGlass: Glass,
+): Retargeted<L> {
+  requireGlass(scene.glass);
+  requireGlass(otherGlass);
+  const { glass, homeEye, zone } = scene;
+  const factor = Math.min(otherGlass.widthMm / glass.widthMm, otherGlass.heightMm / glass.heightMm);
+  return {
+    factor,
+    glass: { widthMm: glass.widthMm * factor, heightMm: glass.heightMm * factor },
+    homeEye: { x: homeEye.x * factor, y: homeEye.y * factor, z: homeEye.z * factor },
+    zone: {
+      leftMm: zone.leftMm * factor,
+      rightMm: zone.rightMm * factor,
+      lowestMm: zone.lowestMm * factor,
+      highestMm: zone.highestMm * factor,
+      nearestMm: zone.nearestMm * factor,
+      farthestMm: zone.farthestMm * factor,
+    },
+    layers: scene.layers.map((layer) => ({
+      ...layer,
+      placed: scaleRectangle(layer.placed, factor),
+      depthMm: layer.depthMm * factor,
+    })),
+  };
+}
