@@ -1,0 +1,21 @@
+import type { Routes } from '@angular/router';
+import { forMembers, forStrangers } from './core/guards';
+
+export const routes: Routes = [
+  { path: 'play/:sceneId', canActivate: [forMembers], loadChildren: () => import('./player/player.routes').then((m) => m.playerRoutes) },
+  {
+    path: '',
+    canActivate: [forMembers],
+    loadComponent: () => import('./shell/shell').then((m) => m.Shell),
+    children: [
+      { path: '', pathMatch: 'full', redirectTo: 'scenes' },
+      { path: 'scenes', loadChildren: () => import('./scenes/scenes.routes').then((m) => m.scenesRoutes) },
+      { path: 'photos', loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
+      { path: 'household', loadChildren: () => import('./household/household.routes').then((m) => m.householdRoutes) },
+      { path: 'compose/:sceneId', loadChildren: () => import('./composer/composer.routes').then((m) => m.composerRoutes) },
+      { path: 'account', loadChildren: () => import('./account/settings.routes').then((m) => m.settingsRoutes) },
+    ],
+  },
+  { path: '', canActivateChild: [forStrangers], loadChildren: () => import('./account/account.routes').then((m) => m.accountRoutes) },
+  { path: '**', loadComponent: () => import('./shell/not-found').then((m) => m.NotFound) },
+];

@@ -1,0 +1,37 @@
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
+import { MatButton, MatIconButton } from '@angular/material/button';
+import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
+import { Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { Icon } from '../core/icon/icon';
+import { Light, type LightChoice } from '../core/light';
+import { Session } from '../core/session';
+
+/** The frame around every page for members: name, places, and the account's menu. */
+@Component({
+  selector: 'oriel-shell',
+  imports: [RouterOutlet, RouterLink, RouterLinkActive, MatButton, MatIconButton, MatMenu, MatMenuItem, MatMenuTrigger, Icon],
+  templateUrl: './shell.html',
+  styleUrl: './shell.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class Shell {
+  protected readonly session = inject(Session);
+  protected readonly light = inject(Light);
+  private readonly router = inject(Router);
+  protected readonly lights: readonly { choice: LightChoice; word: string; icon: 'system' | 'day' | 'evening' }[] = [
+    { choice: 'system', word: 'As the system', icon: 'system' },
+    { choice: 'day', word: 'Day', icon: 'day' },
+    { choice: 'evening', word: 'Evening', icon: 'evening' },
+  ];
+
+  protected async chooseHousehold(householdId: string): Promise<void> {
+    this.session.choose(householdId);
+    await this.router.navigateByUrl('/', { skipLocationChange: true });
+    await this.router.navigateByUrl('/scenes');
+  }
+
+  protected async signOut(): Promise<void> {
+    await this.session.leave();
+    await this.router.navigateByUrl('/sign-in');
+  }
+}
