@@ -9,6 +9,7 @@ export default defineConfig({
   test: {
     include: ['shared/**/*.spec.ts', 'server/**/*.spec.ts', 'tests/outside/**/*.spec.ts'],
     environment: 'node',
+    globalSetup: 'tests/start-postgres.ts',
     testTimeout: 30_000,
     hookTimeout: 60_000,
   },
