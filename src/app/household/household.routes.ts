@@ -1,3 +1,5 @@
 import type { Routes } from '@angular/router';
 
-export const householdRoutes: Routes = [];
+export const householdRoutes: Routes = [
+  { path: '', title: 'Household · Oriel', loadComponent: () => import('./household-page/household-page').then((m) => m.HouseholdPage) },
+];

@@ -1,0 +1,29 @@
+import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { type FormControl, ReactiveFormsModule } from '@angular/forms';
+import { MatError, MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
+import { MatInput } from '@angular/material/input';
+
+/** One labelled line of text, with the contract's words when it is not right. */
+@Component({
+  selector: 'oriel-text-field',
+  imports: [ReactiveFormsModule, MatFormField, MatLabel, MatInput, MatError, MatHint],
+  template: `
+    <mat-form-field>
+      <mat-label>{{ label() }}</mat-label>
+      <input matInput [formControl]="control()" [type]="type()" [autocomplete]="autocomplete()" />
+      @if (hint()) {
+        <mat-hint>{{ hint() }}</mat-hint>
+      }
+      <mat-error>{{ control().errors?.['contract'] }}</mat-error>
+    </mat-form-field>
+  `,
+  styles: ':host, mat-form-field { display: block; width: 100%; }',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class TextField {
+  readonly control = input.required<FormControl<string>>();
+  readonly label = input.required<string>();
+  readonly type = input<'text' | 'email' | 'password'>('text');
+  readonly autocomplete = input('off');
+  readonly hint = input('');
+}
