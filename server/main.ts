@@ -3,18 +3,22 @@ import { pino } from 'pino';
 import { createApp } from './app';
 import { readConfig } from './config';
 import { connect, migrate } from './database/database';
-import { healthRoutes } from './health/health-routes';
+import { createMailer, smtpDelivery } from './mail/mailer';
+import { assemble } from './parts';
 
 const config = readConfig(process.env);
 const log = pino({ level: config.logLevel });
 const connection = connect(config.databaseUrl, (error) => log.warn({ err: error }, 'a database connection was lost'));
 await migrate(connection.db);
 
-const { express } = createApp(config, connection, log, [healthRoutes(connection.db)]);
+let draining = false;
+const mailer = createMailer(smtpDelivery(config.smtpUrl ?? 'smtp://127.0.0.1:2525', config.mailFrom), log);
+const { express } = createApp(assemble({ config, connection, log, mailer, mailPage: null, draining: () => draining }));
 const server = createServer(express);
 server.listen(config.port, config.host, () => log.info({ address: config.publicUrl }, 'serving'));
 
 const stop = () => {
+  draining = true;
   server.close(() => void connection.db.destroy().then(() => process.exit(0)));
   server.closeIdleConnections();
 };

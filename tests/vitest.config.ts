@@ -3,14 +3,18 @@ import { defineConfig } from 'vitest/config';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 
+/** Two projects, so that the mathematics never waits for a database. */
 export default defineConfig({
   root,
   resolve: { alias: { '@oriel/shared': `${root}shared` } },
   test: {
-    include: ['shared/**/*.spec.ts', 'server/**/*.spec.ts', 'tests/outside/**/*.spec.ts'],
     environment: 'node',
     globalSetup: 'tests/start-postgres.ts',
     testTimeout: 30_000,
     hookTimeout: 60_000,
+    projects: [
+      { extends: true, test: { name: 'shared', include: ['shared/**/*.spec.ts', 'tests/outside/**/*.spec.ts'] } },
+      { extends: true, test: { name: 'server', include: ['server/**/*.spec.ts'], globalSetup: 'server/testing/global-setup.ts' } },
+    ],
   },
 });

@@ -1,16 +1,19 @@
 import { sql } from 'kysely';
 import { health, readiness } from '@oriel/shared/contracts/health';
-import type { Feature } from '../app';
-import type { Database } from '../database/database';
 import { DomainFailure } from '../http/failure';
+import type { Feature } from '../http/mount';
+import type { Parts } from '../parts';
+
+const notReady = (message: string, remedy: string) => new DomainFailure(503, 'not-ready', message, remedy);
 
 export const healthRoutes =
-  (db: Database): Feature =>
+  ({ connection, draining }: Parts): Feature =>
   (mount) => {
     mount(health, () => ({ state: 'running' }) as const);
     mount(readiness, async () => {
-      await sql`select 1`.execute(db).catch(() => {
-        throw new DomainFailure(503, 'not-ready', 'The database does not answer.', 'Wait a moment; Oriel tries again by itself.');
+      if (draining()) throw notReady('This server is stopping.', 'Ask again in a moment.');
+      await sql`select 1`.execute(connection.db).catch(() => {
+        throw notReady('The database does not answer.', 'Wait a moment; Oriel tries again by itself.');
       });
       return { state: 'ready' } as const;
     });

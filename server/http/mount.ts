@@ -23,9 +23,12 @@ export type Mount = <P extends z.ZodType, Q extends z.ZodType, B extends z.ZodTy
   receive?: RequestHandler,
 ) => void;
 
+/** One feature's routes, put on the server. */
+export type Feature = (mount: Mount) => void;
+
 /**
- * Makes the `mount` of one router: a route of the contract is admitted by its access rule, received (`receive` takes a multipart body,
- * only after admission), parsed by its schemas, handled, and answered by its reply schema, which also drops whatever it does not name.
+ * Makes the `mount` of one router: a route of the contract is admitted by its access rule, received (`receive` takes
+ * a multipart body or counts against a limit, only after admission), parsed by its schemas, handled, and answered by its reply schema, which also drops whatever it does not name.
  * A handler of a file route writes the response itself.
  */
 export function mountOn(router: Router, db: Database, mounted: (route: Route) => void): Mount {

@@ -1,5 +1,5 @@
 import { createHmac, randomBytes, timingSafeEqual } from 'node:crypto';
-import type { RequestHandler } from 'express';
+import type { RequestHandler, Response } from 'express';
 import { DomainFailure } from './failure';
 
 /** Angular's own names, so that its client sends the header back unasked. */
@@ -7,39 +7,57 @@ const cookieName = 'XSRF-TOKEN';
 const headerName = 'x-xsrf-token';
 const safe = new Set(['GET', 'HEAD', 'OPTIONS']);
 
+export interface Xsrf {
+  /** Refuses what changes something without proof that our own page asks; hands out the proof. */
+  readonly guard: RequestHandler;
+  /** Hands out a proof for another session: after signing in (its id) or out (null). */
+  renew(response: Response, sessionId: string | null): void;
+}
+
 const readCookie = (header: string | undefined, name: string) =>
-  header?.split(';').map((pair) => pair.trim()).find((pair) => pair.startsWith(`${name}=`))?.slice(name.length + 1);
+  header
+    ?.split(';')
+    .map((pair) => pair.trim())
+    .find((pair) => pair.startsWith(`${name}=`))
+    ?.slice(name.length + 1);
+
+const stalePage = () =>
+  new DomainFailure(403, 'stale-page', 'This page has been open since before you signed in or out.', 'Try again; if it keeps failing, reload the page.');
+const otherSite = () =>
+  new DomainFailure(403, 'other-site', 'This request came from another site.', 'Open Oriel at its own address and do it there.');
 
 /**
- * Signed double-submit cookie (OWASP, Cross-Site Request Forgery Prevention): token = nonce.HMAC(secret, session id + nonce), bound to the
- * session once there is one. A request that changes something must carry the cookie's value in a header too, which another site cannot read.
+ * Signed double-submit cookie (OWASP, *Cross-Site Request Forgery Prevention*): token = nonce.HMAC(secret, session id ! nonce). A request
+ * that changes something must carry the cookie's value in a header too, which another site cannot read. Browsers that say where a request
+ * comes from (W3C Fetch Metadata) are held to it as well.
  */
-export function guardXsrf(secret: string, secure: boolean): RequestHandler {
-  const sign = (nonce: string, session: string) => createHmac('sha256', secret).update(`${session}!${nonce}`).digest('base64url');
+export function createXsrf(secret: string, secure: boolean): Xsrf {
+  const key = createHmac('sha256', secret).update('xsrf').digest();
+  const sign = (nonce: string, session: string) => createHmac('sha256', key).update(`${session}!${nonce}`).digest('base64url');
   const valid = (token: string, session: string) => {
     const [nonce = '', signature = ''] = token.split('.');
     const expected = Buffer.from(sign(nonce, session));
     const given = Buffer.from(signature);
     return expected.length === given.length && timingSafeEqual(expected, given);
   };
+  const renew: Xsrf['renew'] = (response, sessionId) => {
+    const nonce = randomBytes(18).toString('base64url');
+    response.cookie(cookieName, `${nonce}.${sign(nonce, sessionId ?? '')}`, { sameSite: 'lax', secure, path: '/' });
+  };
 
-  return (request, response, next) => {
-    const session = request.session.accountId ? request.sessionID : '';
-    const cookie = readCookie(request.headers.cookie, cookieName) ?? '';
-    const cookieIsValid = valid(cookie, session);
-    if (!safe.has(request.method)) {
-      const header = request.get(headerName) ?? '';
-      if (!cookieIsValid || header !== cookie)
-        return next(new DomainFailure(403, 'stale-page', 'This page has been open since before you signed in or out.', 'Try again; if it keeps failing, reload the page.'));
-      return next();
-    }
-    if (!cookieIsValid) giveXsrfToken(request.sessionID);
-    next();
+  return {
+    renew,
+    guard: (request, response, next) => {
+      const session = request.session.accountId ? request.sessionID : null;
+      const cookie = readCookie(request.headers.cookie, cookieName) ?? '';
+      const cookieIsValid = valid(cookie, session ?? '');
+      if (!cookieIsValid) renew(response, session);
+      if (safe.has(request.method)) return next();
 
-    function giveXsrfToken(sessionId: string) {
-      const nonce = randomBytes(18).toString('base64url');
-      const bound = request.session.accountId ? sessionId : '';
-      response.cookie(cookieName, `${nonce}.${sign(nonce, bound)}`, { sameSite: 'lax', secure, path: '/' });
-    }
+      const site = request.get('sec-fetch-site') ?? 'none';
+      if (site !== 'same-origin' && site !== 'none') return next(otherSite());
+      if (!cookieIsValid || request.get(headerName) !== cookie) return next(stalePage());
+      next();
+    },
   };
 }

@@ -1,0 +1,12 @@
+import { createHash, randomBytes } from 'node:crypto';
+
+/** What the database keeps of a mailed secret: whoever reads the table cannot use its links. */
+export const hashOfToken = (token: string): Buffer => createHash('sha256').update(token).digest();
+
+/** A secret for a mailed link: 32 random bytes, base64url, beside its hash. */
+export function makeToken(): { token: string; hash: Buffer } {
+  const token = randomBytes(32).toString('base64url');
+  return { token, hash: hashOfToken(token) };
+}
+
+export const hoursFromNow = (hours: number): Date => new Date(Date.now() + hours * 3_600_000);

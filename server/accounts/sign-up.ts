@@ -1,0 +1,57 @@
+import type { Database } from '../database/database';
+import { DomainFailure } from '../http/failure';
+import { createHousehold } from '../households/household-store';
+import type { Mailer } from '../mail/mailer';
+import { alreadyHereLetter, confirmLetter } from './account-letters';
+import { accountByEmail, createAccount } from './account-store';
+import { hashOfToken, hoursFromNow, makeToken } from './mailed-token';
+import type { Passwords } from './passwords';
+
+export interface SignUp {
+  readonly name: string;
+  readonly email: string;
+  readonly password: string;
+  readonly householdName: string;
+}
+
+const confirmHours = 24;
+
+export const linkSpent = (remedy: string) =>
+  new DomainFailure(410, 'link-spent', 'This link has been used already, has expired, or is not whole.', remedy);
+
+export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords, publicUrl: string) {
+  return {
+    /** Does the same work and says the same whether the address is known or not; the mail tells its holder which. */
+    async ask({ name, email, password, householdName }: SignUp): Promise<void> {
+      const { token, hash } = makeToken();
+      const passwordHash = await passwords.hash(password);
+      const known = await accountByEmail(db, email);
+      await db.deleteFrom('sign_up').where('expires_at', '<', new Date()).execute();
+      if (known) return mailer.send(alreadyHereLetter(email, publicUrl));
+      await db
+        .insertInto('sign_up')
+        .values({ token_hash: hash, email, name, password_hash: passwordHash, household_name: householdName, expires_at: hoursFromNow(confirmHours) })
+        .execute();
+      mailer.send(confirmLetter(email, publicUrl, token));
+    },
+
+    /** Makes the account, its household and its ownership at once. @returns the account's id. @throws link-spent, already-confirmed */
+    async confirm(token: string): Promise<string> {
+      return db.transaction().execute(async (change) => {
+        const asked = await change
+          .deleteFrom('sign_up')
+          .where('token_hash', '=', hashOfToken(token))
+          .where('expires_at', '>', new Date())
+          .returningAll()
+          .executeTakeFirst();
+        if (!asked) throw linkSpent('Sign in if you have confirmed before; otherwise sign up again.');
+        const accountId = await createAccount(change, { email: asked.email, name: asked.name, passwordHash: asked.password_hash });
+        if (!accountId)
+          throw new DomainFailure(409, 'already-confirmed', 'This address has an account already.', 'Sign in, or set a new password.');
+        await change.deleteFrom('sign_up').where('email', '=', asked.email).execute();
+        await createHousehold(change, asked.household_name, accountId);
+        return accountId;
+      });
+    },
+  };
+}

@@ -1,0 +1,60 @@
+import type { NextFunction, Request, RequestHandler, Response } from 'express';
+import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
+import { DomainFailure } from './failure';
+
+/** How many requests in how long. */
+export interface Allowance {
+  readonly tries: number;
+  readonly windowMs: number;
+}
+export interface LimitSettings {
+  readonly passwordsByAccount: Allowance;
+  readonly passwordsByAddress: Allowance;
+  readonly mailsByAccount: Allowance;
+  readonly mailsByAddress: Allowance;
+}
+
+const minuteMs = 60_000;
+export const usualLimits: LimitSettings = {
+  passwordsByAccount: { tries: 10, windowMs: 15 * minuteMs },
+  passwordsByAddress: { tries: 50, windowMs: 15 * minuteMs },
+  mailsByAccount: { tries: 5, windowMs: 60 * minuteMs },
+  mailsByAddress: { tries: 60, windowMs: 60 * minuteMs },
+};
+
+/**
+ * Limits against guessing and against flooding somebody's mailbox, each by account and by network address. Whether the account exists
+ * makes no difference. Counted in this process's memory: several servers behind one balancer would each count for themselves, and a
+ * restart forgets; rateLimit takes a shared `store` when that day comes.
+ */
+export interface Limits {
+  /** For routes that try a password; only failures count. */
+  readonly passwords: RequestHandler;
+  /** For routes that send a mail to an address someone typed. */
+  readonly mails: RequestHandler;
+}
+
+const typedEmail = (request: Request): string => {
+  const body: unknown = request.body;
+  const email = typeof body === 'object' && body !== null && 'email' in body ? body.email : '';
+  return typeof email === 'string' ? email.trim().toLowerCase() : '';
+};
+const account = (request: Request) => typedEmail(request) || (request.session.accountId ?? '');
+const address = (request: Request) => ipKeyGenerator(request.ip ?? '');
+
+const tooManyTries = (_request: Request, response: Response, next: NextFunction) => {
+  const minutes = Math.max(1, Math.ceil(Number(response.getHeader('retry-after')) / 60));
+  next(new DomainFailure(429, 'too-many-tries', 'There were too many tries.', `Wait ${minutes === 1 ? 'a minute' : `${minutes} minutes`} and try again.`));
+};
+
+export function createLimits(settings: LimitSettings): Limits {
+  const limit = ({ tries, windowMs }: Allowance, keyGenerator: (request: Request) => string, skipSuccessfulRequests: boolean) =>
+    rateLimit({ windowMs, limit: tries, keyGenerator, skipSuccessfulRequests, handler: tooManyTries, standardHeaders: false, legacyHeaders: true });
+  const both = (first: RequestHandler, second: RequestHandler): RequestHandler => (request, response, next) =>
+    void first(request, response, (error?: unknown) => (error ? next(error) : void second(request, response, next)));
+
+  return {
+    passwords: both(limit(settings.passwordsByAddress, address, true), limit(settings.passwordsByAccount, account, true)),
+    mails: both(limit(settings.mailsByAddress, address, false), limit(settings.mailsByAccount, account, false)),
+  };
+}

@@ -1,0 +1,54 @@
+import type { Logger } from 'pino';
+import { createPasswords, type Passwords } from './accounts/passwords';
+import { createSessions, type Sessions } from './accounts/sessions';
+import type { Config } from './config';
+import type { Connection } from './database/database';
+import { createLimits, usualLimits, type LimitSettings, type Limits } from './http/limits';
+import { sessionCookie, type SessionCookie } from './http/session-cookie';
+import { createXsrf, type Xsrf } from './http/xsrf';
+import type { MailPage } from './mail/mail-page';
+import type { Mailer } from './mail/mailer';
+
+/** What the features are built from; main.ts and the tests make it in their own ways. */
+export interface Parts {
+  readonly config: Config;
+  readonly connection: Connection;
+  readonly log: Logger;
+  readonly mailer: Mailer;
+  /** Where sent mail is shown, on a server without a mail server. */
+  readonly mailPage: MailPage | null;
+  readonly passwords: Passwords;
+  readonly cookie: SessionCookie;
+  readonly xsrf: Xsrf;
+  readonly sessions: Sessions;
+  readonly limits: Limits;
+  /** True once the server has been asked to stop: it finishes what it has and takes nothing new. */
+  readonly draining: () => boolean;
+}
+
+/** What differs from server to server. */
+export interface Given {
+  readonly config: Config;
+  readonly connection: Connection;
+  readonly log: Logger;
+  readonly mailer: Mailer;
+  readonly mailPage: MailPage | null;
+  readonly draining: () => boolean;
+  /** log2 of bcrypt's rounds. */
+  readonly passwordCost?: number;
+  readonly limits?: LimitSettings;
+}
+
+export function assemble({ passwordCost, limits = usualLimits, ...given }: Given): Parts {
+  const secure = given.config.publicUrl.startsWith('https:');
+  const cookie = sessionCookie(secure);
+  const xsrf = createXsrf(given.config.sessionSecret, secure);
+  return {
+    ...given,
+    passwords: createPasswords(passwordCost),
+    cookie,
+    xsrf,
+    sessions: createSessions(given.connection.db, xsrf, cookie),
+    limits: createLimits(limits),
+  };
+}

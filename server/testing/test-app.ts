@@ -1,0 +1,128 @@
+import { mkdtemp, rm, writeFile, mkdir } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { Writable } from 'node:stream';
+import type { Express } from 'express';
+import { pino } from 'pino';
+import type { Role } from '@oriel/shared/contracts/role';
+import type { Route } from '@oriel/shared/contracts/route';
+import { createAccount } from '../accounts/account-store';
+import { createApp } from '../app';
+import { readConfig } from '../config';
+import type { Database } from '../database/database';
+import { addMember, createHousehold } from '../households/household-store';
+import { usualLimits, type LimitSettings } from '../http/limits';
+import { createMailer, type Mail, type Mailer } from '../mail/mailer';
+import { assemble, type Given, type Parts } from '../parts';
+import { Browser } from './browser';
+import { createTestDatabase } from './test-database';
+
+export const testPassword = 'plaster ink brass';
+
+export interface TestAccount {
+  readonly id: string;
+  readonly email: string;
+}
+export interface SignedIn extends TestAccount {
+  readonly browser: Browser;
+}
+
+export interface TestApp {
+  readonly express: Express;
+  readonly mounted: readonly Route[];
+  readonly db: Database;
+  readonly parts: Parts;
+  /** What was logged, one JSON object a line. */
+  log(): string;
+  /** Every mail sent so far to an address, the newest last. */
+  mailTo(email: string): Promise<readonly Mail[]>;
+  browser(): Browser;
+  /** A new account with testPassword, in no household. */
+  account(name?: string): Promise<TestAccount>;
+  /** A new household and its owner. */
+  household(name?: string): Promise<{ readonly id: string; readonly ownerId: string }>;
+  signIn(email: string): Promise<Browser>;
+  /** A new account with that role in the household (null: in none), signed in. */
+  signedIn(role: Role | null, householdId?: string): Promise<SignedIn>;
+  close(): Promise<void>;
+}
+
+const manyTries = { tries: 10_000, windowMs: 60_000 };
+const noLimits = Object.fromEntries(Object.keys(usualLimits).map((name) => [name, manyTries])) as unknown as LimitSettings;
+
+/** The whole server on a database, a storage folder and a mailbox of its own. Only the password cost and the limits are lower than in earnest. */
+export async function createTestApp(different: Partial<Given> & { environment?: Record<string, string> } = {}): Promise<TestApp> {
+  const { environment, ...given } = different;
+  const database = await createTestDatabase();
+  const { db } = database.connection;
+  const folder = await mkdtemp(join(tmpdir(), 'oriel-test-'));
+  await mkdir(join(folder, 'web'));
+  await writeFile(join(folder, 'web', 'index.html'), '<!doctype html><title>Oriel</title>');
+
+  const logged: string[] = [];
+  const log = pino({ level: 'debug' }, new Writable({ write: (chunk, _encoding, done) => (logged.push(String(chunk)), done()) }));
+  const mails: Mail[] = [];
+  const mailer: Mailer = createMailer((mail) => Promise.resolve(void mails.push(mail)), log);
+  const config = readConfig({
+    DATABASE_URL: database.url,
+    SESSION_SECRET: 'a secret for tests, longer than thirty-two characters',
+    STORAGE_DIR: join(folder, 'storage'),
+    WEB_DIR: join(folder, 'web'),
+    ASSETS_DIR: 'assets',
+    ...environment,
+  });
+  const parts = assemble({
+    config,
+    connection: database.connection,
+    log,
+    mailer,
+    mailPage: null,
+    draining: () => false,
+    passwordCost: 4,
+    limits: noLimits,
+    ...given,
+  });
+  const app = createApp(parts);
+
+  let made = 0;
+  const account = async (name = 'Test person'): Promise<TestAccount> => {
+    const email = `person${++made}@example.org`;
+    const id = await createAccount(db, { email, name, passwordHash: await parts.passwords.hash(testPassword) });
+    return { id: id!, email };
+  };
+  const household = async (name = 'Test household') => {
+    const ownerId = (await account('Owner')).id;
+    return { id: await createHousehold(db, name, ownerId), ownerId };
+  };
+  const signIn = async (email: string) => {
+    const browser = new Browser(app.express);
+    const answer = await browser.ask('post', '/api/session', { email, password: testPassword });
+    if (answer.status !== 200) throw new Error(`could not sign in: ${answer.text}`);
+    return browser;
+  };
+
+  return {
+    ...app,
+    db,
+    parts,
+    log: () => logged.join(''),
+    mailTo: async (email) => {
+      await parts.mailer.settled();
+      return mails.filter((mail) => mail.to === email);
+    },
+    browser: () => new Browser(app.express),
+    account,
+    household,
+    signIn,
+    signedIn: async (role, householdId) => {
+      const person = await account();
+      if (role) await addMember(db, householdId ?? (await household()).id, person.id, role);
+      return { ...person, browser: await signIn(person.email) };
+    },
+    close: async () => {
+      await parts.mailer.settled();
+      await database.drop();
+      await rm(folder, { recursive: true, force: true });
+    },
+  };
+}
