@@ -9,7 +9,6 @@ export default defineConfig({
   resolve: { alias: { '@oriel/shared': `${root}shared` } },
   test: {
     environment: 'node',
-    globalSetup: 'tests/start-postgres.ts',
     testTimeout: 30_000,
     hookTimeout: 60_000,
     projects: [

@@ -10,30 +10,31 @@ declare module 'vitest' {
   }
 }
 
-const templateName = 'oriel_test_template';
-
 /** The PostgreSQL the tests use: TEST_DATABASE_URL, or a private one on loopback, started here and stopped at the end. */
 async function findServer(): Promise<{ url: string; stop: () => Promise<void> }> {
   const given = process.env['TEST_DATABASE_URL'];
   if (given) return { url: given, stop: () => Promise.resolve() };
-  const { startPostgres } = (await import('../../scripts/postgres.mjs')) as {
-    startPostgres: (settings: { dataDir: string }) => Promise<{ url: string; stop: () => Promise<void> }>;
-  };
-  return startPostgres({ dataDir: '.oriel/test-postgres' });
+  const { startPostgres } = await import('../../scripts/postgres.mjs');
+  return startPostgres({ dataDir: '.oriel/test-postgres', durable: false });
+}
+
+async function asAdmin(url: string, statement: string): Promise<void> {
+  const admin = new pg.Client({ connectionString: url });
+  await admin.connect();
+  await admin.query(statement).finally(() => admin.end());
 }
 
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
   const { url, stop } = await findServer();
-  const admin = new pg.Client({ connectionString: url });
-  await admin.connect();
-  await admin.query(`drop database if exists ${templateName} with (force)`);
-  await admin.query(`create database ${templateName}`);
-  await admin.end();
-
-  const templateUrl = withDatabase(url, templateName);
+  const template = `oriel_test_template_${process.pid}`;
+  await asAdmin(url, `create database ${template}`);
+  const templateUrl = withDatabase(url, template);
   const connection = connect(templateUrl, () => undefined);
   await migrate(connection.db);
   await connection.db.destroy();
   project.provide('templateUrl', templateUrl);
-  return stop;
+  return async () => {
+    await asAdmin(url, `drop database ${template} with (force)`);
+    await stop();
+  };
 }
