@@ -1,0 +1,3 @@
+import { bundleServer } from './build/bundle-server.mjs';
+
+await bundleServer();
