@@ -1,0 +1,20 @@
+import type { Point3 } from '@oriel/shared/projection/types';
+import type { StageTimings } from './tracking-messages';
+
+/**
+ * One look at the viewer. The tracking service hands out the same object every time, so that following allocates nothing:
+ * copy what must be kept.
+ */
+export interface EyeSample {
+  /** Whether a face was found; where not, `eye` still holds the last place it was seen. */
+  readonly found: boolean;
+  /** The eye in millimetres from the centre of the glass: x to the viewer's right, y up, z out of the glass. */
+  readonly eye: Point3;
+  /** When the frame was captured, on the page's `performance.now()` clock; when it arrived, until the camera's clock is known. */
+  readonly capturedMs: number;
+  /** When the sample reached the page, on the same clock. */
+  readonly receivedMs: number;
+  /** Whether `capturedMs` is the camera's own time, and not that of arrival. */
+  readonly captureTimeKnown: boolean;
+  readonly timings: StageTimings;
+}

@@ -1,0 +1,206 @@
+import { DOCUMENT, DestroyRef, Injectable, inject, signal } from '@angular/core';
+import { requestCamera } from './camera-request';
+import type { EyeSample } from './eye-sample';
+import type { FrameFeed } from './frame-feed';
+import { glassEye, type Camera } from './glass-eye';
+import type { FromTracker, SampleMessage, ToTracker, TrackerSettings } from './tracking-messages';
+import type { TrackingState } from './tracking-state';
+import { CAMERAS, FRAME_FEED, TRACKING_WORKER } from './tracking-surroundings';
+
+/** What following needs to know of this screen and this viewer. */
+export interface TrackingSetUp {
+  /** Position, turn and field of view of the camera against the glass. */
+  readonly camera: Camera;
+  /** Distance between the viewer's pupils; 63 mm until measured. */
+  readonly ipdMm: number;
+  /** Measured over true distance for this viewer, set once at a known distance; 1 until then. */
+  readonly scaleFactor: number;
+}
+
+/** Without a camera, or with one in use elsewhere, it is asked for again this often. */
+const RETRY_MS = 5000;
+const RATE_MS = 1000;
+
+type Mutable<T> = { -readonly [K in keyof T]: T[K] };
+
+/**
+ * Follows a face through the camera: asks for it, feeds its frames to the tracking worker and hands out where the eye is.
+ * Provide it in the component that follows; everything is freed when that component goes. A camera lost is asked for again by itself.
+ * No picture leaves the page or is kept.
+ */
+@Injectable()
+export class FaceTracking {
+  private readonly cameras = inject(CAMERAS);
+  private readonly makeWorker = inject(TRACKING_WORKER);
+  private readonly feedFrames = inject(FRAME_FEED);
+  private readonly assetsUrl = new URL('assets/tracker/', inject(DOCUMENT).baseURI).href;
+
+  private readonly currentState = signal<TrackingState>('off');
+  /** Where following stands. */
+  readonly state = this.currentState.asReadonly();
+  private readonly rate = signal(0);
+  /** Faces followed a second, measured over the last second. */
+  readonly facesPerSecond = this.rate.asReadonly();
+
+  private readonly listeners = new Set<(sample: EyeSample) => void>();
+  private readonly sample: Mutable<EyeSample> = {
+    found: false,
+    eye: { x: 0, y: 0, z: 0 },
+    capturedMs: 0,
+    receivedMs: 0,
+    captureTimeKnown: false,
+    timings: { cropMs: 0, detectMs: 0, landmarksMs: 0, totalMs: 0 },
+  };
+  private setUp: TrackingSetUp | null = null;
+  private stream: MediaStream | null = null;
+  private worker: Worker | null = null;
+  private feed: FrameFeed | null = null;
+  private retry: ReturnType<typeof setTimeout> | undefined;
+  private counter: ReturnType<typeof setInterval> | undefined;
+  private faces = 0;
+  /** Counts starts and stops, so that an answer that comes after a stop is known for stale. */
+  private attempt = 0;
+
+  constructor() {
+    this.cameras?.addEventListener('devicechange', this.camerasChanged);
+    inject(DestroyRef).onDestroy(() => {
+      this.stop();
+      this.listeners.clear();
+      this.cameras?.removeEventListener('devicechange', this.camerasChanged);
+    });
+  }
+
+  /** Asks for the camera and starts following; safe to call in any state. Never throws: what went wrong is in `state`. */
+  async start(setUp: TrackingSetUp): Promise<void> {
+    this.stop();
+    this.setUp = setUp;
+    const attempt = this.attempt;
+    if (!this.cameras || !this.makeWorker) {
+      this.currentState.set('unsupported');
+      return;
+    }
+    this.currentState.set('asking');
+    const answer = await requestCamera(this.cameras);
+    if (attempt !== this.attempt) {
+      if (answer.given) endTracks(answer.stream);
+      return;
+    }
+    if (!answer.given) return this.goWithout(answer.why);
+    this.stream = answer.stream;
+    this.currentState.set('starting');
+    answer.stream.getVideoTracks()[0].addEventListener('ended', () => {
+      if (attempt === this.attempt) this.goWithout('no-camera');
+    });
+    this.startWorker(this.makeWorker(), setUp);
+    this.counter = setInterval(() => this.count(), RATE_MS);
+  }
+
+  /** Takes a changed set-up of screen or viewer into use at once, without asking for the camera again. */
+  change(setUp: TrackingSetUp): void {
+    this.setUp = setUp;
+    this.tell({ type: 'settings', settings: this.settingsFor(setUp) });
+  }
+
+  /** Releases the camera, ends the worker and forgets the viewer. */
+  stop(): void {
+    this.release();
+    this.setUp = null;
+    this.currentState.set('off');
+  }
+
+  /**
+   * Calls back with every frame looked at, face or none, until the returned function is called. The sample is the same object each time:
+   * copy what must be kept. Called outside of change detection.
+   */
+  watch(listener: (sample: EyeSample) => void): () => void {
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  }
+
+  private readonly camerasChanged = (): void => {
+    if (this.setUp && !this.stream && this.currentState() !== 'asking') void this.start(this.setUp);
+  };
+
+  private startWorker(worker: Worker, setUp: TrackingSetUp): void {
+    this.worker = worker;
+    worker.onmessage = ({ data }: MessageEvent<FromTracker>) => this.hear(data);
+    worker.onerror = () => this.goWithout('failed');
+    this.tell({ type: 'start', settings: this.settingsFor(setUp) });
+  }
+
+  private hear(message: FromTracker): void {
+    switch (message.type) {
+      case 'ready':
+        if (this.stream && this.worker)
+          this.feed = this.feedFrames(this.stream.getVideoTracks()[0], this.worker, message.readsTracks);
+        return;
+      case 'sample':
+        return this.take(message);
+      case 'ended':
+        return this.goWithout('no-camera');
+      case 'failed':
+        return this.goWithout('failed');
+    }
+  }
+
+  private take({ timestampMs, face, timings }: SampleMessage): void {
+    if (!this.feed || !this.setUp) return;
+    this.feed.answered(timestampMs);
+    const { sample } = this;
+    const capturedMs = this.feed.capturedMs(timestampMs);
+    sample.receivedMs = performance.now();
+    sample.capturedMs = capturedMs ?? sample.receivedMs;
+    sample.captureTimeKnown = capturedMs !== null;
+    sample.found = face !== null;
+    sample.timings = timings;
+    if (face) {
+      this.faces++;
+      sample.eye = glassEye(this.setUp.camera, face.eyeCamera);
+    }
+    this.currentState.set(face ? 'following' : 'nobody');
+    for (const listener of this.listeners) listener(sample);
+  }
+
+  /** Says why there is no following, frees everything, and tries again later where that can help. */
+  private goWithout(why: TrackingState): void {
+    const { setUp } = this;
+    this.release();
+    this.currentState.set(why);
+    if (setUp && why !== 'refused' && why !== 'unsupported')
+      this.retry = setTimeout(() => void this.start(setUp), RETRY_MS);
+  }
+
+  private release(): void {
+    this.attempt++;
+    clearTimeout(this.retry);
+    clearInterval(this.counter);
+    this.feed?.stop();
+    this.worker?.terminate();
+    if (this.stream) endTracks(this.stream);
+    this.feed = this.worker = this.stream = null;
+    this.faces = 0;
+    this.rate.set(0);
+  }
+
+  private count(): void {
+    this.rate.set(this.faces);
+    this.faces = 0;
+  }
+
+  private tell(message: ToTracker): void {
+    this.worker?.postMessage(message);
+  }
+
+  private settingsFor(setUp: TrackingSetUp): TrackerSettings {
+    return {
+      assetsUrl: this.assetsUrl,
+      hfovRad: setUp.camera.hfovRad,
+      ipdMm: setUp.ipdMm,
+      scaleFactor: setUp.scaleFactor,
+    };
+  }
+}
+
+function endTracks(stream: MediaStream): void {
+  for (const track of stream.getTracks()) track.stop();
+}

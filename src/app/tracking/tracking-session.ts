@@ -1,0 +1,107 @@
+import { faceSample } from './face-sample';
+import type { FaceModels } from './face-models';
+import { FrameReader } from './frame-picture';
+import { loadFaceModels } from './tfjs-face-models';
+import { framesOf, readsTracks } from './track-processor';
+import { Tracker } from './tracker';
+import type { FromTracker, ToTracker, TrackerSettings } from './tracking-messages';
+
+/** What the worker does with each message; the worker itself only passes messages. Frames are closed whatever happens to them. */
+export class TrackingSession {
+  private readonly frames = new FrameReader();
+  private models: FaceModels | null = null;
+  private tracker: Tracker | null = null;
+  private settings: TrackerSettings | null = null;
+  private reader: ReadableStreamDefaultReader<VideoFrame> | null = null;
+
+  constructor(private readonly say: (message: FromTracker) => void) {}
+
+  /** Acts on a message; what fails is said, not thrown. */
+  async hear(message: ToTracker): Promise<void> {
+    try {
+      await this.act(message);
+    } catch (cause) {
+      this.say({ type: 'failed', reason: cause instanceof Error ? cause.message : String(cause) });
+    }
+  }
+
+  private async act(message: ToTracker): Promise<void> {
+    switch (message.type) {
+      case 'start':
+        return this.start(message.settings);
+      case 'settings':
+        this.settings = message.settings;
+        return;
+      case 'stream':
+        return this.follow(message.frames);
+      case 'track':
+        return this.follow(framesOf(message.track));
+      case 'frame':
+        return this.look(message.image, message.timestampMs);
+      case 'forget':
+        this.tracker?.forget();
+        return;
+      case 'stop':
+        return this.stop();
+    }
+  }
+
+  private async start(settings: TrackerSettings): Promise<void> {
+    this.settings = settings;
+    this.models ??= await loadFaceModels({
+      folder: settings.assetsUrl,
+      read: (name) => fetchFile(settings.assetsUrl + name),
+    });
+    this.tracker = new Tracker(this.models);
+    this.say({ type: 'ready', readsTracks: readsTracks() });
+  }
+
+  /** Reads the camera's frames until it ends; the stream keeps only the newest, so that a slow look loses frames and not time. */
+  private async follow(frames: ReadableStream<VideoFrame>): Promise<void> {
+    await this.reader?.cancel();
+    const reader = (this.reader = frames.getReader());
+    for (;;) {
+      const { done, value } = await reader.read();
+      if (done) break;
+      await this.look(value, value.timestamp / 1000);
+    }
+    if (this.reader === reader) this.say({ type: 'ended' });
+  }
+
+  private async look(image: VideoFrame | ImageBitmap, timestampMs: number): Promise<void> {
+    try {
+      if (!this.tracker || !this.models || !this.settings)
+        throw new Error('A frame came before the tracker was started.');
+      const begun = performance.now();
+      const picture = await this.frames.read(image);
+      const readMs = performance.now() - begun;
+      const belief = this.tracker.look(picture, timestampMs);
+      const face = belief === null ? null : faceSample(this.tracker.points, belief, picture, this.settings);
+      const { cropMs, detectMs, landmarksMs } = this.tracker.looks.times;
+      this.say({
+        type: 'sample',
+        timestampMs,
+        frameWidth: picture.width,
+        frameHeight: picture.height,
+        face,
+        timings: { cropMs: cropMs + readMs, detectMs, landmarksMs, totalMs: performance.now() - begun },
+        tensors: this.models.tensors(),
+      });
+    } finally {
+      image.close();
+    }
+  }
+
+  private async stop(): Promise<void> {
+    const { reader, models } = this;
+    this.reader = this.models = this.tracker = this.settings = null;
+    await reader?.cancel();
+    models?.dispose();
+  }
+}
+
+async function fetchFile(url: string): Promise<ArrayBuffer> {
+  const reply = await fetch(url);
+  if (!reply.ok) throw new Error(`The tracker's file ${url} could not be loaded (${String(reply.status)}).`);
+  return reply.arrayBuffer();
+}

@@ -1,0 +1,71 @@
+import { chromium } from '@playwright/test';
+import { mkdtemp, readFile, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join, resolve } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { parseArgs } from 'node:util';
+import { bundleBench } from './bundle';
+import { matchTruth } from './match-truth';
+import { asMjpeg } from './mjpeg-file';
+import type { replay } from './bench-page';
+import { scoreLooks } from './score';
+import { serveBench } from './serve';
+import { truthSchema } from './truth';
+
+const USAGE = 'npm run bench:tracking -- --video FILE.mjpeg --truth FILE.json';
+const CHROMIUM_FLAGS = [
+  '--headless=new',
+  '--no-sandbox',
+  '--disable-quic',
+  '--no-first-run',
+  '--disable-background-networking',
+  '--disable-component-update',
+  '--disable-sync',
+  '--disable-gpu',
+];
+const trackerFiles = fileURLToPath(new URL('../../../assets/tracker', import.meta.url));
+
+async function main(): Promise<void> {
+  const { values } = parseArgs({
+    options: { video: { type: 'string' }, truth: { type: 'string' }, hfov: { type: 'string', default: '60' } },
+  });
+  if (!values.video || !values.truth) throw new Error(`Say which video and which truth: ${USAGE}`);
+  const truth = truthSchema.parse(JSON.parse(await readFile(resolve(values.truth), 'utf8')));
+  const folder = await mkdtemp(join(tmpdir(), 'oriel-bench-'));
+  try {
+    const [video] = await Promise.all([asMjpeg(resolve(values.video), folder), bundleBench(folder)]);
+    const server = await serveBench(folder, trackerFiles, video);
+    const browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: CHROMIUM_FLAGS });
+    try {
+      const page = await browser.newPage();
+      await page.goto(server.url);
+      await page.waitForFunction(() => 'replay' in globalThis);
+      console.log(`replaying ${values.video} through both engines…`);
+      const results = await page.evaluate(
+        ([fps, hfovRad]) => (globalThis as unknown as { replay: typeof replay }).replay(fps, hfovRad),
+        [truth.FPS, (Number(values.hfov) * Math.PI) / 180] as const,
+      );
+      const { truths, matched } = matchTruth(truth, results);
+      console.log(`${String(results.length)} frames, ${String(matched.length)} matched to their truth`);
+      const oriel = scoreLooks(
+        truths,
+        matched.map((frame) => frame.oriel),
+      );
+      const reference = scoreLooks(
+        truths,
+        matched.map((frame) => frame.reference),
+      );
+      console.log(JSON.stringify({ oriel, reference }));
+    } finally {
+      await browser.close();
+      await server.close();
+    }
+  } finally {
+    await rm(folder, { recursive: true, force: true });
+  }
+}
+
+main().catch((cause: unknown) => {
+  console.error(cause instanceof Error ? cause.message : cause);
+  process.exitCode = 1;
+});
