@@ -1,8 +1,9 @@
-interface TrackProcessorConstructor {
-  new (init: { readonly track: MediaStreamTrack; readonly maxBufferSize?: number }): {
-    readonly readable: ReadableStream<VideoFrame>;
-  };
-}
+/** A MediaStreamTrack; the compiler's library for workers does not know the type, though workers are given them. */
+export type CameraTrack = object;
+
+type TrackProcessorConstructor = new (init: { readonly track: CameraTrack; readonly maxBufferSize?: number }) => {
+  readonly readable: ReadableStream<VideoFrame>;
+};
 
 const constructorHere = (): TrackProcessorConstructor | undefined =>
   (globalThis as { MediaStreamTrackProcessor?: TrackProcessorConstructor }).MediaStreamTrackProcessor;
@@ -11,7 +12,7 @@ const constructorHere = (): TrackProcessorConstructor | undefined =>
 export const readsTracks = (): boolean => constructorHere() !== undefined;
 
 /** The frames of a track; only the newest is kept for a reader that is slow. */
-export function framesOf(track: MediaStreamTrack): ReadableStream<VideoFrame> {
+export function framesOf(track: CameraTrack): ReadableStream<VideoFrame> {
   const Processor = constructorHere();
   if (!Processor) throw new Error('This browser cannot read a camera as a stream of frames.');
   return new Processor({ track, maxBufferSize: 1 }).readable;

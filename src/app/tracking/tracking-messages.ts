@@ -1,3 +1,5 @@
+import type { CameraTrack } from './track-processor';
+
 /**
  * What the page and the tracking worker say to each other. Pixels are those of the camera's frame, origin at its upper left corner,
  * x to the right and y down, pixel centres at integer + 0.5. Camera millimetres: x right, y down, z away from the camera.
@@ -30,7 +32,7 @@ export interface FrameMessage {
 export type ToTracker =
   | { readonly type: 'start'; readonly settings: TrackerSettings }
   | { readonly type: 'stream'; readonly frames: ReadableStream<VideoFrame> }
-  | { readonly type: 'track'; readonly track: MediaStreamTrack }
+  | { readonly type: 'track'; readonly track: CameraTrack }
   | FrameMessage
   | { readonly type: 'settings'; readonly settings: TrackerSettings }
   | { readonly type: 'forget' }

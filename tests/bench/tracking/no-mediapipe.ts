@@ -1,4 +1,3 @@
 /** Stands in for the reference's other runtime, which is never chosen here and must not be loaded. */
-export class FaceMesh {}
-export class FaceDetection {}
-export const FACE_GEOMETRY = undefined;
+export const FaceMesh = undefined;
+export const FaceDetection = undefined;
