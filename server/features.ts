@@ -2,6 +2,11 @@ import { accountRoutes } from './accounts/account-routes';
 import { healthRoutes } from './health/health-routes';
 import type { Feature } from './http/mount';
 import type { Parts } from './parts';
+import { photoRoutes } from './photos/photo-routes';
 
 /** Every feature of the server, one a line: what main.ts serves and what the tests hold against the contract. */
-export const features = (parts: Parts): readonly Feature[] => [accountRoutes(parts), healthRoutes(parts)];
+export const features = (parts: Parts): readonly Feature[] => [
+  accountRoutes(parts),
+  photoRoutes(parts),
+  healthRoutes(parts),
+];

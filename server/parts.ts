@@ -6,14 +6,18 @@ import type { Connection } from './database/database';
 import { createLimits, usualLimits, type LimitSettings, type Limits } from './http/limits';
 import { sessionCookie, type SessionCookie } from './http/session-cookie';
 import { createXsrf, type Xsrf } from './http/xsrf';
+import type { Jobs } from './jobs/jobs';
 import type { MailPage } from './mail/mail-page';
 import type { Mailer } from './mail/mailer';
+import type { Storage } from './storage/storage';
 
 /** What the features are built from; main.ts and the tests make it in their own ways. */
 export interface Parts {
   readonly config: Config;
   readonly connection: Connection;
   readonly log: Logger;
+  readonly storage: Storage;
+  readonly jobs: Jobs;
   readonly mailer: Mailer;
   /** Where sent mail is shown, on a server without a mail server. */
   readonly mailPage: MailPage | null;
@@ -31,6 +35,8 @@ export interface Given {
   readonly config: Config;
   readonly connection: Connection;
   readonly log: Logger;
+  readonly storage: Storage;
+  readonly jobs: Jobs;
   readonly mailer: Mailer;
   readonly mailPage: MailPage | null;
   readonly draining: () => boolean;

@@ -45,7 +45,13 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
   const givenUp = (job: Job) => `${job.name}-given-up`;
 
   async function makeQueue(name: string, job: Job, deadLetter?: string): Promise<void> {
-    const options = { name, retryLimit: job.retries, retryDelay: retryDelayS, expireInSeconds: job.expiresAfterS, deadLetter };
+    const options = {
+      name,
+      retryLimit: job.retries,
+      retryDelay: retryDelayS,
+      expireInSeconds: job.expiresAfterS,
+      ...(deadLetter ? { deadLetter } : {}),
+    };
     await boss.createQueue(name, options);
     await boss.updateQueue(name, options);
   }

@@ -1,15 +1,16 @@
 import * as routes from '@oriel/shared/contracts/photos';
-import type { Feature } from '../app';
+import type { Feature } from '../http/mount';
+import type { Parts } from '../parts';
 import { receiveFile, withReceivedFile } from '../pictures/receive-file';
 import { derivativeKey, edgeKept, originalKey } from '../storage/keys';
 import { sendStored } from '../storage/send-stored';
-import type { Storage } from '../storage/storage';
 import { toPhoto } from './photo-queries';
-import type { PhotoService } from './photo-service';
+import { photoService } from './photo-service';
 
 export const photoRoutes =
-  (photos: PhotoService, storage: Storage): Feature =>
+  ({ connection, storage, jobs }: Parts): Feature =>
   (mount) => {
+    const photos = photoService(connection.db, storage, jobs);
     mount(
       routes.uploadPhoto,
       ({ request, householdId, accountId }) =>

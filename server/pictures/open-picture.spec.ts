@@ -1,7 +1,7 @@
 import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import sharp from 'sharp';
+import sharp, { type Sharp } from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openPicture } from './open-picture';
 import { quadrants, quartersOf, uprightQuarters } from './testing/quadrants';
@@ -13,7 +13,7 @@ const write = async (bytes: Uint8Array) => {
   await writeFile(path, bytes);
   return path;
 };
-const averageOfQuarter = async (picture: sharp.Sharp) => {
+const averageOfQuarter = async (picture: Sharp) => {
   const { data, info } = await picture.removeAlpha().raw().toBuffer({ resolveWithObject: true });
   return [...data.subarray((20 * info.width + 20) * 3, (20 * info.width + 20) * 3 + 3)];
 };

@@ -12,8 +12,11 @@ import { readConfig } from '../config';
 import type { Database } from '../database/database';
 import { addMember, createHousehold } from '../households/household-store';
 import { usualLimits, type LimitSettings } from '../http/limits';
+import { startJobs } from '../jobs/jobs';
 import { createMailer, type Mail, type Mailer } from '../mail/mailer';
 import { assemble, type Given, type Parts } from '../parts';
+import { folderStorage } from '../storage/folder-storage';
+import { startWork } from '../work';
 import { Browser } from './browser';
 import { createTestDatabase } from './test-database';
 
@@ -71,10 +74,13 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     ASSETS_DIR: 'assets',
     ...environment,
   });
+  const jobs = await startJobs(database.url, log);
   const parts = assemble({
     config,
     connection: database.connection,
     log,
+    storage: await folderStorage(config.storageDir),
+    jobs,
     mailer,
     mailPage: null,
     draining: () => false,
@@ -82,6 +88,7 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     limits: noLimits,
     ...given,
   });
+  await startWork(parts);
   const app = createApp(parts);
 
   let made = 0;
@@ -121,6 +128,7 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     },
     close: async () => {
       await parts.mailer.settled();
+      await jobs.stop();
       await database.drop();
       await rm(folder, { recursive: true, force: true });
     },
