@@ -1,3 +1,8 @@
 import type { Routes } from '@angular/router';
 
-export const photosRoutes: Routes = [];
+const loadComponent = () => import('./photos-page/photos-page').then((m) => m.PhotosPage);
+
+export const photosRoutes: Routes = [
+  { path: '', title: 'Photos · Oriel', loadComponent },
+  { path: 'bin', title: 'Bin · Oriel', data: { bin: true }, loadComponent },
+];

@@ -1,0 +1,82 @@
+import { DatePipe } from '@angular/common';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  type ElementRef,
+  afterNextRender,
+  computed,
+  effect,
+  inject,
+  input,
+  output,
+  signal,
+  viewChild,
+} from '@angular/core';
+import type { Photo } from '@oriel/shared/contracts/photos';
+import { Icon } from '../../core/icon/icon';
+import { PhotoPicture } from '../photo-picture';
+import { layContactSheet, rowsBetween } from './contact-sheet-layout';
+
+const overscanPx = 700;
+
+/** Photos in rows of equal height with the month staying above; only the rows in sight are in the page, so ten thousand scroll like ten. */
+@Component({
+  selector: 'oriel-contact-sheet',
+  imports: [DatePipe, Icon, PhotoPicture],
+  templateUrl: './contact-sheet.html',
+  styleUrl: './contact-sheet.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ContactSheet {
+  readonly photos = input.required<readonly Photo[]>();
+  readonly selected = input<ReadonlySet<string>>(new Set());
+  /** Whether a press selects; otherwise it opens, and the mark at the corner selects. */
+  readonly picking = input(false);
+  readonly opened = output<Photo>();
+  /** A press on a photo's mark; `through` is true when everything since the last one is meant (Shift). */
+  readonly marked = output<{ photo: Photo; through: boolean }>();
+  /** The end is near: more may be fetched. */
+  readonly nearEnd = output();
+
+  private readonly scroller = viewChild.required<ElementRef<HTMLElement>>('scroller');
+  private readonly widthPx = signal(0);
+  private readonly viewPx = signal(0);
+  private readonly scrollPx = signal(0);
+  private readonly rowPx = computed(() => (this.widthPx() < 600 ? 116 : 190));
+
+  protected readonly layout = computed(() => layContactSheet(this.photos(), this.widthPx(), this.rowPx()));
+  private readonly seen = computed(() => rowsBetween(this.layout().rows, this.scrollPx() - overscanPx, this.scrollPx() + this.viewPx() + overscanPx), {
+    equal: (a, b) => a[0] === b[0] && a[1] === b[1],
+  });
+  protected readonly rows = computed(() => this.layout().rows.slice(...this.seen()));
+  protected readonly month = computed(() => {
+    const { rows } = this.layout();
+    return rows[rowsBetween(rows, this.scrollPx(), this.scrollPx())[0]]?.month ?? '';
+  });
+
+  constructor() {
+    const destroyed = inject(DestroyRef);
+    afterNextRender(() => {
+      const element = this.scroller().nativeElement;
+      const observer = new ResizeObserver(() => {
+        this.widthPx.set(element.clientWidth);
+        this.viewPx.set(element.clientHeight);
+      });
+      observer.observe(element);
+      destroyed.onDestroy(() => observer.disconnect());
+    });
+    effect(() => {
+      if (this.viewPx() > 0 && this.layout().heightPx < this.scrollPx() + 3 * this.viewPx()) this.nearEnd.emit();
+    });
+  }
+
+  protected scrolled(): void {
+    this.scrollPx.set(this.scroller().nativeElement.scrollTop);
+  }
+
+  protected press(photo: Photo, event: MouseEvent): void {
+    if (this.picking() || event.shiftKey || event.ctrlKey || event.metaKey) this.marked.emit({ photo, through: event.shiftKey });
+    else this.opened.emit(photo);
+  }
+}

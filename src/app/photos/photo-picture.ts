@@ -1,0 +1,34 @@
+import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
+import { type Photo, photoDerivative } from '@oriel/shared/contracts/photos';
+import { thumbHashToDataURL } from 'thumbhash';
+import { addressOf } from '../core/api';
+
+/** A photo at some size: its placeholder at once, the derivative over it, and words while there is none. */
+@Component({
+  selector: 'oriel-photo-picture',
+  template: `
+    @if (photo().state === 'ready') {
+      <img [src]="address()" alt="" decoding="async" draggable="false" [class.here]="loaded()" (load)="loaded.set(true)" />
+    } @else {
+      <span>{{ photo().state === 'failed' ? (photo().problem ?? 'This photo could not be prepared.') : 'Being prepared…' }}</span>
+    }
+  `,
+  styles: `
+    :host { display: grid; place-items: center; width: 100%; height: 100%; overflow: hidden; background: var(--zone) center / 100% 100% no-repeat; }
+    img { width: 100%; height: 100%; object-fit: var(--fit, cover); opacity: 0; transition: opacity var(--ease); }
+    .here { opacity: 1; }
+    span { padding: 8px; font-size: 12px; color: var(--pencil); text-align: center; }
+  `,
+  host: { '[style.background-image]': 'placeholder()' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PhotoPicture {
+  readonly photo = input.required<Photo>();
+  readonly edge = input.required<320 | 800 | 1600 | 3200>();
+  protected readonly loaded = signal(false);
+  protected readonly address = computed(() => addressOf(photoDerivative, { photoId: this.photo().id, edge: this.edge() }));
+  protected readonly placeholder = computed(() => {
+    const hash = this.photo().placeholder;
+    return hash ? `url(${thumbHashToDataURL(Uint8Array.from(atob(hash), (c) => c.charCodeAt(0)))})` : null;
+  });
+}
