@@ -17,7 +17,7 @@ export function securityHeaders(secure: boolean): RequestHandler[] {
           fontSrc: ["'self'"],
           connectSrc: ["'self'"],
           objectSrc: ["'none'"],
-          baseUri: ["'none'"],
+          baseUri: ["'self'"],
           formAction: ["'self'"],
           frameAncestors: ["'none'"],
           ...(secure ? { upgradeInsecureRequests: [] } : {}),
