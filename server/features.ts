@@ -1,5 +1,6 @@
 import { accountRoutes } from './accounts/account-routes';
 import { healthRoutes } from './health/health-routes';
+import { householdRoutes } from './households/household-routes';
 import type { Feature } from './http/mount';
 import type { Parts } from './parts';
 import { photoRoutes } from './photos/photo-routes';
@@ -7,6 +8,7 @@ import { photoRoutes } from './photos/photo-routes';
 /** Every feature of the server, one a line: what main.ts serves and what the tests hold against the contract. */
 export const features = (parts: Parts): readonly Feature[] => [
   accountRoutes(parts),
+  householdRoutes(parts),
   photoRoutes(parts),
   healthRoutes(parts),
 ];

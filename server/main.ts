@@ -1,34 +1,53 @@
-import { createServer } from 'node:http';
+import { createServer, type RequestListener } from 'node:http';
+import { createServer as createSecureServer } from 'node:https';
+import { join } from 'node:path';
 import { pino } from 'pino';
 import { createApp } from './app';
-import { readConfig } from './config';
+import { readConfig, type Config } from './config';
 import { connect, migrate } from './database/database';
+import { stopGracefully } from './http/graceful-stop';
+import { plainError } from './http/log-requests';
+import { ownCertificate } from './http/own-certificate';
 import { startJobs } from './jobs/jobs';
-import { createMailer, smtpDelivery } from './mail/mailer';
+import { openPostOffice } from './mail/post-office';
 import { assemble } from './parts';
 import { folderStorage } from './storage/folder-storage';
 import { startWork } from './work';
 
 const config = readConfig(process.env);
-const log = pino({ level: config.logLevel });
-const connection = connect(config.databaseUrl, (error) => log.warn({ err: error }, 'a database connection was lost'));
-await migrate(connection.db);
+const log = pino({ level: config.logLevel, serializers: { err: plainError } });
+const serverFor = async ({ https, tlsDir, storageDir }: Config, listener: RequestListener) =>
+  https === 'off'
+    ? createServer(listener)
+    : createSecureServer(await ownCertificate(tlsDir ?? join(storageDir, 'tls')), listener);
 
-const storage = await folderStorage(config.storageDir);
-const jobs = await startJobs(config.databaseUrl, log);
+async function start(): Promise<void> {
+  const connection = connect(config.databaseUrl, (error) => log.warn({ err: error }, 'a database connection was lost'));
+  await migrate(connection.db);
+  const storage = await folderStorage(config.storageDir);
+  const jobs = await startJobs(config.databaseUrl, log);
+  const { mailer, mailPage, close: closePostOffice } = await openPostOffice(config, log);
 
-let draining = false;
-const mailer = createMailer(smtpDelivery(config.smtpUrl ?? 'smtp://127.0.0.1:2525', config.mailFrom), log);
-const parts = assemble({ config, connection, log, storage, jobs, mailer, mailPage: null, draining: () => draining });
-await startWork(parts);
-const { express } = createApp(parts);
-const server = createServer(express);
-server.listen(config.port, config.host, () => log.info({ address: config.publicUrl }, 'serving'));
+  let draining = false;
+  const parts = assemble({ config, connection, log, storage, jobs, mailer, mailPage, draining: () => draining });
+  await startWork(parts);
+  const server = await serverFor(config, createApp(parts).express);
+  server.once('error', failToStart);
+  server.listen(config.port, config.host, () => log.info({ address: config.publicUrl }, 'serving'));
 
-const stop = () => {
-  draining = true;
-  server.close(() => void jobs.stop().then(() => connection.db.destroy()).then(() => process.exit(0)));
-  server.closeIdleConnections();
-};
-process.once('SIGTERM', stop);
-process.once('SIGINT', stop);
+  const stop = () => {
+    if (draining) return;
+    draining = true;
+    const steps = [() => jobs.stop(), closePostOffice, () => connection.db.destroy()];
+    void stopGracefully({ server, log, steps, exit: (code) => process.exit(code) });
+  };
+  process.on('SIGTERM', stop);
+  process.on('SIGINT', stop);
+}
+
+function failToStart(error: unknown): void {
+  log.fatal({ err: error }, 'could not start');
+  process.exit(1);
+}
+
+start().catch(failToStart);

@@ -32,3 +32,7 @@ export async function readHousehold(db: Database, householdId: string): Promise<
     .execute();
   return { ...household, members: members.map(({ joined_at, ...member }) => ({ ...member, joinedAt: joined_at.toISOString() })) };
 }
+
+export async function renameHousehold(db: Database, householdId: string, name: string): Promise<void> {
+  await db.updateTable('household').set({ name }).where('id', '=', householdId).execute();
+}

@@ -12,7 +12,7 @@ const pathOf = (url = '') => url.split('?', 1)[0];
  * What of an error goes into the log: not the properties that a driver hangs on it, for PostgreSQL quotes whole rows there
  * (`detail`), password hashes among them.
  */
-const plainError = (error: Error) => {
+export const plainError = (error: Error) => {
   const { type, message, stack }: SerializedError = pino.stdSerializers.err(error);
   return { type, message, stack, code: (error as { code?: unknown }).code };
 };

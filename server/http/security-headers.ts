@@ -33,3 +33,9 @@ export function securityHeaders(secure: boolean): RequestHandler[] {
     },
   ];
 }
+
+/** Answers about people stay out of caches, unless a route of files says otherwise. */
+export const noStore: RequestHandler = (_request, response, next) => {
+  response.setHeader('Cache-Control', 'no-store');
+  next();
+};

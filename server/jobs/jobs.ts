@@ -24,7 +24,7 @@ export interface Jobs {
 }
 
 /** How long a stopping server waits for the jobs under way; those cut off are tried again, ms. */
-const patienceMs = 20_000;
+const patienceMs = 6_000;
 const lookEveryS = 2;
 const retryDelayS = 5;
 const expiryCheckEveryS = 20;
