@@ -27,7 +27,7 @@ export function createApp(parts: Parts): App {
   const mounted: Route[] = [];
   app.disable('x-powered-by');
   app.set('trust proxy', config.trustProxy);
-  app.use(logRequests(log), closeWhenDraining(draining), securityHeaders(secure));
+  app.use(logRequests(log), closeWhenDraining(draining), securityHeaders(secure, secure && config.https === 'off'));
   if (secure) app.use('/api', requireHttps(config.publicUrl));
   app.use(keepSession(connection.pool, config.sessionSecret, cookie));
   app.use(xsrf.guard);

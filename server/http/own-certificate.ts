@@ -63,6 +63,8 @@ export async function ownCertificate(dir: string, names: readonly string[] = own
     await run('openssl', [
       ...['req', '-x509', '-newkey', 'ec', '-pkeyopt', 'ec_paramgen_curve:prime256v1', '-nodes', '-sha256', '-days', String(validDays)],
       ...['-subj', '/CN=Oriel on this machine', '-addext', `subjectAltName=${names.join(',')}`, '-addext', 'extendedKeyUsage=serverAuth'],
+      // So that whoever trusts it trusts this server and not a maker of further certificates.
+      ...['-addext', 'basicConstraints=critical,CA:FALSE'],
       ...['-keyout', key, '-out', cert],
     ]);
     await chmod(key, 0o600);

@@ -1,8 +1,12 @@
 import helmet from 'helmet';
 import type { RequestHandler } from 'express';
 
-/** One policy for every page, without nonces, for a service worker may keep index.html (OWASP ASVS 5.0.0, 3.4). */
-export function securityHeaders(secure: boolean): RequestHandler[] {
+/**
+ * One policy for every page, without nonces, for a service worker may keep index.html (OWASP ASVS 5.0.0, 3.4).
+ * @param forGood whether browsers may remember that this host is https only (RFC 6797): never for a home-made certificate, whose host is
+ * often localhost and serves other programs over http too.
+ */
+export function securityHeaders(secure: boolean, forGood: boolean): RequestHandler[] {
   return [
     helmet({
       contentSecurityPolicy: {
@@ -24,7 +28,8 @@ export function securityHeaders(secure: boolean): RequestHandler[] {
         },
       },
       crossOriginEmbedderPolicy: false,
-      strictTransportSecurity: secure,
+      strictTransportSecurity: forGood,
+      xFrameOptions: { action: 'deny' },
       referrerPolicy: { policy: 'no-referrer' },
     }),
     (_request, response, next) => {

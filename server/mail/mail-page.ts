@@ -43,7 +43,7 @@ export function createMailPage(messages: () => readonly KeptMessage[], toAnyone:
   router.get(`${address}/:id/set`, (request, response) => {
     const { html } = find(request.params.id);
     if (html === null) throw notFound();
-    response.setHeader('Content-Security-Policy', "default-src 'none'; style-src 'unsafe-inline'; sandbox allow-top-navigation-by-user-activation");
+    response.setHeader('Content-Security-Policy', "default-src 'none'; style-src 'unsafe-inline'; sandbox");
     response.type('html').send(html);
   });
   return { address, isOpenTo, router };
