@@ -1,0 +1,64 @@
+import { LANDMARK_COUNT } from './canonical-face';
+import type { FaceModel } from './face-model';
+import type { MutablePoint3 } from './camera';
+
+/*
+ * The place of a head of known turn, in full perspective. With r = R c the model turned and scaled, each landmark at (u, v)
+ * from the middle of the picture asks for
+ *
+ *     f (r_x + X) = u (r_z + Z),     f (r_y + Y) = v (r_z + Z),
+ *
+ * which is linear in the place (X, Y, Z): weighted normal equations in three unknowns, solved by elimination. (The step
+ * of every linear PnP once the rotation is known; R. Hartley, A. Zisserman, ch. 7.)
+ */
+
+/**
+ * Writes the place of the midpoint between the eyes in camera coordinates, mm. Allocates nothing.
+ * @param rotation nine numbers by rows, from `turnedByRay`.
+ * @returns whether there is a place in front of the camera.
+ */
+export function perspectivePlace(
+  model: FaceModel,
+  rotation: Float64Array,
+  eyeDistanceMm: number,
+  landmarks: ArrayLike<number>,
+  centreX: number,
+  centreY: number,
+  focalLengthPx: number,
+  out: MutablePoint3,
+): boolean {
+  const { points, weights } = model;
+  const f = focalLengthPx;
+  // Sums of w, w u, w v, w (u2 + v2), and of the right sides. u and v are over f: the equations stay well scaled.
+  let n = 0,
+    su = 0,
+    sv = 0,
+    sq = 0,
+    bx = 0,
+    by = 0,
+    bz = 0;
+  for (let i = 0; i < LANDMARK_COUNT; i++) {
+    const w = weights[i];
+    const x = points[3 * i] * eyeDistanceMm;
+    const y = points[3 * i + 1] * eyeDistanceMm;
+    const z = points[3 * i + 2] * eyeDistanceMm;
+    const rz = rotation[6] * x + rotation[7] * y + rotation[8] * z;
+    const u = (landmarks[3 * i] - centreX) / f;
+    const v = (landmarks[3 * i + 1] - centreY) / f;
+    const a = u * rz - (rotation[0] * x + rotation[1] * y + rotation[2] * z);
+    const b = v * rz - (rotation[3] * x + rotation[4] * y + rotation[5] * z);
+    n += w;
+    su += w * u;
+    sv += w * v;
+    sq += w * (u * u + v * v);
+    bx += w * a;
+    by += w * b;
+    bz += w * (u * a + v * b);
+  }
+  // X - mean(u) Z = mean(a) and Y - mean(v) Z = mean(b), put into  su X + sv Y - sq Z = bz.
+  const Z = (bz - (su * bx + sv * by) / n) / ((su * su + sv * sv) / n - sq);
+  out.x = (bx + su * Z) / n;
+  out.y = (by + sv * Z) / n;
+  out.z = Z;
+  return Z > 0 && Z < Infinity;
+}
