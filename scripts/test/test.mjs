@@ -1,0 +1,69 @@
+import { mkdirSync, rmSync } from 'node:fs';
+import { lastLines } from '../command.mjs';
+import { dependenciesInstalled, installDependencies } from '../dependencies.mjs';
+import { startPostgres } from '../postgres.mjs';
+import { inProject } from '../project.mjs';
+import { stepsOn } from '../steps.mjs';
+import { stopSignal } from '../stop-signal.mjs';
+import { installPrograms, programsPresent } from './programs.mjs';
+import { parts } from './parts.mjs';
+
+const partMs = 8 * 60_000;
+
+/**
+ * `npm test`: everything, to the end, whatever fails on the way. The last line counts the tests.
+ * @returns {Promise<number>} the exit code: 0 only where tests ran and none failed
+ */
+export async function test() {
+  const { signal } = stopSignal();
+  const { step } = stepsOn(process.stdout);
+  const total = { passed: 0, failed: 0 };
+  let postgres = null;
+  try {
+    if (!dependenciesInstalled()) await step('Installing the packages', () => installDependencies(signal));
+    if (!programsPresent()) await step('Installing programs', (say) => installPrograms({ say, signal }));
+    postgres = await step('Starting the database', (say) =>
+      startPostgres({ dataDir: inProject('.oriel', 'test-postgres'), durable: false, say, signal }),
+    );
+    const env = {
+      ...process.env,
+      CI: 'true',
+      NG_CLI_ANALYTICS: 'false',
+      FORCE_COLOR: '0',
+      TEST_DATABASE_URL: postgres.url,
+    };
+    rmSync(inProject('.oriel', 'reports'), { recursive: true, force: true });
+    mkdirSync(inProject('.oriel', 'reports'), { recursive: true });
+    for (const part of parts) {
+      const { passed, failed } = await step(part.name, (say) => runPart(part, { env, signal }, say));
+      total.passed += passed;
+      total.failed += failed;
+    }
+  } catch (error) {
+    total.failed += 1;
+    process.stdout.write(`\n${error.message}\n`);
+  } finally {
+    await postgres?.stop();
+  }
+  process.stdout.write(`${total.passed} passed, ${total.failed} failed\n`);
+  return total.failed === 0 && total.passed > 0 ? 0 : 1;
+}
+
+/** Runs one part and tells what it found. A part that fails although no test of it did counts as one failed. */
+async function runPart({ name, run }, { env, signal }, say) {
+  const limit = AbortSignal.timeout(partMs);
+  const result = await run({ env, signal: AbortSignal.any([signal, limit]) }).catch((error) => {
+    if (signal.aborted) throw error;
+    return {
+      code: 1,
+      output: limit.aborted ? `not done within ${partMs / 60_000} minutes` : error.message,
+      counts: { passed: 0, failed: 0 },
+    };
+  });
+  const { passed } = result.counts;
+  const failed = result.code === 0 ? result.counts.failed : Math.max(1, result.counts.failed);
+  const counted = passed + failed > 0 ? `: ${passed} passed, ${failed} failed` : '';
+  say(`${failed > 0 ? '✗' : '✓'} ${name}${counted}`);
+  if (failed > 0) process.stdout.write(`\n${lastLines(result.output, 200)}\n\n`);
+  return { passed, failed };
+}

@@ -1,0 +1,31 @@
+import { defineConfig } from '@playwright/test';
+import type { BrowserChoice } from './fixtures';
+import { inProject } from '../../scripts/project.mjs';
+
+/**
+ * Two projects: `page` runs `*.e2e.ts` in a browser without a graphics processor; `camera` runs `*.camera.e2e.ts`, where a file says
+ * with `test.use({ graphics, cameraVideo })` what the fake camera shows and how pictures are drawn.
+ */
+export default defineConfig<object, BrowserChoice>({
+  testDir: '.',
+  outputDir: inProject('test-results'),
+  globalSetup: './set-up/serve-product.ts',
+  workers: 1,
+  retries: 0,
+  timeout: 60_000,
+  expect: { timeout: 10_000 },
+  forbidOnly: true,
+  reporter: [['list'], ['json', { outputFile: inProject('.oriel', 'reports', 'end-to-end.json') }]],
+  use: {
+    baseURL: process.env['ORIEL_URL'],
+    trace: 'off',
+    video: 'off',
+    screenshot: 'off',
+    viewport: { width: 1440, height: 900 },
+    locale: 'en-GB',
+  },
+  projects: [
+    { name: 'page', testMatch: /(?<!\.camera)\.e2e\.ts$/ },
+    { name: 'camera', testMatch: /\.camera\.e2e\.ts$/ },
+  ],
+});
