@@ -11,7 +11,7 @@ test('a stranger is led to the sign-in, in the fonts and under the policy of Ori
   });
   const reply = await page.goto('/');
   expect(reply?.headers()['content-security-policy']).toContain("default-src 'self'");
-  await expect(page).toHaveURL(/\/sign-in$/);
+  await expect(page).toHaveURL(/\/sign-in\?next=/);
   await expect(page).toHaveTitle(/Oriel/);
   await expect(page.getByRole('heading', { name: 'Sign in' })).toBeVisible();
   await page.evaluate(() => document.fonts.ready);
