@@ -1,7 +1,9 @@
 import type { Migration } from 'kysely';
 import { foundation } from './0001-foundation';
+import { unusedImages } from './0002-unused-images';
 
 /** Every migration by name, in order. A static table, for the server is one bundle and has no folder to scan. */
 export const migrations: Record<string, Migration> = {
   '0001-foundation': foundation,
+  '0002-unused-images': unusedImages,
 };

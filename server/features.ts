@@ -4,11 +4,13 @@ import { householdRoutes } from './households/household-routes';
 import type { Feature } from './http/mount';
 import type { Parts } from './parts';
 import { photoRoutes } from './photos/photo-routes';
+import { sceneRoutes } from './scenes/scene-routes';
 
 /** Every feature of the server, one a line: what main.ts serves and what the tests hold against the contract. */
 export const features = (parts: Parts): readonly Feature[] => [
   accountRoutes(parts),
   householdRoutes(parts),
   photoRoutes(parts),
+  sceneRoutes(parts),
   healthRoutes(parts),
 ];

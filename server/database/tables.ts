@@ -54,6 +54,7 @@ export interface Tables {
     height: number;
     trim: JSONColumnType<LayerImage['trim']>;
     created_at: MomentByDefault;
+    unused_since: Moment | null;
   };
   scene: {
     id: Generated<string>;

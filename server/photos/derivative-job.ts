@@ -21,9 +21,9 @@ const problem =
 
 /** Makes the derivatives of one photo. May run twice for the same photo: the second finds nothing to do, or writes the same again. */
 export async function deriveFrom(db: Database, storage: Storage, photoId: string): Promise<void> {
-  const photo = await db.selectFrom('photo').select(['sha256', 'mime', 'state']).where('id', '=', photoId).executeTakeFirst();
+  const photo = await db.selectFrom('photo').select(['sha256', 'state']).where('id', '=', photoId).executeTakeFirst();
   if (!photo || photo.state === 'ready') return;
-  const made = await storage.withFile(originalKey(photo.sha256), (path) => makeDerivatives(path, photo.mime));
+  const made = await storage.withFile(originalKey(photo.sha256), makeDerivatives);
 
   await db.transaction().execute(async (transaction) => {
     await lockContent(transaction, photo.sha256);

@@ -16,8 +16,8 @@ const largestEdge = Math.max(...derivativeEdges);
 const thumbHashEdge = 100;
 
 /** Makes the upright sRGB WebPs of a picture, without any metadata. The picture is decoded once, to the largest size; the others come from that. */
-export async function makeDerivatives(path: string, mime: string): Promise<Derivatives> {
-  const picture = await openPicture(path, mime);
+export async function makeDerivatives(path: string): Promise<Derivatives> {
+  const picture = await openPicture(path);
   const { data, info } = await picture
     .resize(largestEdge, largestEdge, { fit: 'inside', withoutEnlargement: true })
     .raw()

@@ -16,7 +16,7 @@ const write = async (bytes: Uint8Array) => {
 };
 /** Noise, so that no encoder can make it small: then cutting anywhere cuts pixels. */
 const noise = () =>
-  sharp({ create: { width: 640, height: 480, channels: 3, background: '#888', noise: { type: 'gaussian', mean: 128, sigma: 40 } } });
+  sharp({ create: { width: 200, height: 150, channels: 3, background: '#888', noise: { type: 'gaussian', mean: 128, sigma: 40 } } });
 
 beforeAll(async () => {
   folder = await mkdtemp(join(tmpdir(), 'oriel-pictures-'));

@@ -1,9 +1,8 @@
-import { open } from 'node:fs/promises';
 import sharp, { type Metadata } from 'sharp';
 import { photoMaxPixels } from '@oriel/shared/contracts/photos';
 import { boxesAreWhole } from './boxes';
 import { notAPicture, tooManyPixels, truncated } from './refusals';
-import { formatOf, signatureBytes, type PictureFormat } from './signature';
+import { formatOfFile, type PictureFormat } from './signature';
 import { takenDate } from './taken-date';
 
 export interface PictureFacts {
@@ -26,7 +25,9 @@ const trialEdge = 64;
  * @throws not-a-picture (415), too-many-pixels (413), truncated (422).
  */
 export async function inspectPicture(path: string): Promise<PictureFacts> {
-  const format = await checkContainer(path);
+  const format = await formatOfFile(path);
+  if (!format) throw notAPicture();
+  if ((format === 'heic' || format === 'avif') && !(await boxesAreWhole(path))) throw truncated();
   const metadata = await sharp(path, { limitInputPixels: false }).metadata().catch(() => {
     throw truncated();
   });
@@ -38,21 +39,6 @@ export async function inspectPicture(path: string): Promise<PictureFacts> {
 }
 
 const isHevc = (metadata: Metadata) => metadata.format === 'heif' && metadata.compression === 'hevc';
-
-async function checkContainer(path: string): Promise<PictureFormat> {
-  const file = await open(path, 'r');
-  try {
-    const { size } = await file.stat();
-    const start = Buffer.alloc(Math.min(signatureBytes, size));
-    await file.read(start, 0, start.length, 0);
-    const format = formatOf(start);
-    if (!format) throw notAPicture();
-    if ((format === 'heic' || format === 'avif') && !(await boxesAreWhole(file, size))) throw truncated();
-    return format;
-  } finally {
-    await file.close();
-  }
-}
 
 async function decodeToEnd(path: string): Promise<void> {
   await sharp(path, { limitInputPixels: photoMaxPixels, failOn: 'error' })

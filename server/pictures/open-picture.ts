@@ -1,13 +1,14 @@
 import sharp, { type Sharp } from 'sharp';
 import { photoMaxPixels } from '@oriel/shared/contracts/photos';
 import { decodeHeic } from './decode-heic';
+import { formatOfFile } from './signature';
 import { tiffWithProfile } from './tiff-with-profile';
 
 const limits = { limitInputPixels: photoMaxPixels, failOn: 'error' } as const;
 
 /** Opens any picture that `inspectPicture` lets through, upright and in sRGB, 8 bits a channel, whatever its file says of turning and colour. */
-export async function openPicture(path: string, mime: string): Promise<Sharp> {
-  const upright = mime === 'image/heic' ? await openHeic(path) : sharp(path, limits).autoOrient();
+export async function openPicture(path: string): Promise<Sharp> {
+  const upright = (await formatOfFile(path)) === 'heic' ? await openHeic(path) : sharp(path, limits).autoOrient();
   return upright.toColourspace('srgb');
 }
 

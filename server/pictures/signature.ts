@@ -1,7 +1,9 @@
+import { open } from 'node:fs/promises';
+
 export type PictureFormat = 'jpeg' | 'png' | 'webp' | 'tiff' | 'gif' | 'avif' | 'heic';
 
 /** Enough of a file's beginning to tell what it is. */
-export const signatureBytes = 64;
+const signatureBytes = 64;
 
 const startsWith = (bytes: Uint8Array, ...signature: number[]) => signature.every((byte, i) => bytes[i] === byte);
 const text = (bytes: Uint8Array, from: number, to: number) => String.fromCharCode(...bytes.subarray(from, to));
@@ -29,4 +31,14 @@ export function formatOf(bytes: Uint8Array): PictureFormat | null {
   if (text(bytes, 0, 6) === 'GIF87a' || text(bytes, 0, 6) === 'GIF89a') return 'gif';
   if (text(bytes, 4, 8) === 'ftyp') return fromBrands(bytes);
   return null;
+}
+
+export async function formatOfFile(path: string): Promise<PictureFormat | null> {
+  const file = await open(path, 'r');
+  try {
+    const { buffer, bytesRead } = await file.read(Buffer.alloc(signatureBytes), 0, signatureBytes, 0);
+    return formatOf(buffer.subarray(0, bytesRead));
+  } finally {
+    await file.close();
+  }
 }

@@ -1,0 +1,30 @@
+import type { Selectable } from 'kysely';
+import type { LayerImage } from '@oriel/shared/contracts/scenes';
+import type { Database } from '../database/database';
+import type { Tables } from '../database/tables';
+
+type ImageRow = Pick<Selectable<Tables['layer_image']>, 'id' | 'sha256' | 'width' | 'height' | 'trim'>;
+
+const columns = ['id', 'sha256', 'width', 'height', 'trim'] as const;
+const toImage = ({ id, width, height, trim }: ImageRow): LayerImage => ({ id, width, height, trim });
+
+export async function imageByContent(db: Database, householdId: string, sha256: string): Promise<LayerImage | null> {
+  const row = await db
+    .selectFrom('layer_image')
+    .select(columns)
+    .where('household_id', '=', householdId)
+    .where('sha256', '=', sha256)
+    .orderBy('created_at')
+    .executeTakeFirst();
+  return row ? toImage(row) : null;
+}
+
+/** The images of this household among those asked for, by id. */
+export async function imagesById(db: Database, householdId: string, ids: readonly string[]): Promise<Map<string, LayerImage>> {
+  if (ids.length === 0) return new Map();
+  const rows = await db.selectFrom('layer_image').select(columns).where('household_id', '=', householdId).where('id', 'in', ids).execute();
+  return new Map(rows.map((row) => [row.id, toImage(row)]));
+}
+
+export const findImage = (db: Database, id: string): Promise<ImageRow | undefined> =>
+  db.selectFrom('layer_image').select(columns).where('id', '=', id).executeTakeFirst();

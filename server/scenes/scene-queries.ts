@@ -1,0 +1,33 @@
+import type { Selectable } from 'kysely';
+import type { Scene } from '@oriel/shared/contracts/scenes';
+import type { Database } from '../database/database';
+import type { Tables } from '../database/tables';
+
+export type SceneRow = Selectable<Tables['scene']> & { saver: string | null };
+
+export const toScene = (row: SceneRow): Scene => ({
+  id: row.id,
+  householdId: row.household_id,
+  document: row.document,
+  revision: row.revision,
+  savedAt: row.saved_at.toISOString(),
+  savedBy: row.saver ?? 'a former member',
+});
+
+const scenes = (db: Database) =>
+  db.selectFrom('scene').leftJoin('account', 'account.id', 'scene.saved_by').selectAll('scene').select('account.name as saver');
+
+export const findScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
+  scenes(db).where('scene.id', '=', id).executeTakeFirst();
+
+/** The scene, which nobody else can save until the transaction ends. */
+export const holdScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
+  scenes(db).where('scene.id', '=', id).forUpdate('scene').executeTakeFirst();
+
+export const scenesOf = (db: Database, householdId: string): Promise<SceneRow[]> =>
+  scenes(db)
+    .where('scene.household_id', '=', householdId)
+    .where('scene.binned_at', 'is', null)
+    .orderBy('scene.saved_at', 'desc')
+    .orderBy('scene.id')
+    .execute();

@@ -1,0 +1,49 @@
+import * as routes from '@oriel/shared/contracts/scenes';
+import type { Feature } from '../http/mount';
+import type { Parts } from '../parts';
+import { receiveFile, withReceivedFile } from '../pictures/receive-file';
+import { edgeKept, layerKey } from '../storage/keys';
+import { sendStored } from '../storage/send-stored';
+import { notFound } from '../http/failure';
+import { findImage } from './image-queries';
+import { layerFiles } from './layer-files';
+import { sceneService } from './scene-service';
+
+export const sceneRoutes =
+  ({ connection: { db }, storage }: Parts): Feature =>
+  (mount) => {
+    const scenes = sceneService(db, storage);
+    const files = layerFiles(db, storage);
+
+    mount(routes.listScenes, async ({ householdId }) => ({ scenes: await scenes.list(householdId) }));
+    mount(routes.createScene, async ({ body, householdId, accountId }) => ({
+      scene: await scenes.create(body.name, body.photoIds, { householdId, accountId }),
+    }));
+    mount(routes.readScene, async ({ params }) => ({ scene: await scenes.read(params.sceneId) }));
+    mount(routes.saveScene, async ({ params, body, householdId, accountId }) => ({
+      scene: await scenes.save(params.sceneId, body.revision, body.document, { householdId, accountId }),
+    }));
+    mount(routes.duplicateScene, async ({ params, body, householdId, accountId }) => ({
+      scene: await scenes.duplicate(params.sceneId, body.document, { householdId, accountId }),
+    }));
+    mount(routes.binScene, async ({ params }) => {
+      await scenes.bin(params.sceneId);
+      return {};
+    });
+    mount(routes.restoreScene, async ({ params }) => ({ scene: await scenes.restore(params.sceneId) }));
+
+    mount(
+      routes.uploadLayerImage,
+      ({ request, householdId }) => withReceivedFile(request, (file) => scenes.imageFromFile(householdId, file)),
+      receiveFile(storage.incomingDir),
+    );
+    mount(routes.layerImageFromPhoto, ({ body, householdId }) => scenes.imageFromPhoto(householdId, body.photoId));
+    mount(routes.layerImageFile, async ({ params, request, response }) => {
+      const image = await findImage(db, params.imageId);
+      if (!image) throw notFound();
+      const edge = edgeKept(image.width, image.height, params.edge);
+      await files.ensure(image, edge);
+      await sendStored(storage, request, response, { key: layerKey(image.sha256, edge), mime: 'image/webp', tag: `${image.sha256}-layer-${edge}` });
+      return {};
+    });
+  };

@@ -1,0 +1,133 @@
+import { isDeepStrictEqual } from 'node:util';
+import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { Database } from '../database/database';
+import { notFound } from '../http/failure';
+import { findPhotos, type PhotoRow } from '../photos/photo-queries';
+import type { ReceivedFile } from '../pictures/receive-file';
+import type { Storage } from '../storage/storage';
+import { layerImages, nameWithout, type NamedImage, type PhotoOfLayer } from './layer-images';
+import { withOwnImages } from './own-images';
+import { inBin, photosNotHere, revisionMoved } from './refusals';
+import { findScene, holdScene, scenesOf, toScene, type SceneRow } from './scene-queries';
+import { startingDocument } from './starting-document';
+
+interface Asker {
+  readonly householdId: string;
+  readonly accountId: string;
+}
+
+const nameMaxCharacters = 120;
+const copyOf = (name: string) => `${name.slice(0, nameMaxCharacters - ' copy'.length)} copy`;
+
+const asLayer = (photo: PhotoRow): PhotoOfLayer => ({
+  sha256: photo.sha256,
+  name: photo.name,
+  width: photo.width,
+  height: photo.height,
+  hasAlpha: photo.has_alpha,
+});
+
+export type SceneService = ReturnType<typeof sceneService>;
+
+export function sceneService(db: Database, storage: Storage) {
+  const images = layerImages(db, storage);
+
+  async function open(id: string): Promise<SceneRow> {
+    const row = await findScene(db, id);
+    if (!row) throw notFound();
+    if (row.binned_at) throw inBin();
+    return row;
+  }
+
+  async function add(document: SceneDocument, { householdId, accountId }: Asker): Promise<Scene> {
+    const { id } = await db
+      .insertInto('scene')
+      .values({ household_id: householdId, document: JSON.stringify(document), saved_by: accountId })
+      .returning('id')
+      .executeTakeFirstOrThrow();
+    return toScene(await open(id));
+  }
+
+  /** In the order asked for; the same photo may be asked for twice. @throws photo-not-here (422). */
+  async function photosIn(householdId: string, ids: readonly string[]): Promise<PhotoRow[]> {
+    if (ids.length === 0) return [];
+    const found = new Map((await findPhotos(db, householdId, ids)).map((photo) => [photo.id, photo]));
+    const missing = ids.filter((id) => !found.has(id) || found.get(id)?.binned_at);
+    if (missing.length > 0) throw photosNotHere(missing);
+    return ids.map((id) => found.get(id)!);
+  }
+
+  async function setBinned(id: string, binned: boolean): Promise<void> {
+    await db
+      .updateTable('scene')
+      .set({ binned_at: binned ? new Date() : null })
+      .where('id', '=', id)
+      .where('binned_at', binned ? 'is' : 'is not', null)
+      .execute();
+  }
+
+  return {
+    list: async (householdId: string): Promise<Scene[]> => (await scenesOf(db, householdId)).map(toScene),
+
+    /** @throws in-bin (404). */
+    read: async (id: string): Promise<Scene> => toScene(await open(id)),
+
+    /** @throws photo-not-here (422), nothing-opaque (422). */
+    async create(name: string | undefined, photoIds: readonly string[], asker: Asker): Promise<Scene> {
+      const photos = await photosIn(asker.householdId, photoIds);
+      const layers: NamedImage[] = [];
+      for (const photo of photos) layers.push(await images.fromPhoto(asker.householdId, asLayer(photo)));
+      const own = photos.length === 1 ? nameWithout(photos[0].name) : 'Untitled scene';
+      return add(startingDocument(name ?? own, layers), asker);
+    },
+
+    /** @throws image-not-here (422). */
+    add: async (document: SceneDocument, asker: Asker): Promise<Scene> => add(await withOwnImages(db, asker.householdId, document), asker),
+
+    /**
+     * Saves over the newest revision and no other. A save whose answer was lost, sent again, is answered as it was the first time.
+     * @throws revision-moved (409), image-not-here (422), in-bin (404).
+     */
+    async save(id: string, revision: number, given: SceneDocument, { householdId, accountId }: Asker): Promise<Scene> {
+      const document = await withOwnImages(db, householdId, given);
+      await db.transaction().execute(async (transaction) => {
+        const held = await holdScene(transaction, id);
+        if (!held) throw notFound();
+        if (held.binned_at) throw inBin();
+        const sentAgain =
+          held.revision === revision + 1 && held.saved_by === accountId && isDeepStrictEqual(held.document, document);
+        if (sentAgain) return;
+        if (held.revision !== revision) {
+          const { savedBy, savedAt } = toScene(held);
+          throw revisionMoved({ revision: held.revision, savedBy, savedAt });
+        }
+        await transaction
+          .updateTable('scene')
+          .set({ document: JSON.stringify(document), revision: revision + 1, saved_at: new Date(), saved_by: accountId })
+          .where('id', '=', id)
+          .execute();
+      });
+      return toScene(await open(id));
+    },
+
+    /** A copy of the scene, or of the document given in its stead: how an edit that came too late is kept. */
+    async duplicate(id: string, given: SceneDocument | undefined, asker: Asker): Promise<Scene> {
+      const document = given ? await withOwnImages(db, asker.householdId, given) : (await open(id)).document;
+      return add({ ...document, name: copyOf(document.name) }, asker);
+    },
+
+    bin: (id: string): Promise<void> => setBinned(id, true),
+
+    async restore(id: string): Promise<Scene> {
+      await setBinned(id, false);
+      return toScene(await open(id));
+    },
+
+    imageFromFile: (householdId: string, file: ReceivedFile): Promise<NamedImage> => images.fromFile(householdId, file),
+
+    async imageFromPhoto(householdId: string, photoId: string): Promise<NamedImage> {
+      const [photo] = await photosIn(householdId, [photoId]);
+      return images.fromPhoto(householdId, asLayer(photo));
+    },
+  };
+}
