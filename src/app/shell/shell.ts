@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
-import { MatButton, MatIconButton } from '@angular/material/button';
+import { MatButton } from '@angular/material/button';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
 import { Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { Icon } from '../core/icon/icon';
@@ -9,7 +9,7 @@ import { Session } from '../core/session';
 /** The frame around every page for members: name, places, and the account's menu. */
 @Component({
   selector: 'oriel-shell',
-  imports: [RouterOutlet, RouterLink, RouterLinkActive, MatButton, MatIconButton, MatMenu, MatMenuItem, MatMenuTrigger, Icon],
+  imports: [RouterOutlet, RouterLink, RouterLinkActive, MatButton, MatMenu, MatMenuItem, MatMenuTrigger, Icon],
   templateUrl: './shell.html',
   styleUrl: './shell.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
