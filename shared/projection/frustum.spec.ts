@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { frustumMatrix, offAxisFrustum } from './frustum';
+import { frustumMatrix, offAxisFrustum, writeOffAxisMatrix } from './frustum';
 import { project } from './layer-on-glass';
 import { anyEye, anyGlass, figure } from './testing/arbitraries';
 
@@ -72,5 +72,17 @@ describe('frustumMatrix', () => {
       ...[0, 0, -101 / 99, -1],
       ...[0, 0, -200 / 99, 0],
     ]);
+  });
+});
+
+describe('writeOffAxisMatrix', () => {
+  it('is the matrix of the frustum', () => {
+    const out = new Array<number>(16).fill(NaN);
+    fc.assert(
+      fc.property(anyGlass, anyEye, (glass, eye) => {
+        writeOffAxisMatrix(glass, eye, 10, 20_000, out);
+        frustumMatrix(offAxisFrustum(glass, eye, 10, 20_000)).forEach((entry, i) => expect(out[i]).toBeCloseTo(entry, 9));
+      }),
+    );
   });
 });

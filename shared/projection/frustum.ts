@@ -46,3 +46,22 @@ export function frustumMatrix({ left, right, bottom, top, near, far }: Frustum):
     ...[0, 0, (-2 * far * near) / depth, 0],
   ];
 }
+
+/**
+ * The matrix of the frustum through the edges of the glass, written into `out` column by column. Allocates nothing: made
+ * for the render loop. On the near plane every edge shrinks by near/ez, which cancels: 2 ez/W, -2 ex/W and so on.
+ */
+export function writeOffAxisMatrix(glass: Glass, eye: Point3, nearMm: number, farMm: number, out: number[]): void {
+  requireGlass(glass);
+  requireEye(eye);
+  requirePositive('nearMm', nearMm);
+  if (farMm <= nearMm) throw new GeometryError('farMm', `farMm (${farMm}) must lie beyond nearMm (${nearMm}).`);
+  out.fill(0);
+  out[0] = (2 * eye.z) / glass.widthMm;
+  out[5] = (2 * eye.z) / glass.heightMm;
+  out[8] = (-2 * eye.x) / glass.widthMm;
+  out[9] = (-2 * eye.y) / glass.heightMm;
+  out[10] = -(farMm + nearMm) / (farMm - nearMm);
+  out[11] = -1;
+  out[14] = (-2 * farMm * nearMm) / (farMm - nearMm);
+}

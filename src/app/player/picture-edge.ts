@@ -1,0 +1,25 @@
+import { derivativeEdges } from '@oriel/shared/contracts/photos';
+import type { LayerOnScreen } from './scene-on-screen';
+
+export type Edge = (typeof derivativeEdges)[number];
+
+/** The first picture of every layer: small, so that something is there at once. */
+export const firstEdge: Edge = derivativeEdges[0];
+
+/**
+ * The smallest derivative that is as fine as this screen can show the layer from anywhere in the viewing zone, or as the image itself is;
+ * `greatestPx` is the largest the renderer can hold.
+ */
+export function sharpEdge(layer: LayerOnScreen, greatestPx = Infinity): Edge {
+  const own = Math.max(layer.image.width, layer.image.height);
+  const wanted = Math.min(layer.largestPx, own);
+  const held = derivativeEdges.filter((edge) => edge <= greatestPx);
+  return held.find((edge) => edge >= wanted) ?? held.at(-1) ?? firstEdge;
+}
+
+/** Bytes a derivative takes up decoded: 4 a pixel. */
+export function decodedBytes(layer: LayerOnScreen, edge: Edge): number {
+  const { width, height } = layer.image;
+  const share = Math.min(1, edge / Math.max(width, height));
+  return Math.round(width * share) * Math.round(height * share) * 4;
+}
