@@ -1,3 +1,4 @@
 import type { Routes } from '@angular/router';
+import { Player } from './player';
 
-export const playerRoutes: Routes = [];
+export const playerRoutes: Routes = [{ path: '', component: Player }];

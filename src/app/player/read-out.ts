@@ -1,0 +1,39 @@
+import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+
+/** What the corner shows of drawing and following. */
+export interface Figures {
+  readonly framesPerSecond: number;
+  readonly facesPerSecond: number;
+  readonly captureToDrawnMs: number | null;
+  readonly eye: { readonly x: number; readonly y: number; readonly z: number };
+  readonly renderer: string;
+}
+
+/** Figures in the corner of the picture, for those who set up the room. */
+@Component({
+  selector: 'oriel-read-out',
+  template: `
+    @let shown = figures();
+    <dl>
+      <dt>Frames drawn a second</dt>
+      <dd>{{ shown.framesPerSecond }}</dd>
+      <dt>Faces tracked a second</dt>
+      <dd>{{ shown.facesPerSecond }}</dd>
+      <dt>Capture to drawing, ms</dt>
+      <dd>{{ shown.captureToDrawnMs === null ? '–' : shown.captureToDrawnMs.toFixed(0) }}</dd>
+      <dt>Eye, mm</dt>
+      <dd>{{ shown.eye.x.toFixed(0) }}, {{ shown.eye.y.toFixed(0) }}, {{ shown.eye.z.toFixed(0) }}</dd>
+      <dt>Drawn with</dt>
+      <dd>{{ shown.renderer }}</dd>
+    </dl>
+  `,
+  styles: `
+    dl { display: grid; grid-template-columns: auto auto; gap: 2px 18px; margin: 0; padding: 10px 12px; font-size: 12px; background: var(--sheet); border: 1px solid var(--line); border-radius: var(--corner); }
+    dt { color: var(--pencil); }
+    dd { margin: 0; text-align: right; font-variant-numeric: tabular-nums; min-width: 11ch; white-space: nowrap; }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ReadOut {
+  readonly figures = input.required<Figures>();
+}
