@@ -40,18 +40,17 @@ export interface Given {
   readonly mailer: Mailer;
   readonly mailPage: MailPage | null;
   readonly draining: () => boolean;
-  /** log2 of bcrypt's rounds. */
-  readonly passwordCost?: number;
+  readonly passwords?: Passwords;
   readonly limits?: LimitSettings;
 }
 
-export function assemble({ passwordCost, limits = usualLimits, ...given }: Given): Parts {
+export function assemble({ passwords = createPasswords(), limits = usualLimits, ...given }: Given): Parts {
   const secure = given.config.publicUrl.startsWith('https:');
   const cookie = sessionCookie(secure);
   const xsrf = createXsrf(given.config.sessionSecret, secure);
   return {
     ...given,
-    passwords: createPasswords(passwordCost),
+    passwords,
     cookie,
     xsrf,
     sessions: createSessions(given.connection.db, xsrf, cookie),

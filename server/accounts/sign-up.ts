@@ -19,6 +19,11 @@ const confirmHours = 24;
 export const linkSpent = (remedy: string) =>
   new DomainFailure(410, 'link-spent', 'This link has been used already, has expired, or is not whole.', remedy);
 
+/** Only after the account is there for good: within its transaction, two confirmations at one moment would wait for each other for ever. */
+export async function forgetSignUps(db: Database, email: string): Promise<void> {
+  await db.deleteFrom('sign_up').where('email', '=', email).execute();
+}
+
 export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords, publicUrl: string) {
   return {
     /** Does the same work and says the same whether the address is known or not; the mail tells its holder which. */
@@ -37,7 +42,7 @@ export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords
 
     /** Makes the account, its household and its ownership at once. @returns the account's id. @throws link-spent, already-confirmed */
     async confirm(token: string): Promise<string> {
-      return db.transaction().execute(async (change) => {
+      const { accountId, email } = await db.transaction().execute(async (change) => {
         const asked = await change
           .deleteFrom('sign_up')
           .where('token_hash', '=', hashOfToken(token))
@@ -48,10 +53,11 @@ export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords
         const accountId = await createAccount(change, { email: asked.email, name: asked.name, passwordHash: asked.password_hash });
         if (!accountId)
           throw new DomainFailure(409, 'already-confirmed', 'This address has an account already.', 'Sign in, or set a new password.');
-        await change.deleteFrom('sign_up').where('email', '=', asked.email).execute();
         await createHousehold(change, asked.household_name, accountId);
-        return accountId;
+        return { accountId, email: asked.email };
       });
+      await forgetSignUps(db, email);
+      return accountId;
     },
   };
 }

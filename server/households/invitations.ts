@@ -3,7 +3,7 @@ import type { Role } from '@oriel/shared/contracts/role';
 import { createAccount } from '../accounts/account-store';
 import { hashOfToken, hoursFromNow, makeToken } from '../accounts/mailed-token';
 import type { Passwords } from '../accounts/passwords';
-import { linkSpent } from '../accounts/sign-up';
+import { forgetSignUps, linkSpent } from '../accounts/sign-up';
 import type { Database } from '../database/database';
 import { DomainFailure, signInFirst } from '../http/failure';
 import type { Mailer } from '../mail/mailer';
@@ -94,7 +94,7 @@ export function createInvitations(db: Database, mailer: Mailer, passwords: Passw
       // Looked up before the costly hash, so that made-up tokens cost the server nothing.
       if (!(await byToken(token))) throw spent();
       const passwordHash = holder && !signedInId ? await passwords.hash(holder.password) : null;
-      return db.transaction().execute(async (change) => {
+      const { email, ...joined } = await db.transaction().execute(async (change) => {
         const invitation = await change
           .deleteFrom('invitation')
           .where('token_hash', '=', hashOfToken(token))
@@ -107,8 +107,10 @@ export function createInvitations(db: Database, mailer: Mailer, passwords: Passw
           ? await holdToAddress(change, signedInId, invitation.email)
           : await makeAccount(change, invitation.email, holder?.name, passwordHash);
         await addMember(change, invitation.household_id, accountId, invitation.role);
-        return { accountId, householdId: invitation.household_id, isNew: !signedInId };
+        return { accountId, email: invitation.email, householdId: invitation.household_id, isNew: !signedInId };
       });
+      if (joined.isNew) await forgetSignUps(db, email);
+      return joined;
     },
   };
 }
@@ -125,6 +127,5 @@ async function makeAccount(db: Database, email: string, name: string | undefined
   if (name === undefined || passwordHash === null) throw signInFirst();
   const accountId = await createAccount(db, { email, name, passwordHash });
   if (!accountId) throw new DomainFailure(409, 'has-account', 'This address has an account already.', 'Sign in with it, then open the link again.');
-  await db.deleteFrom('sign_up').where('email', '=', email).execute();
   return accountId;
 }

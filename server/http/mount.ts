@@ -45,6 +45,7 @@ export function mountOn(router: Router, db: Database, mounted: (route: Route) =>
     const method = route.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
     router[method](route.path, async (request, response) => {
       const asker = await admit(db, route.access, request.session.accountId ?? null, request.params);
+      request.log.debug({ route: route.path }, 'admitted');
       await receiveFile(request, response);
       const reply = await handler({
         params: route.params.parse(request.params),

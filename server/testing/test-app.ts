@@ -7,6 +7,7 @@ import { pino } from 'pino';
 import type { Role } from '@oriel/shared/contracts/role';
 import type { Route } from '@oriel/shared/contracts/route';
 import { createAccount } from '../accounts/account-store';
+import { createPasswords } from '../accounts/passwords';
 import { createApp } from '../app';
 import { readConfig } from '../config';
 import type { Database } from '../database/database';
@@ -84,7 +85,7 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     mailer,
     mailPage: null,
     draining: () => false,
-    passwordCost: 4,
+    passwords: createPasswords(4),
     limits: noLimits,
     ...given,
   });
