@@ -5,6 +5,7 @@ import { pino } from 'pino';
 import { createApp } from './app';
 import { readConfig, type Config } from './config';
 import { connect, migrate } from './database/database';
+import { loadDemo } from './demo/load-demo';
 import { stopGracefully } from './http/graceful-stop';
 import { plainError } from './http/log-requests';
 import { ownCertificate } from './http/own-certificate';
@@ -31,6 +32,7 @@ async function start(): Promise<void> {
   let draining = false;
   const parts = assemble({ config, connection, log, storage, jobs, mailer, mailPage, draining: () => draining });
   await startWork(parts);
+  if (config.demo) await loadDemo(parts).catch((error: unknown) => log.error({ err: error }, 'the demo could not be loaded'));
   const server = await serverFor(config, createApp(parts).express);
   server.once('error', failToStart);
   server.listen(config.port, config.host, () => log.info({ address: config.publicUrl }, 'serving'));

@@ -66,4 +66,5 @@ export interface Tables {
     created_at: MomentByDefault;
     binned_at: Moment | null;
   };
+  milestone: { name: string; reached_at: MomentByDefault };
 }

@@ -1,6 +1,6 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { coverGlass, placeTrimmed } from './cover-glass';
+import { coverGlass, placeTrimmed, placeTrimmedIn } from './cover-glass';
 import { livingRoom } from './living-room';
 
 const { glass } = livingRoom('landscape');
@@ -46,5 +46,12 @@ describe('placeTrimmed', () => {
     expect(placed.yMm).toBeCloseTo(-302.5, 9);
     expect(placed.widthMm).toBeCloseTo(605, 9);
     expect(placed.heightMm).toBeCloseTo(605, 9);
+  });
+
+  // By hand: the lower left quarter of a picture stretched over 200 x 40 mm about (10, 20).
+  it('keeps a part in its place in any rectangle', () => {
+    const image = { width: 50, height: 10, trim: { left: 0, top: 10, ofWidth: 100, ofHeight: 20 } };
+    const placed = placeTrimmedIn({ xMm: 10, yMm: 20, widthMm: 200, heightMm: 40 }, image);
+    expect(placed).toEqual({ xMm: -40, yMm: 10, widthMm: 100, heightMm: 20 });
   });
 });

@@ -17,13 +17,18 @@ export function coverGlass(glass: Glass, width: number, height: number): Rectang
  * Where a trimmed image stands when the whole picture it came from covers the glass. Images cut from one photograph keep their
  * places to each other. Pixels count downward from the top left corner, the glass upward from its centre.
  */
-export function placeTrimmed(glass: Glass, { width, height, trim }: TrimmedImage): Rectangle {
-  const whole = coverGlass(glass, trim.ofWidth, trim.ofHeight);
-  const mmPerPixel = whole.widthMm / trim.ofWidth;
+export function placeTrimmed(glass: Glass, image: TrimmedImage): Rectangle {
+  return placeTrimmedIn(coverGlass(glass, image.trim.ofWidth, image.trim.ofHeight), image);
+}
+
+/** Where a trimmed image stands when the whole picture it came from fills the rectangle. */
+export function placeTrimmedIn(whole: Rectangle, { width, height, trim }: TrimmedImage): Rectangle {
+  const across = whole.widthMm / trim.ofWidth;
+  const up = whole.heightMm / trim.ofHeight;
   return {
-    xMm: (trim.left + width / 2 - trim.ofWidth / 2) * mmPerPixel,
-    yMm: (trim.ofHeight / 2 - trim.top - height / 2) * mmPerPixel,
-    widthMm: width * mmPerPixel,
-    heightMm: height * mmPerPixel,
+    xMm: whole.xMm + (trim.left + width / 2 - trim.ofWidth / 2) * across,
+    yMm: whole.yMm + (trim.ofHeight / 2 - trim.top - height / 2) * up,
+    widthMm: width * across,
+    heightMm: height * up,
   };
 }

@@ -1,0 +1,96 @@
+import { randomUUID } from 'node:crypto';
+import { join } from 'node:path';
+import { sql } from 'kysely';
+import type { SceneDocument } from '@oriel/shared/contracts/scenes';
+import { placeTrimmedIn } from '@oriel/shared/projection/cover-glass';
+import { accountByEmail, createAccount } from '../accounts/account-store';
+import type { Database } from '../database/database';
+import { addMember, createHousehold } from '../households/household-store';
+import type { Parts } from '../parts';
+import { photoService } from '../photos/photo-service';
+import { sceneService, type SceneService } from '../scenes/scene-service';
+import type { Storage } from '../storage/storage';
+import { bringIn } from './bring-in';
+import { readDemoFiles, type DemoAccount, type DemoScene } from './demo-files';
+
+const householdName = 'The Aldermoor house';
+const done = 'demo loaded';
+
+type Members = ReadonlyMap<DemoAccount['role'], string>;
+
+/**
+ * Loads a household of our own invention, once in the life of the database, through the same services that people's uploads go through.
+ * What its people then change or throw away stays changed. Cut off halfway, the next start begins where it ended.
+ */
+export async function loadDemo({ config, connection: { db }, storage, jobs, passwords, log }: Parts): Promise<void> {
+  if (await isLoaded(db)) return;
+  const folder = join(config.assetsDir, 'demo');
+  const files = await readDemoFiles(folder);
+  // One server of several that start together; the lock goes with the transaction that holds it.
+  await db.transaction().execute(async (transaction) => {
+    await sql`select pg_advisory_xact_lock(hashtextextended(${done}, 0))`.execute(transaction);
+    if (await isLoaded(transaction)) return;
+
+    const members = await demoMembers(db, files.accounts, passwords.hash);
+    const householdId = await demoHousehold(db, members);
+    const asker = { householdId, accountId: members.get('designer') ?? members.get('owner')! };
+    const photos = photoService(db, storage, jobs);
+    for (const path of files.photos) await bringIn(storage, path, (file) => photos.receive(file, asker));
+
+    const scenes = sceneService(db, storage);
+    const known = await sceneNames(db, householdId);
+    for (const scene of [...files.scenes].reverse())
+      if (!known.has(scene.name)) await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);
+
+    await transaction.insertInto('milestone').values({ name: done }).execute();
+    log.info({ photos: files.photos.length, scenes: files.scenes.length }, 'the demo household is loaded');
+  });
+}
+
+const isLoaded = async (db: Database) =>
+  (await db.selectFrom('milestone').select('name').where('name', '=', done).executeTakeFirst()) !== undefined;
+
+/** Binned ones too. */
+async function sceneNames(db: Database, householdId: string): Promise<Set<string>> {
+  const rows = await db.selectFrom('scene').select('document').where('household_id', '=', householdId).execute();
+  return new Set(rows.map(({ document }) => document.name));
+}
+
+async function demoMembers(db: Database, accounts: readonly DemoAccount[], hash: (password: string) => Promise<string>): Promise<Members> {
+  const members = new Map<DemoAccount['role'], string>();
+  for (const { name, email, password, role } of accounts) {
+    const known = (await accountByEmail(db, email))?.id;
+    const id = known ?? (await createAccount(db, { name, email, passwordHash: await hash(password) }));
+    if (id) members.set(role, id);
+  }
+  return members;
+}
+
+async function demoHousehold(db: Database, members: Members): Promise<string> {
+  const ownerId = members.get('owner')!;
+  const known = await db
+    .selectFrom('household')
+    .innerJoin('membership', 'membership.household_id', 'household.id')
+    .select('household.id')
+    .where('household.name', '=', householdName)
+    .where('membership.account_id', '=', ownerId)
+    .executeTakeFirst();
+  const householdId = known?.id ?? (await createHousehold(db, householdName, ownerId));
+  for (const [role, accountId] of members) await addMember(db, householdId, accountId, role);
+  return householdId;
+}
+
+async function documentOf(
+  { layers, ...scene }: DemoScene,
+  folder: string,
+  householdId: string,
+  scenes: SceneService,
+  storage: Storage,
+): Promise<SceneDocument> {
+  const document: SceneDocument = { ...scene, layers: [] };
+  for (const { file, placed, ...layer } of layers) {
+    const { image } = await bringIn(storage, join(folder, file), (received) => scenes.imageFromFile(householdId, received));
+    document.layers.push({ ...layer, id: randomUUID(), image, placed: placeTrimmedIn(placed, image) });
+  }
+  return document;
+}
