@@ -17,6 +17,9 @@ const MOST_LOOKS = 4;
 /** Finds tried in one frame: more are left to the next frame. */
 const MOST_FINDS = 2;
 
+/** Squares less than this many times sharper than the whole frame take turns with it. */
+const LITTLE_MORE = 1.5;
+
 const boxSize = (face: Detection): number => Math.max(face.width, face.height);
 
 /** The region for a closer look at a find, turned to its eye line. */
@@ -47,28 +50,37 @@ export function confirm(looks: Looks, picture: Picture, find: Detection): Detect
 }
 
 /**
- * Seeks a face where nobody is followed: each frame one full-range look at the whole frame and one at the next of a ring of squares,
- * every find confirmed by closer looks. Small faces far away are found within one round of the ring.
+ * Seeks a face where nobody is followed, with full-range looks whose finds are confirmed by closer looks. Each frame has one look at the
+ * next of a ring of squares, and every second frame one at the whole frame; where the squares would show little more than the whole
+ * frame does, they take turns with it. So a small face far away is found within one round of the ring, and a frame with nobody in it
+ * costs little.
  */
 export class Acquisition {
+  private frame = 0;
   private nextTile = 0;
 
   /** Faces found and confirmed in this frame, best first; none most of the time. */
   seek(looks: Looks, picture: Picture): Detection[] {
-    const whole = this.confirmed(
-      looks,
-      picture,
-      looks.full(picture, wholeFrame(picture.width, picture.height), FIND_PROBABILITY),
-    );
-    if (whole.length > 0) return whole;
+    const whole = wholeFrame(picture.width, picture.height);
     const tiles = tilesOf(picture.width, picture.height);
-    if (tiles.length === 0) return [];
-    this.nextTile = (this.nextTile + 1) % tiles.length;
-    return this.confirmed(looks, picture, looks.full(picture, tiles[this.nextTile], FIND_PROBABILITY));
+    const takeTurns = tiles.length > 0 && whole.size < LITTLE_MORE * tiles[0].size;
+    const wholeDue = tiles.length === 0 || this.frame++ % 2 === 0;
+    if (wholeDue) {
+      const faces = this.confirmed(looks, picture, whole);
+      if (faces.length > 0) return faces;
+    }
+    if (tiles.length === 0 || (takeTurns && wholeDue)) return [];
+    return this.confirmed(looks, picture, tiles[this.nextTile++ % tiles.length]);
   }
 
-  private confirmed(looks: Looks, picture: Picture, finds: readonly Detection[]): Detection[] {
-    return finds
+  /** Starts anew with a look at the whole frame, as after losing someone. */
+  restart(): void {
+    this.frame = 0;
+  }
+
+  private confirmed(looks: Looks, picture: Picture, region: Region): Detection[] {
+    return looks
+      .full(picture, region, FIND_PROBABILITY)
       .slice(0, MOST_FINDS)
       .map((find) => confirm(looks, picture, find))
       .filter((face) => face !== null);

@@ -14,5 +14,5 @@ export interface Picture {
   sample(region: Region, n: number, low: number, beyond: Beyond, into: Float32Array): void;
 }
 
-/** Taps along each side of one output pixel: one (bilinear) up to a reduction of 2.5, and one a source pixel beyond. */
-export const tapsFor = (reduction: number): number => (reduction < 2.5 ? 1 : Math.min(8, Math.round(reduction)));
+/** Taps along each side of one output pixel: a bilinear tap spans two source pixels, so one serves up to a reduction of 2.5. */
+export const tapsFor = (reduction: number): number => (reduction < 2.5 ? 1 : Math.ceil(reduction / 2));

@@ -2,6 +2,7 @@ import { setWasmPaths } from '@tensorflow/tfjs-backend-wasm';
 import { loadGraphModel, type GraphModel } from '@tensorflow/tfjs-converter';
 import { dispose, env, memory, ready, setBackend, tensor4d, type io, type Tensor } from '@tensorflow/tfjs-core';
 import { FULL_RANGE, SHORT_RANGE } from './detector-anchors';
+import { foldPadding } from './fold-padding';
 import { LANDMARK_INPUT } from './face-landmarks';
 import type { FaceModels } from './face-models';
 
@@ -24,7 +25,7 @@ export async function loadFaceModels(files: TrackerFiles): Promise<FaceModels> {
   await ready();
   const [short, full, mesh] = await Promise.all([
     loadModel(files, 'facemesh-detection-short'),
-    loadModel(files, 'facemesh-detection-full'),
+    loadModel(files, 'facemesh-detection-full', foldPadding),
     loadModel(files, 'facemesh'),
   ]);
   const models: FaceModels = {
@@ -41,9 +42,10 @@ export async function loadFaceModels(files: TrackerFiles): Promise<FaceModels> {
   return models;
 }
 
-async function loadModel(files: TrackerFiles, name: string): Promise<GraphModel> {
+async function loadModel(files: TrackerFiles, name: string, prepare?: (topology: object) => void): Promise<GraphModel> {
   const [description, weightData] = await Promise.all([files.read(`${name}.json`), files.read(`${name}.bin`)]);
   const json = JSON.parse(new TextDecoder().decode(description)) as io.ModelJSON;
+  if (typeof json.modelTopology === 'object') prepare?.(json.modelTopology);
   return loadGraphModel({
     load: () =>
       Promise.resolve({

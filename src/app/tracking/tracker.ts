@@ -43,13 +43,14 @@ export class Tracker {
   look(picture: Picture, timestampMs: number): number | null {
     this.looks.reset();
     if (this.following && this.follow(this.following, picture, timestampMs)) return this.belief;
-    this.following = null;
+    if (this.following) this.forget();
     return this.acquire(picture, timestampMs) ? this.belief : null;
   }
 
   /** Forgets the viewer, as at a change of camera. */
   forget(): void {
     this.following = null;
+    this.acquisition.restart();
   }
 
   private follow(viewer: Following, picture: Picture, timestampMs: number): boolean {
