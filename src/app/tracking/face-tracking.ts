@@ -1,20 +1,18 @@
 import { DOCUMENT, DestroyRef, Injectable, inject, signal } from '@angular/core';
+import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
 import { requestCamera } from './camera-request';
 import type { EyeSample } from './eye-sample';
 import type { FrameFeed } from './frame-feed';
-import { glassEye, type Camera } from './glass-eye';
-import type { FromTracker, SampleMessage, ToTracker, TrackerSettings } from './tracking-messages';
+import type { CameraSetUp, FromTracker, SampleMessage, ToTracker, TrackerSettings } from './tracking-messages';
 import type { TrackingState } from './tracking-state';
 import { CAMERAS, FRAME_FEED, TRACKING_WORKER } from './tracking-surroundings';
 
 /** What following needs to know of this screen and this viewer. */
 export interface TrackingSetUp {
   /** Position, turn and field of view of the camera against the glass. */
-  readonly camera: Camera;
-  /** Distance between the viewer's pupils; 63 mm until measured. */
-  readonly ipdMm: number;
-  /** Measured over true distance for this viewer, set once at a known distance; 1 until then. */
-  readonly scaleFactor: number;
+  readonly camera: CameraSetUp;
+  /** The distance between the viewer's eyes, and the factor found by standing at a known distance; `USUAL_VIEWER` until measured. */
+  readonly viewer: ViewerMeasure;
 }
 
 /** Without a camera, or with one in use elsewhere, it is asked for again this often. */
@@ -155,7 +153,7 @@ export class FaceTracking {
     sample.timings = timings;
     if (face) {
       this.faces++;
-      sample.eye = glassEye(this.setUp.camera, face.eyeCamera);
+      sample.eye = face.eye;
     }
     this.currentState.set(face ? 'following' : 'nobody');
     for (const listener of this.listeners) listener(sample);
@@ -192,12 +190,7 @@ export class FaceTracking {
   }
 
   private settingsFor(setUp: TrackingSetUp): TrackerSettings {
-    return {
-      assetsUrl: this.assetsUrl,
-      hfovRad: setUp.camera.hfovRad,
-      ipdMm: setUp.ipdMm,
-      scaleFactor: setUp.scaleFactor,
-    };
+    return { assetsUrl: this.assetsUrl, camera: setUp.camera, viewer: setUp.viewer };
   }
 }
 

@@ -1,3 +1,7 @@
+import type { Point3 } from '@oriel/shared/projection/types';
+import type { Camera } from '@oriel/shared/viewer/camera';
+import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
+import type { HeadAngles } from '@oriel/shared/viewer/head-angles';
 import type { CameraTrack } from './track-processor';
 
 /**
@@ -9,16 +13,15 @@ export interface PixelPoint {
   readonly y: number;
 }
 
+/** The camera as the person set it up; the size of its frame is read from the frames themselves. */
+export type CameraSetUp = Omit<Camera, 'widthPx' | 'heightPx'>;
+
 /** What the worker must know before the first frame. */
 export interface TrackerSettings {
   /** Folder of the model and wasm files, as an absolute address on the page's own origin, ending in a slash. */
   readonly assetsUrl: string;
-  /** Horizontal field of view of the camera, over the whole width of its frame. */
-  readonly hfovRad: number;
-  /** The viewer's distance between the pupils; 63 mm until measured. */
-  readonly ipdMm: number;
-  /** Measured distance over true distance for this viewer, set once at a known distance; 1 until then. */
-  readonly scaleFactor: number;
+  readonly camera: CameraSetUp;
+  readonly viewer: ViewerMeasure;
 }
 
 /** One frame to look at; its `image` is transferred, and closed by the worker. */
@@ -48,17 +51,18 @@ export interface StageTimings {
 
 /** The face found in a frame. */
 export interface FaceSample {
-  /** The subject's own right and left eye: midpoints of the corners of each. */
+  /** The subject's own right and left eye, each the middle of its outline. */
   readonly rightEyePx: PixelPoint;
   readonly leftEyePx: PixelPoint;
   /** Midway between the two eyes. */
   readonly eyePx: PixelPoint;
-  /** Distance between the eyes as it would be seen facing the camera, from the fit of all landmarks. */
+  /** Distance between the eyes as it would be seen with the head facing the camera, from the fit of all landmarks. */
   readonly ipdPx: number;
-  /** The eye in camera millimetres. */
-  readonly eyeCamera: { readonly x: number; readonly y: number; readonly z: number };
-  /** Turn of the head: yaw > 0 nose to the picture's right, pitch > 0 nose down, roll > 0 clockwise in the picture. */
-  readonly pose: { readonly yawRad: number; readonly pitchRad: number; readonly rollRad: number };
+  /** The eye in millimetres from the centre of the glass: x to the viewer's right, y up, z out of the glass. */
+  readonly eye: Point3;
+  /** The same in the camera's coordinates. */
+  readonly eyeInCamera: Point3;
+  readonly head: Readonly<HeadAngles>;
   /** The landmark model's own belief that this is a face, 0 to 1. */
   readonly belief: number;
 }

@@ -1,4 +1,4 @@
-import { faceSample } from './face-sample';
+import { FaceMeasure } from './face-measure';
 import type { FaceModels } from './face-models';
 import { FrameReader } from './frame-picture';
 import { loadFaceModels } from './tfjs-face-models';
@@ -9,6 +9,7 @@ import type { FromTracker, ToTracker, TrackerSettings } from './tracking-message
 /** What the worker does with each message; the worker itself only passes messages. Frames are closed whatever happens to them. */
 export class TrackingSession {
   private readonly frames = new FrameReader();
+  private readonly measure = new FaceMeasure();
   private models: FaceModels | null = null;
   private tracker: Tracker | null = null;
   private settings: TrackerSettings | null = null;
@@ -76,7 +77,7 @@ export class TrackingSession {
       const picture = await this.frames.read(image);
       const readMs = performance.now() - begun;
       const belief = this.tracker.look(picture, timestampMs);
-      const face = belief === null ? null : faceSample(this.tracker.points, belief, picture, this.settings);
+      const face = belief === null ? null : this.measure.measure(this.tracker.points, belief, picture, this.settings);
       const { cropMs, detectMs, landmarksMs } = this.tracker.looks.times;
       this.say({
         type: 'sample',

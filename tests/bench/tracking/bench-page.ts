@@ -1,8 +1,12 @@
+import { USUAL_VIEWER } from '@oriel/shared/viewer/eye-from-landmarks';
 import type { FromTracker, ToTracker } from '../../../src/app/tracking/tracking-messages';
 import { readFrameNumber } from './frame-number';
 import { splitJpegs } from './jpeg-stream';
 import type { FromReference, ToReference } from './reference.worker';
 import type { Found, FrameResult, Look } from './result';
+
+/** A camera at the middle of the glass, looking straight out: what the bench measures is in its own coordinates. */
+const CAMERA = { position: { x: 0, y: 0, z: 0 }, pitchRad: 0, yawRad: 0, rollRad: 0, mirrored: false };
 
 /** Worker and page talk in turns here: one message out, one answer back. */
 function ask<Out, In>(worker: Worker, message: Out, transfer: Transferable[] = []): Promise<In> {
@@ -66,7 +70,7 @@ export async function replay(fps: number, hfovRad: number): Promise<FrameResult[
   const assetsUrl = new URL('/tracker/', location.href).href;
   const oriel = new Worker('/tracking.worker.js', { type: 'module' });
   const reference = new Worker('/reference.worker.js', { type: 'module' });
-  const settings = { assetsUrl, hfovRad, ipdMm: 63, scaleFactor: 1 };
+  const settings = { assetsUrl, camera: { ...CAMERA, hfovRad }, viewer: USUAL_VIEWER };
   const started = await ask<ToTracker, FromTracker>(oriel, { type: 'start', settings });
   if (started.type !== 'ready') throw new Error(started.type === 'failed' ? started.reason : 'Oriel did not start.');
   await ask<ToReference, FromReference>(reference, { type: 'start', assetsUrl });
