@@ -30,7 +30,7 @@ function domainFailure(error: unknown): DomainFailure {
 export const answerFailure: ErrorRequestHandler = (error: unknown, request, response, next) => {
   if (response.headersSent) return next(error);
   const failure = domainFailure(error);
-  if (failure.status >= 500) request.log.error({ err: error }, 'unexpected failure');
+  if (failure.status >= 500 && failure !== error) request.log.error({ err: error }, 'unexpected failure');
   const body: Failure = {
     code: failure.code,
     message: failure.message,
