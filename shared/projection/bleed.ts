@@ -29,7 +29,7 @@ export function reaches(placed: Rectangle, glass: Glass, side: Side): boolean {
   return SIDE_AXIS[side].outward * (sideOf(placed, side) - sideOfGlass(glass, side)) >= -REACH_MM;
 }
 
-/** What each side of a layer has to spare over the viewing zone. Throws a GeometryError where the home eye is not in front of the layer. */
+/** What each side of a layer has to spare over the viewing zone. Throws a GeometryError where an eye is not in front of the layer. */
 export function bleedOver(zone: ViewingZone, glass: Glass, homeEye: Point3, layer: PlacedLayer): Bleed {
   requireEye(homeEye, 'homeEye');
   const required = requiredExtent(layer.depthMm, glass, zone);

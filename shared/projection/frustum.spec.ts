@@ -81,7 +81,9 @@ describe('writeOffAxisMatrix', () => {
     fc.assert(
       fc.property(anyGlass, anyEye, (glass, eye) => {
         writeOffAxisMatrix(glass, eye, 10, 20_000, out);
-        frustumMatrix(offAxisFrustum(glass, eye, 10, 20_000)).forEach((entry, i) => expect(out[i]).toBeCloseTo(entry, 9));
+        frustumMatrix(offAxisFrustum(glass, eye, 10, 20_000)).forEach((entry, i) =>
+          expect(out[i]).toBeCloseTo(entry, 9),
+        );
       }),
     );
   });

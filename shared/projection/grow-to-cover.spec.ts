@@ -21,6 +21,18 @@ describe('growToCover', () => {
     expect(growToCover([], SETTING)).toBe(1);
   });
 
+  it('leaves out a layer that the nearest eye is not in front of', () => {
+    expect(
+      growToCover(
+        [
+          { placed: full, depthMm: 0 },
+          { placed: full, depthMm: -600 },
+        ],
+        SETTING,
+      ),
+    ).toBe(1);
+  });
+
   it('covers a side that only growing carries to the edge of the glass', () => {
     // Grown by 700/375 for the back layer, the middle one's top (150 of 200) is carried past the edge and must then be covered at its own depth.
     const middle = { placed: { xMm: 0, yMm: -50, widthMm: 200, heightMm: 400 }, depthMm: 2000 };

@@ -1,7 +1,7 @@
 import { reaches } from './bleed';
 import { layerScale } from './layer-on-glass';
 import { requiredExtent } from './required-extent';
-import { requireEye, requireRectangle } from './requirements';
+import { requireEye, requireRectangle, requireZone } from './requirements';
 import type { PlacedLayer, SceneSetting } from './scene-geometry';
 import { SIDE_AXIS, sideOf, SIDES, type Side } from './sides';
 import type { Rectangle } from './types';
@@ -12,11 +12,15 @@ import type { Rectangle } from './types';
  *
  * A side placed at G asks for s * G = g, with g the required edge of the plane carried back to the glass as the home eye
  * sees it; growing may carry a further side to the edge of the glass, which then must be covered too, so the factor is
- * found by repetition, at most once for every side of every layer.
+ * found by repetition, at most once for every side of every layer. A layer that some eye is not in front of is left out: no
+ * growth mends it (`clearance` names it).
  */
 export function growToCover(layers: readonly PlacedLayer[], { glass, homeEye, zone }: SceneSetting): number {
   requireEye(homeEye, 'homeEye');
-  const needs = layers.map((layer) => {
+  requireZone(zone);
+  const nearestMm = Math.min(zone.nearestMm, homeEye.z);
+  const seen = layers.filter(({ depthMm }) => nearestMm + depthMm > 0);
+  const needs = seen.map((layer) => {
     requireRectangle(layer.placed);
     const required = requiredExtent(layer.depthMm, glass, zone);
     const scale = layerScale(homeEye, layer.depthMm);
@@ -27,7 +31,7 @@ export function growToCover(layers: readonly PlacedLayer[], { glass, homeEye, zo
   });
   let factor = 1;
   for (;;) {
-    const reaching = layers.flatMap(({ placed }, index) =>
+    const reaching = seen.flatMap(({ placed }, index) =>
       SIDES.filter((side) => reaches(scaleRectangle(placed, factor), glass, side)).map((side) => needs[index](side)),
     );
     const next = Math.max(factor, ...reaching);

@@ -84,4 +84,10 @@ describe('requiredExtent', () => {
       }
     }
   });
+
+  it('names a layer that an eye of the zone is not in front of', () => {
+    expect(() => requiredExtent(-500, GLASS, ZONE)).toThrowError(
+      expect.objectContaining({ name: 'GeometryError', value: 'depthMm' }),
+    );
+  });
 });

@@ -1,4 +1,4 @@
-import { requireFinite, requireGlass, requireZone } from './requirements';
+import { requireGlass, requireInFront, requireZone } from './requirements';
 import { perSide, rangeOf, SIDE_AXIS, sideOfGlass, type PerSide, type Side } from './sides';
 import type { Glass, Point3, ViewingZone } from './types';
 
@@ -22,11 +22,13 @@ export interface Requirement {
  * With e settled, X - g = (g - e) d / ez is monotone in 1/ez: the *nearest* eye where (g - e) d > 0, else (an eye beyond
  * the edge for d > 0, one within it for d < 0) the *farthest*. Both extremes are corners of the box. The eye's other
  * coordinate plays no part; the middle of the zone is given for it.
+ *
+ * @throws GeometryError where an eye of the zone is not in front of the layer.
  */
 export function requiredExtent(depthMm: number, glass: Glass, zone: ViewingZone): PerSide<Requirement> {
-  requireFinite('depthMm', depthMm);
   requireGlass(glass);
   requireZone(zone);
+  requireInFront({ x: 0, y: 0, z: zone.nearestMm }, depthMm);
   return perSide((side) => requirement(side, depthMm, glass, zone));
 }
 

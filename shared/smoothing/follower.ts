@@ -60,29 +60,28 @@ export function createFollower(settings: FollowerSettings): Follower {
   };
   const wanted = { x: homeEye.x, y: homeEye.y, z: homeEye.z };
   let presence: Presence = 'nobody';
-  let easeRate = settlingRate(settings.returnMs);
-  let clockMs = NaN;
-  let sampledMs = -Infinity;
-  let lostMs = 0;
+  /** Moments, ms; kept in one object, whose figures are changed in place. */
+  const run = { clockMs: NaN, sampledMs: -Infinity, lostMs: 0, easeRate: settlingRate(settings.returnMs) };
 
   /** Lets the differences die away up to `tMs`. */
   function advance(tMs: number): void {
-    const dtMs = tMs - clockMs;
+    const dtMs = tMs - run.clockMs;
     if (dtMs > 0) {
       for (const axis of AXES) {
-        stepSettling(axes[axis].ease, dtMs, easeRate);
+        stepSettling(axes[axis].ease, dtMs, run.easeRate);
         stepSettling(axes[axis].correction, dtMs, settlingRate(settings.correctionMs));
       }
     }
-    if (!(dtMs <= 0)) clockMs = tMs;
+    if (!(dtMs <= 0)) run.clockMs = tMs;
   }
 
   /** Gives an axis a new goal and adds what it jumps by to `into`. */
   function redirect(axis: Axis, into: Settling, kind: Goal['kind'], level: number, slope: number, tMs: number): void {
     const { goal } = axes[axis];
+    const { clockMs } = run;
     const running = !Number.isNaN(clockMs);
-    const place = running ? goalAt(goal, axis, clockMs, drift, longestHorizonMs) : 0;
-    const rate = running ? goalRate(goal, axis, clockMs, drift, longestHorizonMs) : 0;
+    const place = running ? goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) : 0;
+    const rate = running ? goalRate(goal, axis, run.clockMs, drift, longestHorizonMs) : 0;
     goal.kind = kind;
     goal.level = level;
     goal.slope = slope;
@@ -90,30 +89,30 @@ export function createFollower(settings: FollowerSettings): Follower {
     if (!running) return;
     addJump(
       into,
-      place - goalAt(goal, axis, clockMs, drift, longestHorizonMs),
-      rate - goalRate(goal, axis, clockMs, drift, longestHorizonMs),
+      place - goalAt(goal, axis, run.clockMs, drift, longestHorizonMs),
+      rate - goalRate(goal, axis, run.clockMs, drift, longestHorizonMs),
     );
   }
 
   /** Stops where the present motion runs out: an exponential stop ends v/w farther on. */
   function hold(): void {
     presence = 'holding';
-    easeRate = settlingRate(settings.holdMs);
+    run.easeRate = settlingRate(settings.holdMs);
     for (const axis of AXES) {
       const { goal, ease, correction } = axes[axis];
-      const place = goalAt(goal, axis, clockMs, drift, longestHorizonMs) + ease.p + correction.p;
-      const rate = goalRate(goal, axis, clockMs, drift, longestHorizonMs) + ease.v + correction.v;
+      const place = goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.p + correction.p;
+      const rate = goalRate(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.v + correction.v;
       correction.p = correction.v = 0;
-      ease.p = -rate / easeRate;
+      ease.p = -rate / run.easeRate;
       ease.v = rate;
       goal.kind = 'rest';
-      goal.level = place + rate / easeRate;
+      goal.level = place + rate / run.easeRate;
     }
   }
 
   function goHome(): void {
     presence = 'nobody';
-    easeRate = settlingRate(settings.returnMs);
+    run.easeRate = settlingRate(settings.returnMs);
     for (const axis of AXES) redirect(axis, axes[axis].ease, 'home', homeEye[axis], 0, 0);
   }
 
@@ -144,15 +143,15 @@ export function createFollower(settings: FollowerSettings): Follower {
 
     sample(eye, tMs) {
       requireEye(eye);
-      if (tMs <= sampledMs) return;
+      if (tMs <= run.sampledMs) return;
       const appears = presence === 'nobody' || isAnother(eye, tMs);
       if (appears) {
-        easeRate = settlingRate(settings.appearMs);
+        run.easeRate = settlingRate(settings.appearMs);
         resetEyeFilter(filter);
         for (const axis of AXES) axes[axis].predictor.started = false;
       }
       presence = 'following';
-      sampledMs = tMs;
+      run.sampledMs = tMs;
       stepEyeFilter(filter, eye, tMs, settings.filter);
       for (const axis of AXES) {
         stepDoubleExponential(axes[axis].predictor, filter[axis].value, tMs, predictorMs[axis]);
@@ -169,28 +168,28 @@ export function createFollower(settings: FollowerSettings): Follower {
     },
 
     lost(tMs) {
-      if (presence !== 'following' || tMs < sampledMs) return;
-      if (Number.isNaN(clockMs)) clockMs = tMs;
-      lostMs = clockMs;
+      if (presence !== 'following' || tMs < run.sampledMs) return;
+      if (Number.isNaN(run.clockMs)) run.clockMs = tMs;
+      run.lostMs = run.clockMs;
       hold();
     },
 
     at(tMs, out) {
-      if (presence === 'following' && tMs > sampledMs + settings.silenceMs) {
-        advance(sampledMs + settings.silenceMs);
-        lostMs = clockMs;
+      if (presence === 'following' && tMs > run.sampledMs + settings.silenceMs) {
+        advance(run.sampledMs + settings.silenceMs);
+        run.lostMs = run.clockMs;
         hold();
       }
-      if (presence === 'holding' && tMs > lostMs + settings.holdMs) {
-        advance(lostMs + settings.holdMs);
+      if (presence === 'holding' && tMs > run.lostMs + settings.holdMs) {
+        advance(run.lostMs + settings.holdMs);
         goHome();
       }
       advance(tMs);
       for (const axis of AXES) {
         const { goal, ease, correction } = axes[axis];
-        wanted[axis] = goalAt(goal, axis, clockMs, drift, longestHorizonMs) + ease.p + correction.p;
+        wanted[axis] = goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.p + correction.p;
       }
-      stepSpeedLimit(limit, wanted, clockMs, settings.greatestMmPerS);
+      stepSpeedLimit(limit, wanted, run.clockMs, settings.greatestMmPerS);
       out.x = limit.limited.x;
       out.y = limit.limited.y;
       out.z = Math.max(settings.nearestMm, limit.limited.z);
