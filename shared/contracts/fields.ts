@@ -1,7 +1,12 @@
 import * as z from 'zod';
 
 export const Id = z.uuid();
-export const Name = z.string().trim().min(1, 'Give it a name').max(120, 'Use at most 120 characters');
+export const Name = z
+  .string()
+  .trim()
+  .min(1, 'Give it a name')
+  .max(120, 'Use at most 120 characters')
+  .regex(/^\P{Cc}*$/u, 'Use one line, without control characters');
 export const Email = z.string().trim().toLowerCase().pipe(z.email('Write an address like name@example.org').max(254));
 /** A moment, ISO 8601 with offset. */
 export const Moment = z.iso.datetime({ offset: true });
