@@ -1,7 +1,11 @@
 import type { Parts } from './parts';
 import { workOnDerivatives } from './photos/derivative-job';
+import { purgePhotosDaily } from './photos/purge-photos';
+import { purgeScenesDaily } from './scenes/purge-scenes';
 
 /** Takes up the work that is done apart from requests. */
-export async function startWork({ connection, storage, jobs }: Parts): Promise<void> {
-  await workOnDerivatives(connection.db, storage, jobs);
+export async function startWork({ connection: { db }, storage, jobs }: Parts): Promise<void> {
+  await workOnDerivatives(db, storage, jobs);
+  await purgePhotosDaily(db, storage, jobs);
+  await purgeScenesDaily(db, storage, jobs);
 }

@@ -3,6 +3,7 @@ import PgBoss from 'pg-boss';
 import type { Logger } from 'pino';
 import type { Database } from '../database/database';
 import type { DataOf, Job } from './job';
+import { announceServer } from './sole-server';
 
 interface Work<J extends Job> {
   /** Throwing means: try again, as often as the job allows. */
@@ -40,6 +41,11 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
   });
   boss.on('error', (error) => log.warn({ err: error }, 'the job queue met an error'));
   await boss.start();
+  const presence = await announceServer(
+    databaseUrl,
+    () => tryOrphansAgain(boss),
+    (error) => log.warn({ err: error }, 'the job queue lost a connection'),
+  );
 
   const workers = new Map<string, string[]>();
   const givenUp = (job: Job) => `${job.name}-given-up`;
@@ -94,6 +100,16 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
 
     daily: (job, hour) => boss.schedule(job.name, `0 ${hour} * * *`, {}, { tz: 'UTC' }),
 
-    stop: () => boss.stop({ graceful: true, wait: true, timeout: patienceMs }),
+    async stop() {
+      await boss.stop({ graceful: true, wait: true, timeout: patienceMs });
+      await presence.leave();
+    },
   };
+}
+
+/** Hands jobs that a killed server left under way to another try; where other servers are at work, only their expiry tells. */
+async function tryOrphansAgain(boss: PgBoss): Promise<void> {
+  const orphans = `select name, id from jobs.job where state = 'active' and not starts_with(name, '__pgboss')`;
+  const { rows } = await boss.getDb().executeSql(orphans, []);
+  for (const { name, id } of rows as { name: string; id: string }[]) await boss.fail(name, id, { reason: 'its server was killed' });
 }

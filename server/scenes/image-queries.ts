@@ -8,13 +8,14 @@ type ImageRow = Pick<Selectable<Tables['layer_image']>, 'id' | 'sha256' | 'width
 const columns = ['id', 'sha256', 'width', 'height', 'trim'] as const;
 const toImage = ({ id, width, height, trim }: ImageRow): LayerImage => ({ id, width, height, trim });
 
-export async function imageByContent(db: Database, householdId: string, sha256: string): Promise<LayerImage | null> {
+/** The household's image of this content, which now counts as used; null when it has none. */
+export async function reuseImage(db: Database, householdId: string, sha256: string): Promise<LayerImage | null> {
   const row = await db
-    .selectFrom('layer_image')
-    .select(columns)
+    .updateTable('layer_image')
+    .set({ unused_since: null })
     .where('household_id', '=', householdId)
     .where('sha256', '=', sha256)
-    .orderBy('created_at')
+    .returning(columns)
     .executeTakeFirst();
   return row ? toImage(row) : null;
 }

@@ -7,7 +7,7 @@ import { truncated } from '../pictures/refusals';
 import { lockContent, removeUnreferenced } from '../storage/content';
 import { originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
-import { imageByContent } from './image-queries';
+import { reuseImage } from './image-queries';
 import { opaqueBounds } from './opaque-bounds';
 import { nothingOpaque } from './refusals';
 
@@ -46,7 +46,7 @@ export function layerImages(db: Database, storage: Storage) {
   async function keep(householdId: string, sha256: string, image: Trimmed, path?: string): Promise<LayerImage> {
     const id = await db.transaction().execute(async (transaction) => {
       await lockContent(transaction, sha256);
-      const twin = await imageByContent(transaction, householdId, sha256);
+      const twin = await reuseImage(transaction, householdId, sha256);
       if (twin) return twin.id;
       const row = await transaction
         .insertInto('layer_image')
@@ -63,7 +63,7 @@ export function layerImages(db: Database, storage: Storage) {
     /** @throws nothing-opaque (422), truncated (422). */
     async fromPhoto(householdId: string, photo: PhotoOfLayer): Promise<NamedImage> {
       const name = nameWithout(photo.name);
-      const known = await imageByContent(db, householdId, photo.sha256);
+      const known = await reuseImage(db, householdId, photo.sha256);
       if (known) return { image: known, name };
       const image = await storage.withFile(originalKey(photo.sha256), (path) => trimmed(path, photo));
       return { image: await keep(householdId, photo.sha256, image), name };
@@ -72,7 +72,7 @@ export function layerImages(db: Database, storage: Storage) {
     /** @throws the refusals of `inspectPicture`, and nothing-opaque (422); nothing is left behind then. */
     async fromFile(householdId: string, file: ReceivedFile): Promise<NamedImage> {
       const name = nameWithout(file.name);
-      const known = await imageByContent(db, householdId, file.sha256);
+      const known = await reuseImage(db, householdId, file.sha256);
       if (known) return { image: known, name };
       const facts = await inspectPicture(file.path);
       const image = await trimmed(file.path, { ...facts, name: file.name });

@@ -1,0 +1,31 @@
+import { sql } from 'kysely';
+import type { Database } from '../database/database';
+import type { Jobs } from '../jobs/jobs';
+import { binnedBefore, purgeHour, purgeJob } from '../jobs/purging';
+import { forgetContent } from '../storage/content';
+import type { Storage } from '../storage/storage';
+
+const job = purgeJob('purge-photos');
+
+/** Whether some scene, in the bin or not, shows an image made from the photo's content. */
+const shownInScene = sql<boolean>`exists (
+  select from scene
+  cross join lateral jsonb_array_elements(scene.document -> 'layers') as layer
+  join layer_image on layer_image.id = (layer -> 'image' ->> 'id')::uuid
+  where layer_image.household_id = photo.household_id and layer_image.sha256 = photo.sha256
+)`;
+
+/** Deletes for good what has lain in the bin for its time, except photos that a scene shows. */
+export async function purgePhotos(db: Database, storage: Storage, now = new Date()): Promise<void> {
+  const due = (from: Database) => from.selectFrom('photo').where('binned_at', '<', binnedBefore(now)).where((where) => where.not(shownInScene));
+  for (const { id, sha256 } of await due(db).select(['id', 'sha256']).execute())
+    await forgetContent(db, storage, sha256, async (transaction) => {
+      // Looked at again, for it may have been taken out of the bin meanwhile.
+      await transaction.deleteFrom('photo').where('id', 'in', due(transaction).select('id').where('id', '=', id)).execute();
+    });
+}
+
+export async function purgePhotosDaily(db: Database, storage: Storage, jobs: Jobs): Promise<void> {
+  await jobs.work(job, { run: () => purgePhotos(db, storage) });
+  await jobs.daily(job, purgeHour);
+}
