@@ -29,7 +29,13 @@ const decoder = createRequire(import.meta.url).resolve('heic-decode');
  * rotation and mirror boxes, and by ISO/IEC 23008-12 these alone count, not an EXIF orientation beside them.
  */
 export async function decodeHeic(path: string): Promise<DecodedPixels> {
-  const thread = new Worker(worker, { eval: true, workerData: { decoder, file: await readFile(path) } });
+  const thread = new Worker(worker, {
+    eval: true,
+    workerData: { decoder, file: await readFile(path) },
+    // The decoder prints what it meets; the error it throws is enough.
+    stdout: true,
+    stderr: true,
+  });
   const patience = setTimeout(() => void thread.terminate(), patienceMs);
   try {
     return await new Promise<DecodedPixels>((resolve, reject) => {
