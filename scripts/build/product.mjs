@@ -25,7 +25,7 @@ export async function buildProduct(signal) {
   const hash = sourcesHash();
   rmSync(stamp, { force: true });
   const angular = inProject('node_modules/@angular/cli/bin/ng.js');
-  const env = { ...process.env, NG_CLI_ANALYTICS: 'false' };
+  const env = { ...process.env, NG_CLI_ANALYTICS: 'false', NO_COLOR: '1' };
   await Promise.all([
     mustRun(process.execPath, [angular, 'build', '--progress=false'], { cwd: root, env, signal }),
     bundleServer(),

@@ -1,16 +1,16 @@
 import { spawn } from 'node:child_process';
-import { mkdirSync, openSync, closeSync, readFileSync } from 'node:fs';
 import { request as plain } from 'node:http';
 import { request as secure } from 'node:https';
-import { dirname } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { pathToFileURL } from 'node:url';
 import { inProject, root } from '../project.mjs';
+import { rotatingLog } from './rotating-log.mjs';
 import { whatWentWrong } from './server-log.mjs';
 
 const readyMs = 120_000;
 const stopMs = 10_000;
 const pollMs = 50;
+const recentCharacters = 32_768;
 
 /**
  * Starts the built server as a process of its own group and waits until it is ready: migrated, demo loaded, database answering.
@@ -19,19 +19,29 @@ const pollMs = 50;
  * @throws Error with what the server's log says
  */
 export async function startServer({ settings, logFile, signal }) {
-  mkdirSync(dirname(logFile), { recursive: true });
-  const log = openSync(logFile, 'w', 0o600);
+  const log = rotatingLog(logFile);
   const guard = pathToFileURL(inProject('scripts/start/end-with-parent.mjs')).href;
   const child = spawn(process.execPath, ['--enable-source-maps', '--import', guard, inProject('dist/server/main.js')], {
     cwd: root,
     env: settings,
     detached: true,
-    stdio: ['ignore', log, log, 'ipc'],
+    stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
   });
-  closeSync(log);
-  const ended = new Promise((resolve) => child.once('exit', (code) => resolve(code ?? 1)));
+  let recent = '';
+  for (const stream of [child.stdout, child.stderr]) {
+    stream.on('data', (chunk) => {
+      log.write(chunk);
+      recent = (recent + chunk.toString()).slice(-recentCharacters);
+    });
+  }
   let gone = false;
-  void ended.then(() => (gone = true));
+  const ended = new Promise((resolve) =>
+    child.once('close', (code) => {
+      gone = true;
+      log.close();
+      resolve(code ?? 1);
+    }),
+  );
   const stop = async () => {
     child.kill('SIGTERM');
     const timer = setTimeout(() => child.kill('SIGKILL'), stopMs);
@@ -45,11 +55,11 @@ export async function startServer({ settings, logFile, signal }) {
       !(await answersReady(settings));
       await pause(pollMs, undefined, { signal })
     ) {
-      if (gone) throw new Error(whatWentWrong(readFileSync(logFile, 'utf8')));
+      if (gone) throw new Error(whatWentWrong(recent));
       if (Date.now() > end) throw new Error(`The server is not ready after ${readyMs / 1000} s. Its log: ${logFile}`);
     }
     // Another program on this port may have answered in its place.
-    if (gone) throw new Error(whatWentWrong(readFileSync(logFile, 'utf8')));
+    if (gone) throw new Error(whatWentWrong(recent));
   } catch (error) {
     await stop();
     throw error;

@@ -19,21 +19,23 @@ export async function start() {
   const running = [];
   try {
     const settings = readSettings();
+    const ownDatabase = !settings.DATABASE_URL;
     settings.PORT = await usablePort(settings, signal);
 
-    const install = async () => {
-      if (!dependenciesInstalled()) await steps.step('Installing the packages', () => installDependencies(signal));
-      if (!productBuilt()) await steps.step('Building', () => buildProduct(signal));
-    };
-    await install();
-    if (!settings.DATABASE_URL) {
+    if (!dependenciesInstalled()) await steps.step('Installing the packages', () => installDependencies(signal));
+    if (!productBuilt()) await steps.step('Building', () => buildProduct(signal));
+    if (ownDatabase) {
       const open = (say) => startPostgres({ dataDir: inProject('.oriel', 'postgres'), say, signal });
       const postgres = await steps.step('Starting the database', open);
       running.push(postgres);
       settings.DATABASE_URL = postgres.url;
     }
     const logFile = inProject('.oriel', 'server.log');
-    const server = await steps.step('Starting the server', () => startServer({ settings, logFile, signal }));
+    const server = await steps.step('Starting the server', () =>
+      startServer({ settings, logFile, signal }).catch((error) => {
+        throw ownDatabase ? error : aboutGivenDatabase(error);
+      }),
+    );
     running.push(server);
     process.stdout.write(`${greeting(settings, steps.elapsed())}\n`);
 
@@ -48,4 +50,14 @@ export async function start() {
     for (const part of running.reverse()) await part.stop();
     if (signal.aborted) process.stdout.write('Stopped.\n');
   }
+}
+
+/** Names the setting where the server could not use the database it was given. */
+function aboutGivenDatabase(error) {
+  const database =
+    /ECONNREFUSED|ENOTFOUND|ETIMEDOUT|EHOSTUNREACH|timeout|authentication failed|does not exist|permission denied/;
+  if (!database.test(error.message)) return error;
+  return new Error(
+    `The database at DATABASE_URL cannot be used. Check that address, or leave it out for a private one.\n${error.message}`,
+  );
 }
