@@ -37,9 +37,11 @@ function demoAccounts({ DEMO, ASSETS_DIR }) {
   if (DEMO === 'off' || !existsSync(file)) return [];
   const accounts = JSON.parse(readFileSync(file, 'utf8'));
   const width = Math.max(...accounts.map(({ email }) => email.length));
-  return [
-    '',
-    '  To try it, sign in as',
-    ...accounts.map(({ email, password, role }) => `    ${email.padEnd(width)}   ${password}   ${role}`),
-  ];
+  const onePassword = new Set(accounts.map(({ password }) => password)).size === 1;
+  const line = ({ email, password, role }) =>
+    `    ${email.padEnd(width)}   ${onePassword ? role : `${password}   ${role}`}`;
+  const lead = onePassword
+    ? `  To try it, sign in with the password “${accounts[0].password}” as`
+    : '  To try it, sign in as';
+  return ['', lead, ...accounts.map(line)];
 }
