@@ -72,19 +72,23 @@ export class CssRenderer implements Renderer, PictureShelf<HTMLImageElement> {
     this.element.remove();
   }
 
-  async fetch(imageId: string, edge: Edge, signal: AbortSignal): Promise<HTMLImageElement> {
+  fetch(imageId: string, edge: Edge, signal: AbortSignal): Promise<HTMLImageElement> {
     const image = this.element.ownerDocument.createElement('img');
-    const forget = () => image.removeAttribute('src');
-    signal.addEventListener('abort', forget);
-    try {
-      image.alt = '';
-      image.draggable = false;
-      image.src = this.addressOf(imageId, edge);
-      await image.decode();
-      return image;
-    } finally {
-      signal.removeEventListener('abort', forget);
-    }
+    image.alt = '';
+    image.draggable = false;
+    image.src = this.addressOf(imageId, edge);
+    return new Promise((resolve, reject) => {
+      // A picture given up while it is decoded never answers by itself.
+      const giveUp = () => {
+        this.discard(image);
+        reject(signal.reason);
+      };
+      signal.addEventListener('abort', giveUp, { once: true });
+      image
+        .decode()
+        .then(() => resolve(image), reject)
+        .finally(() => signal.removeEventListener('abort', giveUp));
+    });
   }
 
   put(index: number, image: HTMLImageElement): void {
