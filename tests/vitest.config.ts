@@ -12,7 +12,7 @@ export default defineConfig({
     testTimeout: 30_000,
     hookTimeout: 60_000,
     projects: [
-      { extends: true, test: { name: 'shared', include: ['shared/**/*.spec.ts', 'tests/outside/**/*.spec.ts', 'tests/packages/**/*.spec.ts'] } },
+      { extends: true, test: { name: 'shared', include: ['shared/**/*.spec.ts', 'tests/{outside,packages,bench,video}/**/*.spec.ts'] } },
       { extends: true, test: { name: 'server', include: ['server/**/*.spec.ts'], globalSetup: 'server/testing/global-setup.ts' } },
     ],
   },

@@ -30,6 +30,10 @@ export async function requestCamera(media: MediaDevices | undefined): Promise<Ca
   try {
     return { given: true, stream: await media.getUserMedia(WANTED) };
   } catch (cause) {
-    return { given: false, why: WHY[cause instanceof Error ? cause.name : ''] ?? 'camera-busy' };
+    return { given: false, why: WHY[nameOf(cause)] ?? 'camera-busy' };
   }
 }
+
+/** A DOMException is no Error in every browser, but has a name in all. */
+const nameOf = (cause: unknown): string =>
+  typeof cause === 'object' && cause !== null && 'name' in cause ? String(cause.name) : '';

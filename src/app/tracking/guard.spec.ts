@@ -1,0 +1,59 @@
+import type { Detection } from './detection';
+import { differ, Guard, type Eyes } from './guard';
+
+const eyes = (x: number, ipd = 60): Eyes => ({
+  rightEye: { x: x - ipd / 2, y: 100 },
+  leftEye: { x: x + ipd / 2, y: 100 },
+});
+const seen = (x: number, ipd = 60): Detection => ({
+  ...eyes(x, ipd),
+  score: 0.9,
+  cx: x,
+  cy: 100,
+  width: 120,
+  height: 120,
+});
+
+describe('differ', () => {
+  it('compares places in eye distances and sizes as a ratio', () => {
+    expect(differ(eyes(0), eyes(20), 0.35, 1.3)).toBe(false);
+    expect(differ(eyes(0), eyes(22), 0.35, 1.3)).toBe(true);
+    expect(differ(eyes(0, 60), eyes(0, 80), 0.35, 1.3)).toBe(true);
+  });
+});
+
+describe('Guard', () => {
+  it('looks every fifth frame while nothing is suspect', () => {
+    const guard = new Guard();
+    const due = Array.from({ length: 10 }, () => {
+      const now = guard.due(eyes(0));
+      if (now) guard.judge(eyes(0), seen(0));
+      return now;
+    });
+    expect(due.map(Number)).toEqual([0, 0, 0, 0, 1, 0, 0, 0, 0, 1]);
+  });
+
+  it('looks at once, and three frames on end, after an implausible jump', () => {
+    const guard = new Guard();
+    guard.due(eyes(0));
+    expect([guard.due(eyes(90)), guard.due(eyes(90)), guard.due(eyes(90)), guard.due(eyes(90))]).toEqual([
+      true,
+      true,
+      true,
+      false,
+    ]);
+  });
+
+  it('gives up at the second look in a row that sees no face, and looks again at once after the first', () => {
+    const guard = new Guard();
+    expect(guard.judge(eyes(0), undefined)).toBe('missed');
+    expect(guard.due(eyes(0))).toBe(true);
+    expect(guard.judge(eyes(0), undefined)).toBe('lost');
+  });
+
+  it('tells landmarks that hold from landmarks that cling to a wrong size', () => {
+    const guard = new Guard();
+    expect(guard.judge(eyes(0), seen(5))).toBe('holds');
+    expect(guard.judge(eyes(0), seen(0, 30))).toBe('clings');
+  });
+});
