@@ -23,6 +23,10 @@ describe('settings', () => {
     expect(wrong).toThrow('must look like postgres://');
   });
 
+  it('that are missing are named as missing', () => {
+    expect(() => readConfig({})).toThrow(/DATABASE_URL: is missing\n {2}SESSION_SECRET: is missing/);
+  });
+
   it('security: a wrong setting is not repeated in the message, for it may be a secret', () => {
     expect(() => readConfig({ ...least, SESSION_SECRET: 'hush', DATABASE_URL: 'mysql://me:hush@x' })).not.toThrow(/hush/);
   });

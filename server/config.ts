@@ -49,7 +49,7 @@ export function readConfig(environment: Record<string, string | undefined>): Con
   const present = Object.fromEntries(Object.entries(environment).filter(([, value]) => value !== ''));
   const parsed = Settings.safeParse(present);
   if (!parsed.success) {
-    const lines = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
+    const lines = parsed.error.issues.map(({ path: [name], message }) => `  ${String(name)}: ${present[String(name)] === undefined ? 'is missing' : message}`);
     throw new Error(`Oriel cannot start with these settings:\n${lines.join('\n')}\nSee .env.example.`);
   }
   const s = parsed.data;

@@ -40,6 +40,12 @@ describe('mail on a machine without a mail server', () => {
     expect(set.get('Content-Security-Policy')).toMatch(/default-src 'none'/);
   });
 
+  it('says that a mail from before a restart is gone', async () => {
+    const answer = await page('/mail/9999');
+    expect(answer.status).toBe(404);
+    expect(answer.text).toContain('This mail is gone');
+  });
+
   it('tells the page where it is, but only to somebody at this machine', async () => {
     expect((await page('/api/me', { Host: 'localhost:4300' })).body.mailPage).toBe('/mail');
     expect((await page('/api/me', { Host: '192.168.1.20:4300' })).body.mailPage).toBeNull();

@@ -1,6 +1,6 @@
 import { Router, type Request } from 'express';
 import { notFound } from '../http/failure';
-import { messageView, messagesView } from './mail-views';
+import { goneView, messageView, messagesView } from './mail-views';
 import type { KeptMessage } from './local-smtp';
 
 /** The page that shows the mail this server did not send. */
@@ -33,16 +33,15 @@ export function createMailPage(messages: () => readonly KeptMessage[], toAnyone:
     response.setHeader('Cache-Control', 'no-store');
     next();
   });
-  const find = (id: string) => {
-    const message = messages().find((kept) => kept.id === Number(id));
-    if (!message) throw notFound();
-    return message;
-  };
+  const find = (id: string) => messages().find((kept) => kept.id === Number(id));
   router.get(address, (_request, response) => void response.type('html').send(messagesView(messages())));
-  router.get(`${address}/:id`, (request, response) => void response.type('html').send(messageView(find(request.params.id))));
+  router.get(`${address}/:id`, (request, response) => {
+    const message = find(request.params.id);
+    response.status(message ? 200 : 404).type('html').send(message ? messageView(message) : goneView());
+  });
   router.get(`${address}/:id/set`, (request, response) => {
-    const { html } = find(request.params.id);
-    if (html === null) throw notFound();
+    const html = find(request.params.id)?.html;
+    if (!html) throw notFound();
     response.setHeader('Content-Security-Policy', "default-src 'none'; style-src 'unsafe-inline'; sandbox");
     response.type('html').send(html);
   });

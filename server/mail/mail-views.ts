@@ -1,13 +1,18 @@
 import { escapeHtml } from './letter';
 import type { KeptMessage } from './local-smtp';
 
+const face = (family: string, file: string, weights: string) =>
+  `@font-face{font-family:'${family}';font-weight:${weights};font-display:swap;src:url('/fonts/${file}.woff2') format('woff2')}`;
+
 const style = `
+${face('Newsreader', 'newsreader/newsreader-latin-opsz-normal', '200 800')}
+${face('Instrument Sans', 'instrument-sans/instrument-sans-latin-wght-normal', '400 700')}
 :root{color-scheme:light dark;--plaster:#F4F1EA;--ink:#22303A;--pencil:#5F6569;--line:#C9C2B2;--hairline:#DDD7C9;--brass:#8A6116}
 @media (prefers-color-scheme:dark){:root{--plaster:#15191C;--ink:#E8E2D5;--pencil:#9AA0A0;--line:#3B4247;--hairline:#2A3034;--brass:#D9B36A}}
-body{margin:0;background:var(--plaster);color:var(--ink);font:15px/1.55 'Instrument Sans Variable','Instrument Sans','Helvetica Neue',Arial,sans-serif}
+body{margin:0;background:var(--plaster);color:var(--ink);font:15px/1.55 'Instrument Sans','Helvetica Neue',Arial,sans-serif}
 main{max-width:760px;margin:0 auto;padding:32px 24px 64px}
 header{padding-bottom:12px;border-bottom:1px solid var(--line);display:flex;gap:24px;justify-content:space-between;align-items:baseline;flex-wrap:wrap}
-h1,header a.name{font:500 24px/1.25 'Newsreader Variable',Newsreader,Georgia,serif}
+h1,header a.name{font:500 24px/1.25 Newsreader,Georgia,serif}
 header a.name{color:var(--ink);text-decoration:none}
 h1{margin:28px 0 8px}
 p.note,time,dt{color:var(--pencil);font-size:13px}
@@ -40,7 +45,7 @@ const linked = (text: string) => escapeHtml(text).replace(/https?:\/\/[^\s<]+/g,
 
 export function messagesView(messages: readonly KeptMessage[]): string {
   const note =
-    '<p class="note">This server has no mail server (SMTP_URL is not set), so it keeps here what it would have sent: the last 200 mails, until it stops. Only somebody at this machine sees this page.</p>';
+    '<p class="note">This server has no mail server (SMTP_URL is not set), so it keeps here what it would have sent: the last 200 mails, until it stops. Unless MAIL_PAGE says otherwise, only somebody at this machine sees this page.</p>';
   if (messages.length === 0) return page('Mail', `<h1>No mail yet</h1>${note}<p>Sign up or ask for a new password, then reload this page.</p>`);
   const rows = messages.map(
     ({ id, subject, to, date }) => `<li><a href="/mail/${id}">${escapeHtml(subject)}</a>${time(date)}<span>to ${escapeHtml(to)}</span></li>`,
@@ -57,3 +62,6 @@ export function messageView({ id, from, to, subject, date, text, html }: KeptMes
 <pre>${linked(text)}</pre>${asSet}`,
   );
 }
+
+export const goneView = () =>
+  page('Mail', '<p><a href="/mail">All mail</a></p><h1>This mail is gone</h1><p>Mail is kept here only until the server stops. Ask for it to be sent again.</p>');
