@@ -34,7 +34,7 @@ test('someone signs up by mail, signs out, and signs in again to where they were
 });
 
 test('a wrong password says what to do and keeps the address that was typed', async ({ page, expectErrors }) => {
-  expectErrors(/401/);
+  expectErrors(/422/);
   await page.goto('/sign-in');
   await page.getByLabel('E-mail').fill('nobody@lockhouse.example');
   await page.getByLabel('Password').fill('not this one');
