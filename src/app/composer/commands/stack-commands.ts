@@ -1,0 +1,68 @@
+import type { Layer, LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { Glass, Rectangle } from '@oriel/shared/projection/types';
+import type { Change } from './change';
+
+export const MOST_LAYERS = 64;
+
+/**
+ * Where an image comes to lie when the picture it was cut from covers the glass: centred, as small as leaves no gap. A
+ * trimmed image keeps its place in that picture, so several cuts of one picture come to lie in register.
+ */
+export function placedToCover({ width, height, trim }: LayerImage, glass: Glass): Rectangle {
+  const mmPerPx = Math.max(glass.widthMm / trim.ofWidth, glass.heightMm / trim.ofHeight);
+  return {
+    xMm: (trim.left + width / 2 - trim.ofWidth / 2) * mmPerPx,
+    yMm: (trim.ofHeight / 2 - trim.top - height / 2) * mmPerPx,
+    widthMm: width * mmPerPx,
+    heightMm: height * mmPerPx,
+  };
+}
+
+/** Adds an image as the foremost layer on the glass itself. */
+export const addLayer =
+  (id: string, name: string, image: LayerImage): Change =>
+  (document) => {
+    if (document.layers.length >= MOST_LAYERS) return document;
+    const layer: Layer = {
+      id,
+      name: name.trim().slice(0, 120) || 'Layer',
+      image,
+      depthMm: 0,
+      placed: placedToCover(image, document.glass),
+      opacity: 1,
+      shown: true,
+    };
+    return { ...document, layers: [...document.layers, layer] };
+  };
+
+/** A second layer of the same image, right before the first. */
+export const duplicateLayer =
+  (id: string, copyId: string): Change =>
+  (document) => {
+    const at = document.layers.findIndex((layer) => layer.id === id);
+    if (at < 0 || document.layers.length >= MOST_LAYERS) return document;
+    const original = document.layers[at];
+    const copy = { ...original, id: copyId, name: `${original.name.slice(0, 115)} copy` };
+    return { ...document, layers: document.layers.toSpliced(at + 1, 0, copy) };
+  };
+
+export const removeLayer =
+  (id: string): Change =>
+  (document) =>
+    without(document, id);
+
+const without = (document: SceneDocument, id: string): SceneDocument =>
+  document.layers.some((layer) => layer.id === id)
+    ? { ...document, layers: document.layers.filter((layer) => layer.id !== id) }
+    : document;
+
+/** Moves a layer by `by` places in the ledger; the later stands before the earlier where depths are equal. */
+export const reorderLayer =
+  (id: string, by: number): Change =>
+  (document) => {
+    const from = document.layers.findIndex((layer) => layer.id === id);
+    const to = Math.min(Math.max(from + by, 0), document.layers.length - 1);
+    if (from < 0 || from === to) return document;
+    const layers = document.layers.toSpliced(from, 1).toSpliced(to, 0, document.layers[from]);
+    return { ...document, layers };
+  };

@@ -1,0 +1,41 @@
+import type { SceneDocument } from '@oriel/shared/contracts/scenes';
+import { clearance, type Fault } from '@oriel/shared/projection/clearance';
+import { GeometryError } from '@oriel/shared/projection/geometry-error';
+import type { Point3 } from '@oriel/shared/projection/types';
+import { describeEye, plainMm } from '../words';
+
+/** Why a scene is not clear, in words, with the layer and the eye that show it. */
+export interface StatedFault {
+  readonly words: string;
+  readonly layerId: string | null;
+  readonly eye: Point3 | null;
+}
+
+/** Every fault of what is shown of a scene; empty when no edge shows from anywhere in the viewing zone. */
+export function statedFaults(document: SceneDocument): StatedFault[] {
+  const shown = document.layers.filter((layer) => layer.shown);
+  try {
+    return clearance({ ...document, layers: shown }).map((fault) => state(fault, (index) => shown[index]));
+  } catch (error) {
+    if (error instanceof GeometryError) return [{ words: error.message, layerId: null, eye: null }];
+    throw error;
+  }
+}
+
+const sideWords = { left: 'left', right: 'right', top: 'top', bottom: 'lower' } as const;
+
+function state(fault: Fault, layerAt: (index: number) => { id: string; name: string }): StatedFault {
+  switch (fault.kind) {
+    case 'edgeShows': {
+      const { id, name } = layerAt(fault.layer);
+      const words = `${name}: its ${sideWords[fault.side]} edge shows, ${plainMm(Math.max(fault.shortMm, 0.1))} mm short, seen from ${describeEye(fault.eye)}`;
+      return { words, layerId: id, eye: fault.eye };
+    }
+    case 'tooNear': {
+      const { id, name } = layerAt(fault.layer);
+      return { words: `${name}: ${plainMm(fault.shortMm)} mm too near the nearest eye`, layerId: id, eye: fault.eye };
+    }
+    case 'sideOpen':
+      return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, layerId: null, eye: null };
+  }
+}

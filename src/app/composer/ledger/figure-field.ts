@@ -1,0 +1,105 @@
+import { ChangeDetectionStrategy, Component, ElementRef, computed, input, output, signal, viewChild } from '@angular/core';
+import { plainMm, readFigure, signedMm } from '../words';
+
+let fields = 0;
+
+/** One figure, typed or stepped: arrows by one step, with Shift by ten. What cannot be read stays there and says why. */
+@Component({
+  selector: 'oriel-figure-field',
+  template: `
+    <label [attr.for]="id" [class.unseen]="bare()">{{ label() }}</label>
+    <span class="box" [class.wrong]="problem()">
+      <input
+        #field
+        type="text"
+        inputmode="decimal"
+        role="spinbutton"
+        autocomplete="off"
+        [id]="id"
+        [value]="typed() ?? shown()"
+        [readOnly]="readOnly()"
+        [attr.aria-valuenow]="value()"
+        [attr.aria-valuetext]="shown() + ' ' + unit()"
+        [attr.aria-valuemin]="least()"
+        [attr.aria-valuemax]="most()"
+        [attr.aria-invalid]="problem() ? true : null"
+        [attr.aria-describedby]="problem() ? id + '-problem' : null"
+        (input)="typed.set(field.value)"
+        (focus)="field.select()"
+        (blur)="take()"
+        (keydown)="key($event)"
+      />
+      @if (!bare()) {
+        <span class="unit" aria-hidden="true">{{ unit() }}</span>
+      }
+    </span>
+    @if (problem()) {
+      <span class="problem" role="alert" [id]="id + '-problem'">{{ problem() }}</span>
+    }
+  `,
+  styleUrl: './figure-field.scss',
+  host: { '[class.bare]': 'bare()' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class FigureField {
+  readonly label = input.required<string>();
+  readonly value = input.required<number>();
+  readonly unit = input('mm');
+  readonly least = input(-100_000);
+  readonly most = input(100_000);
+  readonly step = input(1);
+  /** Whether a plus is shown too, as for depths. */
+  readonly signed = input(false);
+  /** Whether label and unit stand elsewhere, as in a column. */
+  readonly bare = input(false);
+  readonly readOnly = input(false);
+  readonly figure = output<number>();
+
+  protected readonly id = `figure-${(fields += 1)}`;
+  protected readonly typed = signal<string | null>(null);
+  protected readonly problem = signal('');
+  protected readonly shown = computed(() => (this.signed() ? signedMm(this.value()) : plainMm(this.value())));
+  private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
+
+  focus(): void {
+    this.field().nativeElement.focus();
+  }
+
+  protected take(): void {
+    const text = this.typed();
+    if (text === null || text === this.shown()) return this.putBack();
+    const figure = readFigure(text);
+    const problem = this.problemOf(figure);
+    this.problem.set(problem);
+    if (figure === null || problem) return;
+    this.typed.set(null);
+    this.figure.emit(figure);
+  }
+
+  protected key(event: KeyboardEvent): void {
+    if (event.key === 'Enter') this.take();
+    if (event.key === 'Escape') {
+      this.putBack();
+      event.stopPropagation();
+    }
+    if (event.key !== 'ArrowUp' && event.key !== 'ArrowDown') return;
+    event.preventDefault();
+    if (this.readOnly()) return;
+    const by = this.step() * (event.shiftKey ? 10 : 1) * (event.key === 'ArrowUp' ? 1 : -1);
+    const next = Math.min(Math.max(this.value() + by, this.least()), this.most());
+    this.putBack();
+    if (next !== this.value()) this.figure.emit(next);
+  }
+
+  private putBack(): void {
+    this.typed.set(null);
+    this.problem.set('');
+  }
+
+  private problemOf(figure: number | null): string {
+    if (figure === null) return 'Write a figure, such as 180';
+    if (figure < this.least()) return `At least ${plainMm(this.least())} ${this.unit()}`;
+    if (figure > this.most()) return `At most ${plainMm(this.most())} ${this.unit()}`;
+    return '';
+  }
+}

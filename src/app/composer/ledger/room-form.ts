@@ -1,0 +1,67 @@
+import { ChangeDetectionStrategy, Component, ElementRef, computed, effect, inject } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatDialog } from '@angular/material/dialog';
+import type { Glass, Point3, ViewingZone } from '@oriel/shared/projection/types';
+import { Icon } from '../../core/icon/icon';
+import { eyeLimits } from '../commands/limits';
+import { renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
+import { SceneStore } from '../scene-store';
+import { FigureField } from './figure-field';
+import { GlassDialog } from './glass-dialog';
+import { RoomFigures } from './room-figures';
+
+const ZONE_LABELS: readonly { readonly side: keyof ViewingZone; readonly label: string }[] = [
+  { side: 'leftMm', label: 'Left end' },
+  { side: 'rightMm', label: 'Right end' },
+  { side: 'lowestMm', label: 'Lowest eye' },
+  { side: 'highestMm', label: 'Highest eye' },
+  { side: 'nearestMm', label: 'Nearest' },
+  { side: 'farthestMm', label: 'Farthest' },
+];
+
+/** The figures of the room a scene is drawn for: its name, glass, home eye and viewing zone. */
+@Component({
+  selector: 'oriel-room-form',
+  imports: [FigureField, MatButton, Icon],
+  templateUrl: './room-form.html',
+  styleUrl: './room-form.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class RoomForm {
+  protected readonly store = inject(SceneStore);
+  protected readonly room = inject(RoomFigures);
+  private readonly dialog = inject(MatDialog);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
+  protected readonly zoneLabels = ZONE_LABELS;
+  protected readonly eyeLimits = computed(() => eyeLimits(this.store.document()));
+
+  constructor() {
+    effect(() => {
+      const part = this.room.asked();
+      if (!part || !this.room.shown()) return;
+      setTimeout(() => this.host.querySelector<HTMLInputElement>(`[data-part="${part}"] input`)?.focus());
+      this.room.asked.set(null);
+    });
+  }
+
+  protected rename(name: string): void {
+    this.store.edit(renameScene(name));
+  }
+
+  protected glass(sides: Partial<Glass>): void {
+    this.store.edit(setGlass({ ...this.store.document().glass, ...sides }), 'glass');
+  }
+
+  protected home(eye: Partial<Point3>): void {
+    this.store.edit(setHomeEye({ ...this.store.document().homeEye, ...eye }), 'home eye');
+  }
+
+  protected zone(side: keyof ViewingZone, mm: number): void {
+    this.store.edit(setZone({ [side]: mm }), `zone ${side}`);
+  }
+
+  protected async scaleToAnotherGlass(): Promise<void> {
+    const dialog = this.dialog.open<GlassDialog, Glass, Glass>(GlassDialog, { data: this.store.document().glass });
+    dialog.afterClosed().subscribe((glass) => glass && this.store.edit(scaleToGlass(glass)));
+  }
+}

@@ -1,0 +1,174 @@
+import { computed, signal } from '@angular/core';
+import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
+import { type ApiFailure, toApiFailure } from '../../core/api-failure';
+import { type Draft, sameDocument } from './draft';
+
+/** Someone else's save that came first. */
+export interface MovedOn {
+  readonly revision: number;
+  readonly savedBy: string;
+  readonly savedAt: string;
+}
+
+/** Where the scene stands with the server. */
+export type SaveState =
+  | { readonly kind: 'saved' }
+  | { readonly kind: 'waiting' }
+  | { readonly kind: 'saving' }
+  | { readonly kind: 'offline' }
+  | { readonly kind: 'failed'; readonly failure: ApiFailure; readonly retrying: boolean }
+  | { readonly kind: 'conflict'; readonly theirs: MovedOn };
+
+/** What autosave asks of the outside. */
+export interface Keeping {
+  save(revision: number, document: SceneDocument): Promise<Scene>;
+  read(): Promise<Scene>;
+  /** Puts the unsaved work where a closed tab or a crashed browser cannot lose it. */
+  keepDraft(draft: Draft): void;
+  dropDraft(): void;
+}
+
+const PAUSE_MS = 800;
+const FIRST_RETRY_MS = 2000;
+const LONGEST_RETRY_MS = 60_000;
+
+/**
+ * Saves the scene a moment after it changes, always over the revision it was drawn on. What is not yet saved is kept as a
+ * draft; a lost network and a failing server are tried again, later and later; a revision that moved on stops it until
+ * someone decides.
+ */
+export class Autosave {
+  private readonly current = signal<SaveState>({ kind: 'saved' });
+  private readonly base = signal({ revision: 0, savedAt: '', savedBy: '' });
+  private pending: SceneDocument | null = null;
+  private sent: SceneDocument | null = null;
+  private inFlight: Promise<void> | null = null;
+  private timer: ReturnType<typeof setTimeout> | undefined;
+  private failures = 0;
+
+  readonly state = this.current.asReadonly();
+  readonly saved = this.base.asReadonly();
+  readonly unsaved = computed(() => this.current().kind !== 'saved');
+
+  constructor(private readonly keeping: Keeping) {}
+
+  /** Starts from a scene as the server has it. */
+  begin(scene: Scene): void {
+    clearTimeout(this.timer);
+    this.pending = null;
+    this.failures = 0;
+    this.adopt(scene);
+    this.current.set({ kind: 'saved' });
+  }
+
+  changed(document: SceneDocument): void {
+    this.pending = document;
+    this.keeping.keepDraft({ revision: this.base().revision, document });
+    const state = this.current();
+    if (state.kind === 'saved') this.current.set({ kind: 'waiting' });
+    const retriesItself = state.kind === 'offline' || (state.kind === 'failed' && state.retrying);
+    if (state.kind !== 'conflict' && !retriesItself) this.after(PAUSE_MS);
+  }
+
+  /** Saves now what is pending; also how a person tries again, and what happens when the network is back. */
+  async flush(): Promise<void> {
+    clearTimeout(this.timer);
+    if (this.inFlight) await this.inFlight;
+    if (!this.pending || this.current().kind === 'conflict') return;
+    this.inFlight = this.attempt(this.pending).finally(() => (this.inFlight = null));
+    await this.inFlight;
+  }
+
+  /** Saves mine over theirs, knowingly. */
+  async saveOver(): Promise<void> {
+    const state = this.current();
+    if (state.kind !== 'conflict') return;
+    this.base.update((base) => ({ ...base, revision: state.theirs.revision }));
+    this.current.set({ kind: 'waiting' });
+    await this.flush();
+  }
+
+  /** Opens a decision about work left behind that stands on an older revision than the newest, theirs. */
+  contest(draft: Draft, theirs: MovedOn): void {
+    this.base.update((base) => ({ ...base, revision: draft.revision }));
+    this.pending = draft.document;
+    this.keeping.keepDraft(draft);
+    this.current.set({ kind: 'conflict', theirs });
+  }
+
+  /** The unsaved scene and the revision it stands on; null when all is saved. */
+  unsavedDraft(): Draft | null {
+    return this.pending ? { revision: this.base().revision, document: this.pending } : null;
+  }
+
+  /** Notes that a farewell carried this document, should its answer never be heard. */
+  farewell(): Draft | null {
+    const draft = this.current().kind === 'conflict' || this.inFlight ? null : this.unsavedDraft();
+    if (draft) this.sent = draft.document;
+    return draft;
+  }
+
+  stop(): void {
+    clearTimeout(this.timer);
+  }
+
+  private after(ms: number): void {
+    clearTimeout(this.timer);
+    this.timer = setTimeout(() => void this.flush(), ms);
+  }
+
+  private async attempt(document: SceneDocument): Promise<void> {
+    const sentBefore = this.sent;
+    this.sent = document;
+    this.current.set({ kind: 'saving' });
+    try {
+      this.settle(await this.keeping.save(this.base().revision, document), document);
+    } catch (error) {
+      const failure = toApiFailure(error);
+      if (movedOn(failure) && (await this.wasOurOwn([document, sentBefore]))) return;
+      this.fail(failure);
+    }
+  }
+
+  /** A save whose answer was lost on the way makes the next one find its own document there: that is no conflict. */
+  private async wasOurOwn(mine: readonly (SceneDocument | null)[]): Promise<boolean> {
+    const theirs = await this.keeping.read().catch(() => null);
+    const found = mine.find((document) => document && theirs && sameDocument(document, theirs.document));
+    if (!found || !theirs) return false;
+    this.settle(theirs, found);
+    return true;
+  }
+
+  private settle(scene: Scene, stored: SceneDocument): void {
+    this.failures = 0;
+    this.adopt(scene);
+    if (this.pending === stored) {
+      this.pending = null;
+      this.keeping.dropDraft();
+      this.current.set({ kind: 'saved' });
+      return;
+    }
+    if (this.pending) this.keeping.keepDraft({ revision: scene.revision, document: this.pending });
+    this.current.set({ kind: 'waiting' });
+    this.after(PAUSE_MS);
+  }
+
+  private fail(failure: ApiFailure): void {
+    const moved = movedOn(failure);
+    if (moved) return this.current.set({ kind: 'conflict', theirs: moved });
+    const retrying = failure.offline || failure.status >= 500 || failure.status === 429;
+    this.current.set(failure.offline ? { kind: 'offline' } : { kind: 'failed', failure, retrying });
+    if (retrying) this.after(Math.min(FIRST_RETRY_MS * 2 ** this.failures, LONGEST_RETRY_MS));
+    this.failures += 1;
+  }
+
+  private adopt({ revision, savedAt, savedBy }: MovedOn): void {
+    this.base.set({ revision, savedAt, savedBy });
+  }
+}
+
+function movedOn({ failure }: ApiFailure): MovedOn | null {
+  const { revision, savedBy, savedAt } = failure.detail ?? {};
+  if (failure.code !== 'revision-moved' || typeof revision !== 'number') return null;
+  return { revision, savedBy: String(savedBy), savedAt: String(savedAt) };
+}

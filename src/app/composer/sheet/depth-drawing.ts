@@ -1,0 +1,154 @@
+import type { SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { Point2, Point3, Rectangle } from '@oriel/shared/projection/types';
+import { walkPath } from '../walk/walk-path';
+import { type DrawnLayer, seenFrom } from '../layers/drawn-layer';
+import { describeDepth, signedMm } from '../words';
+import { acrossOf, glassAcross, sidesOf, spanAcross } from './across';
+import { assumedCamera } from './assumed-camera';
+import { depthTicks } from './depth-scale';
+import { spreadLabels } from './labels';
+import { depthRangeOf, drawnAt } from './placing';
+import type { DepthFrame, Frame } from './sheet-layout';
+
+export interface Line {
+  readonly from: Point2;
+  readonly to: Point2;
+}
+
+/** A layer as a line of plan or section. */
+export interface DrawnLine extends Line {
+  readonly id: string;
+  readonly name: string;
+  readonly depthMm: number;
+  readonly depthText: string;
+  readonly valueText: string;
+  readonly colour: string;
+  readonly shown: boolean;
+  readonly selected: boolean;
+  /** Where the line runs on past the drawing and is broken off. */
+  readonly breaks: readonly Point2[];
+  readonly label: Point2;
+}
+
+/** The points of a line seen through the glass: straight before it, bent only where the depth scale is logarithmic. */
+function sightline(frame: DepthFrame, eye: Point3, edge: number, behindMm: number): string {
+  const e = acrossOf(frame.view, eye);
+  const linear = Math.min(frame.depth.linearToMm, behindMm);
+  const depths = [0, linear, ...Array.from({ length: 12 }, (_, i) => linear + ((behindMm - linear) * (i + 1)) / 12)];
+  const at = (depth: number) => drawnAt(frame, { across: edge + ((edge - e) * depth) / eye.z, z: -depth });
+  return asPoints([drawnAt(frame, { across: e, z: eye.z }), ...depths.map(at)]);
+}
+
+export const asPoints = (points: readonly Point2[]) => points.map(({ x, y }) => `${x.toFixed(2)},${y.toFixed(2)}`).join(' ');
+
+export const sightlines = (frame: DepthFrame, { glass }: SceneDocument, eye: Point3) =>
+  glassAcross(frame.view, glass).map((edge) => sightline(frame, eye, edge, depthRangeOf(frame).behindMm));
+
+/** What does not depend on the eye or the layers: glass, zone, path, camera, ticks. */
+export function drawSetting(frame: DepthFrame, document: SceneDocument) {
+  const { glass, zone, homeEye } = document;
+  const { behindMm, beforeMm } = depthRangeOf(frame);
+  const [from, to] = glassAcross(frame.view, glass);
+  const { low, high } = sidesOf(frame.view);
+  const camera = assumedCamera(frame.view, glass, zone);
+  const lens = drawnAt(frame, { across: camera.across, z: 0 });
+  const path = Array.from({ length: 73 }, (_, i) => walkPath(zone, homeEye, i / 72));
+  return {
+    glass: { from: drawnAt(frame, { across: from, z: 0 }), to: drawnAt(frame, { across: to, z: 0 }) },
+    zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
+    path: asPoints(path.map((eye) => drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z }))),
+    lens,
+    cone: camera.slopes.map((slope) => ({ from: lens, to: drawnAt(frame, { across: camera.across + slope * beforeMm, z: beforeMm }) })),
+    pitchDownDeg: camera.pitchDownDeg,
+    home: drawnAt(frame, { across: acrossOf(frame.view, homeEye), z: homeEye.z }),
+    ticks: depthTicks(frame.depth, -beforeMm, behindMm).map((depthMm) => ({
+      depthMm,
+      text: depthMm === 0 ? '0' : signedMm(depthMm),
+      at: drawnAt(frame, { across: 0, z: -depthMm }),
+    })),
+  };
+}
+
+export const boxOf = (a: Point2, b: Point2): Frame => ({
+  left: Math.min(a.x, b.x),
+  top: Math.min(a.y, b.y),
+  width: Math.abs(b.x - a.x),
+  height: Math.abs(b.y - a.y),
+});
+
+const CHARACTER_PX = 6.4;
+const LABEL_PX = 13;
+
+/** The layers as lines at their depth, the farthest first, broken off where they run past the frame. */
+export function drawLines(frame: DepthFrame, layers: readonly DrawnLayer[], selectedId: string | null): DrawnLine[] {
+  const lines = layers.flatMap((drawn) => (drawn.plane ? [drawLine(frame, drawn, drawn.plane, selectedId)] : []));
+  const labels = lines.map(({ id, label, name, depthText }) => ({
+    id,
+    x: label.x,
+    y: label.y - LABEL_PX,
+    width: (name.length + depthText.length + 1) * CHARACTER_PX,
+    height: LABEL_PX,
+  }));
+  const first = (id: string) => (id === selectedId ? 0 : 1);
+  const spread = spreadLabels(labels.sort((a, b) => first(a.id) - first(b.id)), frame.left + frame.width);
+  return lines.map((line) => ({ ...line, label: { x: spread.get(line.id) ?? line.label.x, y: line.label.y } }));
+}
+
+function drawLine(frame: DepthFrame, { layer, colour }: DrawnLayer, plane: Rectangle, selectedId: string | null): DrawnLine {
+  const { from, to, breaks } = broken(frame, spanAcross(frame.view, plane).map((across) => drawnAt(frame, { across, z: -layer.depthMm })));
+  const start = frame.view === 'plan' ? from : to;
+  return {
+    id: layer.id,
+    name: layer.name,
+    depthMm: layer.depthMm,
+    depthText: signedMm(layer.depthMm),
+    valueText: describeDepth(layer.depthMm),
+    colour,
+    shown: layer.shown,
+    selected: layer.id === selectedId,
+    from,
+    to,
+    breaks,
+    label: { x: start.x + 6, y: layer.depthMm < 0 ? start.y + 14 : start.y - 5 },
+  };
+}
+
+function broken(frame: DepthFrame, [a, b]: Point2[]): Line & { breaks: Point2[] } {
+  const plan = frame.view === 'plan';
+  const [start, length] = plan ? [frame.left, frame.width] : [frame.top, frame.height];
+  const breaks: Point2[] = [];
+  const within = (point: Point2): Point2 => {
+    const value = plan ? point.x : point.y;
+    const kept = Math.min(Math.max(value, start + 3), start + length - 3);
+    const at = plan ? { x: kept, y: point.y } : { x: point.x, y: kept };
+    if (kept !== value) breaks.push(at);
+    return at;
+  };
+  return { from: within(a), to: within(b), breaks };
+}
+
+/**
+ * Projection lines of one layer: from its edge in the elevation square onto the glass, and on along the ray from the eye
+ * through that place to the layer's own edge. Where they meet the glass is where the edge is seen.
+ */
+export function projectionLines(frame: DepthFrame, drawn: DrawnLayer, eye: Point3, elevation: Point2Mapper | null): Line[][] {
+  const seen = seenFrom(drawn, eye);
+  if (!seen || !drawn.plane) return [];
+  const plane = spanAcross(frame.view, drawn.plane);
+  return spanAcross(frame.view, seen).flatMap((across, i) => {
+    const onGlass = drawnAt(frame, { across, z: 0 });
+    const start = elevation ? elevation(seen) : frame.view === 'plan' ? { x: 0, y: frame.top } : { x: frame.left, y: 0 };
+    const from = frame.view === 'plan' ? { x: onGlass.x, y: start.y } : { x: start.x, y: onGlass.y };
+    if (!insideAcross(frame, onGlass)) return [];
+    return [[{ from, to: onGlass }, { from: onGlass, to: drawnAt(frame, { across: plane[i], z: -drawn.layer.depthMm }) }]];
+  });
+}
+
+/** Where on the paper the lower right corner of a rectangle on the glass is drawn in the elevation. */
+export type Point2Mapper = (seen: Rectangle) => Point2;
+
+function insideAcross(frame: DepthFrame, { x, y }: Point2): boolean {
+  return frame.view === 'plan'
+    ? x >= frame.left && x <= frame.left + frame.width
+    : y >= frame.top && y <= frame.top + frame.height;
+}

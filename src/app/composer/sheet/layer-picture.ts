@@ -1,0 +1,52 @@
+import { ChangeDetectionStrategy, Component, DestroyRef, effect, inject, input, signal } from '@angular/core';
+import type { LayerImage } from '@oriel/shared/contracts/scenes';
+import { type Edge, imageAddress } from './image-address';
+
+/** How long to wait before asking again for a picture that did not come, ms. */
+const AGAIN_MS = 5000;
+
+/** The picture of one layer: a sharper one replaces it only once it is decoded, and one that did not come is asked for again. */
+@Component({
+  selector: 'oriel-layer-picture',
+  template: `
+    @if (source(); as src) {
+      <img [src]="src" alt="" draggable="false" />
+    } @else if (missing()) {
+      <span></span>
+    }
+  `,
+  styles: `
+    :host { display: block; }
+    img { display: block; width: 100%; height: 100%; }
+    span { display: block; height: 100%; border: 6px dashed var(--not-clear); opacity: 0.5; }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class LayerPicture {
+  readonly image = input.required<LayerImage>();
+  readonly edge = input.required<Edge>();
+  protected readonly source = signal('');
+  protected readonly missing = signal(false);
+  private timer: ReturnType<typeof setTimeout> | undefined;
+
+  constructor() {
+    effect(() => void this.bring(imageAddress(this.image(), this.edge())));
+    inject(DestroyRef).onDestroy(() => clearTimeout(this.timer));
+  }
+
+  private async bring(address: string): Promise<void> {
+    clearTimeout(this.timer);
+    const picture = new Image();
+    picture.src = address;
+    try {
+      await picture.decode();
+    } catch {
+      this.missing.set(true);
+      this.timer = setTimeout(() => void this.bring(address), AGAIN_MS);
+      return;
+    }
+    if (address !== imageAddress(this.image(), this.edge())) return;
+    this.missing.set(false);
+    this.source.set(address);
+  }
+}

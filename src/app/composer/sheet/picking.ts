@@ -1,0 +1,66 @@
+import type { Point2, Point3, ViewingZone } from '@oriel/shared/projection/types';
+import type { DrawnLayer } from '../layers/drawn-layer';
+import { drawnAt } from './placing';
+import type { DepthFrame } from './sheet-layout';
+import { acrossOf, sidesOf, spanAcross } from './across';
+
+/** What a pointer takes hold of in plan or section. */
+export type Held =
+  | { readonly kind: 'eye' }
+  | { readonly kind: 'home' }
+  | { readonly kind: 'layer'; readonly id: string }
+  | { readonly kind: 'zone'; readonly side: keyof ViewingZone };
+
+export interface Holdable {
+  readonly eye: Point3;
+  readonly homeEye: Point3;
+  readonly zone: ViewingZone;
+  readonly layers: readonly DrawnLayer[];
+  readonly selectedId: string | null;
+}
+
+/** The thing under the pointer: the eyes first, then the selected layer, then the nearest layer, then a side of the zone. */
+export function pick(frame: DepthFrame, point: Point2, things: Holdable, reachPx: number): Held | null {
+  const distanceTo = (eye: Point3) => {
+    const at = drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z });
+    return Math.hypot(at.x - point.x, at.y - point.y);
+  };
+  if (distanceTo(things.eye) <= reachPx + 4) return { kind: 'eye' };
+  if (distanceTo(things.homeEye) <= reachPx) return { kind: 'home' };
+  const layers = things.layers
+    .map((drawn) => ({ id: drawn.layer.id, px: distanceToLayer(frame, point, drawn) - (drawn.layer.id === things.selectedId ? 3 : 0) }))
+    .filter(({ px }) => px <= reachPx)
+    .sort((a, b) => a.px - b.px);
+  if (layers.length > 0) return { kind: 'layer', id: layers[0].id };
+  return pickZoneSide(frame, point, things.zone, reachPx * 0.6);
+}
+
+function distanceToLayer(frame: DepthFrame, point: Point2, { plane, layer }: DrawnLayer): number {
+  if (!plane) return Infinity;
+  const [from, to] = spanAcross(frame.view, plane);
+  const a = drawnAt(frame, { across: from, z: -layer.depthMm });
+  const b = drawnAt(frame, { across: to, z: -layer.depthMm });
+  const beyond = frame.view === 'plan' ? outside(point.x, a.x, b.x) : outside(point.y, b.y, a.y);
+  return Math.hypot(frame.view === 'plan' ? point.y - a.y : point.x - a.x, beyond);
+}
+
+const outside = (value: number, least: number, most: number) => Math.max(least - value, value - most, 0);
+
+function pickZoneSide(frame: DepthFrame, point: Point2, zone: ViewingZone, reachPx: number): Held | null {
+  const { low, high } = sidesOf(frame.view);
+  const a = drawnAt(frame, { across: zone[low], z: zone.nearestMm });
+  const b = drawnAt(frame, { across: zone[high], z: zone.farthestMm });
+  const [alongPoint, acrossPoint] = frame.view === 'plan' ? [point.y, point.x] : [point.x, point.y];
+  const [alongNear, alongFar] = frame.view === 'plan' ? [a.y, b.y] : [a.x, b.x];
+  const [acrossLow, acrossHigh] = frame.view === 'plan' ? [a.x, b.x] : [a.y, b.y];
+  const beside = outside(acrossPoint, Math.min(acrossLow, acrossHigh), Math.max(acrossLow, acrossHigh));
+  const beyond = outside(alongPoint, alongNear, alongFar);
+  const sides: { side: keyof ViewingZone; px: number }[] = [
+    { side: 'nearestMm', px: Math.hypot(alongPoint - alongNear, beside) },
+    { side: 'farthestMm', px: Math.hypot(alongPoint - alongFar, beside) },
+    { side: low, px: Math.hypot(acrossPoint - acrossLow, beyond) },
+    { side: high, px: Math.hypot(acrossPoint - acrossHigh, beyond) },
+  ];
+  const [nearest] = sides.filter(({ px }) => px <= reachPx).sort((p, q) => p.px - q.px);
+  return nearest ? { kind: 'zone', side: nearest.side } : null;
+}

@@ -1,0 +1,35 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { Icon } from '../../core/icon/icon';
+import type { StatedFault } from '../layers/faults';
+import { RoomFigures } from '../ledger/room-figures';
+import { SceneStore } from '../scene-store';
+import { Viewer } from '../walk/viewer';
+import { plainMm } from '../words';
+
+/** The corner of the sheet: what it shows, for which glass and eye, who saved it, and whether it is clear. */
+@Component({
+  selector: 'oriel-title-block',
+  imports: [Icon],
+  templateUrl: './title-block.html',
+  styleUrl: './title-block.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class TitleBlock {
+  readonly revision = input('');
+  protected readonly store = inject(SceneStore);
+  protected readonly room = inject(RoomFigures);
+  private readonly viewer = inject(Viewer);
+  protected readonly figures = computed(() => {
+    const { glass, homeEye, layers } = this.store.document();
+    return {
+      glass: `${plainMm(glass.widthMm)} × ${plainMm(glass.heightMm)} mm`,
+      homeEye: `${[homeEye.x, homeEye.y, homeEye.z].map((mm) => plainMm(mm)).join(', ')} mm`,
+      layers: String(layers.length),
+    };
+  });
+
+  protected show(fault: StatedFault): void {
+    if (fault.layerId) this.store.select(fault.layerId);
+    if (fault.eye) this.viewer.standAt(fault.eye);
+  }
+}

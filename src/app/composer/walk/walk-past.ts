@@ -1,0 +1,49 @@
+import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { MatButton, MatIconButton } from '@angular/material/button';
+import { MatTooltip } from '@angular/material/tooltip';
+import { Icon } from '../../core/icon/icon';
+import { describeEye } from '../words';
+import { Viewer } from './viewer';
+
+/** Below the drawing: where the simulated viewer is on the path, and the way back to the home eye. */
+@Component({
+  selector: 'oriel-walk-past',
+  imports: [MatButton, MatIconButton, MatTooltip, Icon],
+  template: `
+    @if (viewer.walking()) {
+      <button
+        matIconButton
+        type="button"
+        [attr.aria-label]="viewer.playing() ? 'Pause the walk' : 'Go on walking'"
+        [matTooltip]="viewer.playing() ? 'Pause the walk' : 'Go on walking'"
+        (click)="viewer.playing() ? viewer.pause() : viewer.play()"
+      >
+        <oriel-icon [name]="viewer.playing() ? 'pause' : 'play'" />
+      </button>
+      <input
+        #slider
+        type="range"
+        min="0"
+        max="1"
+        step="0.002"
+        aria-label="Place on the walk past"
+        [attr.aria-valuetext]="where()"
+        [value]="viewer.turn()"
+        (input)="viewer.moveTo(slider.valueAsNumber)"
+      />
+    }
+    @if (!viewer.atHome()) {
+      <button matButton type="button" class="home" (click)="viewer.goHome()">Back to the home eye</button>
+    }
+  `,
+  styles: `
+    :host { display: flex; align-items: center; gap: 8px; min-width: 0; }
+    input { flex: 0 1 220px; min-width: 60px; accent-color: var(--brass-line); height: 24px; }
+    .home { white-space: nowrap; }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class WalkPast {
+  protected readonly viewer = inject(Viewer);
+  protected readonly where = computed(() => describeEye(this.viewer.eye()));
+}

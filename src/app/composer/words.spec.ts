@@ -1,0 +1,25 @@
+import { describeDepth, describeEye, plainMm, readFigure, signedMm } from './words';
+
+describe('figures in words', () => {
+  it('carry a true minus and a plus', () => {
+    expect(signedMm(1500)).toBe('+1500');
+    expect(signedMm(-60)).toBe('\u221260');
+    expect(signedMm(-0.01)).toBe('0');
+    expect(plainMm(52.94)).toBe('52.9');
+  });
+
+  it('are read as people type them', () => {
+    expect(readFigure('+180')).toBe(180);
+    expect(readFigure('\u221260 mm')).toBe(-60);
+    expect(readFigure('12,5')).toBe(12.5);
+    expect(readFigure('80%')).toBe(80);
+    for (const wrong of ['', 'far', '1e9', '--3', '1.2.3']) expect(readFigure(wrong)).toBeNull();
+  });
+
+  it('say where a layer and an eye are', () => {
+    expect(describeDepth(180)).toBe('180 mm behind the glass');
+    expect(describeDepth(-60)).toBe('60 mm in front of the glass');
+    expect(describeDepth(0)).toBe('on the glass');
+    expect(describeEye({ x: -260, y: 0, z: 1500 })).toBe('260 mm left, 1500 mm away');
+  });
+});

@@ -1,0 +1,48 @@
+import type { Point3 } from '@oriel/shared/projection/types';
+
+/** A true minus sign: as wide as a plus, so columns of figures stay in line. */
+const MINUS = '\u2212';
+
+/** A figure of mm with at most one decimal. */
+export function plainMm(value: number, decimals = 1): string {
+  const text = rounded(Math.abs(value), decimals);
+  return value < 0 && Number(text) !== 0 ? MINUS + text : text;
+}
+
+/** A depth or a bleed: always with its sign. */
+export function signedMm(value: number, decimals = 1): string {
+  const text = plainMm(value, decimals);
+  return Number(text) > 0 ? `+${text}` : text;
+}
+
+const rounded = (value: number, decimals: number) => String(Number(value.toFixed(decimals)));
+
+/** Reads a figure as people type it: either minus sign, a decimal comma, a trailing unit; null where it is none. */
+export function readFigure(text: string): number | null {
+  const plain = text.trim().replace(/[\u2212\u2013]/g, '-').replace(',', '.').replace(/\s*(mm|%|px)$/i, '').replace(/^\+/, '');
+  if (!/^-?(\d+\.?\d*|\.\d+)$/.test(plain)) return null;
+  return Number(plain);
+}
+
+/** Whole figures near: "180 mm behind the glass". */
+export function describeDepth(depthMm: number): string {
+  const text = plainMm(Math.abs(depthMm));
+  if (Number(text) === 0) return 'on the glass';
+  return `${text} mm ${depthMm > 0 ? 'behind' : 'in front of'} the glass`;
+}
+
+/** "260 mm left, 120 mm up, 1500 mm away", leaving out what is zero. */
+export function describeEye({ x, y, z }: Point3): string {
+  const side = (value: number, positive: string, negative: string) =>
+    Math.round(value) === 0 ? [] : [`${Math.abs(Math.round(value))} mm ${value > 0 ? positive : negative}`];
+  return [...side(x, 'right', 'left'), ...side(y, 'up', 'down'), `${Math.round(z)} mm away`].join(', ');
+}
+
+/** Hours and minutes as this person's clock shows them. */
+export const clockTime = (moment: Date): string => moment.toLocaleTimeString('en-GB', { hour: '2-digit', minute: '2-digit' });
+
+/** A moment as one says it: the time alone today, the day as well before. */
+export function sayMoment(moment: Date, now = new Date()): string {
+  if (moment.toDateString() === now.toDateString()) return `at ${clockTime(moment)}`;
+  return `on ${moment.toLocaleDateString('en-GB', { day: 'numeric', month: 'long' })} at ${clockTime(moment)}`;
+}
