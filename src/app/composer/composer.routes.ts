@@ -1,3 +1,3 @@
 import type { Routes } from '@angular/router';
 
-export const composerRoutes: Routes = [];
+export const composerRoutes: Routes = [{ path: '', loadComponent: () => import('./composer').then((m) => m.Composer) }];
