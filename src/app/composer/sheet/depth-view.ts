@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, ElementRef, computed, inject, input, signal, viewChild } from '@angular/core';
+import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, signal, viewChild } from '@angular/core';
 import type { Point2 } from '@oriel/shared/projection/types';
 import { clamp, depthLimits, eyeLimits } from '../commands/limits';
 import { setDepth } from '../commands/layer-commands';
