@@ -62,7 +62,7 @@ export class DepthView {
 
   protected breakMark(at: Point2): string {
     const across = this.plan();
-    const steps = [-7, -2.5, 2.5, 7].map((along, i) => ({ along, out: [0, -3, 3, 0][i] }));
+    const steps = [-6, -2, 2, 6].map((along, i) => ({ along, out: [0, -2.5, 2.5, 0][i] }));
     return asPoints(steps.map(({ along, out }) => (across ? { x: at.x + out, y: at.y + along } : { x: at.x + along, y: at.y + out })));
   }
 

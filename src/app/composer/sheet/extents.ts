@@ -2,7 +2,7 @@ import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Extents } from './sheet-layout';
 
 const roundUp = (value: number) => {
-  const step = value > 5000 ? 1000 : value > 1000 ? 250 : 100;
+  const step = value > 5000 ? 500 : 100;
   return Math.ceil(value / step) * step;
 };
 
@@ -12,6 +12,6 @@ export function extentsOf({ glass, homeEye, zone, layers }: SceneDocument): Exte
   return {
     glass,
     behindMm: roundUp(Math.max(farthest * 1.15, 0.4 * Math.max(glass.widthMm, glass.heightMm))),
-    beforeMm: roundUp(Math.max(zone.farthestMm, homeEye.z) * 1.06),
+    beforeMm: roundUp(Math.max(zone.farthestMm, homeEye.z) * 1.03),
   };
 }

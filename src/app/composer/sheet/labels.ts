@@ -17,7 +17,7 @@ export function spreadLabels(labels: readonly Label[], right: number): Map<strin
       if (!covered) break;
       x = covered.x + covered.width + 10;
     }
-    placed.push({ ...label, x: x + label.width <= right ? x : label.x });
+    placed.push({ ...label, x: x + label.width <= right ? x : Math.min(label.x, right - label.width) });
   }
   return new Map(placed.map(({ id, x }) => [id, x]));
 }

@@ -1,9 +1,10 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, effect, inject, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DestroyRef, effect, inject, input, signal, untracked } from '@angular/core';
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
 import { type Edge, imageAddress } from './image-address';
 
 /** How long to wait before asking again for a picture that did not come, ms. */
 const AGAIN_MS = 5000;
+const SMALL: Edge = 320;
 
 /** The picture of one layer: a sharper one replaces it only once it is decoded, and one that did not come is asked for again. */
 @Component({
@@ -30,11 +31,20 @@ export class LayerPicture {
   private timer: ReturnType<typeof setTimeout> | undefined;
 
   constructor() {
-    effect(() => void this.bring(imageAddress(this.image(), this.edge())));
+    effect(() => {
+      const [image, edge] = [this.image(), this.edge()];
+      untracked(() => void this.bringSmallFirst(image, edge));
+    });
     inject(DestroyRef).onDestroy(() => clearTimeout(this.timer));
   }
 
-  private async bring(address: string): Promise<void> {
+  /** Something to see at once, then what is sharp. */
+  private async bringSmallFirst(image: LayerImage, edge: Edge): Promise<void> {
+    if (!this.source() && edge > SMALL) await this.bring(imageAddress(image, SMALL), image);
+    await this.bring(imageAddress(image, edge), image);
+  }
+
+  private async bring(address: string, image: LayerImage): Promise<void> {
     clearTimeout(this.timer);
     const picture = new Image();
     picture.src = address;
@@ -42,10 +52,10 @@ export class LayerPicture {
       await picture.decode();
     } catch {
       this.missing.set(true);
-      this.timer = setTimeout(() => void this.bring(address), AGAIN_MS);
+      this.timer = setTimeout(() => void this.bring(address, image), AGAIN_MS);
       return;
     }
-    if (address !== imageAddress(this.image(), this.edge())) return;
+    if (image !== this.image() && image.id !== this.image().id) return;
     this.missing.set(false);
     this.source.set(address);
   }

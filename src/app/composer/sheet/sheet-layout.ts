@@ -52,14 +52,15 @@ export interface Room {
   readonly height: number;
 }
 
-const MARGIN = 30;
+const MARGIN = 26;
 const GAP = 30;
 /** Kept free at the foot of the sheet for its controls, px. */
-const FOOT = 40;
+const FOOT = 34;
 /** Beside the glass for what runs past it, px. */
 const BESIDE = 26;
 const ABOVE = 18;
 const MOST_DEPTH_PX = 460;
+const UNDER_SECTION = 260;
 
 /**
  * The three views for a sheet of this size: the elevation as large as leaves plan and section room to be read, the plan
@@ -70,7 +71,8 @@ export function layOutSheet(room: Room, extents: Extents): SheetLayout {
   const across = Math.max(room.width - 2 * MARGIN - GAP, 120);
   const down = Math.max(room.height - 2 * MARGIN - GAP - FOOT, 120);
   const leastPlan = Math.max(down * (glass.heightMm > glass.widthMm ? 0.28 : 0.37), 120);
-  const leastSection = Math.max(across * 0.27, 120);
+  // The title block stands under the section on a wide sheet, and the plan's figures before it.
+  const leastSection = Math.max(across * 0.25, across > 780 ? UNDER_SECTION : 120);
   const pxPerMm = Math.max(
     Math.min((across - leastSection - 2 * BESIDE) / glass.widthMm, (down - leastPlan - 2 * ABOVE) / glass.heightMm),
     20 / Math.max(glass.widthMm, glass.heightMm),
