@@ -7,6 +7,8 @@ import { describeEye, plainMm } from '../words';
 /** Why a scene is not clear, in words, with the layer and the eye that show it. */
 export interface StatedFault {
   readonly words: string;
+  /** From where it is seen, in words; empty where from everywhere. */
+  readonly from: string;
   readonly layerId: string | null;
   readonly eye: Point3 | null;
 }
@@ -17,7 +19,7 @@ export function statedFaults(document: SceneDocument): StatedFault[] {
   try {
     return clearance({ ...document, layers: shown }).map((fault) => state(fault, (index) => shown[index]));
   } catch (error) {
-    if (error instanceof GeometryError) return [{ words: error.message, layerId: null, eye: null }];
+    if (error instanceof GeometryError) return [{ words: error.message, from: '', layerId: null, eye: null }];
     throw error;
   }
 }
@@ -28,14 +30,14 @@ function state(fault: Fault, layerAt: (index: number) => { id: string; name: str
   switch (fault.kind) {
     case 'edgeShows': {
       const { id, name } = layerAt(fault.layer);
-      const words = `${name}: its ${sideWords[fault.side]} edge shows, ${plainMm(Math.max(fault.shortMm, 0.1))} mm short, seen from ${describeEye(fault.eye)}`;
-      return { words, layerId: id, eye: fault.eye };
+      const words = `${name}: ${sideWords[fault.side]} edge shows, ${plainMm(Math.max(fault.shortMm, 0.1))} mm short`;
+      return { words, from: `from ${describeEye(fault.eye)}`, layerId: id, eye: fault.eye };
     }
     case 'tooNear': {
       const { id, name } = layerAt(fault.layer);
-      return { words: `${name}: ${plainMm(fault.shortMm)} mm too near the nearest eye`, layerId: id, eye: fault.eye };
+      return { words: `${name}: ${plainMm(fault.shortMm)} mm too near the nearest eye`, from: '', layerId: id, eye: fault.eye };
     }
     case 'sideOpen':
-      return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, layerId: null, eye: null };
+      return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, from: '', layerId: null, eye: null };
   }
 }

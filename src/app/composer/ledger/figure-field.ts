@@ -1,4 +1,4 @@
-import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, Injector, afterNextRender, computed, inject, input, output, signal, viewChild } from '@angular/core';
 import { ChangeDetectionStrategy, Component, computed, input, output, signal, viewChild } from '@angular/core';
 import { plainMm, readFigure, signedMm } from '../words';
 
@@ -60,6 +60,7 @@ export class FigureField {
   protected readonly typed = signal<string | null>(null);
   protected readonly problem = signal('');
   protected readonly shown = computed(() => (this.signed() ? signedMm(this.value()) : plainMm(this.value())));
+  private readonly injector = inject(Injector);
   private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
 
   focus(): void {
@@ -89,7 +90,10 @@ export class FigureField {
     const by = this.step() * (event.shiftKey ? 10 : 1) * (event.key === 'ArrowUp' ? 1 : -1);
     const next = Math.min(Math.max(this.value() + by, this.least()), this.most());
     this.putBack();
-    if (next !== this.value()) this.figure.emit(next);
+    if (next === this.value()) return;
+    this.figure.emit(next);
+    // A row that moves in the ledger takes the focus from its field.
+    afterNextRender(() => this.focus(), { injector: this.injector });
   }
 
   private putBack(): void {

@@ -28,6 +28,7 @@ export interface DrawnLine extends Line {
   /** Where the line runs on past the drawing and is broken off. */
   readonly breaks: readonly Point2[];
   readonly label: Point2;
+  readonly labelWidth: number;
 }
 
 /** The points of a line seen through the glass: straight before it, bent only where the depth scale is logarithmic. */
@@ -76,17 +77,18 @@ export const boxOf = (a: Point2, b: Point2): Frame => ({
   height: Math.abs(b.y - a.y),
 });
 
-const CHARACTER_PX = 6.4;
+/** The usual width of a character of a label at 11 px. */
+const CHARACTER_PX = 6;
 const LABEL_PX = 13;
 
-/** The layers as lines at their depth, the farthest first, broken off where they run past the frame. */
+/** The layers as lines at their depth, broken off where they run past the frame. */
 export function drawLines(frame: DepthFrame, layers: readonly DrawnLayer[], selectedId: string | null): DrawnLine[] {
   const lines = layers.flatMap((drawn) => (drawn.plane ? [drawLine(frame, drawn, drawn.plane, selectedId)] : []));
-  const labels = lines.map(({ id, label, name, depthText }) => ({
+  const labels = lines.map(({ id, label, labelWidth }) => ({
     id,
     x: label.x,
     y: label.y - LABEL_PX,
-    width: (name.length + depthText.length + 1) * CHARACTER_PX,
+    width: labelWidth,
     height: LABEL_PX,
   }));
   const first = (id: string) => (id === selectedId ? 0 : 1);
@@ -109,6 +111,7 @@ function drawLine(frame: DepthFrame, { layer, colour }: DrawnLayer, plane: Recta
     from,
     to,
     breaks,
+    labelWidth: (layer.name.length + signedMm(layer.depthMm).length + 1) * CHARACTER_PX,
     label: { x: start.x + 6, y: layer.depthMm < 0 ? start.y + 14 : start.y - 5 },
   };
 }

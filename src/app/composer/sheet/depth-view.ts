@@ -35,10 +35,8 @@ export class DepthView {
   protected readonly title = computed(() => (this.plan() ? 'Plan' : 'Section'));
   protected readonly setting = computed(() => drawSetting(this.frame(), this.store.document()));
   protected readonly sightlines = computed(() => sightlines(this.frame(), this.store.document(), this.viewer.eye()));
-  protected readonly lines = computed(() => {
-    const layers = [...this.store.ledger()];
-    return drawLines(this.frame(), layers, this.store.selectedId());
-  });
+  /** In the document's order, which no depth changes: a line that has the focus keeps it. */
+  protected readonly lines = computed(() => drawLines(this.frame(), this.store.layers(), this.store.selectedId()));
   protected readonly projection = computed(() => {
     const selected = this.store.selected();
     const elevation = this.elevation();

@@ -33,12 +33,14 @@ import { Viewer } from './viewer';
       />
     }
     @if (!viewer.atHome()) {
-      <button matButton type="button" class="home" (click)="viewer.goHome()">Back to the home eye</button>
+      <button matButton="outlined" type="button" class="home" (click)="viewer.goHome()">Back to the home eye</button>
     }
   `,
   styles: `
     :host { display: flex; align-items: center; gap: 8px; min-width: 0; }
-    input { flex: 0 1 220px; min-width: 60px; accent-color: var(--brass-line); height: 24px; }
+    input { flex: 0 1 220px; min-width: 60px; height: 36px; margin: 0; appearance: none; background: linear-gradient(var(--line), var(--line)) center / 100% 1px no-repeat; cursor: pointer; }
+    input::-webkit-slider-thumb { appearance: none; width: 16px; height: 16px; border-radius: 50%; background: var(--sheet); border: 2px solid var(--brass-line); }
+    input::-moz-range-thumb { width: 12px; height: 12px; border-radius: 50%; background: var(--sheet); border: 2px solid var(--brass-line); }
     .home { white-space: nowrap; }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
