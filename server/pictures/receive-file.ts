@@ -1,12 +1,13 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createWriteStream } from 'node:fs';
 import { rm } from 'node:fs/promises';
-import { basename, join } from 'node:path';
+import { join } from 'node:path';
 import { Transform } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { Request, RequestHandler } from 'express';
 import multer, { type StorageEngine } from 'multer';
 import { photoMaxBytes } from '@oriel/shared/contracts/photos';
+import { photoName } from './file-name';
 import { noFile } from './refusals';
 import { plausibleMoment } from './taken-date';
 
@@ -22,11 +23,7 @@ export interface ReceivedFile {
 
 type Arrived = Omit<ReceivedFile, 'modifiedAt'>;
 
-const nameMaxCharacters = 200;
 const arrivals = new WeakMap<Request, Arrived>();
-
-/** The last part of the name without control characters, which no file system would take. */
-const cleanName = (name: string) => basename(name.replaceAll('\\', '/')).replace(/[\u0000-\u001f\u007f]/g, '').trim().slice(0, nameMaxCharacters) || 'Untitled';
 
 /** Writes the file into the folder and takes its SHA-256 on the way; a file that does not arrive whole is removed. */
 function hashingEngine(incomingDir: string): StorageEngine {
@@ -44,7 +41,7 @@ function hashingEngine(incomingDir: string): StorageEngine {
       });
       pipeline(file.stream, measure, createWriteStream(path)).then(
         () => {
-          arrivals.set(request, { path, sha256: hash.digest('hex'), bytes, name: cleanName(file.originalname) });
+          arrivals.set(request, { path, sha256: hash.digest('hex'), bytes, name: photoName(file.originalname) });
           done(null, { path, size: bytes });
         },
         (error: unknown) => void rm(path, { force: true }).finally(() => done(error)),

@@ -1,5 +1,6 @@
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
+import { titleFrom } from '../pictures/file-name';
 import { inspectPicture } from '../pictures/inspect-picture';
 import { openPicture } from '../pictures/open-picture';
 import type { ReceivedFile } from '../pictures/receive-file';
@@ -25,11 +26,6 @@ export interface PhotoOfLayer {
 }
 
 type Trimmed = Omit<LayerImage, 'id'>;
-
-const nameMaxCharacters = 120;
-/** A file's name without its extension, as the name of what is made from it. */
-export const nameWithout = (fileName: string) =>
-  fileName.replace(/\.[a-z0-9]{2,5}$/i, '').trim().slice(0, nameMaxCharacters) || 'Untitled';
 
 export type LayerImages = ReturnType<typeof layerImages>;
 
@@ -62,7 +58,7 @@ export function layerImages(db: Database, storage: Storage) {
   return {
     /** @throws nothing-opaque (422), truncated (422). */
     async fromPhoto(householdId: string, photo: PhotoOfLayer): Promise<NamedImage> {
-      const name = nameWithout(photo.name);
+      const name = titleFrom(photo.name);
       const known = await reuseImage(db, householdId, photo.sha256);
       if (known) return { image: known, name };
       const image = await storage.withFile(originalKey(photo.sha256), (path) => trimmed(path, photo));
@@ -71,7 +67,7 @@ export function layerImages(db: Database, storage: Storage) {
 
     /** @throws the refusals of `inspectPicture`, and nothing-opaque (422); nothing is left behind then. */
     async fromFile(householdId: string, file: ReceivedFile): Promise<NamedImage> {
-      const name = nameWithout(file.name);
+      const name = titleFrom(file.name);
       const known = await reuseImage(db, householdId, file.sha256);
       if (known) return { image: known, name };
       const facts = await inspectPicture(file.path);

@@ -3,9 +3,10 @@ import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
 import { notFound } from '../http/failure';
 import { findPhotos, type PhotoRow } from '../photos/photo-queries';
+import { titleFrom, titleOfCopy } from '../pictures/file-name';
 import type { ReceivedFile } from '../pictures/receive-file';
 import type { Storage } from '../storage/storage';
-import { layerImages, nameWithout, type NamedImage, type PhotoOfLayer } from './layer-images';
+import { layerImages, type NamedImage, type PhotoOfLayer } from './layer-images';
 import { withOwnImages } from './own-images';
 import { inBin, photosNotHere, revisionMoved } from './refusals';
 import { findScene, holdScene, scenesOf, toScene, type SceneRow } from './scene-queries';
@@ -16,8 +17,6 @@ interface Asker {
   readonly accountId: string;
 }
 
-const nameMaxCharacters = 120;
-const copyOf = (name: string) => `${name.slice(0, nameMaxCharacters - ' copy'.length)} copy`;
 
 const asLayer = (photo: PhotoRow): PhotoOfLayer => ({
   sha256: photo.sha256,
@@ -77,7 +76,7 @@ export function sceneService(db: Database, storage: Storage) {
       const photos = await photosIn(asker.householdId, photoIds);
       const layers: NamedImage[] = [];
       for (const photo of photos) layers.push(await images.fromPhoto(asker.householdId, asLayer(photo)));
-      const own = photos.length === 1 ? nameWithout(photos[0].name) : 'Untitled scene';
+      const own = photos.length === 1 ? titleFrom(photos[0].name) : 'Untitled scene';
       return add(startingDocument(name ?? own, layers), asker);
     },
 
@@ -113,7 +112,7 @@ export function sceneService(db: Database, storage: Storage) {
     /** A copy of the scene, or of the document given in its stead: how an edit that came too late is kept. */
     async duplicate(id: string, given: SceneDocument | undefined, asker: Asker): Promise<Scene> {
       const document = given ? await withOwnImages(db, asker.householdId, given) : (await open(id)).document;
-      return add({ ...document, name: copyOf(document.name) }, asker);
+      return add({ ...document, name: titleOfCopy(document.name) }, asker);
     },
 
     bin: (id: string): Promise<void> => setBinned(id, true),
