@@ -40,7 +40,7 @@ async function start(): Promise<void> {
   const stop = () => {
     if (draining) return;
     draining = true;
-    const steps = [() => jobs.stop(), closePostOffice, () => connection.db.destroy()];
+    const steps = [() => jobs.stop(), () => parts.layerFiles.settled(), closePostOffice, () => connection.db.destroy()];
     void stopGracefully({ server, log, steps, exit: (code) => process.exit(code) });
   };
   process.on('SIGTERM', stop);

@@ -9,6 +9,7 @@ import { createXsrf, type Xsrf } from './http/xsrf';
 import type { Jobs } from './jobs/jobs';
 import type { MailPage } from './mail/mail-page';
 import type { Mailer } from './mail/mailer';
+import { layerFiles, type LayerFiles } from './scenes/layer-files';
 import type { Storage } from './storage/storage';
 
 /** What the features are built from; main.ts and the tests make it in their own ways. */
@@ -25,6 +26,7 @@ export interface Parts {
   readonly cookie: SessionCookie;
   readonly xsrf: Xsrf;
   readonly sessions: Sessions;
+  readonly layerFiles: LayerFiles;
   readonly limits: Limits;
   /** True once the server has been asked to stop: it finishes what it has and takes nothing new. */
   readonly draining: () => boolean;
@@ -54,6 +56,7 @@ export function assemble({ passwords = createPasswords(), limits = usualLimits, 
     cookie,
     xsrf,
     sessions: createSessions(given.connection.db, xsrf, cookie),
+    layerFiles: layerFiles(given.connection.db, given.storage),
     limits: createLimits(limits),
   };
 }

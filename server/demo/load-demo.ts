@@ -22,7 +22,7 @@ type Members = ReadonlyMap<DemoAccount['role'], string>;
  * Loads a household of our own invention, once in the life of the database, through the same services that people's uploads go through.
  * What its people then change or throw away stays changed. Cut off halfway, the next start begins where it ended.
  */
-export async function loadDemo({ config, connection: { db }, storage, jobs, passwords, log }: Parts): Promise<void> {
+export async function loadDemo({ config, connection: { db }, storage, jobs, layerFiles, passwords, log }: Parts): Promise<void> {
   if (await isLoaded(db)) return;
   const folder = join(config.assetsDir, 'demo');
   const files = await readDemoFiles(folder);
@@ -37,7 +37,7 @@ export async function loadDemo({ config, connection: { db }, storage, jobs, pass
     const photos = photoService(db, storage, jobs);
     for (const path of files.photos) await bringIn(storage, path, (file) => photos.receive(file, asker));
 
-    const scenes = sceneService(db, storage);
+    const scenes = sceneService(db, storage, layerFiles);
     const known = await sceneNames(db, householdId);
     for (const scene of [...files.scenes].reverse())
       if (!known.has(scene.name)) await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);

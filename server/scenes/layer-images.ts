@@ -9,6 +9,7 @@ import { lockContent, removeUnreferenced } from '../storage/content';
 import { originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
 import { reuseImage } from './image-queries';
+import type { LayerFiles } from './layer-files';
 import { opaqueBounds } from './opaque-bounds';
 import { nothingOpaque } from './refusals';
 
@@ -30,7 +31,7 @@ type Trimmed = Omit<LayerImage, 'id'>;
 export type LayerImages = ReturnType<typeof layerImages>;
 
 /** Makes layer images: the same content in one household is one image, however often it is taken. */
-export function layerImages(db: Database, storage: Storage) {
+export function layerImages(db: Database, storage: Storage, files: LayerFiles) {
   async function trimmed(path: string, of: Omit<PhotoOfLayer, 'sha256'>): Promise<Trimmed> {
     const whole = { left: 0, top: 0, width: of.width, height: of.height };
     const bounds = of.hasAlpha ? await boundsOf(path) : whole;
@@ -52,6 +53,7 @@ export function layerImages(db: Database, storage: Storage) {
       if (path && !(await storage.exists(originalKey(sha256)))) await storage.putFile(originalKey(sha256), path);
       return row.id;
     });
+    files.prepare({ sha256, ...image });
     return { id, ...image };
   }
 

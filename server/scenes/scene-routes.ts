@@ -6,14 +6,12 @@ import { edgeKept, layerKey } from '../storage/keys';
 import { sendStored } from '../storage/send-stored';
 import { notFound } from '../http/failure';
 import { findImage } from './image-queries';
-import { layerFiles } from './layer-files';
 import { sceneService } from './scene-service';
 
 export const sceneRoutes =
-  ({ connection: { db }, storage }: Parts): Feature =>
+  ({ connection: { db }, storage, layerFiles }: Parts): Feature =>
   (mount) => {
-    const scenes = sceneService(db, storage);
-    const files = layerFiles(db, storage);
+    const scenes = sceneService(db, storage, layerFiles);
 
     mount(routes.listScenes, async ({ householdId }) => ({ scenes: await scenes.list(householdId) }));
     mount(routes.createScene, async ({ body, householdId, accountId }) => ({
@@ -42,7 +40,7 @@ export const sceneRoutes =
       const image = await findImage(db, params.imageId);
       if (!image) throw notFound();
       const edge = edgeKept(image.width, image.height, params.edge);
-      await files.ensure(image, edge);
+      await layerFiles.ensure(image, edge);
       await sendStored(storage, request, response, { key: layerKey(image.sha256, edge), mime: 'image/webp', tag: `${image.sha256}-layer-${edge}` });
       return {};
     });

@@ -6,6 +6,7 @@ import { findPhotos, type PhotoRow } from '../photos/photo-queries';
 import { titleFrom, titleOfCopy } from '../pictures/file-name';
 import type { ReceivedFile } from '../pictures/receive-file';
 import type { Storage } from '../storage/storage';
+import type { LayerFiles } from './layer-files';
 import { layerImages, type NamedImage, type PhotoOfLayer } from './layer-images';
 import { withOwnImages } from './own-images';
 import { inBin, photosNotHere, revisionMoved } from './refusals';
@@ -28,8 +29,8 @@ const asLayer = (photo: PhotoRow): PhotoOfLayer => ({
 
 export type SceneService = ReturnType<typeof sceneService>;
 
-export function sceneService(db: Database, storage: Storage) {
-  const images = layerImages(db, storage);
+export function sceneService(db: Database, storage: Storage, files: LayerFiles) {
+  const images = layerImages(db, storage, files);
 
   async function open(id: string): Promise<SceneRow> {
     const row = await findScene(db, id);

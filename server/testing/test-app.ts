@@ -130,6 +130,7 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     close: async () => {
       await parts.mailer.settled();
       await jobs.stop();
+      await parts.layerFiles.settled();
       await database.drop();
       await rm(folder, { recursive: true, force: true });
     },
