@@ -15,6 +15,8 @@ import { assemble } from './parts';
 import { folderStorage } from './storage/folder-storage';
 import { startWork } from './work';
 
+const uploadMs = 30 * 60_000;
+
 const config = readConfig(process.env);
 const log = pino({ level: config.logLevel, serializers: { err: plainError } });
 const serverFor = async ({ https, tlsDir, storageDir }: Config, listener: RequestListener) =>
@@ -34,6 +36,8 @@ async function start(): Promise<void> {
   await startWork(parts);
   if (config.demo) await loadDemo(parts).catch((error: unknown) => log.error({ err: error }, 'the demo could not be loaded'));
   const server = await serverFor(config, createApp(parts).express);
+  // Node's own five minutes would cut a large photograph off on a slow line.
+  server.requestTimeout = uploadMs;
   server.once('error', failToStart);
   server.listen(config.port, config.host, () => log.info({ address: config.publicUrl }, 'serving'));
 

@@ -1,9 +1,13 @@
-import { join } from 'node:path';
+import { extname, join } from 'node:path';
 import express, { Router } from 'express';
+import { notFound } from './failure';
 
 const immutable = /-[A-Z0-9]{8}\.(js|css)$/;
 
-/** The built page: hashed files for good, everything else asked for anew; every other address is the page itself, which routes it. */
+/**
+ * The built page: hashed files for good, everything else asked for anew; every other address is the page itself, which routes it. An
+ * address that ends like a file is not: a chunk of an earlier build must fail as missing, and not arrive as HTML.
+ */
 export function servePage(webDir: string): Router {
   const router = Router();
   router.use(
@@ -14,7 +18,7 @@ export function servePage(webDir: string): Router {
     }),
   );
   router.get('/{*path}', (request, response, next) => {
-    if (!request.accepts('html')) return next();
+    if (extname(request.path) || !request.accepts('html')) return next(notFound());
     response.setHeader('Cache-Control', 'no-cache');
     response.sendFile(join(webDir, 'index.html'), (error) => error && next(error));
   });

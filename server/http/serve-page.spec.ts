@@ -1,0 +1,72 @@
+import { writeFile } from 'node:fs/promises';
+import { join } from 'node:path';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { createTestApp, type TestApp } from '../testing/test-app';
+
+describe('the page and its headers', () => {
+  let app: TestApp;
+  beforeAll(async () => {
+    app = await createTestApp();
+    const { webDir } = app.parts.config;
+    await writeFile(join(webDir, 'main-ABCD1234.js'), 'export {};');
+    await writeFile(join(webDir, 'model.json'), '{}');
+  });
+  afterAll(() => app.close());
+  const get = (path: string, accept = 'text/html') => app.browser().agent.get(path).set('Accept', accept);
+
+  it('is served at every address of its own, asked for anew each time', async () => {
+    for (const path of ['/', '/scenes', '/play/00000000-0000-4000-8000-000000000000', '/confirm']) {
+      const answer = await get(path);
+      expect(answer.text).toContain('<title>Oriel</title>');
+      expect(answer.get('Cache-Control')).toBe('no-cache');
+    }
+  });
+
+  it('keeps hashed files for good and others for no longer than they last', async () => {
+    expect((await get('/main-ABCD1234.js')).get('Cache-Control')).toMatch(/immutable/);
+    expect((await get('/model.json')).get('Cache-Control')).toBe('no-cache');
+  });
+
+  it('says that a file of an earlier build is missing, instead of answering with the page', async () => {
+    const answer = await get('/main-WXYZ9876.js', '*/*');
+    expect(answer.status).toBe(404);
+    expect(answer.body.code).toBe('not-found');
+  });
+
+  it('answers an unknown or broken address in the one failure shape', async () => {
+    for (const [path, status] of [['/api/nothing', 404], ['/%', 400], ['/..%2f..%2fetc%2fpasswd', 404]] as const) {
+      const answer = await get(path, '*/*');
+      expect(answer.status, path).toBe(status);
+      expect(Object.keys(answer.body)).toEqual(expect.arrayContaining(['code', 'message', 'remedy', 'reference']));
+    }
+  });
+
+  it('security: every answer carries the policy, and none says what serves it', async () => {
+    for (const path of ['/', '/api/me', '/api/nothing', '/main-ABCD1234.js', '/health']) {
+      const answer = await get(path);
+      const policy = answer.get('Content-Security-Policy')!;
+      expect(policy).toContain("default-src 'self'");
+      expect(policy).toContain("script-src 'self' 'wasm-unsafe-eval'");
+      expect(policy).toContain("frame-ancestors 'none'");
+      expect(policy).not.toContain("'unsafe-eval'");
+      expect(policy).not.toMatch(/script-src[^;]*unsafe-inline/);
+      expect(answer.get('X-Content-Type-Options')).toBe('nosniff');
+      expect(answer.get('Referrer-Policy')).toBe('no-referrer');
+      expect(answer.get('Permissions-Policy')).toBe('camera=(self), microphone=(), geolocation=()');
+      expect(answer.get('X-Powered-By')).toBeUndefined();
+      expect(answer.get('Strict-Transport-Security')).toBeUndefined();
+    }
+  });
+
+  it('security: answers about people are kept in no cache', async () => {
+    expect((await get('/api/me')).get('Cache-Control')).toBe('no-store');
+  });
+
+  it('security: a home-made certificate makes no lasting promise of https for this host', async () => {
+    const self = await createTestApp({ environment: { HTTPS: 'self' } });
+    const answer = await self.browser().agent.get('/');
+    expect(answer.get('Content-Security-Policy')).toContain('upgrade-insecure-requests');
+    expect(answer.get('Strict-Transport-Security')).toBeUndefined();
+    await self.close();
+  });
+});
