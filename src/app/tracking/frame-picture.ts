@@ -3,6 +3,8 @@ import { RgbaPicture } from './rgba-picture';
 import { YuvPicture, yuvMatrix, type YuvLayout } from './yuv-picture';
 
 const YUV_FORMATS: readonly (string | null)[] = ['I420', 'NV12'];
+/** Interleaved formats, and the byte red is at. */
+const RGB_FORMATS: Readonly<Record<string, 0 | 2>> = { RGBA: 0, RGBX: 0, BGRA: 2, BGRX: 2 };
 
 /**
  * Turns frames into pictures. Camera frames are copied as they are, planes of luma and colour, and only the pieces looked at become
@@ -15,26 +17,38 @@ export class FrameReader {
 
   /** The picture of a frame; the frame stays the caller's to close. */
   async read(image: VideoFrame | ImageBitmap): Promise<Picture> {
-    if ('format' in image && YUV_FORMATS.includes(image.format)) return this.readPlanes(image);
+    if (!('format' in image)) return this.readThroughCanvas(image);
+    if (YUV_FORMATS.includes(image.format)) return this.readPlanes(image);
+    if (image.format !== null && image.format in RGB_FORMATS) return this.readPixels(image, RGB_FORMATS[image.format]);
     return this.readThroughCanvas(image);
   }
 
   private async readPlanes(frame: VideoFrame): Promise<Picture> {
-    const size = frame.allocationSize();
-    if (this.buffer.length < size) this.buffer = new Uint8Array(size);
-    const planes = await frame.copyTo(this.buffer);
-    const { width, height } = frame.visibleRect ?? { width: frame.codedWidth, height: frame.codedHeight };
-    const interleaved = planes.length === 2;
+    const [luma, first, second] = await this.copy(frame);
     const layout: YuvLayout = {
-      lumaAt: planes[0].offset,
-      lumaStride: planes[0].stride,
-      blueAt: planes[1].offset,
-      redAt: interleaved ? planes[1].offset + 1 : planes[2].offset,
-      chromaStride: planes[1].stride,
-      chromaStep: interleaved ? 2 : 1,
+      lumaAt: luma.offset,
+      lumaStride: luma.stride,
+      blueAt: first.offset,
+      redAt: frame.format === 'NV12' ? first.offset + 1 : second.offset,
+      chromaStride: first.stride,
+      chromaStep: frame.format === 'NV12' ? 2 : 1,
     };
     const standard = frame.colorSpace.matrix === 'bt709' ? 'bt709' : 'bt601';
-    return new YuvPicture(width, height, this.buffer, layout, yuvMatrix(standard, frame.colorSpace.fullRange ?? false));
+    const matrix = yuvMatrix(standard, frame.colorSpace.fullRange ?? false);
+    const { width, height } = visibleSize(frame);
+    return new YuvPicture(width, height, this.buffer, layout, matrix);
+  }
+
+  private async readPixels(frame: VideoFrame, redAt: 0 | 2): Promise<Picture> {
+    const [{ offset, stride }] = await this.copy(frame);
+    const { width, height } = visibleSize(frame);
+    return new RgbaPicture(width, height, this.buffer.subarray(offset), redAt, stride);
+  }
+
+  private copy(frame: VideoFrame): Promise<PlaneLayout[]> {
+    const size = frame.allocationSize();
+    if (this.buffer.length < size) this.buffer = new Uint8Array(size);
+    return frame.copyTo(this.buffer);
   }
 
   private readThroughCanvas(image: VideoFrame | ImageBitmap): Picture {
@@ -47,3 +61,6 @@ export class FrameReader {
     return new RgbaPicture(width, height, context.getImageData(0, 0, width, height).data);
   }
 }
+
+const visibleSize = (frame: VideoFrame): { readonly width: number; readonly height: number } =>
+  frame.visibleRect ?? { width: frame.codedWidth, height: frame.codedHeight };

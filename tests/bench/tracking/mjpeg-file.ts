@@ -1,39 +1,59 @@
 import { spawn } from 'node:child_process';
-import { open } from 'node:fs/promises';
 import { join } from 'node:path';
+
+/** What a camera's MJPEG decodes to, and what the bench replays: luma, and colour at half the resolution each way. */
+const CAMERA_PIXELS = 'yuvj420p';
 
 /** The video as a raw MJPEG file: itself where it is one, else converted by ffmpeg into the folder at its best quality. */
 export async function asMjpeg(video: string, folder: string): Promise<string> {
-  const file = await open(video);
-  const { buffer } = await file.read(new Uint8Array(3), 0, 3, 0);
-  await file.close();
-  if (buffer[0] === 0xff && buffer[1] === 0xd8 && buffer[2] === 0xff) return video;
-  const converted = join(folder, 'video.mjpeg');
-  await runFfmpeg([
-    '-i',
+  const probe = [
+    '-v',
+    'error',
+    '-select_streams',
+    'v:0',
+    '-show_entries',
+    'format=format_name:stream=pix_fmt',
+    '-of',
+    'json',
     video,
+  ];
+  const { format, streams } = JSON.parse(await run('ffprobe', probe)) as Probed;
+  if (streams.length === 0) throw new Error(`There is no video in ${video}.`);
+  if (RAW_MJPEG.includes(format.format_name) && streams[0].pix_fmt === CAMERA_PIXELS) return video;
+  const converted = join(folder, 'video.mjpeg');
+  const encoding = [
     '-an',
     '-c:v',
     'mjpeg',
     '-q:v',
     '2',
     '-pix_fmt',
-    'yuvj420p',
+    CAMERA_PIXELS,
     '-fps_mode',
     'passthrough',
     '-f',
     'mjpeg',
-    converted,
-  ]);
+  ];
+  await run('ffmpeg', ['-v', 'error', '-y', '-i', video, ...encoding, converted]);
   return converted;
 }
 
-function runFfmpeg(args: readonly string[]): Promise<void> {
+interface Probed {
+  readonly format: { readonly format_name: string };
+  readonly streams: readonly { readonly pix_fmt: string }[];
+}
+
+/** What ffprobe calls a file of JPEG pictures one after another. */
+const RAW_MJPEG: readonly string[] = ['mjpeg', 'jpeg_pipe'];
+
+function run(program: 'ffmpeg' | 'ffprobe', args: readonly string[]): Promise<string> {
   return new Promise((resolve, reject) => {
-    const ffmpeg = spawn('ffmpeg', ['-v', 'error', '-y', ...args], { stdio: ['ignore', 'ignore', 'inherit'] });
-    ffmpeg.on('error', () => reject(new Error('ffmpeg is needed to read this video: apt-get install ffmpeg')));
-    ffmpeg.on('close', (code) =>
-      code === 0 ? resolve() : reject(new Error(`ffmpeg could not read the video (exit ${String(code)})`)),
+    const child = spawn(program, args, { stdio: ['ignore', 'pipe', 'inherit'] });
+    let printed = '';
+    child.stdout.on('data', (data: Buffer) => (printed += data.toString()));
+    child.on('error', () => reject(new Error(`${program} is needed to read the video: apt-get install ffmpeg`)));
+    child.on('close', (code) =>
+      code === 0 ? resolve(printed) : reject(new Error(`${program} could not read the video (exit ${String(code)})`)),
     );
   });
 }

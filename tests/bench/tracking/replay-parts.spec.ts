@@ -54,6 +54,11 @@ describe('matchTruth', () => {
     expect([truths[0].i, truths[7].i, truths[4094].i, truths[4099].i]).toEqual([3, 7, 4097, 4102]);
   });
 
+  it('goes by the place alone where the numbers do not count up', () => {
+    const results = Array.from({ length: 50 }, (_, place) => result((place * 977) % 4096));
+    expect(matchTruth(truth, results).truths.map(({ i }) => i)).toEqual(results.map((_, place) => place));
+  });
+
   it('refuses a truth of another video', () => {
     expect(() => matchTruth({ ...truth, frames: [frame(900)] }, [result(1)])).toThrow('belong together');
   });

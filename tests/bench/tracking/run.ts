@@ -23,6 +23,8 @@ const CHROMIUM_FLAGS = [
   '--disable-sync',
   '--disable-gpu',
 ];
+/** npm runs scripts in the project's folder; files are meant as seen from where it was called. */
+const CALLED_FROM = process.env['INIT_CWD'] ?? '.';
 const trackerFiles = fileURLToPath(new URL('../../../assets/tracker', import.meta.url));
 
 async function main(): Promise<void> {
@@ -30,10 +32,10 @@ async function main(): Promise<void> {
     options: { video: { type: 'string' }, truth: { type: 'string' }, hfov: { type: 'string', default: '60' } },
   });
   if (!values.video || !values.truth) throw new Error(`Say which video and which truth: ${USAGE}`);
-  const truth = truthSchema.parse(JSON.parse(await readFile(resolve(values.truth), 'utf8')));
+  const truth = truthSchema.parse(JSON.parse(await readFile(resolve(CALLED_FROM, values.truth), 'utf8')));
   const folder = await mkdtemp(join(tmpdir(), 'oriel-bench-'));
   try {
-    const [video] = await Promise.all([asMjpeg(resolve(values.video), folder), bundleBench(folder)]);
+    const [video] = await Promise.all([asMjpeg(resolve(CALLED_FROM, values.video), folder), bundleBench(folder)]);
     const server = await serveBench(folder, trackerFiles, video);
     const browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: CHROMIUM_FLAGS });
     try {
