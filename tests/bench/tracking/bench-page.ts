@@ -54,6 +54,7 @@ async function lookWithOriel(worker: Worker, frame: VideoFrame, timestampMs: num
     rightEye: [face.rightEyePx.x, face.rightEyePx.y],
     leftEye: [face.leftEyePx.x, face.leftEyePx.y],
     ipdPx: face.ipdPx,
+    eyeMm: [face.eyeInCamera.x, face.eyeInCamera.y, face.eyeInCamera.z],
   };
   return { face: found, engineMs: timings.totalMs, roundTripMs };
 }
@@ -66,14 +67,14 @@ async function lookWithReference(worker: Worker, image: ImageBitmap): Promise<Lo
 }
 
 /** Replays the video served at `/video` through both engines, each frame through one and then the other. */
-export async function replay(fps: number, hfovRad: number): Promise<FrameResult[]> {
+export async function replay(fps: number, hfovRad: number, ipdMm: number): Promise<FrameResult[]> {
   const assetsUrl = new URL('/tracker/', location.href).href;
   const oriel = new Worker('/tracking.worker.js', { type: 'module' });
   const reference = new Worker('/reference.worker.js', { type: 'module' });
-  const settings = { assetsUrl, camera: { ...CAMERA, hfovRad }, viewer: USUAL_VIEWER };
+  const settings = { assetsUrl, camera: { ...CAMERA, hfovRad }, viewer: { ...USUAL_VIEWER, eyeDistanceMm: ipdMm } };
   const started = await ask<ToTracker, FromTracker>(oriel, { type: 'start', settings });
   if (started.type !== 'ready') throw new Error(started.type === 'failed' ? started.reason : 'Oriel did not start.');
-  await ask<ToReference, FromReference>(reference, { type: 'start', assetsUrl });
+  await ask<ToReference, FromReference>(reference, { type: 'start', assetsUrl, hfovRad, ipdMm });
   const results: FrameResult[] = [];
   for (const [index, jpeg] of splitJpegs(new Uint8Array(await (await fetch('/video')).arrayBuffer())).entries()) {
     const timestampMs = (index * 1000) / fps;

@@ -16,7 +16,7 @@ export function matchTruth(
   truth: Truth,
   results: readonly FrameResult[],
 ): { truths: TruthFrame[]; matched: FrameResult[] } {
-  const byNumber = new Map(truth.frames.map((frame) => [frame.i, frame]));
+  const byNumber = new Map(truth.frames.map((frame) => [frame.number, frame]));
   const numbered = carriesNumbers(results);
   const truths: TruthFrame[] = [];
   const matched: FrameResult[] = [];

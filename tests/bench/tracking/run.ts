@@ -23,13 +23,15 @@ const CHROMIUM_FLAGS = [
   '--disable-sync',
   '--disable-gpu',
 ];
+/** Taken where the truth knows no distances: no figure of such a truth depends on it. */
+const USUAL_HFOV_RAD = Math.PI / 3;
 /** npm runs scripts in the project's folder; files are meant as seen from where it was called. */
 const CALLED_FROM = process.env['INIT_CWD'] ?? '.';
 const trackerFiles = fileURLToPath(new URL('../../../assets/tracker', import.meta.url));
 
 async function main(): Promise<void> {
   const { values } = parseArgs({
-    options: { video: { type: 'string' }, truth: { type: 'string' }, hfov: { type: 'string', default: '60' } },
+    options: { video: { type: 'string' }, truth: { type: 'string' } },
   });
   if (!values.video || !values.truth) throw new Error(`Say which video and which truth: ${USAGE}`);
   const truth = truthSchema.parse(JSON.parse(await readFile(resolve(CALLED_FROM, values.truth), 'utf8')));
@@ -44,18 +46,20 @@ async function main(): Promise<void> {
       await page.waitForFunction(() => 'replay' in globalThis);
       console.log(`replaying ${values.video} through both engines…`);
       const results = await page.evaluate(
-        ([fps, hfovRad]) => (globalThis as unknown as { replay: typeof replay }).replay(fps, hfovRad),
-        [truth.FPS, (Number(values.hfov) * Math.PI) / 180] as const,
+        ([fps, hfovRad, ipdMm]) => (globalThis as unknown as { replay: typeof replay }).replay(fps, hfovRad, ipdMm),
+        [truth.fps, truth.hfovRad ?? USUAL_HFOV_RAD, truth.ipdMm] as const,
       );
       const { truths, matched } = matchTruth(truth, results);
       console.log(`${String(results.length)} frames, ${String(matched.length)} matched to their truth`);
       const oriel = scoreLooks(
         truths,
         matched.map((frame) => frame.oriel),
+        truth.fps,
       );
       const reference = scoreLooks(
         truths,
         matched.map((frame) => frame.reference),
+        truth.fps,
       );
       console.log(JSON.stringify({ oriel, reference }));
     } finally {
