@@ -1,4 +1,4 @@
-import { card, degrees, diagonalOf, glassFromDiagonal, horizontalFromDiagonal, mmPerInch, nominalPxMm, pxMmFromCard, radians, verticalFromHorizontal } from './screen-measure';
+import { card, diagonalOf, glassFromDiagonal, mmPerInch, nominalPxMm, pxMmFromCard } from './screen-measure';
 
 describe('a screen measured by a card', () => {
   it('takes the card to be of ISO/IEC 7810 ID-1, 3.370 x 2.125 inches (secondary source read)', () => {
@@ -17,16 +17,5 @@ describe('a screen measured by its diagonal', () => {
     expect(glass.widthMm).toBeCloseTo(526.87, 1);
     expect(glass.heightMm).toBeCloseTo(296.36, 1);
     expect(diagonalOf(glass)).toBeCloseTo(23.8 * mmPerInch, 9);
-  });
-});
-
-describe('fields of view of 16:9 webcams (computed)', () => {
-  it.each([
-    [78, 70.43, 43.31],
-    [90, 82.15, 52.23],
-  ])('%d degrees across the diagonal are %d across and %d up', (diagonal, across, up) => {
-    const horizontal = horizontalFromDiagonal(radians(diagonal), 16 / 9);
-    expect(degrees(horizontal)).toBeCloseTo(across, 1);
-    expect(degrees(verticalFromHorizontal(horizontal, 16 / 9))).toBeCloseTo(up, 1);
   });
 });

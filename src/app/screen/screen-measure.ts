@@ -23,18 +23,5 @@ export function diagonalOf(glass: Glass): number {
   return Math.hypot(glass.widthMm, glass.heightMm);
 }
 
-/**
- * Horizontal field of view from the diagonal one, as makers of webcams print it, for a picture of shape `aspect` (width over height):
- * tan(h/2) = tan(d/2) * aspect / sqrt(aspect^2 + 1).
- */
-export function horizontalFromDiagonal(diagonalRad: number, aspect: number): number {
-  return 2 * Math.atan((Math.tan(diagonalRad / 2) * aspect) / Math.hypot(aspect, 1));
-}
-
-/** Vertical field of view from the horizontal one: tan(v/2) = tan(h/2) / aspect. */
-export function verticalFromHorizontal(horizontalRad: number, aspect: number): number {
-  return 2 * Math.atan(Math.tan(horizontalRad / 2) / aspect);
-}
-
 export const radians = (degrees: number) => (degrees * Math.PI) / 180;
 export const degrees = (rad: number) => (rad * 180) / Math.PI;

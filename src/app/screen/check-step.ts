@@ -1,0 +1,61 @@
+import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, model, signal, untracked } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatCheckbox } from '@angular/material/checkbox';
+import type { Point3 } from '@oriel/shared/projection/types';
+import { FaceTracking } from '../tracking/face-tracking';
+import type { TrackingState } from '../tracking/tracking-state';
+import { CameraDrawing } from './camera-drawing';
+import type { ScreenSetUp } from './screen-set-up';
+import { trackingSetUp } from './tracking-set-up';
+
+const words: Readonly<Record<TrackingState, string>> = {
+  off: 'The camera is off.',
+  asking: 'The browser asks for the camera.',
+  starting: 'Getting ready to follow you.',
+  refused: 'The camera was refused. Allow it beside the address, then start again.',
+  'no-camera': 'No camera was found. Connect one, then start again.',
+  'camera-busy': 'The camera is in use elsewhere. Close what uses it, then start again.',
+  unsupported: 'This page cannot have a camera: the address must begin with https, or be on this computer.',
+  failed: 'Following stopped unexpectedly. Start again.',
+  nobody: 'Nobody is in view of the camera.',
+  following: 'Following you. Move your head to the left: in the plan the dot should move left.',
+};
+
+/** The third step: the eye as this set-up sees it, live, and what to beware of. */
+@Component({
+  selector: 'oriel-check-step',
+  imports: [MatButton, MatCheckbox, CameraDrawing],
+  providers: [FaceTracking],
+  templateUrl: './check-step.html',
+  styleUrl: './check-step.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CheckStep {
+  readonly setUp = model.required<ScreenSetUp>();
+
+  private readonly tracking = inject(FaceTracking);
+  private readonly seen = signal<Point3 | null>(null);
+  protected readonly words = computed(() => words[this.tracking.state()]);
+  protected readonly running = computed(() => ['asking', 'starting', 'nobody', 'following'].includes(this.tracking.state()));
+  protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));
+
+  constructor() {
+    inject(DestroyRef).onDestroy(this.tracking.watch(({ found, eye }) => this.seen.set(found ? { ...eye } : null)));
+    effect(() => {
+      const setUp = trackingSetUp(this.setUp());
+      if (untracked(this.running)) this.tracking.change(setUp);
+    });
+  }
+
+  protected start(): void {
+    void this.tracking.start(trackingSetUp(this.setUp()));
+  }
+
+  protected stop(): void {
+    this.tracking.stop();
+  }
+
+  protected mirror(mirrored: boolean): void {
+    this.setUp.update((before) => ({ ...before, camera: { ...before.camera, mirrored } }));
+  }
+}
