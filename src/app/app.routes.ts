@@ -13,6 +13,7 @@ export const routes: Routes = [
       { path: 'photos', loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
       { path: 'household', loadChildren: () => import('./household/household.routes').then((m) => m.householdRoutes) },
       { path: 'compose/:sceneId', loadChildren: () => import('./composer/composer.routes').then((m) => m.composerRoutes) },
+      { path: 'screen', loadChildren: () => import('./screen/screen.routes').then((m) => m.screenRoutes) },
       { path: 'account', loadChildren: () => import('./account/settings.routes').then((m) => m.settingsRoutes) },
     ],
   },

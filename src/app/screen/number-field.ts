@@ -21,7 +21,7 @@ import { accordingTo } from '../core/zod-validator';
       <mat-error>{{ control.errors?.['contract'] }}</mat-error>
     </mat-form-field>
   `,
-  styles: ':host, mat-form-field { display: block; }',
+  styles: ':host, mat-form-field { display: block; min-width: 0; } mat-form-field { width: 100%; } :host ::ng-deep .mat-mdc-form-field-infix { width: 90px; }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class NumberField {
