@@ -29,6 +29,8 @@ function domainFailure(error: unknown): DomainFailure {
 /** Turns whatever was thrown into the one failure shape; only what nobody foresaw is logged as an error. */
 export const answerFailure: ErrorRequestHandler = (error: unknown, request, response, next) => {
   if (response.headersSent) return next(error);
+  // An upload cut off by whoever sent it: nothing failed here, and there is nobody to tell.
+  if (request.socket.destroyed) return request.log.debug({ err: error }, 'the asker went away');
   const failure = domainFailure(error);
   if (failure.status >= 500 && failure !== error) request.log.error({ err: error }, 'unexpected failure');
   const body: Failure = {

@@ -246,5 +246,6 @@ describe('refused uploads leave nothing behind', () => {
     request.destroy();
     await expect.poll(() => readdir(app.parts.storage.incomingDir)).toEqual([]);
     expect(await rows()).toBe(before);
+    expect(app.log().includes('unexpected failure')).toBe(false);
   });
 });
