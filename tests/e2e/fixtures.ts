@@ -3,12 +3,13 @@ import { test as base, expect, type BrowserContext, type Page } from '@playwrigh
 import type { Role } from '@oriel/shared/contracts/role';
 import { demoAccount } from './demo-accounts';
 import { chromiumArguments, chromiumPath, ignoredDefaults, type Graphics } from './set-up/chromium';
+import { filmFace, type FilmedFace, type FilmedTruth } from './set-up/filmed-face';
 
 /** What a file may choose with `test.use`; each choice is a browser of its own. */
 export interface BrowserChoice {
   readonly graphics: Graphics;
-  /** An MJPEG file the fake camera plays; null for Chromium's own test pattern. */
-  readonly cameraVideo: string | null;
+  /** The face the fake camera shows; null for Chromium's own test pattern. */
+  readonly filmedFace: FilmedFace | null;
 }
 
 interface Fixtures {
@@ -28,14 +29,24 @@ interface ErrorWatch {
 
 type SignedIn = Awaited<ReturnType<BrowserContext['storageState']>>;
 
-export const test = base.extend<Fixtures, BrowserChoice & { readonly signedIn: Map<Role, SignedIn> }>({
+interface WorkerFixtures extends BrowserChoice {
+  readonly signedIn: Map<Role, SignedIn>;
+  /** The video of `filmedFace` and the truth of its frames. */
+  readonly filmed: { readonly video: string; readonly truth: FilmedTruth } | null;
+}
+
+export const test = base.extend<Fixtures, WorkerFixtures>({
   graphics: ['software', { option: true, scope: 'worker' }],
-  cameraVideo: [null, { option: true, scope: 'worker' }],
+  filmedFace: [null, { option: true, scope: 'worker' }],
+  filmed: [
+    async ({ filmedFace }, use) => use(filmedFace && (await filmFace(filmedFace))),
+    { scope: 'worker', timeout: 120_000 },
+  ],
   launchOptions: [
-    async ({ graphics, cameraVideo }, use) => {
+    async ({ graphics, filmed }, use) => {
       await use({
         executablePath: chromiumPath,
-        args: chromiumArguments(graphics, cameraVideo),
+        args: chromiumArguments(graphics, filmed?.video ?? null),
         ignoreDefaultArgs: ignoredDefaults,
       });
     },
@@ -43,10 +54,7 @@ export const test = base.extend<Fixtures, BrowserChoice & { readonly signedIn: M
   ],
 
   // Signing in costs a second: once a role and worker is enough.
-  signedIn: [
-    async ({}, use) => use(new Map()),
-    { scope: 'worker' },
-  ],
+  signedIn: [async ({}, use) => use(new Map()), { scope: 'worker' }],
 
   watchErrors: [
     async ({}, use) => {

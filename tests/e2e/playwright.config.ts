@@ -4,7 +4,7 @@ import { inProject } from '../../scripts/project.mjs';
 
 /**
  * Two projects: `page` runs `*.e2e.ts` in a browser without a graphics processor; `camera` runs `*.camera.e2e.ts`, where a file says
- * with `test.use({ graphics, cameraVideo })` what the fake camera shows and how pictures are drawn.
+ * with `test.use({ graphics, filmedFace })` what the fake camera shows and how pictures are drawn.
  */
 export default defineConfig<object, BrowserChoice>({
   testDir: '.',
