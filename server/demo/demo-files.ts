@@ -38,7 +38,10 @@ export async function readDemoFiles(folder: string): Promise<DemoFiles> {
   const json = async (name: string): Promise<unknown> => JSON.parse(await readFile(join(folder, name), 'utf8'));
   const photos = (await readdir(join(folder, 'photos'))).filter((name) => !name.startsWith('.')).sort();
   return {
-    accounts: z.array(DemoAccount).nonempty().parse(await json('accounts.json')),
+    accounts: z
+      .array(DemoAccount)
+      .nonempty()
+      .parse(await json('accounts.json')),
     scenes: z.array(DemoScene).parse(await json('scenes.json')),
     photos: photos.map((name) => join(folder, 'photos', name)),
   };

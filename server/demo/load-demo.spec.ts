@@ -32,7 +32,9 @@ describe('the demo', () => {
     expect(accounts.map(({ role }) => role).sort()).toEqual(['designer', 'owner', 'tuner', 'viewer']);
     for (const person of accounts) {
       const { account } = await signIn(person);
-      expect(account.memberships).toEqual([{ householdId: expect.any(String), householdName: 'The Aldermoor house', role: person.role }]);
+      expect(account.memberships).toEqual([
+        { householdId: expect.any(String), householdName: 'The Aldermoor house', role: person.role },
+      ]);
     }
   });
 
@@ -54,9 +56,14 @@ describe('the demo', () => {
 
   it('has its photos, which become ready', async () => {
     const { browser, account } = await signIn(accounts[0]);
-    const photos = async () => (await browser.ask('get', `/api/households/${account.memberships[0].householdId}/photos`)).body.photos;
+    const photos = async () =>
+      (await browser.ask('get', `/api/households/${account.memberships[0].householdId}/photos`)).body.photos;
     expect((await photos()).length).toBeGreaterThan(0);
-    await expect.poll(async () => (await photos()).every(({ state }: { state: string }) => state === 'ready'), { timeout: 20_000 }).toBe(true);
+    await expect
+      .poll(async () => (await photos()).every(({ state }: { state: string }) => state === 'ready'), {
+        timeout: 20_000,
+      })
+      .toBe(true);
   });
 
   it('is loaded once: what its people throw away stays away', async () => {

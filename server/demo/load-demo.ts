@@ -22,7 +22,15 @@ type Members = ReadonlyMap<DemoAccount['role'], string>;
  * Loads a household of our own invention, once in the life of the database, through the same services that people's uploads go through.
  * What its people then change or throw away stays changed. Cut off halfway, the next start begins where it ended.
  */
-export async function loadDemo({ config, connection: { db }, storage, jobs, layerFiles, passwords, log }: Parts): Promise<void> {
+export async function loadDemo({
+  config,
+  connection: { db },
+  storage,
+  jobs,
+  layerFiles,
+  passwords,
+  log,
+}: Parts): Promise<void> {
   if (await isLoaded(db)) return;
   const folder = join(config.assetsDir, 'demo');
   const files = await readDemoFiles(folder);
@@ -40,7 +48,8 @@ export async function loadDemo({ config, connection: { db }, storage, jobs, laye
     const scenes = sceneService(db, storage, layerFiles);
     const known = await sceneNames(db, householdId);
     for (const scene of [...files.scenes].reverse())
-      if (!known.has(scene.name)) await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);
+      if (!known.has(scene.name))
+        await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);
 
     await transaction.insertInto('milestone').values({ name: done }).execute();
     log.info({ photos: files.photos.length, scenes: files.scenes.length }, 'the demo household is loaded');
@@ -56,7 +65,11 @@ async function sceneNames(db: Database, householdId: string): Promise<Set<string
   return new Set(rows.map(({ document }) => document.name));
 }
 
-async function demoMembers(db: Database, accounts: readonly DemoAccount[], hash: (password: string) => Promise<string>): Promise<Members> {
+async function demoMembers(
+  db: Database,
+  accounts: readonly DemoAccount[],
+  hash: (password: string) => Promise<string>,
+): Promise<Members> {
   const members = new Map<DemoAccount['role'], string>();
   for (const { name, email, password, role } of accounts) {
     const known = (await accountByEmail(db, email))?.id;
@@ -89,7 +102,9 @@ async function documentOf(
 ): Promise<SceneDocument> {
   const document: SceneDocument = { ...scene, layers: [] };
   for (const { file, placed, ...layer } of layers) {
-    const { image } = await bringIn(storage, join(folder, file), (received) => scenes.imageFromFile(householdId, received));
+    const { image } = await bringIn(storage, join(folder, file), (received) =>
+      scenes.imageFromFile(householdId, received),
+    );
     document.layers.push({ ...layer, id: randomUUID(), image, placed: placeTrimmedIn(placed, image) });
   }
   return document;

@@ -62,7 +62,11 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
     await boss.updateQueue(name, options);
   }
 
-  async function startWorkers<J extends Job>(name: string, job: J, run: (data: DataOf<J>) => Promise<void>): Promise<void> {
+  async function startWorkers<J extends Job>(
+    name: string,
+    job: J,
+    run: (data: DataOf<J>) => Promise<void>,
+  ): Promise<void> {
     const ids: string[] = [];
     for (let i = 0; i < job.atOnce; i++) {
       const handle = async ([given]: PgBoss.Job<unknown>[]) => {
@@ -83,7 +87,11 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
 
   return {
     async send(job, data, within) {
-      const db = within && { executeSql: async (text: string, values: unknown[]) => ({ rows: (await within.executeQuery(CompiledQuery.raw(text, values))).rows }) };
+      const db = within && {
+        executeSql: async (text: string, values: unknown[]) => ({
+          rows: (await within.executeQuery(CompiledQuery.raw(text, values))).rows,
+        }),
+      };
       await boss.send(job.name, data as object, db ? { db } : {});
     },
 
@@ -111,5 +119,6 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
 async function tryOrphansAgain(boss: PgBoss): Promise<void> {
   const orphans = `select name, id from jobs.job where state = 'active' and not starts_with(name, '__pgboss')`;
   const { rows } = await boss.getDb().executeSql(orphans, []);
-  for (const { name, id } of rows as { name: string; id: string }[]) await boss.fail(name, id, { reason: 'its server was killed' });
+  for (const { name, id } of rows as { name: string; id: string }[])
+    await boss.fail(name, id, { reason: 'its server was killed' });
 }

@@ -11,7 +11,11 @@ export interface Presence {
  * Marks that a server is at work on this database, for as long as its connection lives: PostgreSQL itself takes the mark of a killed
  * server away. Before that, `alone` runs if no other server is at work, while none can come.
  */
-export async function announceServer(databaseUrl: string, alone: () => Promise<void>, onLost: (error: Error) => void): Promise<Presence> {
+export async function announceServer(
+  databaseUrl: string,
+  alone: () => Promise<void>,
+  onLost: (error: Error) => void,
+): Promise<Presence> {
   const client = new pg.Client({ connectionString: databaseUrl, application_name: 'oriel presence', keepAlive: true });
   client.on('error', onLost);
   await client.connect();

@@ -19,6 +19,11 @@ export function readCursor(text: string): Cursor {
     const [takenAt, id] = Written.parse(JSON.parse(Buffer.from(text, 'base64url').toString('utf8')));
     return { takenAt: new Date(takenAt), id };
   } catch {
-    throw new DomainFailure(400, 'bad-cursor', 'This place in the list is not known.', 'Open the photos from the beginning.');
+    throw new DomainFailure(
+      400,
+      'bad-cursor',
+      'This place in the list is not known.',
+      'Open the photos from the beginning.',
+    );
   }
 }

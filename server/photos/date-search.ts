@@ -4,7 +4,20 @@ export interface Period {
   readonly to: Date;
 }
 
-const months = ['january', 'february', 'march', 'april', 'may', 'june', 'july', 'august', 'september', 'october', 'november', 'december'];
+const months = [
+  'january',
+  'february',
+  'march',
+  'april',
+  'may',
+  'june',
+  'july',
+  'august',
+  'september',
+  'october',
+  'november',
+  'december',
+];
 const shortest = 3;
 
 const yearOf = (word: string) => (/^(18|19|20|21)\d\d$/.test(word) ? Number(word) : null);

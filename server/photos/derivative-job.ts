@@ -39,7 +39,12 @@ export async function deriveFrom(db: Database, storage: Storage, photoId: string
 }
 
 async function giveUp(db: Database, photoId: string): Promise<void> {
-  await db.updateTable('photo').set({ state: 'failed', problem }).where('id', '=', photoId).where('state', '=', 'waiting').execute();
+  await db
+    .updateTable('photo')
+    .set({ state: 'failed', problem })
+    .where('id', '=', photoId)
+    .where('state', '=', 'waiting')
+    .execute();
 }
 
 export const workOnDerivatives = (db: Database, storage: Storage, jobs: Jobs): Promise<void> =>

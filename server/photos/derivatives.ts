@@ -23,8 +23,7 @@ export async function makeDerivatives(path: string): Promise<Derivatives> {
     .raw()
     .toBuffer({ resolveWithObject: true });
   const raw = { width: info.width, height: info.height, channels: info.channels };
-  const fitted = (edge: number) =>
-    sharp(data, { raw }).resize(edge, edge, { fit: 'inside', withoutEnlargement: true });
+  const fitted = (edge: number) => sharp(data, { raw }).resize(edge, edge, { fit: 'inside', withoutEnlargement: true });
 
   const files = [];
   for (const edge of edgesFor(info.width, info.height))

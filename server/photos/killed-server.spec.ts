@@ -19,13 +19,18 @@ it('a photo whose server is killed while making its derivatives becomes ready wh
   const { browser } = await app.signedIn('designer', householdId);
   const file = await quadrants(500, 300).jpeg().toBuffer();
   const { id } = (await upload(browser, `/api/households/${householdId}/photos`, file, 'a.jpg')).body.photo;
-  const state = async () => (await db.selectFrom('photo').select('state').where('id', '=', id).executeTakeFirstOrThrow()).state;
+  const state = async () =>
+    (await db.selectFrom('photo').select('state').where('id', '=', id).executeTakeFirstOrThrow()).state;
   await expect.poll(state, { timeout: 10_000 }).toBe('ready');
   await parts.jobs.stop();
 
   // As if it had just been uploaded, and a server that will die takes its job.
   await db.updateTable('photo').set({ state: 'waiting' }).execute();
-  const doomed = spawn(process.execPath, ['--import', 'tsx', 'server/jobs/testing/doomed-server.ts', parts.config.databaseUrl], { stdio: ['ignore', 'pipe', 'inherit'] });
+  const doomed = spawn(
+    process.execPath,
+    ['--import', 'tsx', 'server/jobs/testing/doomed-server.ts', parts.config.databaseUrl],
+    { stdio: ['ignore', 'pipe', 'inherit'] },
+  );
   const sender = await startJobs(parts.config.databaseUrl, parts.log);
   await sender.send(derivativeJob, { photoId: id });
   await sender.stop();

@@ -32,7 +32,10 @@ async function addPhotos(household: string, photos: readonly { name: string; tak
 }
 
 const list = async (query: Record<string, string> = {}, household = householdId, who = viewer) => {
-  const answer = await who.browser.ask('get', `/api/households/${household}/photos?${new URLSearchParams(query).toString()}`);
+  const answer = await who.browser.ask(
+    'get',
+    `/api/households/${household}/photos?${new URLSearchParams(query).toString()}`,
+  );
   expect(answer.status, answer.text).toBe(200);
   return answer.body as { photos: Photo[]; next: string | null; total: number };
 };
@@ -59,13 +62,20 @@ describe('the list of photos', () => {
     const crowd = (await app.household()).id;
     const member = await app.signedIn('viewer', crowd);
     const moments = ['2020-01-01T00:00:00Z', '2020-01-01T00:00:00.001Z', '2021-06-06T06:06:06Z'];
-    const ids = await addPhotos(crowd, Array.from({ length: 47 }, (_, i) => ({ name: `${i}.jpg`, takenAt: moments[i % 3] })));
+    const ids = await addPhotos(
+      crowd,
+      Array.from({ length: 47 }, (_, i) => ({ name: `${i}.jpg`, takenAt: moments[i % 3] })),
+    );
     await fc.assert(
       fc.asyncProperty(fc.integer({ min: 1, max: 50 }), async (limit) => {
         const seen: Photo[] = [];
         let after: string | null = null;
         do {
-          const page: Awaited<ReturnType<typeof list>> = await list({ limit: String(limit), ...(after ? { after } : {}) }, crowd, member);
+          const page: Awaited<ReturnType<typeof list>> = await list(
+            { limit: String(limit), ...(after ? { after } : {}) },
+            crowd,
+            member,
+          );
           expect(page.photos.length).toBeLessThanOrEqual(limit);
           expect(page.total).toBe(47);
           seen.push(...page.photos);
@@ -82,7 +92,10 @@ describe('the list of photos', () => {
   it('does not slip when photos come in while someone pages', async () => {
     const household = (await app.household()).id;
     const member = await app.signedIn('viewer', household);
-    await addPhotos(household, [1, 2, 3, 4].map((day) => ({ name: `${day}`, takenAt: `2020-01-0${day}T00:00:00Z` })));
+    await addPhotos(
+      household,
+      [1, 2, 3, 4].map((day) => ({ name: `${day}`, takenAt: `2020-01-0${day}T00:00:00Z` })),
+    );
     const first = await list({ limit: '2' }, household, member);
     await addPhotos(household, [{ name: 'new', takenAt: '2022-01-01T00:00:00Z' }]);
     const second = await list({ limit: '2', after: first.next! }, household, member);
@@ -113,13 +126,21 @@ describe('the list of photos', () => {
     expect(await names(search)).toEqual(found);
   });
 
-  it.each(['x', 'W10', '../..', Buffer.from('["2020-01-01T00:00:00Z","1 or 1=1"]').toString('base64url')])('security: refuses a place in the list that it did not give: %s', async (after) => {
-    const answer = await viewer.browser.ask('get', `/api/households/${householdId}/photos?after=${encodeURIComponent(after)}`);
-    expect([answer.status, answer.body.code]).toEqual([400, 'bad-cursor']);
-  });
+  it.each(['x', 'W10', '../..', Buffer.from('["2020-01-01T00:00:00Z","1 or 1=1"]').toString('base64url')])(
+    'security: refuses a place in the list that it did not give: %s',
+    async (after) => {
+      const answer = await viewer.browser.ask(
+        'get',
+        `/api/households/${householdId}/photos?after=${encodeURIComponent(after)}`,
+      );
+      expect([answer.status, answer.body.code]).toEqual([400, 'bad-cursor']);
+    },
+  );
 
   it('security: refuses a NUL in a search without an unexpected failure', async () => {
-    expect((await viewer.browser.ask('get', `/api/households/${householdId}/photos?search=a%00b`)).status).toBeLessThan(500);
+    expect((await viewer.browser.ask('get', `/api/households/${householdId}/photos?search=a%00b`)).status).toBeLessThan(
+      500,
+    );
   });
 });
 
@@ -127,14 +148,21 @@ describe('the bin', () => {
   it('takes photos out of the list and gives them back', async () => {
     const household = (await app.household()).id;
     const owner = await app.signedIn('owner', household);
-    const [a, b] = await addPhotos(household, [{ name: 'a', takenAt: '2020-01-02T00:00:00Z' }, { name: 'b', takenAt: '2020-01-01T00:00:00Z' }]);
-    const at = (query = {}) => list(query, household, owner).then(({ photos, total }) => [photos.map(({ name }) => name), total]);
-    const post = (what: string, photoIds: string[]) => owner.browser.ask('post', `/api/households/${household}/photos/${what}`, { photoIds });
+    const [a, b] = await addPhotos(household, [
+      { name: 'a', takenAt: '2020-01-02T00:00:00Z' },
+      { name: 'b', takenAt: '2020-01-01T00:00:00Z' },
+    ]);
+    const at = (query = {}) =>
+      list(query, household, owner).then(({ photos, total }) => [photos.map(({ name }) => name), total]);
+    const post = (what: string, photoIds: string[]) =>
+      owner.browser.ask('post', `/api/households/${household}/photos/${what}`, { photoIds });
     const binned = await post('bin', [a]);
     expect(binned.body.photos).toMatchObject([{ id: a, binnedAt: expect.any(String) }]);
     expect(await at()).toEqual([['b'], 1]);
     expect(await at({ bin: 'true' })).toEqual([['a'], 1]);
-    expect((await post('bin', [a, b])).body.photos.find(({ id }: Photo) => id === a).binnedAt).toBe(binned.body.photos[0].binnedAt);
+    expect((await post('bin', [a, b])).body.photos.find(({ id }: Photo) => id === a).binnedAt).toBe(
+      binned.body.photos[0].binnedAt,
+    );
     expect((await post('restoration', [a, b])).body.photos).toHaveLength(2);
     expect(await at()).toEqual([['a', 'b'], 2]);
   });
@@ -143,8 +171,15 @@ describe('the bin', () => {
     const household = (await app.household()).id;
     const [theirs] = await addPhotos(household, [{ name: 'theirs', takenAt: '2020-01-02T00:00:00Z' }]);
     for (const what of ['bin', 'restoration', 'reading'])
-      expect((await designer.browser.ask('post', `/api/households/${householdId}/photos/${what}`, { photoIds: [theirs] })).body).toEqual({ photos: [] });
-    const { binned_at } = await app.db.selectFrom('photo').select('binned_at').where('id', '=', theirs).executeTakeFirstOrThrow();
+      expect(
+        (await designer.browser.ask('post', `/api/households/${householdId}/photos/${what}`, { photoIds: [theirs] }))
+          .body,
+      ).toEqual({ photos: [] });
+    const { binned_at } = await app.db
+      .selectFrom('photo')
+      .select('binned_at')
+      .where('id', '=', theirs)
+      .executeTakeFirstOrThrow();
     expect(binned_at).toBeNull();
   });
 });
@@ -155,13 +190,23 @@ describe('ten thousand photos', () => {
     const member = await app.signedIn('viewer', household);
     const start = Date.UTC(2000, 0);
     for (let block = 0; block < 10; block++)
-      await addPhotos(household, Array.from({ length: 1000 }, (_, i) => ({ name: `IMG_${block * 1000 + i}.jpg`, takenAt: new Date(start + (block * 1000 + i) * 3.6e6).toISOString() })));
+      await addPhotos(
+        household,
+        Array.from({ length: 1000 }, (_, i) => ({
+          name: `IMG_${block * 1000 + i}.jpg`,
+          takenAt: new Date(start + (block * 1000 + i) * 3.6e6).toISOString(),
+        })),
+      );
     let after: string | null = null;
     const times: number[] = [];
     let count = 0;
     do {
       const started = performance.now();
-      const page: Awaited<ReturnType<typeof list>> = await list({ limit: '500', ...(after ? { after } : {}) }, household, member);
+      const page: Awaited<ReturnType<typeof list>> = await list(
+        { limit: '500', ...(after ? { after } : {}) },
+        household,
+        member,
+      );
       times.push(performance.now() - started);
       count += page.photos.length;
       after = page.next;

@@ -48,13 +48,20 @@ function filtered(db: Database, { householdId, bin, search }: PhotoFilter) {
   return query.where((where) =>
     where.or([
       where('photo.name', 'ilike', `%${escapeLike(search)}%`),
-      ...(period ? [where.and([where('photo.taken_at', '>=', period.from), where('photo.taken_at', '<', period.to)])] : []),
+      ...(period
+        ? [where.and([where('photo.taken_at', '>=', period.from), where('photo.taken_at', '<', period.to)])]
+        : []),
     ]),
   );
 }
 
 /** A page of photos, newest taken first, ties by id: a keyset, so that a page costs the same at any depth. */
-export function pageOfPhotos(db: Database, filter: PhotoFilter, after: Cursor | null, limit: number): Promise<PhotoRow[]> {
+export function pageOfPhotos(
+  db: Database,
+  filter: PhotoFilter,
+  after: Cursor | null,
+  limit: number,
+): Promise<PhotoRow[]> {
   const page = filtered(db, filter).orderBy('photo.taken_at', 'desc').orderBy('photo.id', 'desc').limit(limit);
   if (!after) return page.execute();
   return page.where(sql<boolean>`(photo.taken_at, photo.id) < (${after.takenAt}, ${after.id}::uuid)`).execute();

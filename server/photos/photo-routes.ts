@@ -20,18 +20,26 @@ export const photoRoutes =
     mount(routes.listPhotos, ({ householdId, query: { after, limit, search = '', bin } }) =>
       photos.list({ householdId, bin, search }, after, limit),
     );
-    mount(routes.readPhotos, async ({ householdId, body }) => ({ photos: await photos.readSome(householdId, body.photoIds) }));
+    mount(routes.readPhotos, async ({ householdId, body }) => ({
+      photos: await photos.readSome(householdId, body.photoIds),
+    }));
     mount(routes.binPhotos, async ({ householdId, body }) => ({
       photos: await photos.setBinned(householdId, body.photoIds, true),
     }));
     mount(routes.restorePhotos, async ({ householdId, body }) => ({
       photos: await photos.setBinned(householdId, body.photoIds, false),
     }));
-    mount(routes.readPhoto, async ({ householdId, params }) => ({ photo: toPhoto(await photos.read(householdId, params.photoId)) }));
+    mount(routes.readPhoto, async ({ householdId, params }) => ({
+      photo: toPhoto(await photos.read(householdId, params.photoId)),
+    }));
     mount(routes.photoDerivative, async ({ householdId, params, request, response }) => {
       const { sha256, width, height } = await photos.read(householdId, params.photoId);
       const edge = edgeKept(width, height, params.edge);
-      await sendStored(storage, request, response, { key: derivativeKey(sha256, edge), mime: 'image/webp', tag: `${sha256}-${edge}` });
+      await sendStored(storage, request, response, {
+        key: derivativeKey(sha256, edge),
+        mime: 'image/webp',
+        tag: `${sha256}-${edge}`,
+      });
       return {};
     });
     mount(routes.photoOriginal, async ({ householdId, params, request, response }) => {

@@ -9,7 +9,15 @@ import { originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
 import { readCursor, writeCursor } from './cursor';
 import { derivativeJob } from './derivative-job';
-import { countPhotos, findPhotoByContent, findPhotos, pageOfPhotos, toPhoto, type PhotoFilter, type PhotoRow } from './photo-queries';
+import {
+  countPhotos,
+  findPhotoByContent,
+  findPhotos,
+  pageOfPhotos,
+  toPhoto,
+  type PhotoFilter,
+  type PhotoRow,
+} from './photo-queries';
 
 interface Owner {
   readonly householdId: string;

@@ -31,7 +31,8 @@ afterEach(async () => {
 });
 
 const photosPath = () => `/api/households/${householdId}/photos`;
-const send = (file: Buffer, name = 'photo.jpg', lastModified?: string) => upload(designer.browser, photosPath(), file, name, lastModified);
+const send = (file: Buffer, name = 'photo.jpg', lastModified?: string) =>
+  upload(designer.browser, photosPath(), file, name, lastModified);
 const sent = async (file: Buffer, name?: string, lastModified?: string): Promise<Photo> => {
   const answer = await send(file, name, lastModified);
   expect(answer.status, answer.text).toBe(200);
@@ -42,18 +43,28 @@ const ready = async (id: string): Promise<Photo> => {
   await expect.poll(async () => (await get(`/api/photos/${id}`)).body.photo.state, { timeout: 20_000 }).toBe('ready');
   return (await get(`/api/photos/${id}`)).body.photo;
 };
-const derivative = async (id: string, edge: number) => (await get(`/api/photos/${id}/derivatives/${edge}`)).body as Buffer;
+const derivative = async (id: string, edge: number) =>
+  (await get(`/api/photos/${id}/derivatives/${edge}`)).body as Buffer;
 const rows = async () => (await app.db.selectFrom('photo').select('id').execute()).length;
 const originals = () => readdir(`${app.parts.config.storageDir}/originals`).catch(() => []);
 const fixture = (name: string) => readFile(new URL(`../pictures/fixtures/${name}`, import.meta.url));
 
 describe('an uploaded photo', () => {
-  it.each(['jpeg', 'png', 'webp', 'avif', 'tiff', 'gif'] as const)('becomes upright derivatives from %s', async (format) => {
-    const photo = await sent(await quadrants(1000, 640).toFormat(format).toBuffer(), `picture.${format}`);
-    expect(photo).toMatchObject({ width: 1000, height: 640, mime: `image/${format}`, state: 'waiting', placeholder: null });
-    await ready(photo.id);
-    expect(await quartersOf(await derivative(photo.id, 320))).toEqual(uprightQuarters);
-  });
+  it.each(['jpeg', 'png', 'webp', 'avif', 'tiff', 'gif'] as const)(
+    'becomes upright derivatives from %s',
+    async (format) => {
+      const photo = await sent(await quadrants(1000, 640).toFormat(format).toBuffer(), `picture.${format}`);
+      expect(photo).toMatchObject({
+        width: 1000,
+        height: 640,
+        mime: `image/${format}`,
+        state: 'waiting',
+        placeholder: null,
+      });
+      await ready(photo.id);
+      expect(await quartersOf(await derivative(photo.id, 320))).toEqual(uprightQuarters);
+    },
+  );
 
   it('becomes upright derivatives from HEIC, turned once', async () => {
     const photo = await sent(await fixture('turned.heic'), 'IMG_0001.HEIC');
@@ -73,14 +84,22 @@ describe('an uploaded photo', () => {
       const { width, height } = await sharp(await derivative(id, edge)).metadata();
       sizes.push([width, height]);
     }
-    expect(sizes).toEqual([[320, 192], [800, 480], [1600, 960], [2000, 1200]]);
+    expect(sizes).toEqual([
+      [320, 192],
+      [800, 480],
+      [1600, 960],
+      [2000, 1200],
+    ]);
     expect((await get(`/api/photos/${id}/derivatives/500`)).status).toBe(400);
   });
 
   it('security: leaves place and camera behind in its derivatives, and keeps them in the original alone', async () => {
     const file = await quadrants(400, 300)
       .jpeg()
-      .withExif({ IFD0: { Make: 'Alder Optics' }, IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1', GPSLongitudeRef: 'W', GPSLongitude: '0/1 7/1 0/1' } })
+      .withExif({
+        IFD0: { Make: 'Alder Optics' },
+        IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 0/1', GPSLongitudeRef: 'W', GPSLongitude: '0/1 7/1 0/1' },
+      })
       .toBuffer();
     expect(file.includes('Alder Optics')).toBe(true);
     const { id } = await sent(file, 'place.jpg');
@@ -92,7 +111,11 @@ describe('an uploaded photo', () => {
       expect(small.includes('Alder Optics')).toBe(false);
     }
     const original = await get(`/api/photos/${id}/original`);
-    expect(createHash('sha256').update(original.body as Buffer).digest('hex')).toBe(createHash('sha256').update(file).digest('hex'));
+    expect(
+      createHash('sha256')
+        .update(original.body as Buffer)
+        .digest('hex'),
+    ).toBe(createHash('sha256').update(file).digest('hex'));
     expect(original.headers['content-disposition']).toBe('attachment; filename=place.jpg');
     const viewer = await app.signedIn('viewer', householdId);
     expect((await viewer.browser.ask('get', `/api/photos/${id}/original`)).status).toBe(403);
@@ -103,8 +126,14 @@ describe('an uploaded photo', () => {
     const { id } = await sent(await quadrants(90, 60).jpeg().toBuffer());
     await ready(id);
     const first = await get(`/api/photos/${id}/derivatives/320`);
-    expect(first.headers).toMatchObject({ 'content-type': 'image/webp', 'cache-control': 'private, max-age=31536000, immutable', 'x-content-type-options': 'nosniff' });
-    const again = await designer.browser.prepare('get', `/api/photos/${id}/derivatives/320`).set('If-None-Match', first.headers['etag']);
+    expect(first.headers).toMatchObject({
+      'content-type': 'image/webp',
+      'cache-control': 'private, max-age=31536000, immutable',
+      'x-content-type-options': 'nosniff',
+    });
+    const again = await designer.browser
+      .prepare('get', `/api/photos/${id}/derivatives/320`)
+      .set('If-None-Match', first.headers['etag']);
     expect(again.status).toBe(304);
     const stranger = await app.signedIn('owner');
     expect((await stranger.browser.ask('get', `/api/photos/${id}/derivatives/320`)).status).toBe(404);
@@ -125,17 +154,26 @@ describe('an uploaded photo', () => {
     const damaged = await fixture('wide-colour.heic');
     damaged.fill(0, damaged.indexOf('mdat') + 4);
     const { id } = await sent(damaged, 'damaged.heic');
-    await expect.poll(async () => (await get(`/api/photos/${id}`)).body.photo.state, { timeout: 28_000 }).toBe('failed');
+    await expect
+      .poll(async () => (await get(`/api/photos/${id}`)).body.photo.state, { timeout: 28_000 })
+      .toBe('failed');
     expect((await get(`/api/photos/${id}`)).body.photo.problem).toMatch(/Upload it again/);
     const again = await send(damaged, 'damaged.heic');
     expect(again.body).toMatchObject({ duplicate: true, photo: { id, state: 'waiting', problem: null } });
   });
 
   it('was taken when EXIF says, else when its file was last changed, else now', async () => {
-    const exif = await quadrants(92, 60).jpeg().withExif({ IFD2: { DateTimeOriginal: '2011:07:09 10:00:00', OffsetTimeOriginal: '+02:00' } }).toBuffer();
+    const exif = await quadrants(92, 60)
+      .jpeg()
+      .withExif({ IFD2: { DateTimeOriginal: '2011:07:09 10:00:00', OffsetTimeOriginal: '+02:00' } })
+      .toBuffer();
     expect((await sent(exif, 'a.jpg', '1500000000000')).takenAt).toBe('2011-07-09T08:00:00.000Z');
-    expect((await sent(await quadrants(93, 60).jpeg().toBuffer(), 'b.jpg', '1500000000000')).takenAt).toBe('2017-07-14T02:40:00.000Z');
-    expect((await sent(await quadrants(94, 60).jpeg().toBuffer(), 'c.jpg', '2018-01-02T03:04:05Z')).takenAt).toBe('2018-01-02T03:04:05.000Z');
+    expect((await sent(await quadrants(93, 60).jpeg().toBuffer(), 'b.jpg', '1500000000000')).takenAt).toBe(
+      '2017-07-14T02:40:00.000Z',
+    );
+    expect((await sent(await quadrants(94, 60).jpeg().toBuffer(), 'c.jpg', '2018-01-02T03:04:05Z')).takenAt).toBe(
+      '2018-01-02T03:04:05.000Z',
+    );
     const now = await sent(await quadrants(95, 60).jpeg().toBuffer(), 'd.jpg', 'some day');
     expect(Math.abs(Date.parse(now.takenAt) - Date.now())).toBeLessThan(60_000);
   });
@@ -184,14 +222,33 @@ describe('the same content', () => {
 });
 
 describe('refused uploads leave nothing behind', () => {
-  const noise = () => sharp({ create: { width: 300, height: 200, channels: 3, background: '#888', noise: { type: 'gaussian', mean: 128, sigma: 40 } } });
+  const noise = () =>
+    sharp({
+      create: {
+        width: 300,
+        height: 200,
+        channels: 3,
+        background: '#888',
+        noise: { type: 'gaussian', mean: 128, sigma: 40 },
+      },
+    });
   it.each<[string, () => Promise<Buffer>, number, string]>([
-    ['text called .jpg', () => Promise.resolve(Buffer.from('I am no picture, whatever my name says.')), 415, 'not-a-picture'],
+    [
+      'text called .jpg',
+      () => Promise.resolve(Buffer.from('I am no picture, whatever my name says.')),
+      415,
+      'not-a-picture',
+    ],
     ['an empty file', () => Promise.resolve(Buffer.alloc(0)), 415, 'not-a-picture'],
     ['a cut JPEG', async () => (await noise().jpeg().toBuffer()).subarray(0, 5000), 422, 'truncated'],
     ['a cut HEIC', async () => (await fixture('turned.heic')).subarray(0, 1500), 422, 'truncated'],
     ['a bomb', () => Promise.resolve(pngBomb(16_000, 16_000)), 413, 'too-many-pixels'],
-    ['SVG with a script', () => Promise.resolve(Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>')), 415, 'not-a-picture'],
+    [
+      'SVG with a script',
+      () => Promise.resolve(Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>')),
+      415,
+      'not-a-picture',
+    ],
   ])('security: %s', async (_what, make, status, code) => {
     const [photos, files] = [await rows(), await originals()];
     const answer = await send(await make());
@@ -210,7 +267,10 @@ describe('refused uploads leave nothing behind', () => {
     const none = await designer.browser.prepare('post', photosPath()).field('lastModified', '1');
     expect([none.status, none.body.code]).toEqual([400, 'no-file']);
     const file = await quadrants(60, 40).jpeg().toBuffer();
-    const two = await designer.browser.prepare('post', photosPath()).attach('file', file, 'a.jpg').attach('file', file, 'b.jpg');
+    const two = await designer.browser
+      .prepare('post', photosPath())
+      .attach('file', file, 'a.jpg')
+      .attach('file', file, 'b.jpg');
     expect([two.status, two.body.code]).toEqual([400, 'upload-not-understood']);
   });
 
@@ -226,7 +286,8 @@ describe('refused uploads leave nothing behind', () => {
     const before = await rows();
     const { port } = server.address() as AddressInfo;
     const cookies = ['oriel', 'XSRF-TOKEN'].map((name) => `${name}=${designer.browser.cookie(name)}`).join('; ');
-    const head = '--cut\r\nContent-Disposition: form-data; name="file"; filename="cut.png"\r\nContent-Type: image/png\r\n\r\n';
+    const head =
+      '--cut\r\nContent-Disposition: form-data; name="file"; filename="cut.png"\r\nContent-Type: image/png\r\n\r\n';
     const request = httpRequest({
       port,
       host: '127.0.0.1',

@@ -33,12 +33,15 @@ const purge = async (days: number) => {
 /** Uploads, and waits for the derivatives. */
 const add = async (file: Buffer, { id, owner }: Home): Promise<{ photoId: string; sha256: string }> => {
   const { photo } = (await upload(owner.browser, `/api/households/${id}/photos`, file, 'a.jpg')).body;
-  const row = () => app.db.selectFrom('photo').select(['state', 'sha256']).where('id', '=', photo.id).executeTakeFirstOrThrow();
+  const row = () =>
+    app.db.selectFrom('photo').select(['state', 'sha256']).where('id', '=', photo.id).executeTakeFirstOrThrow();
   await expect.poll(async () => (await row()).state, { timeout: 15_000 }).toBe('ready');
   return { photoId: photo.id, sha256: (await row()).sha256 };
 };
-const bin = (photoId: string, { id, owner }: Home) => owner.browser.ask('post', `/api/households/${id}/photos/bin`, { photoIds: [photoId] });
-const status = async (photoId: string, { owner }: Home) => (await owner.browser.ask('get', `/api/photos/${photoId}`)).status;
+const bin = (photoId: string, { id, owner }: Home) =>
+  owner.browser.ask('post', `/api/households/${id}/photos/bin`, { photoIds: [photoId] });
+const status = async (photoId: string, { owner }: Home) =>
+  (await owner.browser.ask('get', `/api/photos/${photoId}`)).status;
 const objects = async (sha256: string) => {
   const all = await readdir(app.parts.config.storageDir, { recursive: true });
   return all.filter((path) => path.includes(sha256) && (path.startsWith('originals') || path.endsWith('.webp')));
@@ -72,7 +75,9 @@ describe('purging', () => {
 
   it('keeps a photo for as long as a scene shows it, and its image a while longer', async () => {
     const { photoId, sha256 } = await add(await quadrants(402, 300).jpeg().toBuffer(), here);
-    const { scene } = (await here.owner.browser.ask('post', `/api/households/${here.id}/scenes`, { photoIds: [photoId] })).body;
+    const { scene } = (
+      await here.owner.browser.ask('post', `/api/households/${here.id}/scenes`, { photoIds: [photoId] })
+    ).body;
     const imageId = scene.document.layers[0].image.id as string;
     const image = async () => (await here.owner.browser.ask('get', `/api/images/${imageId}/320`)).status;
     expect(await image()).toBe(200);

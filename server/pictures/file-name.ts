@@ -4,7 +4,10 @@ const unnamed = 'Untitled';
 
 /** The beginning of a text, without half characters (a surrogate that has lost its other half). */
 const beginning = (text: string, max: number) =>
-  text.slice(0, max).replace(/\p{Cs}/gu, '').trim();
+  text
+    .slice(0, max)
+    .replace(/\p{Cs}/gu, '')
+    .trim();
 
 /** The last part of a file's path as some browser or system wrote it, on one line, without control characters. */
 export function photoName(path: string): string {
@@ -13,6 +16,7 @@ export function photoName(path: string): string {
 }
 
 /** A photo's name without its extension, as the name of what is made from it. */
-export const titleFrom = (name: string): string => beginning(name.replace(/\.[a-z0-9]{2,5}$/i, '').trim(), titleMax) || unnamed;
+export const titleFrom = (name: string): string =>
+  beginning(name.replace(/\.[a-z0-9]{2,5}$/i, '').trim(), titleMax) || unnamed;
 
 export const titleOfCopy = (title: string): string => `${beginning(title, titleMax - ' copy'.length)} copy`;

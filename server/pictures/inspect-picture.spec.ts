@@ -16,7 +16,15 @@ const write = async (bytes: Uint8Array) => {
 };
 /** Noise, so that no encoder can make it small: then cutting anywhere cuts pixels. */
 const noise = () =>
-  sharp({ create: { width: 200, height: 150, channels: 3, background: '#888', noise: { type: 'gaussian', mean: 128, sigma: 40 } } });
+  sharp({
+    create: {
+      width: 200,
+      height: 150,
+      channels: 3,
+      background: '#888',
+      noise: { type: 'gaussian', mean: 128, sigma: 40 },
+    },
+  });
 
 beforeAll(async () => {
   folder = await mkdtemp(join(tmpdir(), 'oriel-pictures-'));
@@ -51,14 +59,19 @@ describe('inspectPicture', () => {
 
   it('tells alpha', async () => {
     expect(await inspectPicture(await write(await quadrants().png().toBuffer()))).toMatchObject({ hasAlpha: false });
-    expect(await inspectPicture(await write(await quadrants().ensureAlpha(0.5).png().toBuffer()))).toMatchObject({ hasAlpha: true });
+    expect(await inspectPicture(await write(await quadrants().ensureAlpha(0.5).png().toBuffer()))).toMatchObject({
+      hasAlpha: true,
+    });
   });
 
   it.each(['jpeg', 'png', 'webp', 'avif', 'tiff', 'gif'] as const)('refuses %s cut anywhere', async (format) => {
     const whole = await noise().toFormat(format).toBuffer();
     for (const part of [0.02, 0.4, 0.9, 0.995]) {
       const path = await write(whole.subarray(0, Math.floor(whole.length * part)));
-      await expect(inspectPicture(path), `${part} of ${format}`).rejects.toMatchObject({ status: 422, code: 'truncated' });
+      await expect(inspectPicture(path), `${part} of ${format}`).rejects.toMatchObject({
+        status: 422,
+        code: 'truncated',
+      });
     }
     await expect(inspectPicture(await write(whole))).resolves.toBeDefined();
   });
@@ -74,9 +87,15 @@ describe('inspectPicture', () => {
   it.each([
     ['an empty file', ''],
     ['text', 'not a picture at all, whatever it is called'],
-    ['SVG, which can carry scripts', '<svg xmlns="http://www.w3.org/2000/svg" width="10" height="10"><rect width="10" height="10"/></svg>'],
+    [
+      'SVG, which can carry scripts',
+      '<svg xmlns="http://www.w3.org/2000/svg" width="10" height="10"><rect width="10" height="10"/></svg>',
+    ],
   ])('security: refuses %s', async (_what, text) => {
-    await expect(inspectPicture(await write(Buffer.from(text)))).rejects.toMatchObject({ status: 415, code: 'not-a-picture' });
+    await expect(inspectPicture(await write(Buffer.from(text)))).rejects.toMatchObject({
+      status: 415,
+      code: 'not-a-picture',
+    });
   });
 
   it('security: refuses a bomb by its header, without unfolding it', async () => {
@@ -90,8 +109,13 @@ describe('inspectPicture', () => {
   });
 
   it('takes 120 megapixels and refuses a row more', async () => {
-    await expect(inspectPicture(await write(pngBomb(12_000, 10_000)))).resolves.toMatchObject({ width: 12_000, height: 10_000 });
-    await expect(inspectPicture(await write(pngBomb(12_000, 10_001)))).rejects.toMatchObject({ code: 'too-many-pixels' });
+    await expect(inspectPicture(await write(pngBomb(12_000, 10_000)))).resolves.toMatchObject({
+      width: 12_000,
+      height: 10_000,
+    });
+    await expect(inspectPicture(await write(pngBomb(12_000, 10_001)))).rejects.toMatchObject({
+      code: 'too-many-pixels',
+    });
   });
 
   it('goes by what is inside, not by the name', async () => {

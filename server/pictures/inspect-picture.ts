@@ -28,14 +28,23 @@ export async function inspectPicture(path: string): Promise<PictureFacts> {
   const format = await formatOfFile(path);
   if (!format) throw notAPicture();
   if ((format === 'heic' || format === 'avif') && !(await boxesAreWhole(path))) throw truncated();
-  const metadata = await sharp(path, { limitInputPixels: false }).metadata().catch(() => {
-    throw truncated();
-  });
+  const metadata = await sharp(path, { limitInputPixels: false })
+    .metadata()
+    .catch(() => {
+      throw truncated();
+    });
   const { width, height } = metadata.autoOrient;
   if (width * height > photoMaxPixels) throw tooManyPixels(width, height);
   if (isHevc(metadata) !== (format === 'heic')) throw notAPicture();
   if (format !== 'heic') await decodeToEnd(path);
-  return { format, mime: `image/${format}`, width, height, hasAlpha: metadata.hasAlpha, takenAt: takenDate(metadata.exif) };
+  return {
+    format,
+    mime: `image/${format}`,
+    width,
+    height,
+    hasAlpha: metadata.hasAlpha,
+    takenAt: takenDate(metadata.exif),
+  };
 }
 
 const isHevc = (metadata: Metadata) => metadata.format === 'heif' && metadata.compression === 'hevc';

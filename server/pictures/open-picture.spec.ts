@@ -33,7 +33,9 @@ describe('openPicture', () => {
     expect([info.width, info.height]).toEqual([120, 80]);
     expect([info.width, info.height]).toEqual([reference.info.width, reference.info.height]);
     expect(data.equals(reference.data)).toBe(true);
-    expect(await quartersOf(sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels } }))).toEqual(uprightQuarters);
+    expect(
+      await quartersOf(sharp(data, { raw: { width: info.width, height: info.height, channels: info.channels } })),
+    ).toEqual(uprightQuarters);
   });
 
   it('turns a HEIC once, though its box and its EXIF both say so', async () => {
@@ -49,13 +51,16 @@ describe('openPicture', () => {
     expect(b).toBeLessThan(12);
   });
 
-  it.each(['jpeg', 'png', 'tiff', 'webp', 'avif'] as const)('brings the wide colours of a %s into sRGB', async (format) => {
-    const file = await quadrants().withIccProfile('p3').toFormat(format, { quality: 100 }).toBuffer();
-    const [r, g, b] = await averageOfQuarter(await openPicture(await write(file)));
-    expect(r).toBeGreaterThan(248);
-    expect(g).toBeLessThan(12);
-    expect(b).toBeLessThan(12);
-  });
+  it.each(['jpeg', 'png', 'tiff', 'webp', 'avif'] as const)(
+    'brings the wide colours of a %s into sRGB',
+    async (format) => {
+      const file = await quadrants().withIccProfile('p3').toFormat(format, { quality: 100 }).toBuffer();
+      const [r, g, b] = await averageOfQuarter(await openPicture(await write(file)));
+      expect(r).toBeGreaterThan(248);
+      expect(g).toBeLessThan(12);
+      expect(b).toBeLessThan(12);
+    },
+  );
 
   it('brings CMYK, 16 bits and grey to 8-bit sRGB', async () => {
     const cmyk = await quadrants().toColourspace('cmyk').jpeg({ quality: 100 }).toBuffer();
@@ -86,7 +91,10 @@ const undoing: Record<number, [degrees: number, mirrored: boolean]> = {
 /** The upright picture as a camera held that way would keep it, marked with the orientation. */
 async function asKeptWith(orientation: number): Promise<Buffer> {
   const [degrees, mirrored] = undoing[orientation];
-  const turned = await sharp(await quadrants().png().toBuffer()).rotate(degrees).png().toBuffer();
+  const turned = await sharp(await quadrants().png().toBuffer())
+    .rotate(degrees)
+    .png()
+    .toBuffer();
   const kept = mirrored ? sharp(turned).flop() : sharp(turned);
   return kept.jpeg({ quality: 100, chromaSubsampling: '4:4:4' }).withMetadata({ orientation }).toBuffer();
 }

@@ -18,12 +18,17 @@ describe('takenDate', () => {
   });
 
   it('takes the wall clock as UTC without one', async () => {
-    expect(takenDate(await exifWith({ DateTimeOriginal: '2003:06:07 08:09:10' }))?.toISOString()).toBe('2003-06-07T08:09:10.000Z');
+    expect(takenDate(await exifWith({ DateTimeOriginal: '2003:06:07 08:09:10' }))?.toISOString()).toBe(
+      '2003-06-07T08:09:10.000Z',
+    );
   });
 
-  it.each(['0000:00:00 00:00:00', '    :  :     :  :  ', '1601:01:01 00:00:00', '2999:01:01 00:00:00'])('gives up on a clock never set: %s', async (text) => {
-    expect(takenDate(await exifWith({ DateTimeOriginal: text }))).toBeNull();
-  });
+  it.each(['0000:00:00 00:00:00', '    :  :     :  :  ', '1601:01:01 00:00:00', '2999:01:01 00:00:00'])(
+    'gives up on a clock never set: %s',
+    async (text) => {
+      expect(takenDate(await exifWith({ DateTimeOriginal: text }))).toBeNull();
+    },
+  );
 
   it('bears damaged EXIF', () => {
     expect(takenDate(Buffer.from('Exif\0\0MM\0*\0\0\xff\xff nothing of use', 'latin1'))).toBeNull();

@@ -21,9 +21,18 @@ export async function reuseImage(db: Database, householdId: string, sha256: stri
 }
 
 /** The images of this household among those asked for, by id. */
-export async function imagesById(db: Database, householdId: string, ids: readonly string[]): Promise<Map<string, LayerImage>> {
+export async function imagesById(
+  db: Database,
+  householdId: string,
+  ids: readonly string[],
+): Promise<Map<string, LayerImage>> {
   if (ids.length === 0) return new Map();
-  const rows = await db.selectFrom('layer_image').select(columns).where('household_id', '=', householdId).where('id', 'in', ids).execute();
+  const rows = await db
+    .selectFrom('layer_image')
+    .select(columns)
+    .where('household_id', '=', householdId)
+    .where('id', 'in', ids)
+    .execute();
   return new Map(rows.map((row) => [row.id, toImage(row)]));
 }
 

@@ -63,7 +63,11 @@ export function layerFiles(db: Database, storage: Storage): LayerFiles {
     const files = await turn(() => storage.withFile(originalKey(sha256), (path) => makeFiles(path, source)));
     await db.transaction().execute(async (transaction) => {
       await lockContent(transaction, sha256);
-      const image = await transaction.selectFrom('layer_image').select('id').where('sha256', '=', sha256).executeTakeFirst();
+      const image = await transaction
+        .selectFrom('layer_image')
+        .select('id')
+        .where('sha256', '=', sha256)
+        .executeTakeFirst();
       // Purged meanwhile: what would be written now, nothing would ever remove.
       if (!image) return;
       for (const { edge, bytes } of files) await storage.put(layerKey(sha256, edge), bytes);
@@ -84,7 +88,10 @@ export function layerFiles(db: Database, storage: Storage): LayerFiles {
     prepare(source) {
       const preparing = ensure(source, edgesFor(source.width, source.height)[0]).catch(() => undefined);
       const key = `preparing ${source.sha256}`;
-      underWay.set(key, preparing.finally(() => underWay.delete(key)));
+      underWay.set(
+        key,
+        preparing.finally(() => underWay.delete(key)),
+      );
     },
     async settled() {
       while (underWay.size > 0) await Promise.allSettled(underWay.values());

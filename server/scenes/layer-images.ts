@@ -47,7 +47,13 @@ export function layerImages(db: Database, storage: Storage, files: LayerFiles) {
       if (twin) return twin.id;
       const row = await transaction
         .insertInto('layer_image')
-        .values({ household_id: householdId, sha256, width: image.width, height: image.height, trim: JSON.stringify(image.trim) })
+        .values({
+          household_id: householdId,
+          sha256,
+          width: image.width,
+          height: image.height,
+          trim: JSON.stringify(image.trim),
+        })
         .returning('id')
         .executeTakeFirstOrThrow();
       if (path && !(await storage.exists(originalKey(sha256)))) await storage.putFile(originalKey(sha256), path);

@@ -13,7 +13,11 @@ const seenFrom = 4;
 
 /** The smallest part that holds everything seen in the image; null when it is wholly transparent. */
 export async function opaqueBounds(picture: Sharp): Promise<Bounds | null> {
-  const { data, info } = await picture.ensureAlpha().extractChannel('alpha').raw().toBuffer({ resolveWithObject: true });
+  const { data, info } = await picture
+    .ensureAlpha()
+    .extractChannel('alpha')
+    .raw()
+    .toBuffer({ resolveWithObject: true });
   const { width, height } = info;
   const rowIsSeen = (y: number) => data.subarray(y * width, (y + 1) * width).some((alpha) => alpha >= seenFrom);
 

@@ -16,7 +16,12 @@ const shown = sql<boolean>`layer_image.id in (
 export async function purgeScenes(db: Database, storage: Storage, now = new Date()): Promise<void> {
   await db.deleteFrom('scene').where('binned_at', '<', binnedBefore(now)).execute();
 
-  await db.updateTable('layer_image').set({ unused_since: null }).where('unused_since', 'is not', null).where(shown).execute();
+  await db
+    .updateTable('layer_image')
+    .set({ unused_since: null })
+    .where('unused_since', 'is not', null)
+    .where(shown)
+    .execute();
   await db
     .updateTable('layer_image')
     .set({ unused_since: now })
@@ -24,10 +29,19 @@ export async function purgeScenes(db: Database, storage: Storage, now = new Date
     .where((where) => where.not(shown))
     .execute();
 
-  const due = await db.selectFrom('layer_image').select(['id', 'sha256']).where('unused_since', '<', binnedBefore(now)).execute();
+  const due = await db
+    .selectFrom('layer_image')
+    .select(['id', 'sha256'])
+    .where('unused_since', '<', binnedBefore(now))
+    .execute();
   for (const { id, sha256 } of due)
     await forgetContent(db, storage, sha256, async (transaction) => {
-      await transaction.deleteFrom('layer_image').where('id', '=', id).where('unused_since', 'is not', null).where((where) => where.not(shown)).execute();
+      await transaction
+        .deleteFrom('layer_image')
+        .where('id', '=', id)
+        .where('unused_since', 'is not', null)
+        .where((where) => where.not(shown))
+        .execute();
     });
 }
 

@@ -15,7 +15,11 @@ export const toScene = (row: SceneRow): Scene => ({
 });
 
 const scenes = (db: Database) =>
-  db.selectFrom('scene').leftJoin('account', 'account.id', 'scene.saved_by').selectAll('scene').select('account.name as saver');
+  db
+    .selectFrom('scene')
+    .leftJoin('account', 'account.id', 'scene.saved_by')
+    .selectAll('scene')
+    .select('account.name as saver');
 
 export const findScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
   scenes(db).where('scene.id', '=', id).executeTakeFirst();

@@ -41,7 +41,11 @@ export const sceneRoutes =
       if (!image) throw notFound();
       const edge = edgeKept(image.width, image.height, params.edge);
       await layerFiles.ensure(image, edge);
-      await sendStored(storage, request, response, { key: layerKey(image.sha256, edge), mime: 'image/webp', tag: `${image.sha256}-layer-${edge}` });
+      await sendStored(storage, request, response, {
+        key: layerKey(image.sha256, edge),
+        mime: 'image/webp',
+        tag: `${image.sha256}-layer-${edge}`,
+      });
       return {};
     });
   };

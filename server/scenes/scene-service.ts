@@ -18,7 +18,6 @@ interface Asker {
   readonly accountId: string;
 }
 
-
 const asLayer = (photo: PhotoRow): PhotoOfLayer => ({
   sha256: photo.sha256,
   name: photo.name,
@@ -82,7 +81,8 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
     },
 
     /** @throws image-not-here (422). */
-    add: async (document: SceneDocument, asker: Asker): Promise<Scene> => add(await withOwnImages(db, asker.householdId, document), asker),
+    add: async (document: SceneDocument, asker: Asker): Promise<Scene> =>
+      add(await withOwnImages(db, asker.householdId, document), asker),
 
     /**
      * Saves over the newest revision and no other. A save whose answer was lost, sent again, is answered as it was the first time.
@@ -103,7 +103,12 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
         }
         await transaction
           .updateTable('scene')
-          .set({ document: JSON.stringify(document), revision: revision + 1, saved_at: new Date(), saved_by: accountId })
+          .set({
+            document: JSON.stringify(document),
+            revision: revision + 1,
+            saved_at: new Date(),
+            saved_by: accountId,
+          })
           .where('id', '=', id)
           .execute();
       });

@@ -42,7 +42,12 @@ const file = async (imageId: string, edge: number) => {
 describe('a new scene', () => {
   it('is an empty lying sheet when made from nothing', async () => {
     const scene = await create({ name: ' The sheet ' });
-    expect(scene.document).toMatchObject({ name: 'The sheet', glass: { widthMm: 1210, heightMm: 681 }, homeEye: { x: 0, y: 0, z: 1800 }, layers: [] });
+    expect(scene.document).toMatchObject({
+      name: 'The sheet',
+      glass: { widthMm: 1210, heightMm: 681 },
+      homeEye: { x: 0, y: 0, z: 1800 },
+      layers: [],
+    });
     expect(scene).toMatchObject({ revision: 1, savedBy: 'Test person', householdId });
   });
 
@@ -55,7 +60,11 @@ describe('a new scene', () => {
     // 3:2 on 1210 x 681 (16:9): as wide as the glass, 1210 / 1.5 high.
     expect(layer.placed).toMatchObject({ xMm: 0, yMm: 0, widthMm: 1210 });
     expect(layer.placed.heightMm).toBeCloseTo(806.667, 3);
-    expect(layer.image).toMatchObject({ width: 900, height: 600, trim: { left: 0, top: 0, ofWidth: 900, ofHeight: 600 } });
+    expect(layer.image).toMatchObject({
+      width: 900,
+      height: 600,
+      trim: { left: 0, top: 0, ofWidth: 900, ofHeight: 600 },
+    });
   });
 
   it('stands when the photo stands, also when only its EXIF says so', async () => {
@@ -72,8 +81,16 @@ describe('a new scene', () => {
     const left = await uploadPhoto(await cutOut(size, { left: 100, top: 500, width: 200, height: 300 }), 'left.png');
     const right = await uploadPhoto(await cutOut(size, { left: 700, top: 200, width: 250, height: 400 }), 'right.png');
     const { document } = await create({ name: 'Three', photoIds: [back, left, right] });
-    expect(document.layers.map(({ name, depthMm }) => [name, depthMm])).toEqual([['back', 1200], ['left', 600], ['right', 0]]);
-    expect(document.layers[1].image).toMatchObject({ width: 200, height: 300, trim: { left: 100, top: 500, ofWidth: 1000, ofHeight: 800 } });
+    expect(document.layers.map(({ name, depthMm }) => [name, depthMm])).toEqual([
+      ['back', 1200],
+      ['left', 600],
+      ['right', 0],
+    ]);
+    expect(document.layers[1].image).toMatchObject({
+      width: 200,
+      height: 300,
+      trim: { left: 100, top: 500, ofWidth: 1000, ofHeight: 800 },
+    });
 
     // By hand: 1.21 mm a pixel. The left part's centre (200, 650) lies 300 px left of the middle and 250 below it.
     const [, leftPlaced, rightPlaced] = document.layers.map(({ placed }) => placed);
@@ -88,9 +105,16 @@ describe('a new scene', () => {
   it('says which photos are not there: binned, of another household, or none', async () => {
     const binned = await uploadPhoto(await quadrants(33, 44).png().toBuffer(), 'binned.png');
     await designer.browser.ask('post', `/api/households/${householdId}/photos/bin`, { photoIds: [binned] });
-    const foreign = await uploadPhoto(await quadrants(44, 33).png().toBuffer(), 'foreign.png', elsewhere.designer, elsewhere.householdId);
+    const foreign = await uploadPhoto(
+      await quadrants(44, 33).png().toBuffer(),
+      'foreign.png',
+      elsewhere.designer,
+      elsewhere.householdId,
+    );
     const none = randomUUID();
-    const answer = await designer.browser.ask('post', `/api/households/${householdId}/scenes`, { photoIds: [binned, foreign, none] });
+    const answer = await designer.browser.ask('post', `/api/households/${householdId}/scenes`, {
+      photoIds: [binned, foreign, none],
+    });
     expect(answer.status).toBe(422);
     expect(answer.body).toMatchObject({ code: 'photo-not-here', detail: { photoIds: [binned, foreign, none] } });
   });
@@ -99,26 +123,43 @@ describe('a new scene', () => {
 describe('images of layers', () => {
   it('keep their alpha, lose their surroundings and all metadata, at every size', async () => {
     const scene = await create({});
-    const cut = await cutOut({ width: 2000, height: 1500 }, { left: 300, top: 200, width: 1000, height: 500 }, '#ff0000');
+    const cut = await cutOut(
+      { width: 2000, height: 1500 },
+      { left: 300, top: 200, width: 1000, height: 500 },
+      '#ff0000',
+    );
     const answer = await upload(designer.browser, `/api/scenes/${scene.id}/images`, cut, 'Red barn.png');
     expect(answer.status, answer.text).toBe(200);
-    expect(answer.body).toMatchObject({ name: 'Red barn', image: { width: 1000, height: 500, trim: { left: 300, top: 200, ofWidth: 2000, ofHeight: 1500 } } });
+    expect(answer.body).toMatchObject({
+      name: 'Red barn',
+      image: { width: 1000, height: 500, trim: { left: 300, top: 200, ofWidth: 2000, ofHeight: 1500 } },
+    });
     const sizes: number[][] = [];
     for (const edge of [320, 800, 1600, 3200]) {
       const metadata = await sharp(await file(answer.body.image.id, edge)).metadata();
       expect([metadata.exif, metadata.icc, metadata.xmp]).toEqual([undefined, undefined, undefined]);
       sizes.push([metadata.width, metadata.height]);
     }
-    expect(sizes).toEqual([[320, 160], [800, 400], [1000, 500], [1000, 500]]);
+    expect(sizes).toEqual([
+      [320, 160],
+      [800, 400],
+      [1000, 500],
+      [1000, 500],
+    ]);
   });
 
   it('keep soft edges exactly', async () => {
     const ramp = Buffer.alloc(256 * 8 * 4);
     for (let i = 0; i < 256 * 8; i++) ramp.set([200, 100, 50, i % 256], i * 4);
     const scene = await create({});
-    const png = await sharp(ramp, { raw: { width: 256, height: 8, channels: 4 } }).png().toBuffer();
+    const png = await sharp(ramp, { raw: { width: 256, height: 8, channels: 4 } })
+      .png()
+      .toBuffer();
     const { image } = (await upload(designer.browser, `/api/scenes/${scene.id}/images`, png, 'ramp.png')).body;
-    const alpha = await sharp(await file(image.id, 320)).extractChannel('alpha').raw().toBuffer();
+    const alpha = await sharp(await file(image.id, 320))
+      .extractChannel('alpha')
+      .raw()
+      .toBuffer();
     expect([...alpha.subarray(0, 252)]).toEqual(Array.from({ length: 252 }, (_, i) => i + 4));
   });
 
@@ -142,7 +183,11 @@ describe('images of layers', () => {
 
   it('refuses what is wholly transparent, and leaves nothing of it', async () => {
     const scene = await create({});
-    const clear = await sharp({ create: { width: 50, height: 50, channels: 4, background: { r: 9, g: 9, b: 9, alpha: 0 } } }).png().toBuffer();
+    const clear = await sharp({
+      create: { width: 50, height: 50, channels: 4, background: { r: 9, g: 9, b: 9, alpha: 0 } },
+    })
+      .png()
+      .toBuffer();
     const before = await app.db.selectFrom('layer_image').select('id').execute();
     const answer = await upload(designer.browser, `/api/scenes/${scene.id}/images`, clear, 'clear.png');
     expect(answer.status).toBe(422);
@@ -168,17 +213,24 @@ describe('saving', () => {
     const theirs = await save(scene, { ...scene.document, name: 'Theirs' }, other);
     const mine = await save(scene, { ...scene.document, name: 'Mine' });
     expect(mine.status).toBe(409);
-    expect(mine.body).toMatchObject({ code: 'revision-moved', detail: { revision: 2, savedBy: 'Test person', savedAt: theirs.body.scene.savedAt } });
+    expect(mine.body).toMatchObject({
+      code: 'revision-moved',
+      detail: { revision: 2, savedBy: 'Test person', savedAt: theirs.body.scene.savedAt },
+    });
     const read = await designer.browser.ask('get', `/api/scenes/${scene.id}`);
     expect(read.body.scene.document.name).toBe('Theirs');
-    const copy = await designer.browser.ask('post', `/api/scenes/${scene.id}/duplicates`, { document: { ...scene.document, name: 'Mine' } });
+    const copy = await designer.browser.ask('post', `/api/scenes/${scene.id}/duplicates`, {
+      document: { ...scene.document, name: 'Mine' },
+    });
     expect(copy.body.scene).toMatchObject({ revision: 1, document: { name: 'Mine copy' } });
   });
 
   it('lets exactly one of many win who save at the same moment', async () => {
     const scene = await create({ name: 'Race' });
     const names = Array.from({ length: 8 }, (_, i) => `Version ${i}`);
-    const answers = await Promise.all(names.map((name, i) => save(scene, { ...scene.document, name }, i % 2 ? other : designer)));
+    const answers = await Promise.all(
+      names.map((name, i) => save(scene, { ...scene.document, name }, i % 2 ? other : designer)),
+    );
     expect(answers.map(({ status }) => status).sort()).toEqual([200, ...Array<number>(7).fill(409)]);
     const read = await designer.browser.ask('get', `/api/scenes/${scene.id}`);
     expect(read.body.scene.document.name).toBe(names[answers.findIndex(({ status }) => status === 200)]);
@@ -198,7 +250,10 @@ describe('saving', () => {
     const photo = await uploadPhoto(await quadrants(300, 200).png().toBuffer(), 'facts.png');
     const scene = await create({ photoIds: [photo] });
     const [layer] = scene.document.layers;
-    const lie = { ...layer, image: { ...layer.image, width: 9000, trim: { left: 5, top: 5, ofWidth: 1, ofHeight: 1 } } };
+    const lie = {
+      ...layer,
+      image: { ...layer.image, width: 9000, trim: { left: 5, top: 5, ofWidth: 1, ofHeight: 1 } },
+    };
     const answer = await save(scene, { ...scene.document, layers: [lie] });
     expect(answer.body.scene.document.layers[0].image).toEqual(layer.image);
   });
@@ -215,7 +270,12 @@ describe('saving', () => {
   });
 
   it("security: refuses another household's image in a document, saved or duplicated", async () => {
-    const photo = await uploadPhoto(await quadrants(330, 210).png().toBuffer(), 'theirs.png', elsewhere.designer, elsewhere.householdId);
+    const photo = await uploadPhoto(
+      await quadrants(330, 210).png().toBuffer(),
+      'theirs.png',
+      elsewhere.designer,
+      elsewhere.householdId,
+    );
     const foreign = await create({ photoIds: [photo] }, elsewhere.designer, elsewhere.householdId);
     const scene = await create({ name: 'Ours' });
     const document = { ...scene.document, layers: foreign.document.layers };
@@ -224,10 +284,17 @@ describe('saving', () => {
       await designer.browser.ask('post', `/api/scenes/${scene.id}/duplicates`, { document }),
     ]) {
       expect(answer.status).toBe(422);
-      expect(answer.body).toMatchObject({ code: 'image-not-here', fields: { 'document.layers.0.image': expect.any(String) } });
+      expect(answer.body).toMatchObject({
+        code: 'image-not-here',
+        fields: { 'document.layers.0.image': expect.any(String) },
+      });
     }
-    expect((await designer.browser.ask('get', `/api/images/${foreign.document.layers[0].image.id}/320`)).status).toBe(404);
-    expect((await designer.browser.ask('post', `/api/scenes/${scene.id}/images/from-photo`, { photoId: photo })).status).toBe(422);
+    expect((await designer.browser.ask('get', `/api/images/${foreign.document.layers[0].image.id}/320`)).status).toBe(
+      404,
+    );
+    expect(
+      (await designer.browser.ask('post', `/api/scenes/${scene.id}/images/from-photo`, { photoId: photo })).status,
+    ).toBe(422);
   });
 });
 
@@ -239,14 +306,18 @@ describe('the list', () => {
     const b = await create({ name: 'B' }, owner, household);
     await save(a, { ...a.document, name: 'A again' }, owner);
     const names = async () =>
-      (await owner.browser.ask('get', `/api/households/${household}/scenes`)).body.scenes.map((scene: Scene) => scene.document.name);
+      (await owner.browser.ask('get', `/api/households/${household}/scenes`)).body.scenes.map(
+        (scene: Scene) => scene.document.name,
+      );
     expect(await names()).toEqual(['A again', 'B']);
 
     expect((await owner.browser.ask('delete', `/api/scenes/${b.id}`)).status).toBe(200);
     expect(await names()).toEqual(['A again']);
     expect((await owner.browser.ask('get', `/api/scenes/${b.id}`)).body.code).toBe('in-bin');
     expect((await save(b, b.document, owner)).body.code).toBe('in-bin');
-    expect((await owner.browser.ask('post', `/api/scenes/${b.id}/restoration`)).body.scene.document).toEqual(b.document);
+    expect((await owner.browser.ask('post', `/api/scenes/${b.id}/restoration`)).body.scene.document).toEqual(
+      b.document,
+    );
     expect(await names()).toEqual(['A again', 'B']);
   });
 });

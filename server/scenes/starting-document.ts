@@ -5,7 +5,8 @@ import { farthestOfNewMm, livingRoom } from '@oriel/shared/projection/living-roo
 import type { NamedImage } from './layer-images';
 
 /** Depths from the farthest to the glass, evenly; a single layer lies in the glass. */
-const spread = (index: number, count: number) => (count === 1 ? 0 : Math.round(farthestOfNewMm * (1 - index / (count - 1))));
+const spread = (index: number, count: number) =>
+  count === 1 ? 0 : Math.round(farthestOfNewMm * (1 - index / (count - 1)));
 
 /** What a scene is when it is made: each picture covers the glass, the first the farthest; the glass lies or stands as the first picture does. */
 export function startingDocument(name: string, pictures: readonly NamedImage[]): SceneDocument {

@@ -70,7 +70,10 @@ async function sweep(folder: string): Promise<void> {
   const before = Date.now() - abandonedAfterMs;
   for (const name of await readdir(folder)) {
     const path = join(folder, name);
-    const modified = await stat(path).then((found) => found.mtimeMs, () => Infinity);
+    const modified = await stat(path).then(
+      (found) => found.mtimeMs,
+      () => Infinity,
+    );
     if (modified < before) await rm(path, { force: true, recursive: true });
   }
 }

@@ -16,10 +16,20 @@ interface Sending {
  * Answers with an object's bytes. Objects never change, so the asker's own browser may keep them for good.
  * @throws not-yet (404) while the object has not been made.
  */
-export async function sendStored(storage: Storage, request: Request, response: Response, sending: Sending): Promise<void> {
+export async function sendStored(
+  storage: Storage,
+  request: Request,
+  response: Response,
+  sending: Sending,
+): Promise<void> {
   const stored = await storage.open(sending.key);
   if (!stored)
-    throw new DomainFailure(404, 'not-yet', 'This picture is still being made.', 'Wait a moment; it appears by itself.');
+    throw new DomainFailure(
+      404,
+      'not-yet',
+      'This picture is still being made.',
+      'Wait a moment; it appears by itself.',
+    );
 
   if (sending.saveAs !== undefined) response.attachment(sending.saveAs);
   response.set({

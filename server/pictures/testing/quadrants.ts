@@ -18,11 +18,15 @@ export function quadrants(width = 120, height = 80): Sharp {
 
 const tolerance = 40;
 const name = (pixel: readonly number[]): Colour =>
-  (Object.keys(rgb) as (keyof typeof rgb)[]).find((colour) => rgb[colour].every((value, i) => Math.abs(value - pixel[i]) <= tolerance)) ?? 'other';
+  (Object.keys(rgb) as (keyof typeof rgb)[]).find((colour) =>
+    rgb[colour].every((value, i) => Math.abs(value - pixel[i]) <= tolerance),
+  ) ?? 'other';
 
 /** The colours of the four quarters: top left, top right, bottom left, bottom right. */
 export async function quartersOf(picture: Sharp | Buffer): Promise<Colour[]> {
-  const { data, info } = await (Buffer.isBuffer(picture) ? sharp(picture) : picture).raw().toBuffer({ resolveWithObject: true });
+  const { data, info } = await (Buffer.isBuffer(picture) ? sharp(picture) : picture)
+    .raw()
+    .toBuffer({ resolveWithObject: true });
   const at = (x: number, y: number) => {
     const start = (Math.floor(y * info.height) * info.width + Math.floor(x * info.width)) * info.channels;
     return name([...data.subarray(start, start + 3)]);
