@@ -1,6 +1,6 @@
 import { Writable } from 'node:stream';
 import { pino } from 'pino';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { createTestApp, testPassword, type TestApp } from '../testing/test-app';
 import { tokenIn } from '../testing/token-in';
 import { plainError } from './log-requests';
@@ -12,12 +12,16 @@ describe('the log', () => {
 
   it('says method, path, status and a reference that the failure carries too', async () => {
     const answer = await app.browser().ask('get', '/api/households/none?search=secret');
-    const line = app
-      .log()
-      .split('\n')
-      .map((text) => (text ? (JSON.parse(text) as { req?: object; res?: object }) : {}))
-      .find(({ req }) => req && 'id' in req && req.id === answer.body.reference);
-    expect(line).toMatchObject({ req: { method: 'GET', path: '/api/households/none' }, res: { status: 401 } });
+    const lineOf = (reference: string) =>
+      app
+        .log()
+        .split('\n')
+        .map((text) => (text ? (JSON.parse(text) as { req?: object; res?: object }) : {}))
+        .find(({ req }) => req && 'id' in req && req.id === reference);
+    // The line is written once the answer is out, which may be after it has arrived.
+    await vi.waitFor(() =>
+      expect(lineOf(answer.body.reference)).toMatchObject({ req: { method: 'GET', path: '/api/households/none' }, res: { status: 401 } }),
+    );
   });
 
   it('security: holds no password, token, cookie, query or mailed link, even at its most talkative', async () => {
