@@ -229,7 +229,7 @@ test('the title block names what is not clear, shows it, and the layers grow unt
   await expect(block).toContainText('Clear from the whole viewing zone');
   await typeDepth(page, 'Sky', 1400);
   await expect(block).toContainText('Not clear');
-  await block.getByRole('button', { name: /^Sky: .* edge shows, [\d.]+ mm short/ }).first().click();
+  await block.getByRole('button', { name: /^Sky, .* edge: [\d.]+ mm short/ }).first().click();
   await expect(page.getByRole('button', { name: /^Sky/, expanded: true })).toBeVisible();
   await expect(page.getByRole('button', { name: 'Back to the home eye' })).toBeVisible();
   await page.getByRole('button', { name: 'Grow to cover the zone' }).click();

@@ -151,13 +151,11 @@ export class Composer {
   }
 
   protected key(event: KeyboardEvent): void {
-    const typing = event.target instanceof HTMLElement && event.target.matches('input, textarea, select');
     if (this.dialog.openDialogs.length > 0) return;
-    const act = keyCommand(event, typing, this.store);
-    if (!act) return;
+    const command = keyCommand(event, this.store);
+    if (!command) return;
     event.preventDefault();
-    act();
-    const selected = this.store.selected();
-    if (event.ctrlKey || event.metaKey) void this.announcer.announce(selected ? `${selected.layer.name} selected` : 'Nothing selected');
+    command.act();
+    if (command.says) void this.announcer.announce(command.says);
   }
 }

@@ -2,35 +2,45 @@ import { place, setDepth } from './commands/layer-commands';
 import { duplicateLayer, removeLayer } from './commands/stack-commands';
 import type { SceneStore } from './scene-store';
 
+/** What a key asks for, and what is said of it where nothing else says it. */
+export interface KeyCommand {
+  readonly act: () => void;
+  readonly says?: string;
+}
+
 /**
- * What a key does on the sheet, or null. Undoing is left to a text field while one is typed in; so are all plain keys.
- * Arrows move the selected layer on the glass by 1 mm and Page Up and Page Down in depth by 10 mm, ten times that with Shift.
+ * What a key does on the sheet, or null. Arrows move the selected layer on the glass by 1 mm, Page Up and Page Down in depth by 10 mm,
+ * ten times that with Shift. Plain keys belong to a field that has the focus; undoing belongs to it only while it is typed in.
  */
-export function keyCommand(event: KeyboardEvent, typing: boolean, store: SceneStore): (() => void) | null {
-  if (typing || event.altKey) return null;
+export function keyCommand(event: KeyboardEvent, store: SceneStore): KeyCommand | null {
+  if (event.altKey) return null;
   return event.ctrlKey || event.metaKey ? withControl(event, store) : plain(event, store);
 }
 
-function withControl(event: KeyboardEvent, store: SceneStore): (() => void) | null {
+function withControl(event: KeyboardEvent, store: SceneStore): KeyCommand | null {
+  if (isTyped(event.target)) return null;
   const key = event.key.toLowerCase();
-  if (key === 'z') return event.shiftKey ? () => store.redo() : () => store.undo();
-  if (key === 'y') return () => store.redo();
-  const selected = store.selectedId();
+  if (key === 'y' || (key === 'z' && event.shiftKey)) return { act: () => store.redo(), says: store.canRedo() ? 'Redone' : 'Nothing to redo' };
+  if (key === 'z') return { act: () => store.undo(), says: store.canUndo() ? 'Undone' : 'Nothing to undo' };
+  const selected = store.selected()?.layer;
   if (key !== 'd' || !selected) return null;
-  return () => {
-    const copyId = crypto.randomUUID();
-    store.edit(duplicateLayer(selected, copyId));
+  const copyId = crypto.randomUUID();
+  const act = () => {
+    store.edit(duplicateLayer(selected.id, copyId));
     store.select(copyId);
   };
+  return { act, says: `${selected.name} duplicated` };
 }
 
-function plain(event: KeyboardEvent, store: SceneStore): (() => void) | null {
+function plain(event: KeyboardEvent, store: SceneStore): KeyCommand | null {
   const selected = store.selected();
   if (!selected || !onSheet(event.target)) return null;
-  const { id, placed, depthMm } = selected.layer;
+  const { id, name, placed, depthMm } = selected.layer;
   const far = event.shiftKey ? 10 : 1;
-  const move = (x: number, y: number) => () => store.edit(place(id, placed.xMm + x * far, placed.yMm + y * far), `place ${id}`);
-  const deepen = (mm: number) => () => store.edit(setDepth(id, depthMm + mm * far), `depth ${id}`);
+  const move = (x: number, y: number) => ({
+    act: () => store.edit(place(id, placed.xMm + x * far, placed.yMm + y * far), `place ${id}`),
+  });
+  const deepen = (mm: number) => ({ act: () => store.edit(setDepth(id, depthMm + mm * far), `depth ${id}`) });
   switch (event.key) {
     case 'ArrowLeft':
       return move(-1, 0);
@@ -46,14 +56,17 @@ function plain(event: KeyboardEvent, store: SceneStore): (() => void) | null {
       return deepen(-10);
     case 'Delete':
     case 'Backspace':
-      return () => store.edit(removeLayer(id));
+      return { act: () => store.edit(removeLayer(id)), says: `${name} removed` };
     case 'Escape':
-      return () => store.select(null);
+      return { act: () => store.select(null), says: 'Nothing selected' };
     default:
       return null;
   }
 }
 
-/** Keys belong to the sheet when nothing has the focus, or something on the sheet. */
+const isTyped = (target: EventTarget | null) =>
+  target instanceof Element && target.matches('input:not([data-settled], [type=range]), textarea');
+
+/** Plain keys belong to the sheet when it has the focus, or nothing has. */
 const onSheet = (target: EventTarget | null) =>
-  target === document.body || (target instanceof Element && target.closest('oriel-drawing-sheet, #content') !== null && !target.closest('oriel-ledger button, [role=menu]'));
+  target === document.body || (target instanceof Element && !target.matches('input') && target.closest('oriel-drawing-sheet') !== null);

@@ -24,18 +24,21 @@ export function statedFaults(document: SceneDocument): StatedFault[] {
   }
 }
 
+/** Whole millimetres, but never none. */
+const shortness = (mm: number) => `${mm < 10 ? plainMm(Math.max(mm, 0.1)) : plainMm(mm, 0)} mm`;
+
 const sideWords = { left: 'left', right: 'right', top: 'top', bottom: 'lower' } as const;
 
 function state(fault: Fault, layerAt: (index: number) => { id: string; name: string }): StatedFault {
   switch (fault.kind) {
     case 'edgeShows': {
       const { id, name } = layerAt(fault.layer);
-      const words = `${name}: ${sideWords[fault.side]} edge shows, ${plainMm(Math.max(fault.shortMm, 0.1))} mm short`;
+      const words = `${name}, ${sideWords[fault.side]} edge: ${shortness(fault.shortMm)} short`;
       return { words, from: `from ${describeEye(fault.eye)}`, layerId: id, eye: fault.eye };
     }
     case 'tooNear': {
       const { id, name } = layerAt(fault.layer);
-      return { words: `${name}: ${plainMm(fault.shortMm)} mm too near the nearest eye`, from: '', layerId: id, eye: fault.eye };
+      return { words: `${name}: ${shortness(fault.shortMm)} too near the nearest eye`, from: '', layerId: id, eye: fault.eye };
     }
     case 'sideOpen':
       return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, from: '', layerId: null, eye: null };

@@ -18,6 +18,7 @@ let fields = 0;
         [id]="id"
         [value]="typed() ?? shown()"
         [readOnly]="readOnly()"
+        [attr.data-settled]="typed() === null ? '' : null"
         [attr.aria-valuenow]="value()"
         [attr.aria-valuetext]="shown() + ' ' + unit()"
         [attr.aria-valuemin]="least()"

@@ -97,6 +97,7 @@ export class SceneKeeper {
 
   private show(scene: Scene): void {
     this.opened = scene.document;
+    this.restored.set(false);
     this.scene.set(scene);
     this.store.open(scene.document);
     this.store.readOnly.set(!this.mayDesign());

@@ -27,7 +27,8 @@ export interface DrawnLine extends Line {
   readonly selected: boolean;
   /** Where the line runs on past the drawing and is broken off. */
   readonly breaks: readonly Point2[];
-  readonly label: Point2;
+  /** Where its name stands; null where there is no room. */
+  readonly label: Point2 | null;
   readonly labelWidth: number;
 }
 
@@ -53,7 +54,9 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
   const { low, high } = sidesOf(frame.view);
   const camera = assumedCamera(frame.view, glass, zone);
   const lens = drawnAt(frame, { across: camera.across, z: 0 });
-  const path = Array.from({ length: 73 }, (_, i) => walkPath(zone, homeEye, i / 72));
+  // Seen from the side there and back lie on one line: half a turn draws it once.
+  const [start, turns] = frame.view === 'plan' ? [0, 1] : [0.25, 0.5];
+  const path = Array.from({ length: 73 }, (_, i) => walkPath(zone, homeEye, start + (turns * i) / 72));
   return {
     glass: { from: drawnAt(frame, { across: from, z: 0 }), to: drawnAt(frame, { across: to, z: 0 }) },
     zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
@@ -84,19 +87,22 @@ const LABEL_PX = 13;
 /** The layers as lines at their depth, broken off where they run past the frame. */
 export function drawLines(frame: DepthFrame, layers: readonly DrawnLayer[], selectedId: string | null): DrawnLine[] {
   const lines = layers.flatMap((drawn) => (drawn.plane ? [drawLine(frame, drawn, drawn.plane, selectedId)] : []));
-  const labels = lines.map(({ id, label, labelWidth }) => ({
+  const labels = lines.map(({ id, wanted, labelWidth }) => ({
     id,
-    x: label.x,
-    y: label.y - LABEL_PX,
+    x: wanted.x,
+    y: wanted.y - LABEL_PX,
     width: labelWidth,
     height: LABEL_PX,
   }));
   const first = (id: string) => (id === selectedId ? 0 : 1);
-  const spread = spreadLabels(labels.sort((a, b) => first(a.id) - first(b.id)), frame.left + frame.width);
-  return lines.map((line) => ({ ...line, label: { x: spread.get(line.id) ?? line.label.x, y: line.label.y } }));
+  const spread = spreadLabels(labels.sort((a, b) => first(a.id) - first(b.id)), frame.left, frame.left + frame.width);
+  return lines.map(({ wanted, ...line }) => {
+    const x = spread.get(line.id);
+    return { ...line, label: x === undefined ? null : { x, y: wanted.y } };
+  });
 }
 
-function drawLine(frame: DepthFrame, { layer, colour }: DrawnLayer, plane: Rectangle, selectedId: string | null): DrawnLine {
+function drawLine(frame: DepthFrame, { layer, colour }: DrawnLayer, plane: Rectangle, selectedId: string | null): Omit<DrawnLine, 'label'> & { readonly wanted: Point2 } {
   const { from, to, breaks } = broken(frame, spanAcross(frame.view, plane).map((across) => drawnAt(frame, { across, z: -layer.depthMm })));
   const start = frame.view === 'plan' ? from : to;
   return {
@@ -112,7 +118,7 @@ function drawLine(frame: DepthFrame, { layer, colour }: DrawnLayer, plane: Recta
     to,
     breaks,
     labelWidth: (layer.name.length + signedMm(layer.depthMm).length + 1) * CHARACTER_PX,
-    label: { x: start.x + 6, y: layer.depthMm < 0 ? start.y + 14 : start.y - 5 },
+    wanted: { x: start.x + 6, y: layer.depthMm < 0 ? start.y + 14 : start.y - 5 },
   };
 }
 

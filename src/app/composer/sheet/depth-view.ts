@@ -3,7 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal, vi
 import type { Point2 } from '@oriel/shared/projection/types';
 import { clamp, depthLimits, eyeLimits } from '../commands/limits';
 import { setDepth } from '../commands/layer-commands';
-import { setHomeEye, setZone } from '../commands/setting-commands';
+import { setGlass, setHomeEye, setZone } from '../commands/setting-commands';
 import { type Gesture, SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
 import { describeEye } from '../words';
@@ -58,6 +58,14 @@ export class DepthView {
   private readonly held = signal<Held | null>(null);
   protected readonly cursor = computed(() => cursorOf(this.held() ?? this.over(), this.plan(), this.held() !== null));
 
+  /** In the plan every layer is named beside its line; in the section only the selected one, above the drawing. */
+  protected labelOf(line: DrawnLine): Point2 | null {
+    if (this.plan()) return line.label;
+    const { top, left } = this.frame();
+    if (!line.selected) return null;
+    return { x: Math.max(line.to.x - line.labelWidth + 8, this.elevation() ? 0 : left + 4), y: this.elevation() ? top - 8 : top + 14 };
+  }
+
   protected breakMark(at: Point2): string {
     const across = this.plan();
     const steps = [-6, -2, 2, 6].map((along, i) => ({ along, out: [0, -2.5, 2.5, 0][i] }));
@@ -72,9 +80,15 @@ export class DepthView {
     const held = this.pickAt(event);
     if (!held || event.button !== 0) return;
     event.stopPropagation();
-    if (held.kind === 'layer') this.store.select(held.id);
+    if (held.kind === 'layer') this.takeUp(held.id);
     if (this.store.readOnly() && held.kind !== 'eye') return;
     this.hold(held, event);
+  }
+
+  /** The layer pressed has the focus, and not the one whose wide reach happens to lie uppermost. */
+  private takeUp(id: string): void {
+    this.store.select(id);
+    this.svg().nativeElement.querySelector<SVGElement>(`[data-layer="${id}"]`)?.focus({ preventScroll: true });
   }
 
   private hold(held: Held, event: PointerEvent): void {
@@ -107,6 +121,10 @@ export class DepthView {
         return gesture.edit(setDepth(held.id, free ? toMillimetre(-z) : snapToRound(-z, frame.depth)));
       case 'eye':
         return this.viewer.standAt(withAcross(frame.view, this.viewer.eye(), whole.across, clamp(whole.z, eyeLimits(document))));
+      case 'glass': {
+        const size = Math.max(2 * Math.abs(whole.across), 1);
+        return gesture.edit(setGlass({ ...document.glass, ...(this.plan() ? { widthMm: size } : { heightMm: size }) }));
+      }
       case 'home':
         return gesture.edit(setHomeEye(withAcross(frame.view, document.homeEye, whole.across, whole.z)));
       case 'zone': {
@@ -118,7 +136,7 @@ export class DepthView {
 
   /** How far from the thing's own place the pointer took hold of it, so that nothing jumps. */
   private gripOf(held: Held, at: Point2): Point2 {
-    if (held.kind === 'zone') return { x: 0, y: 0 };
+    if (held.kind === 'zone' || held.kind === 'glass') return { x: 0, y: 0 };
     const line = this.lines().find(({ id }) => held.kind === 'layer' && id === held.id);
     const own = held.kind === 'layer' ? line?.from : held.kind === 'eye' ? this.eye().at : this.setting().home;
     return own ? { x: own.x - at.x, y: own.y - at.y } : { x: 0, y: 0 };
@@ -136,8 +154,8 @@ export class DepthView {
   }
 
   private pickAt(event: PointerEvent): Held | null {
-    const { homeEye, zone } = this.store.document();
-    const things = { eye: this.viewer.eye(), homeEye, zone, layers: this.store.layers(), selectedId: this.store.selectedId() };
+    const { homeEye, glass, zone } = this.store.document();
+    const things = { eye: this.viewer.eye(), homeEye, glass, zone, layers: this.store.layers(), selectedId: this.store.selectedId() };
     const held = pick(this.frame(), this.pointAt(event), things, event.pointerType === 'mouse' ? 9 : 22);
     return this.store.readOnly() && held && held.kind !== 'eye' && held.kind !== 'layer' ? null : held;
   }
@@ -151,6 +169,7 @@ export class DepthView {
 function cursorOf(held: Held | null, plan: boolean, dragging: boolean): string {
   if (!held) return '';
   if (held.kind === 'eye' || held.kind === 'home') return dragging ? 'grabbing' : 'grab';
+  if (held.kind === 'glass') return plan ? 'ew-resize' : 'ns-resize';
   const alongDepth = held.kind === 'layer' || held.side === 'nearestMm' || held.side === 'farthestMm';
   return alongDepth === plan ? 'ns-resize' : 'ew-resize';
 }

@@ -1,25 +1,27 @@
-import type { Point2, Point3, ViewingZone } from '@oriel/shared/projection/types';
+import type { Glass, Point2, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import type { DrawnLayer } from '../layers/drawn-layer';
 import { drawnAt } from './placing';
 import type { DepthFrame } from './sheet-layout';
-import { acrossOf, sidesOf, spanAcross } from './across';
+import { acrossOf, glassAcross, sidesOf, spanAcross } from './across';
 
 /** What a pointer takes hold of in plan or section. */
 export type Held =
   | { readonly kind: 'eye' }
   | { readonly kind: 'home' }
+  | { readonly kind: 'glass' }
   | { readonly kind: 'layer'; readonly id: string }
   | { readonly kind: 'zone'; readonly side: keyof ViewingZone };
 
 export interface Holdable {
   readonly eye: Point3;
   readonly homeEye: Point3;
+  readonly glass: Glass;
   readonly zone: ViewingZone;
   readonly layers: readonly DrawnLayer[];
   readonly selectedId: string | null;
 }
 
-/** The thing under the pointer: the eyes first, then the selected layer, then the nearest layer, then a side of the zone. */
+/** The thing under the pointer: the eyes first, then the selected layer, an end of the glass, the nearest layer, a side of the zone. */
 export function pick(frame: DepthFrame, point: Point2, things: Holdable, reachPx: number): Held | null {
   const distanceTo = (eye: Point3) => {
     const at = drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z });
@@ -31,8 +33,15 @@ export function pick(frame: DepthFrame, point: Point2, things: Holdable, reachPx
     .map((drawn) => ({ id: drawn.layer.id, px: distanceToLayer(frame, point, drawn) - (drawn.layer.id === things.selectedId ? 3 : 0) }))
     .filter(({ px }) => px <= reachPx)
     .sort((a, b) => a.px - b.px);
+  const onSelected = layers.some(({ id }) => id === things.selectedId);
+  if (!onSelected && distanceToGlassEnd(frame, point, things.glass) <= reachPx * 0.6) return { kind: 'glass' };
   if (layers.length > 0) return { kind: 'layer', id: layers[0].id };
   return pickZoneSide(frame, point, things.zone, reachPx * 0.6);
+}
+
+function distanceToGlassEnd(frame: DepthFrame, point: Point2, glass: Glass): number {
+  const ends = glassAcross(frame.view, glass).map((across) => drawnAt(frame, { across, z: 0 }));
+  return Math.min(...ends.map(({ x, y }) => Math.hypot(x - point.x, y - point.y)));
 }
 
 function distanceToLayer(frame: DepthFrame, point: Point2, { plane, layer }: DrawnLayer): number {

@@ -1,8 +1,11 @@
 import type { ElementRef} from '@angular/core';
 import { ChangeDetectionStrategy, Component, effect, inject, input, signal, viewChild } from '@angular/core';
+import { MatIconButton } from '@angular/material/button';
+import { Icon } from '../../core/icon/icon';
 import { WalkPast } from '../walk/walk-past';
 import { DepthView } from './depth-view';
 import { Elevation } from './elevation';
+import { HoldPaper } from './hold-paper';
 import { observedSize } from './observed-size';
 import { SheetView } from './sheet-view';
 import { TitleBlock } from './title-block';
@@ -10,11 +13,20 @@ import { TitleBlock } from './title-block';
 /** The sheet on a small screen: the elevation stays, plan, section and title block are swiped beneath it. */
 @Component({
   selector: 'oriel-sheet-panes',
-  imports: [Elevation, DepthView, TitleBlock, WalkPast],
+  imports: [Elevation, DepthView, TitleBlock, WalkPast, HoldPaper, MatIconButton, Icon],
   template: `
-    <div class="above" #above>
+    <div class="above" #above orielHoldPaper>
       @if (view.ready()) {
-        <oriel-elevation [frame]="view.layout().elevation" />
+        @let elevation = view.layout().elevation;
+        <oriel-elevation
+          [frame]="elevation"
+          [style.width.px]="elevation.width"
+          [style.height.px]="elevation.height"
+          [style.transform]="'translate(' + view.offset().x + 'px,' + view.offset().y + 'px)'"
+        />
+      }
+      @if (view.zoom() !== 1) {
+        <button matIconButton class="fit" type="button" (click)="view.fit()" aria-label="Fit the elevation"><oriel-icon name="fit" /></button>
       }
     </div>
     <oriel-walk-past />
@@ -40,7 +52,9 @@ import { TitleBlock } from './title-block';
   styles: `
     :host { display: grid; grid-template-rows: auto auto auto minmax(0, 1fr); height: 100%; background: var(--sheet); }
     .above { position: relative; height: min(34dvh, 62vw); overflow: hidden; }
-    oriel-elevation { position: absolute; inset: 0; }
+    oriel-elevation { position: absolute; left: 0; top: 0; }
+    .fit { position: absolute; right: 4px; top: 4px; background: var(--sheet); }
+    .above { touch-action: none; }
     oriel-walk-past { padding: 0 16px; }
     .tabs { display: flex; border-bottom: 1px solid var(--hairline); padding: 0 8px; }
     .tabs button { min-height: 44px; padding: 0 14px; border: 0; background: none; font: inherit; color: var(--pencil); border-bottom: 2px solid transparent; }

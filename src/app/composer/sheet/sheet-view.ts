@@ -30,7 +30,13 @@ export class SheetView {
     const panes = this.panes();
     return panes ? layOutPanes(panes.elevation, panes.pane, this.extents()) : layOutSheet(this.room(), this.extents());
   });
-  readonly layout = computed(() => (this.zoom() === 1 ? this.base() : enlarge(this.base(), this.zoom())));
+  /** Of panes, only the elevation is enlarged. */
+  readonly layout = computed(() => {
+    const [base, zoom] = [this.base(), this.zoom()];
+    if (zoom === 1) return base;
+    const enlarged = enlarge(base, zoom);
+    return this.panes() ? { ...base, elevation: enlarged.elevation } : enlarged;
+  });
   readonly ready = computed(() => (this.panes()?.elevation ?? this.room()).width > 0);
 
   zoomIn(): void {
@@ -63,6 +69,7 @@ export class SheetView {
   }
 
   private middle(): Point2 {
-    return { x: this.room().width / 2, y: this.room().height / 2 };
+    const { width, height } = this.panes()?.elevation ?? this.room();
+    return { x: width / 2, y: height / 2 };
   }
 }
