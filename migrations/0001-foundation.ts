@@ -44,9 +44,6 @@ export const foundation: Migration = {
       .createTable('sign_up')
       .addColumn('token_hash', 'bytea', (c) => c.primaryKey())
       .addColumn('email', 'text', (c) => c.notNull())
-      .addColumn('name', 'text', (c) => c.notNull())
-      .addColumn('password_hash', 'text', (c) => c.notNull())
-      .addColumn('household_name', 'text', (c) => c.notNull())
       .addColumn('expires_at', 'timestamptz', (c) => c.notNull())
       .execute();
     await db.schema

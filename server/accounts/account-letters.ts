@@ -11,7 +11,7 @@ export const confirmLetter = (to: string, publicUrl: string, token: string): Mai
     to,
     subject: 'Confirm your address',
     paragraphs: ['Someone, we hope you, signed up to Oriel with this address. Confirm it to open your household.'],
-    action: { label: 'Confirm and sign in', href: `${publicUrl}/confirm#${token}` },
+    action: { label: 'Confirm and begin', href: `${publicUrl}/confirm#${token}` },
     note: 'The link works once, within 24 hours. If it was not you, do nothing: no account is made.',
   });
 

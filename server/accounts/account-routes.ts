@@ -19,13 +19,13 @@ export function accountRoutes({ connection: { db }, config, mailer, passwords, s
     mount(
       contract.signUp,
       async ({ body }) => {
-        await signUps.ask(body);
+        await signUps.ask(body.email);
         return {};
       },
       limits.mails,
     );
     mount(contract.confirmSignUp, async ({ body, request, response }) => {
-      const accountId = await signUps.confirm(body.token);
+      const accountId = await signUps.confirm(body);
       await sessions.begin(request, response, accountId);
       return { account: await readAccount(db, accountId) };
     });

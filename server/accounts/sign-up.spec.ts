@@ -10,7 +10,8 @@ describe('signing up', () => {
   beforeAll(async () => void (app = await createTestApp({ passwords })));
   afterAll(() => app.close());
 
-  const form = (email: string) => ({ name: 'Ada', email, password: testPassword, householdName: 'Lark House' });
+  const form = (email: string) => ({ email });
+  const confirmation = (token: string) => ({ token, name: 'Ada', password: testPassword, householdName: 'Lark House' });
   const newest = async (email: string) => (await app.mailTo(email)).at(-1);
 
   it('opens a household by the mailed link, and is signed in', async () => {
@@ -21,7 +22,7 @@ describe('signing up', () => {
     const mail = await newest('ada@example.org');
     expect(mail?.subject).toBe('Confirm your address');
     expect(mail?.text).toContain(`${app.parts.config.publicUrl}/confirm#`);
-    const answer = await browser.ask('post', '/api/accounts/confirmations', { token: tokenIn(mail) });
+    const answer = await browser.ask('post', '/api/accounts/confirmations', confirmation(tokenIn(mail)));
     expect(answer.status).toBe(200);
     expect(answer.body.account.memberships).toEqual([expect.objectContaining({ householdName: 'Lark House', role: 'owner' })]);
     expect((await browser.ask('get', '/api/me')).body.account.email).toBe('ada@example.org');
@@ -31,8 +32,8 @@ describe('signing up', () => {
   it('security: a confirmation works once', async () => {
     await app.browser().ask('post', '/api/accounts', form('once@example.org'));
     const token = tokenIn(await newest('once@example.org'));
-    expect((await app.browser().ask('post', '/api/accounts/confirmations', { token })).status).toBe(200);
-    const again = await app.browser().ask('post', '/api/accounts/confirmations', { token });
+    expect((await app.browser().ask('post', '/api/accounts/confirmations', confirmation(token))).status).toBe(200);
+    const again = await app.browser().ask('post', '/api/accounts/confirmations', confirmation(token));
     expect(again.status).toBe(410);
     expect(again.body.code).toBe('link-spent');
   });
@@ -42,7 +43,7 @@ describe('signing up', () => {
     await app.browser().ask('post', '/api/accounts', form('race@example.org'));
     const tokens = (await app.mailTo('race@example.org')).map(tokenIn);
     expect(tokens).toHaveLength(2);
-    const answers = await Promise.all([...tokens, ...tokens].map((token) => app.browser().ask('post', '/api/accounts/confirmations', { token })));
+    const answers = await Promise.all([...tokens, ...tokens].map((token) => app.browser().ask('post', '/api/accounts/confirmations', confirmation(token))));
     expect(answers.map(({ status }) => status).filter((status) => status === 200)).toHaveLength(1);
     expect(answers.every(({ status }) => [200, 409, 410].includes(status))).toBe(true);
     expect(await app.db.selectFrom('account').select('id').where('email', '=', 'race@example.org').execute()).toHaveLength(1);
@@ -54,7 +55,7 @@ describe('signing up', () => {
     const { expires_at } = await app.db.selectFrom('sign_up').select('expires_at').where('email', '=', 'late@example.org').executeTakeFirstOrThrow();
     expect((expires_at.getTime() - Date.now()) / 3_600_000).toBeCloseTo(24, 1);
     await app.db.updateTable('sign_up').set({ expires_at: new Date(Date.now() - 1000) }).where('email', '=', 'late@example.org').execute();
-    const answer = await app.browser().ask('post', '/api/accounts/confirmations', { token: tokenIn(await newest('late@example.org')) });
+    const answer = await app.browser().ask('post', '/api/accounts/confirmations', confirmation(tokenIn(await newest('late@example.org'))));
     expect(answer.status).toBe(410);
   });
 
@@ -67,7 +68,7 @@ describe('signing up', () => {
     expect(known.status).toBe(unknown.status);
     expect(known.body).toEqual(unknown.body);
     expect(passwords.taken()).toEqual(workForUnknown);
-    expect(workForUnknown).toEqual({ hashes: 1, comparisons: 0 });
+    expect(workForUnknown).toEqual({ hashes: 0, comparisons: 0 });
     const mail = await newest(email);
     expect(mail?.subject).toBe('You have an account already');
     expect(() => tokenIn(mail)).toThrow();
@@ -75,28 +76,26 @@ describe('signing up', () => {
     expect(stored?.name).toBe('Test person');
   });
 
-  it('security: carries no words of a stranger to another person', async () => {
-    await app.browser().ask('post', '/api/accounts', { ...form('other@example.org'), name: 'Win a prize', householdName: 'at evil.example' });
-    const mail = await newest('other@example.org');
-    expect(`${mail?.subject}${mail?.text}${mail?.html}`).not.toMatch(/prize|evil/);
-  });
-
-  it('security: the database keeps neither the link nor the password', async () => {
+  it('security: the database does not keep the link', async () => {
     await app.browser().ask('post', '/api/accounts', form('kept@example.org'));
     const row = await app.db.selectFrom('sign_up').selectAll().where('email', '=', 'kept@example.org').executeTakeFirstOrThrow();
     const kept = JSON.stringify({ ...row, token_hash: row.token_hash.toString('base64url') });
     expect(kept).not.toContain(tokenIn(await newest('kept@example.org')));
-    expect(kept).not.toContain(testPassword);
   });
 
   it('says which field is wrong, in plain words', async () => {
-    const answer = await app.browser().ask('post', '/api/accounts', { name: ' ', email: 'nowhere', password: 'short', householdName: 'x'.repeat(121) });
+    const asked = await app.browser().ask('post', '/api/accounts', { email: 'nowhere' });
+    expect(asked.status).toBe(400);
+    expect(asked.body.fields).toEqual({ email: 'Write an address like name@example.org' });
+    await app.browser().ask('post', '/api/accounts', form('fields@example.org'));
+    const token = tokenIn(await newest('fields@example.org'));
+    const answer = await app.browser().ask('post', '/api/accounts/confirmations', { token, name: ' ', password: 'short', householdName: 'x'.repeat(121) });
     expect(answer.status).toBe(400);
     expect(answer.body.fields).toEqual({
       name: 'Give it a name',
-      email: 'Write an address like name@example.org',
       password: 'Use at least 10 characters',
       householdName: 'Use at most 120 characters',
     });
+    expect((await app.browser().ask('post', '/api/accounts/confirmations', confirmation(token))).status, 'the link is not spent by a form that was not right').toBe(200);
   });
 });

@@ -7,9 +7,9 @@ import { accountByEmail, createAccount } from './account-store';
 import { hashOfToken, hoursFromNow, makeToken } from './mailed-token';
 import type { Passwords } from './passwords';
 
-export interface SignUp {
+export interface NewHousehold {
+  readonly token: string;
   readonly name: string;
-  readonly email: string;
   readonly password: string;
   readonly householdName: string;
 }
@@ -26,22 +26,22 @@ export async function forgetSignUps(db: Database, email: string): Promise<void> 
 
 export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords, publicUrl: string) {
   return {
-    /** Does the same work and says the same whether the address is known or not; the mail tells its holder which. */
-    async ask({ name, email, password, householdName }: SignUp): Promise<void> {
+    /** Says the same whether the address is known or not; the mail tells its holder which. */
+    async ask(email: string): Promise<void> {
       const { token, hash } = makeToken();
-      const passwordHash = await passwords.hash(password);
       const known = await accountByEmail(db, email);
       await db.deleteFrom('sign_up').where('expires_at', '<', new Date()).execute();
       if (known) return mailer.send(alreadyHereLetter(email, publicUrl));
       await db
         .insertInto('sign_up')
-        .values({ token_hash: hash, email, name, password_hash: passwordHash, household_name: householdName, expires_at: hoursFromNow(confirmHours) })
+        .values({ token_hash: hash, email, expires_at: hoursFromNow(confirmHours) })
         .execute();
       mailer.send(confirmLetter(email, publicUrl, token));
     },
 
     /** Makes the account, its household and its ownership at once. @returns the account's id. @throws link-spent, already-confirmed */
-    async confirm(token: string): Promise<string> {
+    async confirm({ token, name, password, householdName }: NewHousehold): Promise<string> {
+      const passwordHash = await passwords.hash(password);
       const { accountId, email } = await db.transaction().execute(async (change) => {
         const asked = await change
           .deleteFrom('sign_up')
@@ -50,10 +50,10 @@ export function createSignUps(db: Database, mailer: Mailer, passwords: Passwords
           .returningAll()
           .executeTakeFirst();
         if (!asked) throw linkSpent('Sign in if you have confirmed before; otherwise sign up again.');
-        const accountId = await createAccount(change, { email: asked.email, name: asked.name, passwordHash: asked.password_hash });
+        const accountId = await createAccount(change, { email: asked.email, name, passwordHash });
         if (!accountId)
           throw new DomainFailure(409, 'already-confirmed', 'This address has an account already.', 'Sign in, or set a new password.');
-        await createHousehold(change, asked.household_name, accountId);
+        await createHousehold(change, householdName, accountId);
         return { accountId, email: asked.email };
       });
       await forgetSignUps(db, email);

@@ -10,14 +10,7 @@ export interface Tables {
   session: { sid: string; sess: JSONColumnType<Record<string, unknown>>; expire: Moment };
   household: { id: Generated<string>; name: string; created_at: MomentByDefault };
   membership: { household_id: string; account_id: string; role: Role; joined_at: MomentByDefault };
-  sign_up: {
-    token_hash: Buffer;
-    email: string;
-    name: string;
-    password_hash: string;
-    household_name: string;
-    expires_at: Moment;
-  };
+  sign_up: { token_hash: Buffer; email: string; expires_at: Moment };
   password_reset: { token_hash: Buffer; account_id: string; expires_at: Moment };
   invitation: {
     id: Generated<string>;

@@ -19,19 +19,22 @@ export const whoAmI = defineRoute({
   reply: z.object({ account: Account.nullable(), mailPage: z.string().nullable() }),
 });
 
-/** Answers alike whether the address is known or not; the rest happens by mail. */
+/**
+ * Answers alike whether the address is known or not; the rest happens by mail. Name and password are only asked of whoever holds the mailed
+ * link, so that nobody can prepare an account with a password of theirs for another's address.
+ */
 export const signUp = defineRoute({
   method: 'POST',
   path: '/api/accounts',
   access: anyone,
-  body: z.object({ name: Name, email: Email, password: Password, householdName: Name }),
+  body: z.object({ email: Email }),
   status: 202,
 });
 export const confirmSignUp = defineRoute({
   method: 'POST',
   path: '/api/accounts/confirmations',
   access: anyone,
-  body: z.object({ token: Token }),
+  body: z.object({ token: Token, name: Name, password: Password, householdName: Name }),
   reply: AccountReply,
 });
 

@@ -1,44 +1,42 @@
-import { ChangeDetectionStrategy, Component, type OnInit, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
+import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
+import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import { confirmSignUp } from '@oriel/shared/contracts/accounts';
+import { passwordMinCharacters } from '@oriel/shared/contracts/fields';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Session } from '../../core/session';
 import { Submission } from '../../core/submission';
+import { TextField } from '../../core/text-field';
+import { accordingTo } from '../../core/zod-validator';
 import { mailedToken } from '../mailed-token';
 import { Threshold } from '../threshold/threshold';
 
+/** What the mailed link of a sign-up opens: the household and its first owner are named here. */
 @Component({
   selector: 'oriel-confirm',
-  imports: [RouterLink, FailureNotice, Threshold],
-  template: `
-    <oriel-threshold>
-      @if (submission.failure(); as failure) {
-        <h1>This link did not work</h1>
-        <oriel-failure-notice [failure]="failure" [retryable]="failure.offline" (retry)="confirm()" />
-        <p class="links"><a routerLink="/sign-in">Sign in</a> <a routerLink="/sign-up">Make a household</a></p>
-      } @else {
-        <h1>Opening your household…</h1>
-      }
-    </oriel-threshold>
-  `,
+  imports: [ReactiveFormsModule, RouterLink, MatButton, TextField, FailureNotice, Threshold],
+  templateUrl: './confirm.html',
   styleUrl: '../account-form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class Confirm implements OnInit {
+export class Confirm {
   private readonly api = inject(Api);
   private readonly session = inject(Session);
   private readonly router = inject(Router);
   private readonly token = mailedToken();
-  protected readonly submission = new Submission();
-
-  ngOnInit(): void {
-    void this.confirm();
-  }
+  protected readonly passwordHint = `At least ${passwordMinCharacters} characters`;
+  protected readonly form = inject(NonNullableFormBuilder).group({
+    name: ['', accordingTo(confirmSignUp.body.shape.name)],
+    householdName: ['', accordingTo(confirmSignUp.body.shape.householdName)],
+    password: ['', accordingTo(confirmSignUp.body.shape.password)],
+  });
+  protected readonly submission = new Submission(this.form);
 
   protected confirm(): Promise<void> {
     return this.submission.run(async () => {
-      const { account } = await this.api.call(confirmSignUp, { body: { token: this.token } });
+      const { account } = await this.api.call(confirmSignUp, { body: { token: this.token, ...this.form.getRawValue() } });
       this.session.enter(account);
       await this.router.navigateByUrl('/photos');
     });

@@ -3,7 +3,6 @@ import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { signUp } from '@oriel/shared/contracts/accounts';
-import { passwordMinCharacters } from '@oriel/shared/contracts/fields';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
@@ -21,12 +20,8 @@ import { Threshold } from '../threshold/threshold';
 })
 export class SignUp {
   private readonly api = inject(Api);
-  protected readonly passwordHint = `At least ${passwordMinCharacters} characters`;
   protected readonly form = inject(NonNullableFormBuilder).group({
-    name: ['', accordingTo(signUp.body.shape.name)],
-    householdName: ['', accordingTo(signUp.body.shape.householdName)],
     email: ['', accordingTo(signUp.body.shape.email)],
-    password: ['', accordingTo(signUp.body.shape.password)],
   });
   protected readonly submission = new Submission(this.form);
   protected readonly sentTo = signal<string | null>(null);
