@@ -2,6 +2,7 @@ import { provideZonelessChangeDetection } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { layerIds, someScene } from '../commands/testing';
 import { SceneStore } from '../scene-store';
+import { Viewer } from '../walk/viewer';
 import { Ledger } from './ledger';
 import { RoomFigures } from './room-figures';
 
@@ -23,7 +24,7 @@ describe('the ledger', () => {
   };
 
   beforeEach(async () => {
-    TestBed.configureTestingModule({ imports: [Ledger], providers: [provideZonelessChangeDetection(), SceneStore, RoomFigures] });
+    TestBed.configureTestingModule({ imports: [Ledger], providers: [provideZonelessChangeDetection(), SceneStore, RoomFigures, Viewer] });
     store = TestBed.inject(SceneStore);
     store.open(someScene);
     fixture = TestBed.createComponent(Ledger);

@@ -6,6 +6,7 @@ import { Icon } from '../../core/icon/icon';
 import { eyeLimits } from '../commands/limits';
 import { renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
 import { SceneStore } from '../scene-store';
+import { Viewer } from '../walk/viewer';
 import { FigureField } from './figure-field';
 import { GlassDialog } from './glass-dialog';
 import { RoomFigures } from './room-figures';
@@ -30,6 +31,7 @@ const ZONE_LABELS: readonly { readonly side: keyof ViewingZone; readonly label: 
 export class RoomForm {
   protected readonly store = inject(SceneStore);
   protected readonly room = inject(RoomFigures);
+  protected readonly viewer = inject(Viewer);
   private readonly dialog = inject(MatDialog);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
   protected readonly zoneLabels = ZONE_LABELS;
@@ -42,6 +44,11 @@ export class RoomForm {
       setTimeout(() => this.host.querySelector<HTMLInputElement>(`[data-part="${part}"] input`)?.focus());
       this.room.asked.set(null);
     });
+  }
+
+  /** Looks from another place; the scene itself stays as it is. */
+  protected look(eye: Partial<Point3>): void {
+    this.viewer.standAt({ ...this.viewer.eye(), ...eye });
   }
 
   protected rename(name: string): void {

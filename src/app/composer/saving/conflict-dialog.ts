@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle } from '@angular/material/dialog';
+import { Session } from '../../core/session';
 import { sayMoment } from '../words';
 import type { MovedOn } from './autosave';
 
@@ -12,24 +13,24 @@ export type ConflictChoice = 'theirs' | 'copy' | 'over';
   selector: 'oriel-conflict-dialog',
   imports: [MatButton, MatDialogTitle, MatDialogContent, MatDialogActions, MatDialogClose],
   template: `
-    <h2 mat-dialog-title>{{ theirs.savedBy }} saved this scene meanwhile</h2>
+    <h2 mat-dialog-title>{{ mine ? 'You saved this scene meanwhile, on another page' : theirs.savedBy + ' saved this scene meanwhile' }}</h2>
     <mat-dialog-content>
       <p>
-        Revision {{ theirs.revision }} was saved by {{ theirs.savedBy }} {{ when }}, after the one you drew on. Your changes are
+        Revision {{ theirs.revision }} was saved by {{ mine ? 'you' : theirs.savedBy }} {{ when }}, after the one you drew on. Your changes are
         still on this sheet and kept in this browser. What should become of them?
       </p>
       <ul>
         <li>
-          <button matButton="filled" mat-dialog-close="copy">Keep mine as a copy</button>
-          <span>Both stay: theirs here, yours as a scene of its own, which opens now.</span>
+          <button matButton="filled" mat-dialog-close="copy">{{ mine ? 'Keep this as a copy' : 'Keep mine as a copy' }}</button>
+          <span>Both stay: {{ mine ? 'that one' : 'theirs' }} here, {{ mine ? 'this' : 'yours' }} as a scene of its own, which opens now.</span>
         </li>
         <li>
-          <button matButton="outlined" mat-dialog-close="theirs">Take theirs</button>
-          <span>This sheet shows revision {{ theirs.revision }}. One undo brings yours back.</span>
+          <button matButton="outlined" mat-dialog-close="theirs">{{ mine ? 'Take the saved one' : 'Take theirs' }}</button>
+          <span>This sheet shows revision {{ theirs.revision }}. One undo brings this one back.</span>
         </li>
         <li>
-          <button matButton="outlined" mat-dialog-close="over">Save mine over theirs</button>
-          <span>The scene becomes yours; what {{ theirs.savedBy }} changed in it is replaced.</span>
+          <button matButton="outlined" mat-dialog-close="over">{{ mine ? 'Save this over it' : 'Save mine over theirs' }}</button>
+          <span>The scene becomes this one; what {{ mine ? 'you' : theirs.savedBy }} changed in revision {{ theirs.revision }} is replaced.</span>
         </li>
       </ul>
     </mat-dialog-content>
@@ -47,5 +48,7 @@ export type ConflictChoice = 'theirs' | 'copy' | 'over';
 })
 export class ConflictDialog {
   protected readonly theirs = inject<MovedOn>(MAT_DIALOG_DATA);
+  /** Whether it was this person too, on another page or another computer. */
+  protected readonly mine = inject(Session).account()?.name === this.theirs.savedBy;
   protected readonly when = sayMoment(new Date(this.theirs.savedAt));
 }

@@ -6,12 +6,14 @@ import { SheetView } from './sheet-view';
 const WHEEL = 0.0018;
 /** A pinch on a touchpad comes as a wheel with Ctrl, in smaller steps. */
 const TOUCHPAD_PINCH = 4;
+const DOUBLE_PRESS = 1.6;
 
-/** Holds the paper of a sheet: a wheel or two fingers enlarge it, dragging where nothing is drawn moves it. */
+/** Holds the paper of a sheet: a wheel, two fingers or a double press enlarge it, dragging where nothing is drawn moves it. */
 @Directive({
   selector: '[orielHoldPaper]',
   host: {
     '(wheel)': 'wheel($event)',
+    '(dblclick)': 'zoomHere($event)',
     '(pointerdown)': 'press($event)',
     '(pointermove)': 'move($event)',
     '(pointerup)': 'release($event)',
@@ -37,6 +39,12 @@ export class HoldPaper {
     this.element.addEventListener('pointerdown', (event) => this.touch(event), { capture: true });
   }
 
+  /** A way to any place of the sheet that needs no dragging. */
+  protected zoomHere(event: MouseEvent): void {
+    if (isControl(event.target)) return;
+    this.view.zoomAbout(this.within(event), event.shiftKey ? 1 / DOUBLE_PRESS : DOUBLE_PRESS);
+  }
+
   private touch(event: PointerEvent): void {
     if (event.pointerType !== 'touch') return;
     const [first] = this.fingers.keys();
@@ -48,7 +56,7 @@ export class HoldPaper {
   }
 
   protected press(event: PointerEvent): void {
-    if (event.target instanceof Element && event.target.closest('button, input, a, label')) return;
+    if (isControl(event.target)) return;
     this.panning = { id: event.pointerId, at: this.within(event) };
     if (event.pointerType !== 'touch') this.element.setPointerCapture(event.pointerId);
   }
@@ -84,4 +92,5 @@ export class HoldPaper {
   }
 }
 
+const isControl = (target: EventTarget | null) => target instanceof Element && target.closest('button, input, a, label') !== null;
 const distance = (a: Point2, b: Point2) => Math.hypot(a.x - b.x, a.y - b.y);

@@ -13,13 +13,13 @@ const SMALL: Edge = 320;
     @if (source(); as src) {
       <img [src]="src" alt="" draggable="false" />
     } @else if (missing()) {
-      <span></span>
+      <span>The picture has not come. Trying again.</span>
     }
   `,
   styles: `
     :host { display: block; }
     img { display: block; width: 100%; height: 100%; }
-    span { display: block; height: 100%; border: 6px dashed var(--not-clear); opacity: 0.5; }
+    span { display: grid; place-items: center; height: 100%; border: 4px dashed var(--not-clear); background: var(--sheet); color: var(--not-clear); font-size: 26px; }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

@@ -15,6 +15,7 @@ import { Viewer } from './viewer';
         matIconButton
         type="button"
         [attr.aria-label]="viewer.playing() ? 'Pause the walk' : 'Go on walking'"
+        matTooltipTouchGestures="off"
         [matTooltip]="viewer.playing() ? 'Pause the walk' : 'Go on walking'"
         (click)="viewer.playing() ? viewer.pause() : viewer.play()"
       >
@@ -41,7 +42,8 @@ import { Viewer } from './viewer';
     input { flex: 0 1 220px; min-width: 60px; height: 36px; margin: 0; appearance: none; background: linear-gradient(var(--line), var(--line)) center / 100% 1px no-repeat; cursor: pointer; }
     input::-webkit-slider-thumb { appearance: none; width: 16px; height: 16px; border-radius: 50%; background: var(--sheet); border: 2px solid var(--brass-line); }
     input::-moz-range-thumb { width: 12px; height: 12px; border-radius: 50%; background: var(--sheet); border: 2px solid var(--brass-line); }
-    .home { white-space: nowrap; }
+    .home { flex: none; white-space: nowrap; }
+    @media (max-width: 760px) { input { flex-basis: 100px; flex-grow: 1; } }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
