@@ -13,7 +13,7 @@ export interface Asker {
 }
 
 const Uuid = z.uuid();
-const tableOf = { photo: 'photo', scene: 'scene', image: 'layer_image' } as const;
+const tableOf = { photo: 'photo', scene: 'scene', image: 'layer_image', wall: 'wall', run: 'run' } as const;
 
 async function owningHousehold(db: Database, of: Owned, id: string): Promise<string | null> {
   if (of === 'household') return id;

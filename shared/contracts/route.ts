@@ -2,19 +2,22 @@ import * as z from 'zod';
 import type { Role } from './role';
 
 /** The things an address can name; each belongs to one household, which decides the asker's role. */
-export type Owned = 'household' | 'photo' | 'scene' | 'image';
+export type Owned = 'household' | 'photo' | 'scene' | 'image' | 'wall' | 'run';
 
 /**
  * Who may use a route: anyone; whoever is signed in; or members of the household that owns the thing named in the address
- * (`householdId`, `photoId`, `sceneId`, `imageId`), in one of the roles. To anyone else the thing does not exist (404).
+ * (`householdId`, `photoId`, `sceneId` and so on), in one of the roles, to anyone else the thing does not exist (404); or a paired screen,
+ * which by its own credential reaches its own wall and nothing else.
  */
 export type Access =
   | { readonly kind: 'anyone' }
   | { readonly kind: 'signed-in' }
-  | { readonly kind: 'member'; readonly of: Owned; readonly roles: readonly Role[] };
+  | { readonly kind: 'member'; readonly of: Owned; readonly roles: readonly Role[] }
+  | { readonly kind: 'wall' };
 
 export const anyone: Access = { kind: 'anyone' };
 export const signedIn: Access = { kind: 'signed-in' };
+export const theWall: Access = { kind: 'wall' };
 export const members = (of: Owned, roles: readonly Role[]): Access => ({ kind: 'member', of, roles });
 
 export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
