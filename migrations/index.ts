@@ -1,13 +1,13 @@
 import type { Migration } from 'kysely';
 import { foundation } from './0001-foundation';
-import { walls } from './0002-walls';
 import { unusedImages } from './0002-unused-images';
 import { milestone } from './0003-milestone';
+import { walls } from './0004-walls';
 
 /** Every migration by name, in order. A static table, for the server is one bundle and has no folder to scan. */
 export const migrations: Record<string, Migration> = {
   '0001-foundation': foundation,
-  '0002-walls': walls,
   '0002-unused-images': unusedImages,
   '0003-milestone': milestone,
+  '0004-walls': walls,
 };

@@ -10,7 +10,6 @@ import { mountOn } from './http/mount';
 import { requireHttps } from './http/require-https';
 import { noStore, securityHeaders } from './http/security-headers';
 import { servePage } from './http/serve-page';
-import { refuseUnstorableText } from './http/storable-text';
 import type { Parts } from './parts';
 
 export interface App {
@@ -21,7 +20,7 @@ export interface App {
 
 /** Composes middleware and features into one Express application; starts nothing. */
 export function createApp(parts: Parts): App {
-  const { config, connection, log, cookie, xsrf, mailPage, draining } = parts;
+  const { config, connection, log, cookie, wallCookie, xsrf, mailPage, draining } = parts;
   const secure = config.publicUrl.startsWith('https:');
   const app = express();
   const mounted: Route[] = [];
@@ -31,10 +30,10 @@ export function createApp(parts: Parts): App {
   if (secure) app.use('/api', requireHttps(config.publicUrl));
   app.use(keepSession(connection.pool, config.sessionSecret, cookie));
   app.use(xsrf.guard);
-  app.use('/api', noStore, express.json({ limit: '1mb' }), refuseUnstorableText);
+  app.use('/api', noStore);
 
   const router = express.Router();
-  const mount = mountOn(router, connection.db, (route) => mounted.push(route));
+  const mount = mountOn({ router, db: connection.db, wallCookie, mounted: (route) => mounted.push(route) });
   for (const feature of features(parts)) feature(mount);
   app.use(router);
   if (mailPage) app.use(mailPage.router);

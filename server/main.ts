@@ -6,6 +6,7 @@ import { createApp } from './app';
 import { readConfig, type Config } from './config';
 import { connect, migrate } from './database/database';
 import { loadDemo } from './demo/load-demo';
+import { listenForChanges } from './events/changes';
 import { stopGracefully } from './http/graceful-stop';
 import { plainError } from './http/log-requests';
 import { ownCertificate } from './http/own-certificate';
@@ -29,10 +30,11 @@ async function start(): Promise<void> {
   await migrate(connection.db);
   const storage = await folderStorage(config.storageDir);
   const jobs = await startJobs(config.databaseUrl, log);
+  const changes = await listenForChanges(config.databaseUrl, log);
   const { mailer, mailPage, close: closePostOffice } = await openPostOffice(config, log);
 
   let draining = false;
-  const parts = assemble({ config, connection, log, storage, jobs, mailer, mailPage, draining: () => draining });
+  const parts = assemble({ config, connection, log, storage, jobs, changes, mailer, mailPage, draining: () => draining });
   await startWork(parts);
   if (config.demo) await loadDemo(parts).catch((error: unknown) => log.error({ err: error }, 'the demo could not be loaded'));
   const server = await serverFor(config, createApp(parts).express);
@@ -44,7 +46,8 @@ async function start(): Promise<void> {
   const stop = () => {
     if (draining) return;
     draining = true;
-    const steps = [() => jobs.stop(), () => parts.layerFiles.settled(), closePostOffice, () => connection.db.destroy()];
+    parts.eventStreams.endAll();
+    const steps = [() => jobs.stop(), () => changes.stop(), () => parts.layerFiles.settled(), closePostOffice, () => connection.db.destroy()];
     void stopGracefully({ server, log, steps, exit: (code) => process.exit(code) });
   };
   process.on('SIGTERM', stop);

@@ -3,8 +3,11 @@ import { createPasswords, type Passwords } from './accounts/passwords';
 import { createSessions, type Sessions } from './accounts/sessions';
 import type { Config } from './config';
 import type { Connection } from './database/database';
+import type { Changes } from './events/changes';
+import { createEventStreams, type EventStreams } from './events/event-streams';
 import { createLimits, usualLimits, type LimitSettings, type Limits } from './http/limits';
 import { sessionCookie, type SessionCookie } from './http/session-cookie';
+import { createWallCookie, type WallCookie } from './http/wall-cookie';
 import { createXsrf, type Xsrf } from './http/xsrf';
 import type { Jobs } from './jobs/jobs';
 import type { MailPage } from './mail/mail-page';
@@ -19,11 +22,14 @@ export interface Parts {
   readonly log: Logger;
   readonly storage: Storage;
   readonly jobs: Jobs;
+  readonly changes: Changes;
   readonly mailer: Mailer;
   /** Where sent mail is shown, on a server without a mail server. */
   readonly mailPage: MailPage | null;
   readonly passwords: Passwords;
   readonly cookie: SessionCookie;
+  readonly wallCookie: WallCookie;
+  readonly eventStreams: EventStreams;
   readonly xsrf: Xsrf;
   readonly sessions: Sessions;
   readonly layerFiles: LayerFiles;
@@ -39,6 +45,7 @@ export interface Given {
   readonly log: Logger;
   readonly storage: Storage;
   readonly jobs: Jobs;
+  readonly changes: Changes;
   readonly mailer: Mailer;
   readonly mailPage: MailPage | null;
   readonly draining: () => boolean;
@@ -49,13 +56,16 @@ export interface Given {
 export function assemble({ passwords = createPasswords(), limits = usualLimits, ...given }: Given): Parts {
   const secure = given.config.publicUrl.startsWith('https:');
   const cookie = sessionCookie(secure);
-  const xsrf = createXsrf(given.config.sessionSecret, secure);
+  const wallCookie = createWallCookie(secure);
+  const xsrf = createXsrf(given.config.sessionSecret, secure, wallCookie);
   return {
     ...given,
     passwords,
     cookie,
+    wallCookie,
     xsrf,
-    sessions: createSessions(given.connection.db, xsrf, cookie),
+    eventStreams: createEventStreams(given.draining),
+    sessions: createSessions(given.connection.db, xsrf, cookie, wallCookie),
     layerFiles: layerFiles(given.connection.db, given.storage),
     limits: createLimits(limits),
   };

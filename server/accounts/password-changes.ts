@@ -3,7 +3,7 @@ import type { Database } from '../database/database';
 import { DomainFailure } from '../http/failure';
 import type { Mailer } from '../mail/mailer';
 import { passwordChangedLetter, resetLetter } from './account-letters';
-import { hashOfToken, hoursFromNow, makeToken } from './mailed-token';
+import { hashOfToken, hoursFromNow, makeToken } from '../http/secret-token';
 import type { Passwords } from './passwords';
 import type { Sessions } from './sessions';
 import { linkSpent } from './sign-up';

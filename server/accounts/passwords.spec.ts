@@ -2,7 +2,7 @@ import { sql } from 'kysely';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Password } from '@oriel/shared/contracts/fields';
 import { createTestDatabase, type TestDatabase } from '../testing/test-database';
-import { hashOfToken, makeToken } from './mailed-token';
+import { hashOfToken, makeToken } from '../http/secret-token';
 import { createPasswords } from './passwords';
 
 describe('passwords and mailed secrets', () => {

@@ -1,6 +1,7 @@
 import type { Request, Response } from 'express';
 import type { Database } from '../database/database';
 import type { SessionCookie } from '../http/session-cookie';
+import type { WallCookie } from '../http/wall-cookie';
 import type { Xsrf } from '../http/xsrf';
 
 /** Signing a browser in and out, and ending what other browsers hold. */
@@ -17,7 +18,7 @@ const done = (act: (callback: (error?: unknown) => void) => void) =>
     act((error) => (error ? reject(error instanceof Error ? error : new Error(String(error))) : resolve())),
   );
 
-export function createSessions(db: Database, xsrf: Xsrf, cookie: SessionCookie): Sessions {
+export function createSessions(db: Database, xsrf: Xsrf, cookie: SessionCookie, wallCookie: WallCookie): Sessions {
   const ofAccount = (accountId: string) => db.deleteFrom('session').where((on) => on(on.ref('sess', '->>').key('accountId'), '=', accountId));
   return {
     async begin(request, response, accountId) {
@@ -30,7 +31,7 @@ export function createSessions(db: Database, xsrf: Xsrf, cookie: SessionCookie):
     async end(request, response) {
       await done((callback) => request.session.destroy(callback));
       response.clearCookie(cookie.name, cookie.attributes);
-      xsrf.renew(response, null);
+      xsrf.renew(response, wallCookie.read(request));
     },
     async endEverywhere(accountId) {
       await ofAccount(accountId).execute();

@@ -4,7 +4,7 @@ import { createHousehold } from '../households/household-store';
 import type { Mailer } from '../mail/mailer';
 import { alreadyHereLetter, confirmLetter } from './account-letters';
 import { accountByEmail, createAccount } from './account-store';
-import { hashOfToken, hoursFromNow, makeToken } from './mailed-token';
+import { hashOfToken, hoursFromNow, makeToken } from '../http/secret-token';
 import type { Passwords } from './passwords';
 
 export interface NewHousehold {

@@ -1,6 +1,8 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { Role } from '@oriel/shared/contracts/role';
 import type { LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { ViewerScale, WallReport, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { CompactSample, RunFacts } from '../runs/compact-run';
 
 type Moment = ColumnType<Date, Date | string, Date | string>;
 type MomentByDefault = ColumnType<Date, Date | string | undefined, Date | string>;
@@ -58,6 +60,41 @@ export interface Tables {
     saved_by: string | null;
     created_at: MomentByDefault;
     binned_at: Moment | null;
+  };
+  wall: {
+    id: Generated<string>;
+    household_id: string;
+    /** But for the scene, which the database itself keeps to what exists. */
+    set_up: JSONColumnType<Omit<WallSetUp, 'sceneId'>>;
+    scene_id: string | null;
+    revision: Generated<number>;
+    saved_at: MomentByDefault;
+    saved_by: string | null;
+    credential_hash: Buffer | null;
+    paired_at: Moment | null;
+    heard_at: Moment | null;
+    report: JSONColumnType<WallReport> | null;
+    created_at: MomentByDefault;
+  };
+  pairing: { code: string; claim_hash: Buffer; wall_id: string | null; expires_at: Moment };
+  wall_report: { wall_id: string; at: Moment; report: JSONColumnType<WallReport>; received_at: MomentByDefault };
+  viewer_scale: {
+    id: Generated<string>;
+    household_id: string;
+    name: string;
+    ipd_mm: JSONColumnType<ViewerScale['ipdMm']>;
+    scale_factor: number;
+    measured_at: MomentByDefault;
+  };
+  run: {
+    id: Generated<string>;
+    household_id: string;
+    wall_id: string | null;
+    name: string;
+    facts: JSONColumnType<RunFacts>;
+    samples: JSONColumnType<readonly CompactSample[]>;
+    recorded_by: string | null;
+    recorded_at: MomentByDefault;
   };
   milestone: { name: string; reached_at: MomentByDefault };
 }

@@ -1,7 +1,7 @@
 import type { Invitation } from '@oriel/shared/contracts/households';
 import type { Role } from '@oriel/shared/contracts/role';
 import { createAccount } from '../accounts/account-store';
-import { hashOfToken, hoursFromNow, makeToken } from '../accounts/mailed-token';
+import { hashOfToken, hoursFromNow, makeToken } from '../http/secret-token';
 import type { Passwords } from '../accounts/passwords';
 import { forgetSignUps, linkSpent } from '../accounts/sign-up';
 import type { Database } from '../database/database';

@@ -17,3 +17,5 @@ export const notFound = () =>
 export const signInFirst = () => new DomainFailure(401, 'signed-out', 'You are not signed in.', 'Sign in and try again.');
 export const notYourRole = () =>
   new DomainFailure(403, 'not-your-role', 'Your role in this household does not include this.', 'Ask an owner of the household to change your role.');
+export const notPaired = () =>
+  new DomainFailure(401, 'not-paired', 'This screen is not paired with a wall.', 'Enter the code it shows at the wall it hangs on.');

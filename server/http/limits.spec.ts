@@ -10,6 +10,7 @@ describe('limits', () => {
     app = await createTestApp({
       environment: { TRUST_PROXY: '1' },
       limits: {
+        ...usualLimits,
         passwordsByAccount: { tries: 3, windowMs },
         passwordsByAddress: { tries: 8, windowMs },
         mailsByAccount: { tries: 2, windowMs },

@@ -12,6 +12,10 @@ export interface LimitSettings {
   readonly passwordsByAddress: Allowance;
   readonly mailsByAccount: Allowance;
   readonly mailsByAddress: Allowance;
+  readonly codesAskedByAddress: Allowance;
+  readonly claimsByAddress: Allowance;
+  readonly codesTriedByAccount: Allowance;
+  readonly codesTriedByAddress: Allowance;
 }
 
 const minuteMs = 60_000;
@@ -20,6 +24,11 @@ export const usualLimits: LimitSettings = {
   passwordsByAddress: { tries: 50, windowMs: 15 * minuteMs },
   mailsByAccount: { tries: 5, windowMs: 60 * minuteMs },
   mailsByAddress: { tries: 60, windowMs: 60 * minuteMs },
+  // A screen asks for a code every ten minutes and claims every two seconds; several may stand behind one address.
+  codesAskedByAddress: { tries: 30, windowMs: 10 * minuteMs },
+  claimsByAddress: { tries: 300, windowMs: minuteMs },
+  codesTriedByAccount: { tries: 10, windowMs: 15 * minuteMs },
+  codesTriedByAddress: { tries: 50, windowMs: 15 * minuteMs },
 };
 
 /**
@@ -32,6 +41,11 @@ export interface Limits {
   readonly passwords: RequestHandler;
   /** For routes that send a mail to an address someone typed. */
   readonly mails: RequestHandler;
+  /** For screens that ask for a pairing code, and those that claim what came of it. */
+  readonly codesAsked: RequestHandler;
+  readonly claims: RequestHandler;
+  /** For members who enter a pairing code; only failures count. */
+  readonly codesTried: RequestHandler;
 }
 
 const typedEmail = (request: Request): string => {
@@ -40,6 +54,7 @@ const typedEmail = (request: Request): string => {
   return typeof email === 'string' ? email.trim().toLowerCase() : '';
 };
 const account = (request: Request) => typedEmail(request) || (request.session.accountId ?? '');
+const signedIn = (request: Request) => request.session.accountId ?? '';
 const address = (request: Request) => ipKeyGenerator(request.ip ?? '');
 
 const tooManyTries = (_request: Request, response: Response, next: NextFunction) => {
@@ -56,5 +71,8 @@ export function createLimits(settings: LimitSettings): Limits {
   return {
     passwords: both(limit(settings.passwordsByAddress, address, true), limit(settings.passwordsByAccount, account, true)),
     mails: both(limit(settings.mailsByAddress, address, false), limit(settings.mailsByAccount, account, false)),
+    codesAsked: limit(settings.codesAskedByAddress, address, false),
+    claims: limit(settings.claimsByAddress, address, false),
+    codesTried: both(limit(settings.codesTriedByAddress, address, true), limit(settings.codesTriedByAccount, signedIn, true)),
   };
 }

@@ -3,7 +3,7 @@ import type { LayerImage } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
 import type { Tables } from '../database/tables';
 
-type ImageRow = Pick<Selectable<Tables['layer_image']>, 'id' | 'sha256' | 'width' | 'height' | 'trim'>;
+export type ImageRow = Pick<Selectable<Tables['layer_image']>, 'id' | 'sha256' | 'width' | 'height' | 'trim'>;
 
 const columns = ['id', 'sha256', 'width', 'height', 'trim'] as const;
 const toImage = ({ id, width, height, trim }: ImageRow): LayerImage => ({ id, width, height, trim });

@@ -41,12 +41,3 @@ export const layersAlike = (index: number) =>
 
 export const inBin = () =>
   new DomainFailure(404, 'in-bin', 'This scene is in the bin.', 'Take it out of the bin to open it.');
-
-export const revisionMoved = (detail: { revision: number; savedBy: string; savedAt: string }) =>
-  new DomainFailure(
-    409,
-    'revision-moved',
-    `${detail.savedBy} saved this scene after you opened it.`,
-    'Nothing was overwritten. Take the newer one, or keep yours as a copy.',
-    { detail },
-  );

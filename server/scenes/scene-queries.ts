@@ -1,6 +1,7 @@
 import type { Selectable } from 'kysely';
 import type { Scene } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
+import { saverOf } from '../database/revisions';
 import type { Tables } from '../database/tables';
 
 export type SceneRow = Selectable<Tables['scene']> & { saver: string | null };
@@ -11,7 +12,7 @@ export const toScene = (row: SceneRow): Scene => ({
   document: row.document,
   revision: row.revision,
   savedAt: row.saved_at.toISOString(),
-  savedBy: row.saver ?? 'a former member',
+  savedBy: saverOf(row),
 });
 
 const scenes = (db: Database) =>

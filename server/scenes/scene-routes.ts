@@ -1,12 +1,11 @@
 import * as routes from '@oriel/shared/contracts/scenes';
+import { notFound } from '../http/failure';
 import type { Feature } from '../http/mount';
 import type { Parts } from '../parts';
 import { receiveFile, withReceivedFile } from '../pictures/receive-file';
-import { edgeKept, layerKey } from '../storage/keys';
-import { sendStored } from '../storage/send-stored';
-import { notFound } from '../http/failure';
 import { findImage } from './image-queries';
 import { sceneService } from './scene-service';
+import { sendLayerImage } from './send-layer-image';
 
 export const sceneRoutes =
   ({ connection: { db }, storage, layerFiles }: Parts): Feature =>
@@ -39,13 +38,7 @@ export const sceneRoutes =
     mount(routes.layerImageFile, async ({ params, request, response }) => {
       const image = await findImage(db, params.imageId);
       if (!image) throw notFound();
-      const edge = edgeKept(image.width, image.height, params.edge);
-      await layerFiles.ensure(image, edge);
-      await sendStored(storage, request, response, {
-        key: layerKey(image.sha256, edge),
-        mime: 'image/webp',
-        tag: `${image.sha256}-layer-${edge}`,
-      });
+      await sendLayerImage({ storage, layerFiles }, request, response, image, params.edge);
       return {};
     });
   };

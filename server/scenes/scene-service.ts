@@ -1,15 +1,17 @@
 import { isDeepStrictEqual } from 'node:util';
 import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
+import { mustWrite } from '../database/revisions';
 import { notFound } from '../http/failure';
 import { findPhotos, type PhotoRow } from '../photos/photo-queries';
 import { titleFrom, titleOfCopy } from '../pictures/file-name';
 import type { ReceivedFile } from '../pictures/receive-file';
 import type { Storage } from '../storage/storage';
+import { announceWallsShowing } from '../walls/wall-changes';
 import type { LayerFiles } from './layer-files';
 import { layerImages, type NamedImage, type PhotoOfLayer } from './layer-images';
 import { withOwnImages } from './own-images';
-import { inBin, photosNotHere, revisionMoved } from './refusals';
+import { inBin, photosNotHere } from './refusals';
 import { findScene, holdScene, scenesOf, toScene, type SceneRow } from './scene-queries';
 import { startingDocument } from './starting-document';
 
@@ -56,14 +58,16 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
     return ids.map((id) => found.get(id)!);
   }
 
-  async function setBinned(id: string, binned: boolean): Promise<void> {
-    await db
-      .updateTable('scene')
-      .set({ binned_at: binned ? new Date() : null })
-      .where('id', '=', id)
-      .where('binned_at', binned ? 'is' : 'is not', null)
-      .execute();
-  }
+  const setBinned = (id: string, binned: boolean): Promise<void> =>
+    db.transaction().execute(async (transaction) => {
+      await transaction
+        .updateTable('scene')
+        .set({ binned_at: binned ? new Date() : null })
+        .where('id', '=', id)
+        .where('binned_at', binned ? 'is' : 'is not', null)
+        .execute();
+      await announceWallsShowing(transaction, id);
+    });
 
   return {
     list: async (householdId: string): Promise<Scene[]> => (await scenesOf(db, householdId)).map(toScene),
@@ -94,13 +98,8 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
         const held = await holdScene(transaction, id);
         if (!held) throw notFound();
         if (held.binned_at) throw inBin();
-        const sentAgain =
-          held.revision === revision + 1 && held.saved_by === accountId && isDeepStrictEqual(held.document, document);
-        if (sentAgain) return;
-        if (held.revision !== revision) {
-          const { savedBy, savedAt } = toScene(held);
-          throw revisionMoved({ revision: held.revision, savedBy, savedAt });
-        }
+        const isSame = isDeepStrictEqual(held.document, document);
+        if (!mustWrite('scene', held, { revision, accountId, isSame })) return;
         await transaction
           .updateTable('scene')
           .set({
@@ -111,6 +110,7 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
           })
           .where('id', '=', id)
           .execute();
+        await announceWallsShowing(transaction, id);
       });
       return toScene(await open(id));
     },

@@ -4,17 +4,21 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { everyRole, type Role } from '@oriel/shared/contracts/role';
 import type { Route } from '@oriel/shared/contracts/route';
 import { allRoutes } from '@oriel/shared/contracts/routes';
+import { wallEvents } from '@oriel/shared/contracts/walls';
+import { newWall } from '@oriel/shared/contracts/new-wall';
 import { originalKey } from '../storage/keys';
+import { pairedScreen } from '../walls/testing/paired-screen';
+import { wallService } from '../walls/wall-service';
 import type { Browser } from './browser';
 import { createTestApp, type TestApp } from './test-app';
 
 /*
  * Who may use which route, as a full table: every route of the contract, asked by a member in each role, by a member of another household,
- * by someone in none, and by a stranger. What to expect follows from the route's access rule alone. Each request meets a household of its
+ * by someone in none, by a stranger, and by the paired screen of a wall there. What to expect follows from the route's access rule alone. Each request meets a household of its
  * own, so that no answer depends on the one before.
  */
-type Who = Role | 'owner elsewhere' | 'in no household' | 'stranger';
-const everyone: readonly Who[] = [...everyRole, 'owner elsewhere', 'in no household', 'stranger'];
+type Who = Role | 'owner elsewhere' | 'in no household' | 'stranger' | 'paired screen';
+const everyone: readonly Who[] = [...everyRole, 'owner elsewhere', 'in no household', 'stranger', 'paired screen'];
 
 interface Denial {
   readonly status: number;
@@ -22,15 +26,19 @@ interface Denial {
 }
 const signedOut: Denial = { status: 401, code: 'signed-out' };
 const hidden: Denial = { status: 404, code: 'not-found' };
+const notPaired: Denial = { status: 401, code: 'not-paired' };
 const roleFallsShort: Denial = { status: 403, code: 'not-your-role' };
 
 function expected({ access }: Route, who: Who): Denial | 'admitted' {
   if (access.kind === 'anyone') return 'admitted';
-  if (who === 'stranger') return signedOut;
+  if (access.kind === 'wall') return who === 'paired screen' ? 'admitted' : notPaired;
+  if (who === 'stranger' || who === 'paired screen') return signedOut;
   if (access.kind === 'signed-in') return 'admitted';
   if (who === 'owner elsewhere' || who === 'in no household') return hidden;
   return access.roles.includes(who) ? 'admitted' : roleFallsShort;
 }
+
+const facts = { machine: 'A machine', tuning: newWall('A wall').tuning, durationMs: 0, sampleCount: 0, frameIntervalP50Ms: 17, frameIntervalP95Ms: 17 };
 
 const name = (route: Route) => `${route.method} ${route.path}`;
 const method = (route: Route) => route.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
@@ -50,7 +58,7 @@ describe('security: the role table', () => {
   });
 
   /** A household with one of everything that an address can name. */
-  async function furnish(householdId: string): Promise<Record<string, string>> {
+  async function furnish({ id: householdId, ownerId: accountId }: { id: string; ownerId: string }): Promise<Record<string, string>> {
     const sha256 = randomBytes(32).toString('hex');
     await app.parts.storage.put(originalKey(sha256), picture);
     const photo = await app.db
@@ -75,25 +83,45 @@ describe('security: the role table', () => {
       .values({ household_id: householdId, document: JSON.stringify(document) })
       .returning('id')
       .executeTakeFirstOrThrow();
-    return { householdId, photoId: photo.id, imageId: image.id, sceneId: scene.id, accountId: randomUUID(), invitationId: randomUUID(), edge: '320' };
+    const wall = await wallService(app.db).create('A wall', { householdId, accountId });
+    const run = await app.db
+      .insertInto('run')
+      .values({ household_id: householdId, name: 'A run', facts: JSON.stringify(facts), samples: '[]' })
+      .returning('id')
+      .executeTakeFirstOrThrow();
+    const named = { householdId, photoId: photo.id, imageId: image.id, sceneId: scene.id, wallId: wall.id, runId: run.id, edge: '320' };
+    return { ...named, accountId: randomUUID(), invitationId: randomUUID(), scaleId: randomUUID() };
   }
 
-  async function enter(who: Who, householdId: string): Promise<Browser> {
+  async function enter(who: Who, { householdId, wallId }: Record<string, string>): Promise<Browser> {
     if (who === 'stranger') return app.browser();
+    if (who === 'paired screen') return pairedScreen(app, wallId);
     if (who === 'owner elsewhere') return (await app.signedIn('owner')).browser;
     if (who === 'in no household') return (await app.signedIn(null)).browser;
     return (await app.signedIn(who, householdId)).browser;
   }
 
+  /** Lines of events stay open until somebody ends them. */
+  async function endStreams(asking: Promise<unknown>): Promise<void> {
+    let answered = false;
+    void asking.finally(() => (answered = true));
+    while (!answered) {
+      app.parts.eventStreams.endAll();
+      await new Promise((resolve) => setTimeout(resolve, 20));
+    }
+  }
+
   for (const route of allRoutes) {
     it(name(route), async () => {
       for (const who of everyone) {
-        const names = await furnish((await app.household()).id);
-        const browser = await enter(who, names['householdId']);
+        const names = await furnish(await app.household());
+        const browser = await enter(who, names);
         await browser.ask('get', '/api/me');
         const logged = app.log().length;
         const path = route.path.replace(/:(\w+)/g, (_match, param: string) => names[param]);
-        const answer = await browser.ask(method(route), path, route.method === 'GET' ? undefined : {});
+        const asking = browser.ask(method(route), path, route.method === 'GET' ? undefined : {});
+        if (route === wallEvents) await endStreams(asking);
+        const answer = await asking;
         const admitted = app.log().slice(logged).includes('"msg":"admitted"');
 
         const rule = expected(route, who);
@@ -107,7 +135,7 @@ describe('security: the role table', () => {
 
   it('hides what does not exist and what belongs to others in the same words', async () => {
     const { browser } = await app.signedIn('owner');
-    const names = await furnish((await app.household()).id);
+    const names = await furnish(await app.household());
     const [foreign, absent, nonsense] = [names['photoId'], randomUUID(), 'x'].map((id) => browser.ask('get', `/api/photos/${id}`));
     const bodies = (await Promise.all([foreign, absent, nonsense])).map(({ status, body }) => ({ status, ...body, reference: '' }));
     expect(bodies[0].status).toBe(404);

@@ -10,7 +10,8 @@ import { createAccount } from '../accounts/account-store';
 import { createPasswords } from '../accounts/passwords';
 import { createApp } from '../app';
 import { readConfig } from '../config';
-import type { Database } from '../database/database';
+import { connect, type Database } from '../database/database';
+import { listenForChanges } from '../events/changes';
 import { addMember, createHousehold } from '../households/household-store';
 import { usualLimits, type LimitSettings } from '../http/limits';
 import { startJobs } from '../jobs/jobs';
@@ -19,7 +20,7 @@ import { assemble, type Given, type Parts } from '../parts';
 import { folderStorage } from '../storage/folder-storage';
 import { startWork } from '../work';
 import { Browser } from './browser';
-import { createTestDatabase } from './test-database';
+import { createTestDatabase, type TestDatabase } from './test-database';
 
 export const testPassword = 'plaster ink brass';
 
@@ -54,10 +55,20 @@ export interface TestApp {
 const manyTries = { tries: 10_000, windowMs: 60_000 };
 const noLimits = Object.fromEntries(Object.keys(usualLimits).map((name) => [name, manyTries])) as unknown as LimitSettings;
 
+interface Different extends Partial<Given> {
+  readonly environment?: Record<string, string>;
+  /** Another server on the database and the storage folder of that one, which is to be closed after it. */
+  readonly beside?: TestApp;
+}
+
+function sharedDatabase({ parts: { config } }: TestApp): TestDatabase {
+  const connection = connect(config.databaseUrl, () => undefined);
+  return { url: config.databaseUrl, connection, drop: () => connection.db.destroy() };
+}
+
 /** The whole server on a database, a storage folder and a mailbox of its own. Only the password cost and the limits are lower than in earnest. */
-export async function createTestApp(different: Partial<Given> & { environment?: Record<string, string> } = {}): Promise<TestApp> {
-  const { environment, ...given } = different;
-  const database = await createTestDatabase();
+export async function createTestApp({ environment, beside, ...given }: Different = {}): Promise<TestApp> {
+  const database = beside ? sharedDatabase(beside) : await createTestDatabase();
   const { db } = database.connection;
   const folder = await mkdtemp(join(tmpdir(), 'oriel-test-'));
   await mkdir(join(folder, 'web'));
@@ -70,18 +81,20 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
   const config = readConfig({
     DATABASE_URL: database.url,
     SESSION_SECRET: 'a secret for tests, longer than thirty-two characters',
-    STORAGE_DIR: join(folder, 'storage'),
+    STORAGE_DIR: beside?.parts.config.storageDir ?? join(folder, 'storage'),
     WEB_DIR: join(folder, 'web'),
     ASSETS_DIR: 'assets',
     ...environment,
   });
   const jobs = await startJobs(database.url, log);
+  const changes = await listenForChanges(database.url, log);
   const parts = assemble({
     config,
     connection: database.connection,
     log,
     storage: await folderStorage(config.storageDir),
     jobs,
+    changes,
     mailer,
     mailPage: null,
     draining: () => false,
@@ -129,6 +142,8 @@ export async function createTestApp(different: Partial<Given> & { environment?: 
     },
     close: async () => {
       await parts.mailer.settled();
+      parts.eventStreams.endAll();
+      await changes.stop();
       await jobs.stop();
       await parts.layerFiles.settled();
       await database.drop();

@@ -43,6 +43,8 @@ export interface Route<
   readonly body: B;
   readonly reply: R;
   readonly sends: Sends;
+  /** The most a JSON body may hold; a larger one is answered 413. */
+  readonly bodyMaxBytes: number;
   readonly answers: Answers;
   /** HTTP status of a good answer. */
   readonly status: number;
@@ -60,6 +62,7 @@ interface Definition<P, Q, B, R> {
   body?: B;
   reply?: R;
   sends?: Sends;
+  bodyMaxBytes?: number;
   answers?: Answers;
   status?: number;
 }
@@ -78,6 +81,7 @@ export function defineRoute<
     body: empty as B,
     reply: empty as R,
     sends: 'json',
+    bodyMaxBytes: 1_000_000,
     answers: 'json',
     status: 200,
     ...definition,

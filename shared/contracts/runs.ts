@@ -4,7 +4,10 @@ import { everyRole, tuners } from './role';
 import { defineRoute, members } from './route';
 import { TrackerTuning } from './walls';
 
-/** One frame of a run: when it was captured and received, the eye as measured (null where nobody was), and the time each stage took. Never a picture. */
+/**
+ * One frame of a run: when it was captured and received (ms, one clock), the eye as measured before smoothing (mm from the centre of the glass;
+ * null where nobody was), and the time each stage took. Never a picture.
+ */
 export const RunSample = z.object({
   capturedMs: z.number(),
   receivedMs: z.number(),
@@ -35,10 +38,13 @@ export type RunHeader = z.infer<typeof RunHeader>;
 
 /** Ten minutes at thirty a second. */
 export const runMaxSamples = 18_000;
+/** That many samples in full digits, and room. */
+const runMaxBytes = 8_000_000;
 
 const HouseholdParams = z.object({ householdId: Id });
 const RunParams = z.object({ runId: Id });
 
+/** The newest first. */
 export const listRuns = defineRoute({
   method: 'GET',
   path: '/api/households/:householdId/runs',
@@ -46,6 +52,7 @@ export const listRuns = defineRoute({
   params: HouseholdParams,
   reply: z.object({ runs: z.array(RunHeader) }),
 });
+/** 422 `wall-not-here` for a wall of another household. */
 export const keepRun = defineRoute({
   method: 'POST',
   path: '/api/households/:householdId/runs',
@@ -58,8 +65,9 @@ export const keepRun = defineRoute({
     tuning: TrackerTuning,
     frameIntervalP50Ms: z.number().nonnegative(),
     frameIntervalP95Ms: z.number().nonnegative(),
-    samples: z.array(RunSample).min(2, 'Record for longer').max(runMaxSamples),
+    samples: z.array(RunSample).min(2, 'Record for longer').max(runMaxSamples, 'A run holds at most ten minutes'),
   }),
+  bodyMaxBytes: runMaxBytes,
   reply: z.object({ run: RunHeader }),
 });
 export const readRun = defineRoute({

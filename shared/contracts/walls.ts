@@ -9,10 +9,6 @@ const Radians = z.number().min(-Math.PI).max(Math.PI);
 const Positive = z.number().positive('Must be more than 0').max(100_000);
 const Milliseconds = z.number().min(0).max(60_000);
 
-/** A measured value with its standard uncertainty, in the unit of the value (JCGM 100:2008, GUM); null while it is only assumed. */
-export const Measured = z.object({ value: z.number(), uncertainty: z.number().nonnegative().nullable() });
-export type Measured = z.infer<typeof Measured>;
-
 export const WallGlass = z.object({
   widthMm: Positive,
   heightMm: Positive,
@@ -34,12 +30,20 @@ export const WallCamera = z.object({
   uncertainty: z.object({ hfovRad: z.number().nonnegative().nullable(), pitchRad: z.number().nonnegative().nullable(), positionMm: z.number().nonnegative().nullable() }),
 });
 
+export type WallGlass = z.infer<typeof WallGlass>;
+export type WallCamera = z.infer<typeof WallCamera>;
+
 /** Which of several people is followed; the others take over only after `handOverMs`, and by a margin of `handOverShare`. */
 export const ViewerChoice = z.object({
   rule: z.enum(['nearest', 'most-central', 'longest']),
   handOverMs: Milliseconds,
   handOverShare: z.number().min(0).max(1),
 });
+export type ViewerChoice = z.infer<typeof ViewerChoice>;
+
+/** Distance between the eyes and its standard uncertainty (JCGM 100:2008, GUM), mm. */
+const ViewerIpd = z.object({ value: z.number().min(35).max(90), uncertainty: z.number().nonnegative() });
+const ViewerFactor = z.number().min(0.5).max(2);
 
 /** What a tuner may turn: shared/smoothing's FollowerSettings as far as they are tuned, the viewer's own scale, and the choice of viewer. */
 export const TrackerTuning = z.object({
@@ -55,8 +59,9 @@ export const TrackerTuning = z.object({
   returnMs: Milliseconds,
   greatestMmPerS: z.number().positive().max(20_000),
   choice: ViewerChoice,
-  ipdMm: z.object({ value: z.number().min(35).max(90), uncertainty: z.number().nonnegative() }),
-  scaleFactor: z.number().min(0.5).max(2),
+  ipdMm: ViewerIpd,
+  /** k of shared/viewer. */
+  scaleFactor: ViewerFactor,
 });
 export type TrackerTuning = z.infer<typeof TrackerTuning>;
 
@@ -66,6 +71,7 @@ export const WallSetUp = z.object({
   camera: WallCamera,
   zone: ZoneSchema,
   tuning: TrackerTuning,
+  /** A scene of the same household; null while nothing is chosen. */
   sceneId: Id.nullable(),
 });
 export type WallSetUp = z.infer<typeof WallSetUp>;
@@ -91,15 +97,21 @@ export const Wall = z.object({
   householdId: Id,
   setUp: WallSetUp,
   revision: z.number().int(),
+  savedAt: Moment,
+  savedBy: z.string(),
+  /** When its screen fetched its credential; null while it has none. */
   pairedAt: Moment.nullable(),
-  /** When it last reported or asked; null before it ever did. */
+  /** When that screen last reported or asked; null before it ever did. */
   heardAt: Moment.nullable(),
+  /** Its newest report. */
   report: WallReport.nullable(),
 });
 export type Wall = z.infer<typeof Wall>;
 
 /** A wall that has not been heard for so long counts as silent. */
 export const silentAfterMs = 90_000;
+/** How long a wall's reports are kept, days. */
+export const reportsKeptDays = 7;
 
 const HouseholdParams = z.object({ householdId: Id });
 const WallParams = z.object({ wallId: Id });
@@ -112,6 +124,7 @@ export const listWalls = defineRoute({
   params: HouseholdParams,
   reply: z.object({ walls: z.array(Wall) }),
 });
+/** Begins with the usual set-up of shared/contracts/new-wall.ts. */
 export const createWall = defineRoute({
   method: 'POST',
   path: '/api/households/:householdId/walls',
@@ -127,7 +140,10 @@ export const readWall = defineRoute({
   params: WallParams,
   reply: WallReply,
 });
-/** Saves over `revision`, which must be the newest: otherwise 409 `revision-moved`. The screen hears of it within a second. */
+/**
+ * Saves over `revision`, which must be the newest: otherwise 409 `revision-moved` with `detail` {revision, savedBy, savedAt}, and nothing is
+ * written. 422 `scene-not-here` for a scene that is binned or not of this household. The screen hears of it within a second.
+ */
 export const saveWall = defineRoute({
   method: 'PUT',
   path: '/api/walls/:wallId',
@@ -137,6 +153,7 @@ export const saveWall = defineRoute({
   reply: WallReply,
 });
 export const removeWall = defineRoute({ method: 'DELETE', path: '/api/walls/:wallId', access: members('wall', tuners), params: WallParams });
+/** The oldest first: at most one for each 720th of the time asked for, and besides every one with which the ladder's step or the last error changed. */
 export const wallReports = defineRoute({
   method: 'GET',
   path: '/api/walls/:wallId/reports',
@@ -146,12 +163,13 @@ export const wallReports = defineRoute({
   reply: z.object({ reports: z.array(WallReport) }),
 });
 
-/** Six figures and capitals that are not mistaken for one another (no 0, O, 1, I). */
+/** What codes are made of: figures and capitals that are not mistaken for one another (no 0, O, 1, I). */
+export const pairingSigns = '23456789ABCDEFGHJKLMNPQRSTUVWXYZ';
+/** Six of them, however they are typed. */
 export const PairingCode = z
   .string()
-  .trim()
-  .toUpperCase()
-  .regex(/^[2-9A-HJ-NP-Z]{6}$/, 'The code has six letters and figures, as the screen shows them');
+  .transform((typed) => typed.replace(/[\s-]/g, '').toUpperCase())
+  .pipe(z.string().regex(new RegExp(`^[${pairingSigns}]{6}$`), 'The code has six letters and figures, as the screen shows them'));
 export const pairingMinutes = 10;
 
 /** A screen asks for a code; it keeps `claim`, a secret, to fetch its credential when someone has entered the code. */
@@ -161,7 +179,7 @@ export const askPairing = defineRoute({
   access: anyone,
   reply: z.object({ code: z.string(), claim: z.string(), expiresAt: Moment }),
 });
-/** `paired` comes with the wall's own cookie; `expired` means ask for another code. */
+/** Asked every two seconds or so. `paired` comes once, with the wall's own cookie; `expired` means ask for another code. */
 export const claimPairing = defineRoute({
   method: 'POST',
   path: '/api/pairings/claims',
@@ -169,6 +187,10 @@ export const claimPairing = defineRoute({
   body: z.object({ claim: z.string().min(40).max(60) }),
   reply: z.object({ state: z.enum(['waiting', 'paired', 'expired']) }),
 });
+/**
+ * 422 `code-unknown` when no screen shows this code. The screen fetches its credential within seconds; `pairedAt` of the wall then says so,
+ * and whatever screen the wall had before is no longer let in.
+ */
 export const pairWall = defineRoute({
   method: 'POST',
   path: '/api/walls/:wallId/pairing',
@@ -177,7 +199,7 @@ export const pairWall = defineRoute({
   body: z.object({ code: PairingCode }),
   reply: WallReply,
 });
-/** Revokes the screen's credential. */
+/** Revokes the screen's credential at once. */
 export const unpairWall = defineRoute({
   method: 'DELETE',
   path: '/api/walls/:wallId/pairing',
@@ -186,15 +208,19 @@ export const unpairWall = defineRoute({
   reply: WallReply,
 });
 
-/** What the screen itself may use, by its own credential and for nothing but its own wall. */
+/** What the screen itself may use, by its own credential and for nothing but its own wall: otherwise 401 `not-paired`. `scene` is null when none is chosen or it is in the bin. */
 export const wallShows = defineRoute({
   method: 'GET',
   path: '/api/wall',
   access: theWall,
   reply: z.object({ wallId: Id, setUp: WallSetUp, revision: z.number().int(), scene: Scene.nullable() }),
 });
-/** Server-sent events: `changed` whenever the wall's set-up or scene did, and a comment every 20 s to keep the line alive. */
+/**
+ * Server-sent events: `changed` at the opening and whenever the wall's set-up or scene may have changed, and a comment every 20 s to keep
+ * the line alive. Ends when the screen is unpaired.
+ */
 export const wallEvents = defineRoute({ method: 'GET', path: '/api/wall/events', access: theWall, answers: 'file' });
+/** As `layerImageFile`, of the scene that the wall shows. */
 export const wallImageFile = defineRoute({
   method: 'GET',
   path: '/api/wall/images/:imageId/:edge',
@@ -202,6 +228,7 @@ export const wallImageFile = defineRoute({
   params: z.object({ imageId: Id, edge: DerivativeEdge }),
   answers: 'file',
 });
+/** A report sent again, because its answer was lost, counts once. */
 export const reportFromWall = defineRoute({
   method: 'POST',
   path: '/api/wall/reports',
@@ -210,7 +237,7 @@ export const reportFromWall = defineRoute({
 });
 
 /** A household member's own scale, set once at a marked distance. */
-export const ViewerScale = z.object({ id: Id, name: Name, ipdMm: Measured, scaleFactor: z.number(), measuredAt: Moment });
+export const ViewerScale = z.object({ id: Id, name: Name, ipdMm: ViewerIpd, scaleFactor: ViewerFactor, measuredAt: Moment });
 export type ViewerScale = z.infer<typeof ViewerScale>;
 const ScalesReply = z.object({ scales: z.array(ViewerScale) });
 export const listViewerScales = defineRoute({
@@ -220,6 +247,7 @@ export const listViewerScales = defineRoute({
   params: HouseholdParams,
   reply: ScalesReply,
 });
+/** Replaces what was kept under that name. */
 export const keepViewerScale = defineRoute({
   method: 'POST',
   path: '/api/households/:householdId/viewer-scales',

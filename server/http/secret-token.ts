@@ -1,9 +1,9 @@
 import { createHash, randomBytes } from 'node:crypto';
 
-/** What the database keeps of a mailed secret: whoever reads the table cannot use its links. */
+/** What the database keeps of a secret that was mailed or given to a screen: whoever reads the table cannot use it. */
 export const hashOfToken = (token: string): Buffer => createHash('sha256').update(token).digest();
 
-/** A secret for a mailed link: 32 random bytes, base64url, beside its hash. */
+/** 32 random bytes, base64url, beside their hash. */
 export function makeToken(): { token: string; hash: Buffer } {
   const token = randomBytes(32).toString('base64url');
   return { token, hash: hashOfToken(token) };

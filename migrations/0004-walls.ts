@@ -11,13 +11,18 @@ export const walls: Migration = {
       .addColumn('id', 'uuid', (c) => c.primaryKey().defaultTo(id))
       .addColumn('household_id', 'uuid', (c) => c.notNull().references('household.id').onDelete('cascade'))
       .addColumn('set_up', 'jsonb', (c) => c.notNull())
+      .addColumn('scene_id', 'uuid', (c) => c.references('scene.id').onDelete('set null'))
       .addColumn('revision', 'integer', (c) => c.notNull().defaultTo(1))
+      .addColumn('saved_at', 'timestamptz', (c) => c.notNull().defaultTo(now))
+      .addColumn('saved_by', 'uuid', (c) => c.references('account.id').onDelete('set null'))
       .addColumn('credential_hash', 'bytea', (c) => c.unique())
       .addColumn('paired_at', 'timestamptz')
       .addColumn('heard_at', 'timestamptz')
+      .addColumn('report', 'jsonb')
       .addColumn('created_at', 'timestamptz', (c) => c.notNull().defaultTo(now))
       .execute();
     await db.schema.createIndex('wall_household').on('wall').column('household_id').execute();
+    await db.schema.createIndex('wall_scene').on('wall').column('scene_id').execute();
 
     await db.schema
       .createTable('pairing')
@@ -26,15 +31,17 @@ export const walls: Migration = {
       .addColumn('wall_id', 'uuid', (c) => c.references('wall.id').onDelete('cascade'))
       .addColumn('expires_at', 'timestamptz', (c) => c.notNull())
       .execute();
+    await db.schema.createIndex('pairing_wall').on('pairing').column('wall_id').execute();
 
     await db.schema
       .createTable('wall_report')
-      .addColumn('id', 'bigint', (c) => c.primaryKey().generatedAlwaysAsIdentity())
       .addColumn('wall_id', 'uuid', (c) => c.notNull().references('wall.id').onDelete('cascade'))
       .addColumn('at', 'timestamptz', (c) => c.notNull())
       .addColumn('report', 'jsonb', (c) => c.notNull())
+      .addColumn('received_at', 'timestamptz', (c) => c.notNull().defaultTo(now))
+      .addPrimaryKeyConstraint('wall_report_key', ['wall_id', 'at'])
       .execute();
-    await sql`create index wall_report_by_time on wall_report (wall_id, at desc)`.execute(db);
+    await db.schema.createIndex('wall_report_received').on('wall_report').column('received_at').execute();
 
     await db.schema
       .createTable('viewer_scale')
@@ -52,11 +59,13 @@ export const walls: Migration = {
       .addColumn('id', 'uuid', (c) => c.primaryKey().defaultTo(id))
       .addColumn('household_id', 'uuid', (c) => c.notNull().references('household.id').onDelete('cascade'))
       .addColumn('wall_id', 'uuid', (c) => c.references('wall.id').onDelete('set null'))
-      .addColumn('header', 'jsonb', (c) => c.notNull())
+      .addColumn('name', 'text', (c) => c.notNull())
+      .addColumn('facts', 'jsonb', (c) => c.notNull())
       .addColumn('samples', 'jsonb', (c) => c.notNull())
       .addColumn('recorded_by', 'uuid', (c) => c.references('account.id').onDelete('set null'))
       .addColumn('recorded_at', 'timestamptz', (c) => c.notNull().defaultTo(now))
       .execute();
     await sql`create index run_by_time on run (household_id, recorded_at desc)`.execute(db);
+    await db.schema.createIndex('run_wall').on('run').column('wall_id').execute();
   },
 };

@@ -1,0 +1,36 @@
+import type { Selectable } from 'kysely';
+import type { Wall, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { Database } from '../database/database';
+import { saverOf } from '../database/revisions';
+import type { Tables } from '../database/tables';
+
+export type WallRow = Selectable<Tables['wall']> & { saver: string | null };
+
+export const setUpOf = ({ set_up, scene_id }: Pick<WallRow, 'set_up' | 'scene_id'>): WallSetUp => ({ ...set_up, sceneId: scene_id });
+
+export const toWall = (row: WallRow): Wall => ({
+  id: row.id,
+  householdId: row.household_id,
+  setUp: setUpOf(row),
+  revision: row.revision,
+  savedAt: row.saved_at.toISOString(),
+  savedBy: saverOf(row),
+  pairedAt: row.paired_at?.toISOString() ?? null,
+  heardAt: row.heard_at?.toISOString() ?? null,
+  report: row.report,
+});
+
+const walls = (db: Database) =>
+  db.selectFrom('wall').leftJoin('account', 'account.id', 'wall.saved_by').selectAll('wall').select('account.name as saver');
+
+export const findWall = (db: Database, id: string): Promise<WallRow | undefined> => walls(db).where('wall.id', '=', id).executeTakeFirst();
+
+/** The wall, which nobody else can change until the transaction ends. */
+export const holdWall = (db: Database, id: string): Promise<WallRow | undefined> =>
+  walls(db).where('wall.id', '=', id).forUpdate('wall').executeTakeFirst();
+
+/** By name. */
+export const wallsOf = async (db: Database, householdId: string): Promise<WallRow[]> => {
+  const rows = await walls(db).where('wall.household_id', '=', householdId).orderBy('wall.created_at').orderBy('wall.id').execute();
+  return rows.sort((a, b) => a.set_up.name.localeCompare(b.set_up.name, 'en-GB', { numeric: true }));
+};

@@ -1,0 +1,84 @@
+import { isDeepStrictEqual } from 'node:util';
+import { newWall } from '@oriel/shared/contracts/new-wall';
+import type { Wall, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { Database } from '../database/database';
+import { mustWrite } from '../database/revisions';
+import { notFound } from '../http/failure';
+import { sceneNotHere } from './refusals';
+import { announceWall } from './wall-changes';
+import { findWall, holdWall, setUpOf, toWall, wallsOf } from './wall-queries';
+
+interface Asker {
+  readonly householdId: string;
+  readonly accountId: string;
+}
+
+const columnsOf = ({ sceneId, ...setUp }: WallSetUp) => ({ set_up: JSON.stringify(setUp), scene_id: sceneId });
+
+/** Holds the scene, so that it is still there when the wall is saved. @throws scene-not-here (422) */
+async function holdSceneOf(transaction: Database, householdId: string, sceneId: string): Promise<void> {
+  const scene = await transaction
+    .selectFrom('scene')
+    .select('id')
+    .where('id', '=', sceneId)
+    .where('household_id', '=', householdId)
+    .where('binned_at', 'is', null)
+    .forKeyShare()
+    .executeTakeFirst();
+  if (!scene) throw sceneNotHere();
+}
+
+export type WallService = ReturnType<typeof wallService>;
+
+export function wallService(db: Database) {
+  async function read(id: string): Promise<Wall> {
+    const row = await findWall(db, id);
+    if (!row) throw notFound();
+    return toWall(row);
+  }
+
+  return {
+    list: async (householdId: string): Promise<Wall[]> => (await wallsOf(db, householdId)).map(toWall),
+
+    read,
+
+    async create(name: string, { householdId, accountId }: Asker): Promise<Wall> {
+      const { id } = await db
+        .insertInto('wall')
+        .values({ household_id: householdId, saved_by: accountId, ...columnsOf(newWall(name)) })
+        .returning('id')
+        .executeTakeFirstOrThrow();
+      return read(id);
+    },
+
+    /**
+     * Saves over the newest revision and no other. A save whose answer was lost, sent again, is answered as it was the first time. A wall
+     * that shows a scene from the bin may go on doing so.
+     * @throws revision-moved (409), scene-not-here (422).
+     */
+    async save(id: string, revision: number, setUp: WallSetUp, { householdId, accountId }: Asker): Promise<Wall> {
+      await db.transaction().execute(async (transaction) => {
+        const held = await holdWall(transaction, id);
+        if (!held) throw notFound();
+        const isSame = isDeepStrictEqual(setUpOf(held), setUp);
+        if (!mustWrite('wall', held, { revision, accountId, isSame })) return;
+        if (setUp.sceneId && setUp.sceneId !== held.scene_id) await holdSceneOf(transaction, householdId, setUp.sceneId);
+        await transaction
+          .updateTable('wall')
+          .set({ ...columnsOf(setUp), revision: revision + 1, saved_at: new Date(), saved_by: accountId })
+          .where('id', '=', id)
+          .execute();
+        await announceWall(transaction, id);
+      });
+      return read(id);
+    },
+
+    /** With it go its screen's credential and its reports; its runs stay. */
+    async remove(id: string): Promise<void> {
+      await db.transaction().execute(async (transaction) => {
+        await transaction.deleteFrom('wall').where('id', '=', id).execute();
+        await announceWall(transaction, id);
+      });
+    },
+  };
+}
