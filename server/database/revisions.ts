@@ -29,5 +29,11 @@ export function mustWrite(
   if (last.revision === asked.revision + 1 && last.saved_by === asked.accountId && asked.isSame) return false;
   const savedBy = saverOf(last);
   const detail = { revision: last.revision, savedBy, savedAt: last.saved_at.toISOString() };
-  throw new DomainFailure(409, 'revision-moved', `${savedBy} saved this ${thing} after you opened it.`, remedies[thing], { detail });
+  throw new DomainFailure(
+    409,
+    'revision-moved',
+    `${savedBy} saved this ${thing} after you opened it.`,
+    remedies[thing],
+    { detail },
+  );
 }

@@ -70,7 +70,11 @@ export async function listenForChanges(databaseUrl: string, log: Logger): Promis
 }
 
 /** One listening connection; `onLost` is called once, unless it was closed. @throws when it cannot be made */
-async function openListener(databaseUrl: string, onTopic: (topic: string) => void, onLost: (error: unknown) => void): Promise<{ close(): Promise<void> }> {
+async function openListener(
+  databaseUrl: string,
+  onTopic: (topic: string) => void,
+  onLost: (error: unknown) => void,
+): Promise<{ close(): Promise<void> }> {
   const client = new pg.Client({
     connectionString: databaseUrl,
     application_name: 'oriel changes',

@@ -27,7 +27,10 @@ export function createEventStreams(draining: () => boolean): EventStreams {
         'X-Accel-Buffering': 'no',
       });
       const write = (text: string) => void (response.writableEnded || response.write(text));
-      const stream: EventStream = { send: (event) => write(`event: ${event}\ndata: {}\n\n`), end: () => void response.end() };
+      const stream: EventStream = {
+        send: (event) => write(`event: ${event}\ndata: {}\n\n`),
+        end: () => void response.end(),
+      };
       const keepAlive = setInterval(() => write(': still here\n\n'), keepAliveMs);
       const close = () => {
         clearInterval(keepAlive);

@@ -33,7 +33,11 @@ async function owningHousehold(db: Database, of: Owned, id: string): Promise<str
 async function admitScreen(db: Database, credential: string | null): Promise<Asker> {
   const wall =
     credential &&
-    (await db.selectFrom('wall').select(['id', 'household_id']).where('credential_hash', '=', hashOfToken(credential)).executeTakeFirst());
+    (await db
+      .selectFrom('wall')
+      .select(['id', 'household_id'])
+      .where('credential_hash', '=', hashOfToken(credential))
+      .executeTakeFirst());
   if (!wall) throw notPaired();
   return { accountId: null, member: null, wall: { id: wall.id, householdId: wall.household_id } };
 }
@@ -42,7 +46,12 @@ async function admitScreen(db: Database, credential: string | null): Promise<Ask
  * The one place where roles are enforced. @throws signed-out (401) for a stranger, not-found (404) for someone outside the household,
  * not-your-role (403) for a member whose role does not reach, not-paired (401) for whoever is not a wall's own screen.
  */
-export async function admit(db: Database, access: Access, { accountId, wallCredential }: Shown, params: Record<string, unknown>): Promise<Asker> {
+export async function admit(
+  db: Database,
+  access: Access,
+  { accountId, wallCredential }: Shown,
+  params: Record<string, unknown>,
+): Promise<Asker> {
   if (access.kind === 'wall') return admitScreen(db, wallCredential);
   if (access.kind === 'anyone') return { accountId, member: null, wall: null };
   if (!accountId) throw signInFirst();

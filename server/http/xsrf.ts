@@ -17,9 +17,19 @@ export interface Xsrf {
 }
 
 const stalePage = () =>
-  new DomainFailure(403, 'stale-page', 'This page has been open since before you signed in or out.', 'Try again; if it keeps failing, reload the page.');
+  new DomainFailure(
+    403,
+    'stale-page',
+    'This page has been open since before you signed in or out.',
+    'Try again; if it keeps failing, reload the page.',
+  );
 const otherSite = () =>
-  new DomainFailure(403, 'other-site', 'This request came from another site.', 'Open Oriel at its own address and do it there.');
+  new DomainFailure(
+    403,
+    'other-site',
+    'This request came from another site.',
+    'Open Oriel at its own address and do it there.',
+  );
 
 /**
  * Signed double-submit cookie (OWASP, *Cross-Site Request Forgery Prevention*): token = nonce.HMAC(secret, holder ! nonce), where the
@@ -29,7 +39,8 @@ const otherSite = () =>
  */
 export function createXsrf(secret: string, secure: boolean, wallCookie: WallCookie): Xsrf {
   const key = createHmac('sha256', secret).update('xsrf').digest();
-  const sign = (nonce: string, holder: string) => createHmac('sha256', key).update(`${holder}!${nonce}`).digest('base64url');
+  const sign = (nonce: string, holder: string) =>
+    createHmac('sha256', key).update(`${holder}!${nonce}`).digest('base64url');
   const valid = (token: string, holder: string) => {
     const [nonce = '', signature = ''] = token.split('.');
     const expected = Buffer.from(sign(nonce, holder));

@@ -9,7 +9,9 @@ export const runRoutes =
     const runs = runService(db);
 
     mount(contract.listRuns, async ({ householdId }) => ({ runs: await runs.list(householdId) }));
-    mount(contract.keepRun, async ({ body, householdId, accountId }) => ({ run: await runs.keep(body, { householdId, accountId }) }));
+    mount(contract.keepRun, async ({ body, householdId, accountId }) => ({
+      run: await runs.keep(body, { householdId, accountId }),
+    }));
     mount(contract.readRun, ({ params }) => runs.read(params.runId));
     mount(contract.renameRun, async ({ params, body }) => ({ run: await runs.rename(params.runId, body.name) }));
     mount(contract.removeRun, async ({ params }) => {

@@ -20,9 +20,15 @@ interface HeaderRow {
 }
 
 const wallNotHere = () =>
-  new DomainFailure(422, 'wall-not-here', 'The wall of this run is not in this household.', 'Keep the run without a wall, or choose another.', {
-    fields: { wallId: 'This wall is not here' },
-  });
+  new DomainFailure(
+    422,
+    'wall-not-here',
+    'The wall of this run is not in this household.',
+    'Keep the run without a wall, or choose another.',
+    {
+      fields: { wallId: 'This wall is not here' },
+    },
+  );
 
 const toHeader = ({ facts, ...row }: HeaderRow): RunHeader => ({
   id: row.id,
@@ -48,14 +54,23 @@ export function runService(db: Database) {
 
   /** @throws wall-not-here (422) */
   async function requireWall(householdId: string, wallId: string): Promise<void> {
-    const wall = await db.selectFrom('wall').select('id').where('id', '=', wallId).where('household_id', '=', householdId).executeTakeFirst();
+    const wall = await db
+      .selectFrom('wall')
+      .select('id')
+      .where('id', '=', wallId)
+      .where('household_id', '=', householdId)
+      .executeTakeFirst();
     if (!wall) throw wallNotHere();
   }
 
   return {
     /** Without their samples, the newest first. */
     async list(householdId: string): Promise<RunHeader[]> {
-      const rows = await headers(db).where('run.household_id', '=', householdId).orderBy('run.recorded_at', 'desc').orderBy('run.id').execute();
+      const rows = await headers(db)
+        .where('run.household_id', '=', householdId)
+        .orderBy('run.recorded_at', 'desc')
+        .orderBy('run.id')
+        .execute();
       return rows.map(toHeader);
     },
 

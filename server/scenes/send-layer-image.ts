@@ -14,5 +14,9 @@ export async function sendLayerImage(
 ): Promise<void> {
   const edge = edgeKept(image.width, image.height, asked);
   await layerFiles.ensure(image, edge);
-  await sendStored(storage, request, response, { key: layerKey(image.sha256, edge), mime: 'image/webp', tag: `${image.sha256}-layer-${edge}` });
+  await sendStored(storage, request, response, {
+    key: layerKey(image.sha256, edge),
+    mime: 'image/webp',
+    tag: `${image.sha256}-layer-${edge}`,
+  });
 }

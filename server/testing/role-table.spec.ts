@@ -38,7 +38,14 @@ function expected({ access }: Route, who: Who): Denial | 'admitted' {
   return access.roles.includes(who) ? 'admitted' : roleFallsShort;
 }
 
-const facts = { machine: 'A machine', tuning: newWall('A wall').tuning, durationMs: 0, sampleCount: 0, frameIntervalP50Ms: 17, frameIntervalP95Ms: 17 };
+const facts = {
+  machine: 'A machine',
+  tuning: newWall('A wall').tuning,
+  durationMs: 0,
+  sampleCount: 0,
+  frameIntervalP50Ms: 17,
+  frameIntervalP95Ms: 17,
+};
 
 const name = (route: Route) => `${route.method} ${route.path}`;
 const method = (route: Route) => route.method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
@@ -48,7 +55,9 @@ describe('security: the role table', () => {
   let picture: Buffer;
   beforeAll(async () => {
     app = await createTestApp();
-    picture = await sharp({ create: { width: 1, height: 1, channels: 3, background: 'white' } }).png().toBuffer();
+    picture = await sharp({ create: { width: 1, height: 1, channels: 3, background: 'white' } })
+      .png()
+      .toBuffer();
   });
   afterAll(() => app.close());
 
@@ -58,17 +67,39 @@ describe('security: the role table', () => {
   });
 
   /** A household with one of everything that an address can name. */
-  async function furnish({ id: householdId, ownerId: accountId }: { id: string; ownerId: string }): Promise<Record<string, string>> {
+  async function furnish({
+    id: householdId,
+    ownerId: accountId,
+  }: {
+    id: string;
+    ownerId: string;
+  }): Promise<Record<string, string>> {
     const sha256 = randomBytes(32).toString('hex');
     await app.parts.storage.put(originalKey(sha256), picture);
     const photo = await app.db
       .insertInto('photo')
-      .values({ household_id: householdId, sha256, name: 'a.png', mime: 'image/png', bytes: 1, width: 1, height: 1, has_alpha: false, taken_at: new Date() })
+      .values({
+        household_id: householdId,
+        sha256,
+        name: 'a.png',
+        mime: 'image/png',
+        bytes: 1,
+        width: 1,
+        height: 1,
+        has_alpha: false,
+        taken_at: new Date(),
+      })
       .returning('id')
       .executeTakeFirstOrThrow();
     const image = await app.db
       .insertInto('layer_image')
-      .values({ household_id: householdId, sha256, width: 1, height: 1, trim: JSON.stringify({ left: 0, top: 0, ofWidth: 1, ofHeight: 1 }) })
+      .values({
+        household_id: householdId,
+        sha256,
+        width: 1,
+        height: 1,
+        trim: JSON.stringify({ left: 0, top: 0, ofWidth: 1, ofHeight: 1 }),
+      })
       .returning('id')
       .executeTakeFirstOrThrow();
     const document = {
@@ -89,7 +120,15 @@ describe('security: the role table', () => {
       .values({ household_id: householdId, name: 'A run', facts: JSON.stringify(facts), samples: '[]' })
       .returning('id')
       .executeTakeFirstOrThrow();
-    const named = { householdId, photoId: photo.id, imageId: image.id, sceneId: scene.id, wallId: wall.id, runId: run.id, edge: '320' };
+    const named = {
+      householdId,
+      photoId: photo.id,
+      imageId: image.id,
+      sceneId: scene.id,
+      wallId: wall.id,
+      runId: run.id,
+      edge: '320',
+    };
     return { ...named, accountId: randomUUID(), invitationId: randomUUID(), scaleId: randomUUID() };
   }
 
@@ -136,8 +175,14 @@ describe('security: the role table', () => {
   it('hides what does not exist and what belongs to others in the same words', async () => {
     const { browser } = await app.signedIn('owner');
     const names = await furnish(await app.household());
-    const [foreign, absent, nonsense] = [names['photoId'], randomUUID(), 'x'].map((id) => browser.ask('get', `/api/photos/${id}`));
-    const bodies = (await Promise.all([foreign, absent, nonsense])).map(({ status, body }) => ({ status, ...body, reference: '' }));
+    const [foreign, absent, nonsense] = [names['photoId'], randomUUID(), 'x'].map((id) =>
+      browser.ask('get', `/api/photos/${id}`),
+    );
+    const bodies = (await Promise.all([foreign, absent, nonsense])).map(({ status, body }) => ({
+      status,
+      ...body,
+      reference: '',
+    }));
     expect(bodies[0].status).toBe(404);
     expect(bodies[1]).toEqual(bodies[0]);
     expect(bodies[2]).toEqual(bodies[0]);

@@ -53,7 +53,9 @@ export interface TestApp {
 }
 
 const manyTries = { tries: 10_000, windowMs: 60_000 };
-const noLimits = Object.fromEntries(Object.keys(usualLimits).map((name) => [name, manyTries])) as unknown as LimitSettings;
+const noLimits = Object.fromEntries(
+  Object.keys(usualLimits).map((name) => [name, manyTries]),
+) as unknown as LimitSettings;
 
 interface Different extends Partial<Given> {
   readonly environment?: Record<string, string>;
@@ -75,7 +77,10 @@ export async function createTestApp({ environment, beside, ...given }: Different
   await writeFile(join(folder, 'web', 'index.html'), '<!doctype html><title>Oriel</title>');
 
   const logged: string[] = [];
-  const log = pino({ level: 'debug' }, new Writable({ write: (chunk, _encoding, done) => (logged.push(String(chunk)), done()) }));
+  const log = pino(
+    { level: 'debug' },
+    new Writable({ write: (chunk, _encoding, done) => (logged.push(String(chunk)), done()) }),
+  );
   const mails: Mail[] = [];
   const mailer: Mailer = createMailer((mail) => Promise.resolve(void mails.push(mail)), log);
   const config = readConfig({

@@ -15,7 +15,8 @@ const tries = 5;
 const inMinutes = (minutes: number) => new Date(Date.now() + minutes * 60_000);
 const makeCode = () => Array.from({ length: codeLength }, () => pairingSigns[randomInt(pairingSigns.length)]).join('');
 
-export type Claimed = { readonly state: 'waiting' | 'expired' } | { readonly state: 'paired'; readonly credential: string };
+export type Claimed =
+  { readonly state: 'waiting' | 'expired' } | { readonly state: 'paired'; readonly credential: string };
 
 export const forgetExpiredPairings = async (db: Database): Promise<void> => {
   await db.deleteFrom('pairing').where('expires_at', '<', new Date()).execute();

@@ -35,8 +35,12 @@ export async function reportsOf(db: Database, wallId: string, hours: number): Pr
     .select([
       'at',
       'report',
-      sql<number>`row_number() over (partition by floor(extract(epoch from at) / ${sliceS}::float8) order by at desc)`.as('nth'),
-      sql<boolean>`(report -> 'ladderStep', report -> 'lastError') is distinct from lag((report -> 'ladderStep', report -> 'lastError')) over (order by at)`.as('turns'),
+      sql<number>`row_number() over (partition by floor(extract(epoch from at) / ${sliceS}::float8) order by at desc)`.as(
+        'nth',
+      ),
+      sql<boolean>`(report -> 'ladderStep', report -> 'lastError') is distinct from lag((report -> 'ladderStep', report -> 'lastError')) over (order by at)`.as(
+        'turns',
+      ),
     ]);
   const rows = await db
     .selectFrom(told.as('told'))
@@ -49,5 +53,8 @@ export async function reportsOf(db: Database, wallId: string, hours: number): Pr
 }
 
 export async function forgetOldReports(db: Database, now = new Date()): Promise<void> {
-  await db.deleteFrom('wall_report').where('received_at', '<', new Date(now.getTime() - reportsKeptDays * 24 * 3_600_000)).execute();
+  await db
+    .deleteFrom('wall_report')
+    .where('received_at', '<', new Date(now.getTime() - reportsKeptDays * 24 * 3_600_000))
+    .execute();
 }

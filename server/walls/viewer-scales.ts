@@ -4,7 +4,13 @@ import type { Database } from '../database/database';
 export function viewerScales(db: Database) {
   /** By name. */
   async function list(householdId: string): Promise<ViewerScale[]> {
-    const rows = await db.selectFrom('viewer_scale').selectAll().where('household_id', '=', householdId).orderBy('name').orderBy('id').execute();
+    const rows = await db
+      .selectFrom('viewer_scale')
+      .selectAll()
+      .where('household_id', '=', householdId)
+      .orderBy('name')
+      .orderBy('id')
+      .execute();
     return rows.map((row) => ({
       id: row.id,
       name: row.name,
@@ -17,7 +23,10 @@ export function viewerScales(db: Database) {
   return {
     list,
 
-    async keep(householdId: string, { name, ipdMm, scaleFactor }: Omit<ViewerScale, 'id' | 'measuredAt'>): Promise<void> {
+    async keep(
+      householdId: string,
+      { name, ipdMm, scaleFactor }: Omit<ViewerScale, 'id' | 'measuredAt'>,
+    ): Promise<void> {
       const measured = { ipd_mm: JSON.stringify(ipdMm), scale_factor: scaleFactor, measured_at: new Date() };
       await db
         .insertInto('viewer_scale')

@@ -10,8 +10,12 @@ export function wallEvents({ connection: { db }, changes, eventStreams, wallCook
     const credential = wallCookie.read(request);
     if (!credential) throw notPaired();
     const isPaired = async () =>
-      (await db.selectFrom('wall').select('id').where('id', '=', wallId).where('credential_hash', '=', hashOfToken(credential)).executeTakeFirst()) !==
-      undefined;
+      (await db
+        .selectFrom('wall')
+        .select('id')
+        .where('id', '=', wallId)
+        .where('credential_hash', '=', hashOfToken(credential))
+        .executeTakeFirst()) !== undefined;
 
     const stream = eventStreams.open(response, () => unsubscribe());
     const tell = () =>

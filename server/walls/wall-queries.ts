@@ -6,7 +6,10 @@ import type { Tables } from '../database/tables';
 
 export type WallRow = Selectable<Tables['wall']> & { saver: string | null };
 
-export const setUpOf = ({ set_up, scene_id }: Pick<WallRow, 'set_up' | 'scene_id'>): WallSetUp => ({ ...set_up, sceneId: scene_id });
+export const setUpOf = ({ set_up, scene_id }: Pick<WallRow, 'set_up' | 'scene_id'>): WallSetUp => ({
+  ...set_up,
+  sceneId: scene_id,
+});
 
 export const toWall = (row: WallRow): Wall => ({
   id: row.id,
@@ -21,9 +24,14 @@ export const toWall = (row: WallRow): Wall => ({
 });
 
 const walls = (db: Database) =>
-  db.selectFrom('wall').leftJoin('account', 'account.id', 'wall.saved_by').selectAll('wall').select('account.name as saver');
+  db
+    .selectFrom('wall')
+    .leftJoin('account', 'account.id', 'wall.saved_by')
+    .selectAll('wall')
+    .select('account.name as saver');
 
-export const findWall = (db: Database, id: string): Promise<WallRow | undefined> => walls(db).where('wall.id', '=', id).executeTakeFirst();
+export const findWall = (db: Database, id: string): Promise<WallRow | undefined> =>
+  walls(db).where('wall.id', '=', id).executeTakeFirst();
 
 /** The wall, which nobody else can change until the transaction ends. */
 export const holdWall = (db: Database, id: string): Promise<WallRow | undefined> =>
@@ -31,6 +39,10 @@ export const holdWall = (db: Database, id: string): Promise<WallRow | undefined>
 
 /** By name. */
 export const wallsOf = async (db: Database, householdId: string): Promise<WallRow[]> => {
-  const rows = await walls(db).where('wall.household_id', '=', householdId).orderBy('wall.created_at').orderBy('wall.id').execute();
+  const rows = await walls(db)
+    .where('wall.household_id', '=', householdId)
+    .orderBy('wall.created_at')
+    .orderBy('wall.id')
+    .execute();
   return rows.sort((a, b) => a.set_up.name.localeCompare(b.set_up.name, 'en-GB', { numeric: true }));
 };

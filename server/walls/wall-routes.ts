@@ -13,7 +13,9 @@ export const wallRoutes =
     const scales = viewerScales(db);
 
     mount(contract.listWalls, async ({ householdId }) => ({ walls: await walls.list(householdId) }));
-    mount(contract.createWall, async ({ body, householdId, accountId }) => ({ wall: await walls.create(body.name, { householdId, accountId }) }));
+    mount(contract.createWall, async ({ body, householdId, accountId }) => ({
+      wall: await walls.create(body.name, { householdId, accountId }),
+    }));
     mount(contract.readWall, async ({ params }) => ({ wall: await walls.read(params.wallId) }));
     mount(contract.saveWall, async ({ params, body, householdId, accountId }) => ({
       wall: await walls.save(params.wallId, body.revision, body.setUp, { householdId, accountId }),
@@ -22,7 +24,9 @@ export const wallRoutes =
       await walls.remove(params.wallId);
       return {};
     });
-    mount(contract.wallReports, async ({ params, query }) => ({ reports: await reportsOf(db, params.wallId, query.hours) }));
+    mount(contract.wallReports, async ({ params, query }) => ({
+      reports: await reportsOf(db, params.wallId, query.hours),
+    }));
 
     mount(contract.listViewerScales, async ({ householdId }) => ({ scales: await scales.list(householdId) }));
     mount(contract.keepViewerScale, async ({ body, householdId }) => {

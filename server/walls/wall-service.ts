@@ -62,7 +62,8 @@ export function wallService(db: Database) {
         if (!held) throw notFound();
         const isSame = isDeepStrictEqual(setUpOf(held), setUp);
         if (!mustWrite('wall', held, { revision, accountId, isSame })) return;
-        if (setUp.sceneId && setUp.sceneId !== held.scene_id) await holdSceneOf(transaction, householdId, setUp.sceneId);
+        if (setUp.sceneId && setUp.sceneId !== held.scene_id)
+          await holdSceneOf(transaction, householdId, setUp.sceneId);
         await transaction
           .updateTable('wall')
           .set({ ...columnsOf(setUp), revision: revision + 1, saved_at: new Date(), saved_by: accountId })

@@ -85,4 +85,9 @@ export const renameRun = defineRoute({
   body: z.object({ name: Name }),
   reply: z.object({ run: RunHeader }),
 });
-export const removeRun = defineRoute({ method: 'DELETE', path: '/api/runs/:runId', access: members('run', tuners), params: RunParams });
+export const removeRun = defineRoute({
+  method: 'DELETE',
+  path: '/api/runs/:runId',
+  access: members('run', tuners),
+  params: RunParams,
+});

@@ -20,14 +20,22 @@ export const WallGlass = z.object({
 
 /** The camera as shared/viewer's Camera has it; position from the centre of the glass. */
 export const WallCamera = z.object({
-  position: z.object({ x: z.number().min(-10_000).max(10_000), y: z.number().min(-10_000).max(10_000), z: z.number().min(-10_000).max(10_000) }),
+  position: z.object({
+    x: z.number().min(-10_000).max(10_000),
+    y: z.number().min(-10_000).max(10_000),
+    z: z.number().min(-10_000).max(10_000),
+  }),
   pitchRad: Radians,
   yawRad: Radians,
   rollRad: Radians,
   hfovRad: z.number().min(0.2).max(2.8),
   mirrored: z.boolean(),
   /** Standard uncertainties; null while assumed. */
-  uncertainty: z.object({ hfovRad: z.number().nonnegative().nullable(), pitchRad: z.number().nonnegative().nullable(), positionMm: z.number().nonnegative().nullable() }),
+  uncertainty: z.object({
+    hfovRad: z.number().nonnegative().nullable(),
+    pitchRad: z.number().nonnegative().nullable(),
+    positionMm: z.number().nonnegative().nullable(),
+  }),
 });
 
 export type WallGlass = z.infer<typeof WallGlass>;
@@ -48,8 +56,16 @@ const ViewerFactor = z.number().min(0.5).max(2);
 /** What a tuner may turn: shared/smoothing's FollowerSettings as far as they are tuned, the viewer's own scale, and the choice of viewer. */
 export const TrackerTuning = z.object({
   filter: z.object({
-    across: z.object({ minCutoffHz: z.number().positive().max(60), beta: z.number().min(0).max(10), derivativeCutoffHz: z.number().positive().max(60) }),
-    along: z.object({ minCutoffHz: z.number().positive().max(60), beta: z.number().min(0).max(10), derivativeCutoffHz: z.number().positive().max(60) }),
+    across: z.object({
+      minCutoffHz: z.number().positive().max(60),
+      beta: z.number().min(0).max(10),
+      derivativeCutoffHz: z.number().positive().max(60),
+    }),
+    along: z.object({
+      minCutoffHz: z.number().positive().max(60),
+      beta: z.number().min(0).max(10),
+      derivativeCutoffHz: z.number().positive().max(60),
+    }),
   }),
   /** Delay of screen and camera that prediction makes good beyond what is measured frame by frame, ms. */
   displayDelayMs: Milliseconds,
@@ -152,7 +168,12 @@ export const saveWall = defineRoute({
   body: z.object({ revision: z.number().int(), setUp: WallSetUp }),
   reply: WallReply,
 });
-export const removeWall = defineRoute({ method: 'DELETE', path: '/api/walls/:wallId', access: members('wall', tuners), params: WallParams });
+export const removeWall = defineRoute({
+  method: 'DELETE',
+  path: '/api/walls/:wallId',
+  access: members('wall', tuners),
+  params: WallParams,
+});
 /** The oldest first: at most one for each 720th of the time asked for, and besides every one with which the ladder's step or the last error changed. */
 export const wallReports = defineRoute({
   method: 'GET',
@@ -169,7 +190,11 @@ export const pairingSigns = '23456789ABCDEFGHJKLMNPQRSTUVWXYZ';
 export const PairingCode = z
   .string()
   .transform((typed) => typed.replace(/[\s-]/g, '').toUpperCase())
-  .pipe(z.string().regex(new RegExp(`^[${pairingSigns}]{6}$`), 'The code has six letters and figures, as the screen shows them'));
+  .pipe(
+    z
+      .string()
+      .regex(new RegExp(`^[${pairingSigns}]{6}$`), 'The code has six letters and figures, as the screen shows them'),
+  );
 export const pairingMinutes = 10;
 
 /** A screen asks for a code; it keeps `claim`, a secret, to fetch its credential when someone has entered the code. */
@@ -237,7 +262,13 @@ export const reportFromWall = defineRoute({
 });
 
 /** A household member's own scale, set once at a marked distance. */
-export const ViewerScale = z.object({ id: Id, name: Name, ipdMm: ViewerIpd, scaleFactor: ViewerFactor, measuredAt: Moment });
+export const ViewerScale = z.object({
+  id: Id,
+  name: Name,
+  ipdMm: ViewerIpd,
+  scaleFactor: ViewerFactor,
+  measuredAt: Moment,
+});
 export type ViewerScale = z.infer<typeof ViewerScale>;
 const ScalesReply = z.object({ scales: z.array(ViewerScale) });
 export const listViewerScales = defineRoute({
@@ -263,4 +294,3 @@ export const removeViewerScale = defineRoute({
   params: z.object({ householdId: Id, scaleId: Id }),
   reply: ScalesReply,
 });
-
