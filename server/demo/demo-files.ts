@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import * as z from 'zod';
 import { Email, Name, Password } from '@oriel/shared/contracts/fields';
 import { Role } from '@oriel/shared/contracts/role';
-import { EyeSchema, GlassSchema, Layer, PlacedSchema, ZoneSchema } from '@oriel/shared/contracts/scenes';
+import { EyeSchema, GlassSchema, Layer, PlacedSchema, SceneDocument, ZoneSchema } from '@oriel/shared/contracts/scenes';
 
 const DemoAccount = z.object({ name: Name, email: Email, password: Password, role: Role });
 export type DemoAccount = z.infer<typeof DemoAccount>;
@@ -19,6 +19,7 @@ const DemoLayer = z.object({
 });
 const DemoScene = z.object({
   name: Name,
+  credit: SceneDocument.shape.credit,
   glass: GlassSchema,
   homeEye: EyeSchema,
   zone: ZoneSchema,

@@ -49,6 +49,8 @@ export type Layer = z.infer<typeof Layer>;
 /** What the designer draws. Layers in ledger order, which also breaks ties of depth: the later stands before the earlier. */
 export const SceneDocument = z.object({
   name: Name,
+  /** Whose photograph it is and under what licence, where that must be said. */
+  credit: z.string().trim().max(200, 'Use at most 200 characters').optional(),
   glass: GlassSchema,
   homeEye: EyeSchema,
   zone: ZoneSchema,

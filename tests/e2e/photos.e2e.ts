@@ -2,7 +2,7 @@ import sharp from 'sharp';
 import { inProject } from '../../scripts/project.mjs';
 import { expect, test } from './fixtures';
 
-const ridge = inProject('assets', 'demo', 'photos', 'ridge.jpg');
+const ridge = inProject('assets', 'demo', 'photos', 'Ridge in October (Aitzol Berasategi, CC BY 4.0, resized).jpg');
 const picture = async (name: string, colour: string) => ({
   name,
   mimeType: 'image/png',
@@ -61,7 +61,7 @@ test('a real photograph becomes a scene', async ({ signedInPage }) => {
   await page.goto('/photos');
   await page.locator(upload).setInputFiles([ridge]);
   await expect(page.getByText(/you have this one already|1 kept/)).toBeVisible({ timeout: 30_000 });
-  const tile = page.getByRole('button', { name: /ridge/ }).first();
+  const tile = page.getByRole('button', { name: /Ridge/ }).first();
   await expect(tile.locator('img.here')).toBeVisible({ timeout: 30_000 });
   await tile.click();
   await page.getByRole('button', { name: 'Make a scene' }).click();

@@ -7,6 +7,7 @@ import { EyeSchema, GlassSchema, type Layer, PlacedSchema, type SceneDocument, Z
 const Shipped = z.array(
   z.object({
     name: z.string(),
+    credit: z.string().optional(),
     glass: GlassSchema,
     homeEye: EyeSchema,
     zone: ZoneSchema,
