@@ -3,7 +3,7 @@ import type { PixelPoint } from './tracking-messages';
 
 /** Frames from one guarding look to the next while nothing is suspect. */
 const INTERVAL_FRAMES = 5;
-/** Frames guarded one by one after an implausible jump. */
+/** Frames guarded one by one after someone was found, whose velocity is not known yet, and after an implausible jump. */
 const ALERT_FRAMES = 3;
 /** Guarding looks in a row that may see no face before the viewer is given up. */
 const MOST_MISSES = 2;
@@ -34,7 +34,7 @@ export type Verdict = 'holds' | 'clings' | 'missed' | 'lost';
  */
 export class Guard {
   private sinceLook = 0;
-  private alert = 0;
+  private alert = ALERT_FRAMES;
   private misses = 0;
   private previous: Eyes | null = null;
 
