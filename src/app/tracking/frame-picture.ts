@@ -8,7 +8,8 @@ const RGB_FORMATS: Readonly<Record<string, 0 | 2>> = { RGBA: 0, RGBX: 0, BGRA: 2
 
 /**
  * Turns frames into pictures. Camera frames are copied as they are, planes of luma and colour, and only the pieces looked at become
- * red, green and blue: a quarter of the time of drawing the frame to a canvas. Frames of another kind go through a canvas.
+ * red, green and blue: measured at 1280 x 720, 0.8 ms for the landmarks' piece, against 3.3 ms for drawing that piece to a canvas and
+ * 5.1 ms for the whole frame (and 0.9, 1.7 and 1.4 ms at 640 x 480). Frames of a kind unknown here go through a canvas.
  * The buffer is kept, so a picture is good until the next `read`.
  */
 export class FrameReader {
