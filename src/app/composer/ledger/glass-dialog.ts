@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@a
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle } from '@angular/material/dialog';
 import type { Glass } from '@oriel/shared/projection/types';
-import { FigureField } from './figure-field';
+import { FigureField } from '../../figures/figure-field';
 
 /** Asks for the glass a whole scene is to be carried to. */
 @Component({

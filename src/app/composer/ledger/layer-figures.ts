@@ -7,8 +7,8 @@ import { hideLayer, place, renameLayer, setOpacity, setWidth, showLayer } from '
 import { duplicateLayer, removeLayer, reorderLayer } from '../commands/stack-commands';
 import type { DrawnLayer } from '../layers/drawn-layer';
 import { SceneStore } from '../scene-store';
-import { plainMm } from '../words';
-import { FigureField } from './figure-field';
+import { plainMm } from '../../figures/words';
+import { FigureField } from '../../figures/figure-field';
 
 /** The longer side of the screen a shift is stated for until a wall is known, px. */
 const SCREEN_PX = 1920;

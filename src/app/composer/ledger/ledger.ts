@@ -7,8 +7,8 @@ import { setDepth } from '../commands/layer-commands';
 import { depthLimits } from '../commands/limits';
 import type { DrawnLayer } from '../layers/drawn-layer';
 import { SceneStore } from '../scene-store';
-import { signedMm } from '../words';
-import { FigureField } from './figure-field';
+import { signedMm } from '../../figures/words';
+import { FigureField } from '../../figures/figure-field';
 import { LayerFigures } from './layer-figures';
 import { RoomForm } from './room-form';
 

@@ -6,8 +6,8 @@ import { Icon } from '../../core/icon/icon';
 import { eyeLimits } from '../commands/limits';
 import { renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
 import { SceneStore } from '../scene-store';
+import { FigureField } from '../../figures/figure-field';
 import { Viewer } from '../walk/viewer';
-import { FigureField } from './figure-field';
 import { GlassDialog } from './glass-dialog';
 import { RoomFigures } from './room-figures';
 

@@ -1,9 +1,9 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle } from '@angular/material/dialog';
+import { sayMoment } from '../../core/moments';
 import { Session } from '../../core/session';
-import { sayMoment } from '../words';
-import type { MovedOn } from './autosave';
+import type { MovedOn } from '../../saving/autosave';
 
 /** What someone decided about two versions of one scene; nothing is lost while they have not. */
 export type ConflictChoice = 'theirs' | 'copy' | 'over';

@@ -1,17 +1,19 @@
 import { HttpClient } from '@angular/common/http';
 import { DOCUMENT, DestroyRef, Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
-import { duplicateScene, readScene, saveScene, type Scene, type SceneDocument } from '@oriel/shared/contracts/scenes';
+import { SceneDocument, duplicateScene, readScene, saveScene, type Scene } from '@oriel/shared/contracts/scenes';
 import { designers } from '@oriel/shared/contracts/role';
 import { Api, addressOf } from '../../core/api';
 import { type ApiFailure, toApiFailure } from '../../core/api-failure';
 import { Session } from '../../core/session';
 import { SceneStore } from '../scene-store';
-import { Autosave } from './autosave';
-import { type Draft, sameDocument } from './draft';
-import { DraftShelf } from './draft-shelf';
+import { Autosave } from '../../saving/autosave';
+import { type Draft, sameBy } from '../../saving/draft';
+import { DraftShelf } from '../../saving/draft-shelf';
 
 /** A request may outlive its page only while its body is small: 64 KiB in all (Fetch standard, keepalive). */
 const FAREWELL_MAX_BYTES = 60_000;
+
+const sameDocument = sameBy(SceneDocument);
 
 /** Opens one scene from the server and keeps it saved for as long as the page lives. */
 @Injectable()
@@ -21,7 +23,7 @@ export class SceneKeeper {
   private readonly session = inject(Session);
   private readonly store = inject(SceneStore);
   private readonly window = inject(DOCUMENT).defaultView;
-  private shelf: DraftShelf | null = null;
+  private shelf: DraftShelf<SceneDocument> | null = null;
   private opened: SceneDocument | null = null;
 
   readonly scene = signal<Scene | null>(null);
@@ -30,10 +32,11 @@ export class SceneKeeper {
   readonly restored = signal(false);
   /** Whether this browser refuses to hold a draft; then unsaved work is only on this page. */
   readonly draftUnsafe = signal(false);
-  readonly autosave = new Autosave({
+  readonly autosave = new Autosave<SceneDocument>({
     save: async (revision, document) =>
       (await this.api.call(saveScene, { params: this.params(), body: { revision, document } })).scene,
     read: async () => (await this.api.call(readScene, { params: this.params() })).scene,
+    same: sameDocument,
     keepDraft: (draft) => this.draftUnsafe.set(!this.shelf?.keep(draft)),
     dropDraft: () => this.shelf?.drop(),
   });
@@ -107,7 +110,7 @@ export class SceneKeeper {
   private async takeUpDraft(scene: Scene): Promise<void> {
     const accountId = this.session.account()?.id ?? '';
     this.shelf?.close();
-    this.shelf = new DraftShelf(accountId, scene.id, localStorage, navigator.locks);
+    this.shelf = new DraftShelf(SceneDocument, accountId, scene.id, localStorage, navigator.locks);
     const draft = await this.shelf.takeLeftBehind();
     if (!draft) return;
     if (sameDocument(draft.document, scene.document)) return this.shelf.drop();
@@ -139,4 +142,4 @@ export class SceneKeeper {
   }
 }
 
-const sizeOf = (draft: Draft) => new Blob([JSON.stringify(draft)]).size;
+const sizeOf = (draft: Draft<SceneDocument>) => new Blob([JSON.stringify(draft)]).size;

@@ -1,5 +1,5 @@
 import type { Glass, ViewingZone } from '@oriel/shared/projection/types';
-import type { DepthFrame } from './sheet-layout';
+import type { DepthFrame } from '../../drawing/frames';
 
 /*
  * A scene is drawn before its wall has a camera, so the sheet shows the camera one may expect: in the middle of the upper

@@ -3,7 +3,7 @@ import { layerIds, someScene } from '../commands/testing';
 import { drawLayers } from '../layers/drawn-layer';
 import { drawLines, drawSetting, projectionLines, sightlines } from './depth-drawing';
 import { extentsOf } from './extents';
-import { drawnAt, pointedAt } from './placing';
+import { drawnAt, pointedAt } from '../../drawing/placing';
 import { layOutSheet } from './sheet-layout';
 
 const { plan, section } = layOutSheet({ width: 1000, height: 780 }, extentsOf(someScene));

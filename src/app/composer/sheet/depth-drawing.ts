@@ -2,13 +2,13 @@ import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Point2, Point3, Rectangle } from '@oriel/shared/projection/types';
 import { walkPath } from '../walk/walk-path';
 import { type DrawnLayer, seenFrom } from '../layers/drawn-layer';
-import { describeDepth, signedMm } from '../words';
-import { acrossOf, glassAcross, sidesOf, spanAcross } from './across';
+import { describeDepth, signedMm } from '../../figures/words';
+import { acrossOf, glassAcross, sidesOf, spanAcross } from '../../drawing/across';
 import { assumedCamera } from './assumed-camera';
-import { depthTicks } from './depth-scale';
+import { depthTicks } from '../../drawing/depth-scale';
+import { type DepthFrame, asPoints, boxOf } from '../../drawing/frames';
 import { spreadLabels } from './labels';
-import { depthRangeOf, drawnAt } from './placing';
-import type { DepthFrame, Frame } from './sheet-layout';
+import { depthRangeOf, drawnAt } from '../../drawing/placing';
 
 export interface Line {
   readonly from: Point2;
@@ -41,8 +41,6 @@ function sightline(frame: DepthFrame, eye: Point3, edge: number, behindMm: numbe
   return asPoints([drawnAt(frame, { across: e, z: eye.z }), ...depths.map(at)]);
 }
 
-export const asPoints = (points: readonly Point2[]) => points.map(({ x, y }) => `${x.toFixed(2)},${y.toFixed(2)}`).join(' ');
-
 export const sightlines = (frame: DepthFrame, { glass }: SceneDocument, eye: Point3) =>
   glassAcross(frame.view, glass).map((edge) => sightline(frame, eye, edge, depthRangeOf(frame).behindMm));
 
@@ -72,13 +70,6 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
     })),
   };
 }
-
-export const boxOf = (a: Point2, b: Point2): Frame => ({
-  left: Math.min(a.x, b.x),
-  top: Math.min(a.y, b.y),
-  width: Math.abs(b.x - a.x),
-  height: Math.abs(b.y - a.y),
-});
 
 /** The usual width of a character of a label at 11 px. */
 const CHARACTER_PX = 6;

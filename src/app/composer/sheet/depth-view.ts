@@ -6,13 +6,13 @@ import { setDepth } from '../commands/layer-commands';
 import { setGlass, setHomeEye, setZone } from '../commands/setting-commands';
 import { type Gesture, SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
-import { describeEye } from '../words';
-import { acrossOf, sidesOf, withAcross } from './across';
-import { asPoints, drawLines, drawSetting, projectionLines, sightlines, type DrawnLine } from './depth-drawing';
-import { followPointer } from './follow-pointer';
+import { describeEye } from '../../figures/words';
+import { acrossOf, sidesOf, withAcross } from '../../drawing/across';
+import { drawLines, drawSetting, projectionLines, sightlines, type DrawnLine } from './depth-drawing';
+import { followPointer } from '../../drawing/follow-pointer';
 import { type Held, pick } from './picking';
-import { drawnAt, drawnOnGlass, pointedAt } from './placing';
-import type { DepthFrame, ElevationFrame } from './sheet-layout';
+import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
+import { type DepthFrame, type ElevationFrame, asPoints } from '../../drawing/frames';
 import { snapToRound, toMillimetre } from './snapping';
 
 /** Plan or section: the views in which depth is seen, and dragged. */

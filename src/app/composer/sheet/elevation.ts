@@ -4,13 +4,13 @@ import { place, setWidth } from '../commands/layer-commands';
 import { type DrawnLayer, placedPerSeen, seenFrom } from '../layers/drawn-layer';
 import { SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
-import { plainMm } from '../words';
-import { followPointer } from './follow-pointer';
+import { plainMm } from '../../figures/words';
+import { followPointer } from '../../drawing/follow-pointer';
 import { edgeFor } from './image-address';
 import { LayerAlpha } from './layer-alpha';
 import { LayerPicture } from './layer-picture';
-import { drawnOnGlass } from './placing';
-import type { ElevationFrame, Frame } from './sheet-layout';
+import { drawnOnGlass } from '../../drawing/placing';
+import type { ElevationFrame, Frame } from '../../drawing/frames';
 
 /** The width at which layer pictures are laid out before they are scaled: no layout as they move. */
 const LAID_OUT_PX = 1000;

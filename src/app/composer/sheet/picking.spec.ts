@@ -2,7 +2,7 @@ import { layerIds, someScene } from '../commands/testing';
 import { drawLayers } from '../layers/drawn-layer';
 import { extentsOf } from './extents';
 import { pick, type Holdable } from './picking';
-import { drawnAt } from './placing';
+import { drawnAt } from '../../drawing/placing';
 import { layOutSheet } from './sheet-layout';
 
 const { plan, section } = layOutSheet({ width: 1400, height: 950 }, extentsOf(someScene));

@@ -1,8 +1,9 @@
 import type { Glass, Point2, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import type { DrawnLayer } from '../layers/drawn-layer';
-import { drawnAt } from './placing';
-import type { DepthFrame } from './sheet-layout';
-import { acrossOf, glassAcross, sidesOf, spanAcross } from './across';
+import { drawnAt } from '../../drawing/placing';
+import type { DepthFrame } from '../../drawing/frames';
+import { outside, zoneSideAt } from '../../drawing/zone-side';
+import { acrossOf, glassAcross, spanAcross } from '../../drawing/across';
 
 /** What a pointer takes hold of in plan or section. */
 export type Held =
@@ -36,7 +37,8 @@ export function pick(frame: DepthFrame, point: Point2, things: Holdable, reachPx
   const onSelected = layers.some(({ id }) => id === things.selectedId);
   if (!onSelected && distanceToGlassEnd(frame, point, things.glass) <= reachPx * 0.6) return { kind: 'glass' };
   if (layers.length > 0) return { kind: 'layer', id: layers[0].id };
-  return pickZoneSide(frame, point, things.zone, reachPx * 0.6);
+  const side = zoneSideAt(frame, point, things.zone, reachPx * 0.6);
+  return side && { kind: 'zone', side };
 }
 
 function distanceToGlassEnd(frame: DepthFrame, point: Point2, glass: Glass): number {
@@ -51,25 +53,4 @@ function distanceToLayer(frame: DepthFrame, point: Point2, { plane, layer }: Dra
   const b = drawnAt(frame, { across: to, z: -layer.depthMm });
   const beyond = frame.view === 'plan' ? outside(point.x, a.x, b.x) : outside(point.y, b.y, a.y);
   return Math.hypot(frame.view === 'plan' ? point.y - a.y : point.x - a.x, beyond);
-}
-
-const outside = (value: number, least: number, most: number) => Math.max(least - value, value - most, 0);
-
-function pickZoneSide(frame: DepthFrame, point: Point2, zone: ViewingZone, reachPx: number): Held | null {
-  const { low, high } = sidesOf(frame.view);
-  const a = drawnAt(frame, { across: zone[low], z: zone.nearestMm });
-  const b = drawnAt(frame, { across: zone[high], z: zone.farthestMm });
-  const [alongPoint, acrossPoint] = frame.view === 'plan' ? [point.y, point.x] : [point.x, point.y];
-  const [alongNear, alongFar] = frame.view === 'plan' ? [a.y, b.y] : [a.x, b.x];
-  const [acrossLow, acrossHigh] = frame.view === 'plan' ? [a.x, b.x] : [a.y, b.y];
-  const beside = outside(acrossPoint, Math.min(acrossLow, acrossHigh), Math.max(acrossLow, acrossHigh));
-  const beyond = outside(alongPoint, alongNear, alongFar);
-  const sides: { side: keyof ViewingZone; px: number }[] = [
-    { side: 'nearestMm', px: Math.hypot(alongPoint - alongNear, beside) },
-    { side: 'farthestMm', px: Math.hypot(alongPoint - alongFar, beside) },
-    { side: low, px: Math.hypot(acrossPoint - acrossLow, beyond) },
-    { side: high, px: Math.hypot(acrossPoint - acrossHigh, beyond) },
-  ];
-  const [nearest] = sides.filter(({ px }) => px <= reachPx).sort((p, q) => p.px - q.px);
-  return nearest ? { kind: 'zone', side: nearest.side } : null;
 }

@@ -1,6 +1,7 @@
 import * as fc from 'fast-check';
-import { drawnAt, drawnOnGlass, pointedAt } from './placing';
-import { enlarge, layOutPanes, layOutSheet, type DepthFrame, type Frame, type SheetLayout } from './sheet-layout';
+import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
+import type { DepthFrame, Frame } from '../../drawing/frames';
+import { enlarge, layOutPanes, layOutSheet, type SheetLayout } from './sheet-layout';
 
 const livingRoom = { glass: { widthMm: 1210, heightMm: 681 }, behindMm: 1750, beforeMm: 2500 };
 const extents = fc.record({

@@ -1,34 +1,6 @@
 import type { Glass } from '@oriel/shared/projection/types';
-import { type DepthScale, drawnDepth, linearDepthOf } from './depth-scale';
-
-/** A rectangle of the paper, px. */
-export interface Frame {
-  readonly left: number;
-  readonly top: number;
-  readonly width: number;
-  readonly height: number;
-}
-
-/** The view from the front: x to the right, y up, about the centre of the glass. */
-export interface ElevationFrame extends Frame {
-  readonly centreX: number;
-  readonly centreY: number;
-  readonly pxPerMm: number;
-}
-
-/**
- * A view in which depth is seen. In the plan (from above) `across` is x and the viewer stands below; in the section (from
- * the left) `across` is y and the viewer stands to the right. Behind the glass lies toward the elevation in both: first angle.
- */
-export interface DepthFrame extends Frame {
-  readonly view: 'plan' | 'section';
-  /** Where the centre of the glass lies along the shared axis, px. */
-  readonly centre: number;
-  readonly pxPerMm: number;
-  /** Where the glass lies along the depth axis, px. */
-  readonly glassAt: number;
-  readonly depth: DepthScale;
-}
+import { drawnDepth, linearDepthOf } from '../../drawing/depth-scale';
+import type { DepthFrame, ElevationFrame, Frame, Room } from '../../drawing/frames';
 
 export interface SheetLayout {
   readonly width: number;
@@ -45,11 +17,6 @@ export interface Extents {
   readonly behindMm: number;
   /** The farthest eye before the glass, mm. */
   readonly beforeMm: number;
-}
-
-export interface Room {
-  readonly width: number;
-  readonly height: number;
 }
 
 const MARGIN = 26;

@@ -6,7 +6,7 @@ import { WalkPast } from '../walk/walk-past';
 import { DepthView } from './depth-view';
 import { Elevation } from './elevation';
 import { HoldPaper } from './hold-paper';
-import { observedSize } from './observed-size';
+import { observedSize } from '../../drawing/observed-size';
 import { SheetView } from './sheet-view';
 import { TitleBlock } from './title-block';
 

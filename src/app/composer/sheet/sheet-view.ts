@@ -2,7 +2,8 @@ import { Injectable, computed, inject, linkedSignal, signal } from '@angular/cor
 import type { Point2 } from '@oriel/shared/projection/types';
 import { SceneStore } from '../scene-store';
 import { extentsOf } from './extents';
-import { type Extents, type Room, enlarge, layOutPanes, layOutSheet } from './sheet-layout';
+import type { Room } from '../../drawing/frames';
+import { type Extents, enlarge, layOutPanes, layOutSheet } from './sheet-layout';
 
 export const LARGEST = 12;
 export const SMALLEST = 0.5;

@@ -1,4 +1,4 @@
-import { depthToPx, roundStep, type DepthScale } from './depth-scale';
+import { depthToPx, roundStep, type DepthScale } from '../../drawing/depth-scale';
 
 /** A snap should be felt but not fought: its steps are at least this wide on the sheet, px. */
 const STEP_PX = 1.5;

@@ -4,7 +4,7 @@ import type { StatedFault } from '../layers/faults';
 import { RoomFigures } from '../ledger/room-figures';
 import { SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
-import { plainMm } from '../words';
+import { plainMm } from '../../figures/words';
 
 /** The corner of the sheet: what it shows, for which glass and eye, who saved it, and whether it is clear. */
 @Component({

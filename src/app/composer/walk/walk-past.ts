@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatTooltip } from '@angular/material/tooltip';
 import { Icon } from '../../core/icon/icon';
-import { describeEye } from '../words';
+import { describeEye } from '../../figures/words';
 import { Viewer } from './viewer';
 
 /** Below the drawing: where the simulated viewer is on the path, and the way back to the home eye. */

@@ -1,4 +1,4 @@
-import { clockTime } from '../words';
+import { clockTime } from '../core/moments';
 import type { MovedOn, SaveState } from './autosave';
 
 /** Where the scene stands, in words. */

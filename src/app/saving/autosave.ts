@@ -1,7 +1,6 @@
 import { computed, signal } from '@angular/core';
-import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
-import { type ApiFailure, toApiFailure } from '../../core/api-failure';
-import { type Draft, sameDocument } from './draft';
+import { type ApiFailure, toApiFailure } from '../core/api-failure';
+import type { Draft } from './draft';
 
 /** Someone else's save that came first. */
 export interface MovedOn {
@@ -10,7 +9,12 @@ export interface MovedOn {
   readonly savedAt: string;
 }
 
-/** Where the scene stands with the server. */
+/** A document as the server has it. */
+export interface Stored<T> extends MovedOn {
+  readonly document: T;
+}
+
+/** Where a document stands with the server. */
 export type SaveState =
   | { readonly kind: 'saved' }
   | { readonly kind: 'waiting' }
@@ -20,11 +24,13 @@ export type SaveState =
   | { readonly kind: 'conflict'; readonly theirs: MovedOn };
 
 /** What autosave asks of the outside. */
-export interface Keeping {
-  save(revision: number, document: SceneDocument): Promise<Scene>;
-  read(): Promise<Scene>;
+export interface Keeping<T> {
+  save(revision: number, document: T): Promise<Stored<T>>;
+  read(): Promise<Stored<T>>;
+  /** Whether two documents are the same in every figure. */
+  same(a: T, b: T): boolean;
   /** Puts the unsaved work where a closed tab or a crashed browser cannot lose it. */
-  keepDraft(draft: Draft): void;
+  keepDraft(draft: Draft<T>): void;
   dropDraft(): void;
 }
 
@@ -33,15 +39,15 @@ const FIRST_RETRY_MS = 2000;
 const LONGEST_RETRY_MS = 60_000;
 
 /**
- * Saves the scene a moment after it changes, always over the revision it was drawn on. What is not yet saved is kept as a
+ * Saves a document a moment after it changes, always over the revision it was drawn on. What is not yet saved is kept as a
  * draft; a lost network and a failing server are tried again, later and later; a revision that moved on stops it until
  * someone decides.
  */
-export class Autosave {
+export class Autosave<T> {
   private readonly current = signal<SaveState>({ kind: 'saved' });
   private readonly base = signal({ revision: 0, savedAt: '', savedBy: '' });
-  private pending: SceneDocument | null = null;
-  private sent: SceneDocument | null = null;
+  private pending: T | null = null;
+  private sent: T | null = null;
   private inFlight: Promise<void> | null = null;
   private timer: ReturnType<typeof setTimeout> | undefined;
   private failures = 0;
@@ -50,18 +56,18 @@ export class Autosave {
   readonly saved = this.base.asReadonly();
   readonly unsaved = computed(() => this.current().kind !== 'saved');
 
-  constructor(private readonly keeping: Keeping) {}
+  constructor(private readonly keeping: Keeping<T>) {}
 
-  /** Starts from a scene as the server has it. */
-  begin(scene: Scene): void {
+  /** Starts from the document as the server has it. */
+  begin(stored: Stored<T>): void {
     clearTimeout(this.timer);
     this.pending = null;
     this.failures = 0;
-    this.adopt(scene);
+    this.adopt(stored);
     this.current.set({ kind: 'saved' });
   }
 
-  changed(document: SceneDocument): void {
+  changed(document: T): void {
     this.pending = document;
     this.keeping.keepDraft({ revision: this.base().revision, document });
     const state = this.current();
@@ -89,20 +95,20 @@ export class Autosave {
   }
 
   /** Opens a decision about work left behind that stands on an older revision than the newest, theirs. */
-  contest(draft: Draft, theirs: MovedOn): void {
+  contest(draft: Draft<T>, theirs: MovedOn): void {
     this.base.update((base) => ({ ...base, revision: draft.revision }));
     this.pending = draft.document;
     this.keeping.keepDraft(draft);
     this.current.set({ kind: 'conflict', theirs });
   }
 
-  /** The unsaved scene and the revision it stands on; null when all is saved. */
-  unsavedDraft(): Draft | null {
+  /** The unsaved document and the revision it stands on; null when all is saved. */
+  unsavedDraft(): Draft<T> | null {
     return this.pending ? { revision: this.base().revision, document: this.pending } : null;
   }
 
   /** Notes that a farewell carried this document, should its answer never be heard. */
-  farewell(): Draft | null {
+  farewell(): Draft<T> | null {
     const draft = this.current().kind === 'conflict' || this.inFlight ? null : this.unsavedDraft();
     if (draft) this.sent = draft.document;
     return draft;
@@ -117,7 +123,7 @@ export class Autosave {
     this.timer = setTimeout(() => void this.flush(), ms);
   }
 
-  private async attempt(document: SceneDocument): Promise<void> {
+  private async attempt(document: T): Promise<void> {
     const sentBefore = this.sent;
     this.sent = document;
     this.current.set({ kind: 'saving' });
@@ -131,24 +137,24 @@ export class Autosave {
   }
 
   /** A save whose answer was lost on the way makes the next one find its own document there: that is no conflict. */
-  private async wasOurOwn(mine: readonly (SceneDocument | null)[]): Promise<boolean> {
+  private async wasOurOwn(mine: readonly (T | null)[]): Promise<boolean> {
     const theirs = await this.keeping.read().catch(() => null);
-    const found = mine.find((document) => document && theirs && sameDocument(document, theirs.document));
+    const found = mine.find((document) => document && theirs && this.keeping.same(document, theirs.document));
     if (!found || !theirs) return false;
     this.settle(theirs, found);
     return true;
   }
 
-  private settle(scene: Scene, stored: SceneDocument): void {
+  private settle(answer: Stored<T>, sent: T): void {
     this.failures = 0;
-    this.adopt(scene);
-    if (this.pending === stored) {
+    this.adopt(answer);
+    if (this.pending === sent) {
       this.pending = null;
       this.keeping.dropDraft();
       this.current.set({ kind: 'saved' });
       return;
     }
-    if (this.pending) this.keeping.keepDraft({ revision: scene.revision, document: this.pending });
+    if (this.pending) this.keeping.keepDraft({ revision: answer.revision, document: this.pending });
     this.current.set({ kind: 'waiting' });
     this.after(PAUSE_MS);
   }

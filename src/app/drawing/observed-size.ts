@@ -1,5 +1,5 @@
 import { DestroyRef, type ElementRef, type Signal, afterNextRender, inject, signal } from '@angular/core';
-import type { Room } from './sheet-layout';
+import type { Room } from './frames';
 
 /** The size of an element as it changes; zero until it is on the page. To be called where injection is possible. */
 export function observedSize(element: () => ElementRef<Element> | undefined): Signal<Room> {

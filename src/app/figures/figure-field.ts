@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, type ElementRef, Injector, afterNextRender, computed, inject, input, output, signal, viewChild } from '@angular/core';
-import { plainMm, readFigure, signedMm } from '../words';
+import { plainMm, readFigure, signedMm } from './words';
 
 let fields = 0;
 

@@ -1,6 +1,6 @@
 import { SIDE_AXIS, sideOf } from '@oriel/shared/projection/sides';
 import type { Glass, Point3, Rectangle, ViewingZone } from '@oriel/shared/projection/types';
-import type { DepthFrame } from './sheet-layout';
+import type { DepthFrame } from './frames';
 
 type View = DepthFrame['view'];
 

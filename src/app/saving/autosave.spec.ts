@@ -1,19 +1,20 @@
-import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
-import { ApiFailure } from '../../core/api-failure';
-import { setDepth } from '../commands/layer-commands';
-import { layerIds, someScene } from '../commands/testing';
+import { type Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
+import { ApiFailure } from '../core/api-failure';
+import { setDepth } from '../composer/commands/layer-commands';
+import { layerIds, someScene } from '../composer/commands/testing';
 import { Autosave, type Keeping } from './autosave';
-import type { Draft } from './draft';
+import { type Draft, sameBy } from './draft';
 
 const failure = (status: number, code: string, detail?: Record<string, unknown>) =>
   new ApiFailure(status, { code, message: code, remedy: '', reference: '', detail });
 
 /** A server of one scene that can be cut off, before or after it hears a request; it keeps what it was sent. */
-class SmallServer implements Keeping {
+class SmallServer implements Keeping<SceneDocument> {
+  readonly same = sameBy(SceneDocument);
   scene: Scene = { id: layerIds[0], householdId: layerIds[1], document: someScene, revision: 7, savedAt: '2026-01-05T10:00:00Z', savedBy: 'Ilse' };
   network: 'up' | 'down' | 'answers-lost' = 'up';
   broken = false;
-  draft: Draft | null = null;
+  draft: Draft<SceneDocument> | null = null;
   saves: number[] = [];
 
   async save(revision: number, document: SceneDocument): Promise<Scene> {
@@ -34,7 +35,7 @@ class SmallServer implements Keeping {
     return this.scene;
   }
 
-  keepDraft(draft: Draft): void {
+  keepDraft(draft: Draft<SceneDocument>): void {
     this.draft = draft;
   }
 
@@ -51,7 +52,7 @@ const at = (depthMm: number) => setDepth(layerIds[0], depthMm)(someScene);
 
 describe('autosave', () => {
   let server: SmallServer;
-  let autosave: Autosave;
+  let autosave: Autosave<SceneDocument>;
 
   beforeEach(() => {
     vi.useFakeTimers();
@@ -82,7 +83,7 @@ describe('autosave', () => {
   it('saves what was drawn while a save was on its way', async () => {
     const late = { ...server, save: server.save.bind(server) };
     let answer: () => void = () => undefined;
-    const slow: Keeping = { ...late, read: () => server.read(), keepDraft: (d) => server.keepDraft(d), dropDraft: () => server.dropDraft(), save: async (r, d) => { await new Promise<void>((go) => (answer = go)); return server.save(r, d); } };
+    const slow: Keeping<SceneDocument> = { ...late, read: () => server.read(), keepDraft: (d) => server.keepDraft(d), dropDraft: () => server.dropDraft(), save: async (r, d) => { await new Promise<void>((go) => (answer = go)); return server.save(r, d); } };
     autosave = new Autosave(slow);
     autosave.begin(server.scene);
     autosave.changed(at(10));

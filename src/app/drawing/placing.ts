@@ -1,6 +1,6 @@
 import type { Point2 } from '@oriel/shared/projection/types';
 import { depthToPx, pxToDepth } from './depth-scale';
-import type { DepthFrame, ElevationFrame } from './sheet-layout';
+import type { DepthFrame, ElevationFrame } from './frames';
 
 /** A point of the scene's cross-section: along the axis the view shares with the elevation, and z toward the viewer, mm. */
 export interface Across {

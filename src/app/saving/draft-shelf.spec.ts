@@ -1,4 +1,5 @@
-import { someScene } from '../commands/testing';
+import { SceneDocument } from '@oriel/shared/contracts/scenes';
+import { someScene } from '../composer/commands/testing';
 import { DraftShelf } from './draft-shelf';
 
 /** The browser's locks as far as a shelf uses them: requested ones are held until released. */
@@ -16,7 +17,7 @@ function someLocks() {
 
 describe('the shelf of drafts', () => {
   const draft = { revision: 7, document: someScene };
-  const shelf = (locks: LockManager, account = 'ilse') => new DraftShelf(account, 'scene', localStorage, locks);
+  const shelf = (locks: LockManager, account = 'ilse') => new DraftShelf(SceneDocument, account, 'scene', localStorage, locks);
   beforeEach(() => localStorage.clear());
 
   it('gives what a closed page left behind to the next, once', async () => {
