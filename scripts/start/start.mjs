@@ -1,3 +1,4 @@
+import { mkdirSync } from 'node:fs';
 import { buildProduct, productBuilt } from '../build/product.mjs';
 import { dependenciesInstalled, installDependencies } from '../dependencies.mjs';
 import { startPostgres } from '../postgres.mjs';
@@ -22,14 +23,17 @@ export async function start() {
     const ownDatabase = !settings.DATABASE_URL;
     settings.PORT = await usablePort(settings, signal);
 
-    if (!dependenciesInstalled()) await steps.step('Installing the packages', () => installDependencies(signal));
-    if (!productBuilt()) await steps.step('Building', () => buildProduct(signal));
+    // First, for on a machine without PostgreSQL an ordinary user learns here what to install.
     if (ownDatabase) {
       const open = (say) => startPostgres({ dataDir: inProject('.oriel', 'postgres'), say, signal });
       const postgres = await steps.step('Starting the database', open);
       running.push(postgres);
       settings.DATABASE_URL = postgres.url;
     }
+    if (!dependenciesInstalled()) await steps.step('Installing the packages', () => installDependencies(signal));
+    if (!productBuilt()) await steps.step('Building', () => buildProduct(signal));
+    // Photographs of a household: nobody else on this machine may look.
+    mkdirSync(settings.STORAGE_DIR, { recursive: true, mode: 0o700 });
     const logFile = inProject('.oriel', 'server.log');
     const server = await steps.step('Starting the server', () =>
       startServer({ settings, logFile, signal }).catch((error) => {

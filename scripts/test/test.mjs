@@ -20,11 +20,11 @@ export async function test() {
   const total = { passed: 0, failed: 0 };
   let postgres = null;
   try {
-    if (!dependenciesInstalled()) await step('Installing the packages', () => installDependencies(signal));
     if (!programsPresent()) await step('Installing programs', (say) => installPrograms({ say, signal }));
     postgres = await step('Starting the database', (say) =>
       startPostgres({ dataDir: inProject('.oriel', 'test-postgres'), durable: false, say, signal }),
     );
+    if (!dependenciesInstalled()) await step('Installing the packages', () => installDependencies(signal));
     const env = {
       ...process.env,
       CI: 'true',
