@@ -35,7 +35,7 @@ export async function test() {
     rmSync(inProject('.oriel', 'reports'), { recursive: true, force: true });
     mkdirSync(inProject('.oriel', 'reports'), { recursive: true });
     for (const part of parts) {
-      const { passed, failed } = await step(part.name, (say) => runPart(part, { env, signal }, say));
+      const { passed, failed } = await step(part.name, () => runPart(part, { env, signal }), outcome(part));
       total.passed += passed;
       total.failed += failed;
     }
@@ -50,7 +50,7 @@ export async function test() {
 }
 
 /** Runs one part and tells what it found. A part that fails although no test of it did counts as one failed. */
-async function runPart({ name, run }, { env, signal }, say) {
+async function runPart({ run }, { env, signal }) {
   const limit = AbortSignal.timeout(partMs);
   const result = await run({ env, signal: AbortSignal.any([signal, limit]) }).catch((error) => {
     if (signal.aborted) throw error;
@@ -62,8 +62,12 @@ async function runPart({ name, run }, { env, signal }, say) {
   });
   const { passed } = result.counts;
   const failed = result.code === 0 ? result.counts.failed : Math.max(1, result.counts.failed);
-  const counted = passed + failed > 0 ? `: ${passed} passed, ${failed} failed` : '';
-  say(`${failed > 0 ? '✗' : '✓'} ${name}${counted}`);
   if (failed > 0) process.stdout.write(`\n${lastLines(result.output, 200)}\n\n`);
   return { passed, failed };
 }
+
+/** @param {{ name: string }} part */
+const outcome =
+  ({ name }) =>
+  ({ passed, failed }) =>
+    `${failed > 0 ? '✗' : '✓'} ${name}${passed + failed > 0 ? `: ${passed} passed, ${failed} failed` : ''}`;
