@@ -1,12 +1,11 @@
-import { pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
+import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
-import { EYE_CORNERS } from '@oriel/shared/viewer/face-model';
 import { leftEyeOf, rightEyeOf } from './face-landmarks';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
 
 /**
- * From landmarks to the viewer's eye. The fit takes the eye to lie midway between the corners; the pupils lie a little higher, in the
- * middle of the eyes' outlines, so the result is moved across by what separates the two in the picture.
+ * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
+ * the eyes. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
  */
 export class FaceMeasure {
   private readonly result = createLandmarkEye();
@@ -26,9 +25,9 @@ export class FaceMeasure {
     const rightEyePx = rightEyeOf(landmarks);
     const leftEyePx = leftEyeOf(landmarks);
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
-    const mmPerPx = settings.viewer.eyeDistanceMm / fit.scalePx;
-    inCamera.x += (eyePx.x - meanOfCorners(landmarks, 0)) * mmPerPx;
-    inCamera.y += (eyePx.y - meanOfCorners(landmarks, 1)) * mmPerPx;
+    const mmPerPx = inCamera.z / focalPx(camera);
+    inCamera.x = (eyePx.x - frame.width / 2) * mmPerPx;
+    inCamera.y = (eyePx.y - frame.height / 2) * mmPerPx;
     pointToGlass(camera, inCamera, eye);
     return {
       rightEyePx,
@@ -58,8 +57,3 @@ export class FaceMeasure {
     return this.camera;
   }
 }
-
-const CORNERS = [...EYE_CORNERS.right, ...EYE_CORNERS.left];
-
-const meanOfCorners = (landmarks: Float64Array, axis: 0 | 1): number =>
-  CORNERS.reduce((sum, corner) => sum + landmarks[3 * corner + axis], 0) / CORNERS.length;

@@ -1,0 +1,64 @@
+import { CANONICAL_FACE_CM } from '@oriel/shared/viewer/canonical-face';
+import { FaceMeasure } from './face-measure';
+import type { TrackerSettings } from './tracking-messages';
+
+/** The canonical face's eye centres, midpoints of their corners, are 6.3023 cm apart, 2.6246 up and 3.46565 toward the camera (computed). */
+const BETWEEN_EYES_CM = 6.3023;
+const FRAME = { width: 1280, height: 720 };
+const FOCAL_PX = 640 / Math.tan(Math.PI / 6);
+const SETTINGS: TrackerSettings = {
+  assetsUrl: '',
+  camera: {
+    position: { x: 0, y: 170, z: 0 },
+    pitchRad: 0,
+    yawRad: 0,
+    rollRad: 0,
+    hfovRad: Math.PI / 3,
+    mirrored: false,
+  },
+  viewer: { eyeDistanceMm: 63, distanceFactor: 1 },
+};
+
+/** Landmarks of the canonical face, eyes 63 mm apart, squarely before the camera with the midpoint between them at this place. */
+function landmarksAt(x: number, y: number, z: number): Float64Array {
+  const mm = 63 / BETWEEN_EYES_CM;
+  const landmarks = new Float64Array(CANONICAL_FACE_CM.length);
+  for (let at = 0; at < landmarks.length; at += 3) {
+    const depth = z - (CANONICAL_FACE_CM[at + 2] - 3.46565) * mm;
+    landmarks[at] = FRAME.width / 2 + (FOCAL_PX * (x + CANONICAL_FACE_CM[at] * mm)) / depth;
+    landmarks[at + 1] = FRAME.height / 2 + (FOCAL_PX * (y - (CANONICAL_FACE_CM[at + 1] - 2.6246) * mm)) / depth;
+    landmarks[at + 2] = (FOCAL_PX * (depth - z)) / z;
+  }
+  return landmarks;
+}
+
+describe('FaceMeasure', () => {
+  it.each([
+    [0, 0, 600],
+    [150, -40, 1000],
+    [-300, 60, 2000],
+  ])('finds the eye of a face made at (%i, %i, %i) mm: to 2 mm across and 1 % away', (x, y, z) => {
+    const { eyeInCamera } = new FaceMeasure().measure(landmarksAt(x, y, z), 1, FRAME, SETTINGS);
+    expect(Math.abs(eyeInCamera.x - x)).toBeLessThan(2);
+    expect(Math.abs(eyeInCamera.y - y)).toBeLessThan(2);
+    expect(Math.abs(eyeInCamera.z / z - 1)).toBeLessThan(0.01);
+  });
+
+  it('carries it to the glass: the left of the picture is the right of the glass, and the camera is 170 mm up', () => {
+    const { eye, eyeInCamera } = new FaceMeasure().measure(landmarksAt(150, -40, 1000), 1, FRAME, SETTINGS);
+    expect(eye.x).toBeCloseTo(-eyeInCamera.x, 9);
+    expect(eye.y).toBeCloseTo(170 - eyeInCamera.y, 9);
+    expect(eye.z).toBeCloseTo(eyeInCamera.z, 9);
+  });
+
+  it('gives every sample a place of its own, and heeds a change of set-up', () => {
+    const measure = new FaceMeasure();
+    const first = measure.measure(landmarksAt(0, 0, 600), 1, FRAME, SETTINGS);
+    const second = measure.measure(landmarksAt(0, 0, 600), 1, FRAME, {
+      ...SETTINGS,
+      viewer: { eyeDistanceMm: 126, distanceFactor: 1 },
+    });
+    expect(second.eye).not.toBe(first.eye);
+    expect(second.eyeInCamera.z / first.eyeInCamera.z).toBeCloseTo(2, 6);
+  });
+});
