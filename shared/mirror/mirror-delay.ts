@@ -36,9 +36,8 @@ export interface MirrorDelay {
 /** No loop of screen and camera is quicker or slower than this. */
 const LONGEST_MS = 500;
 const STEP_MS = 4;
-/** The flanks are judged between these shares of the peak. */
-const FLANK_FROM = 0.35;
-const FLANK_TO = 0.92;
+/** How much of each flank is judged: three frames of the camera. Farther down, noise adds up along the flank. */
+const FLANK_MS = 100;
 const PARTS = 4;
 
 /** Below this the blink was not seen: the best of fifty parts of a picture that has nothing to do with it reaches about 0.45 (computed: sqrt(2 ln 500) / sqrt(62)). */
@@ -47,7 +46,8 @@ export const LEAST_CORRELATION = 0.6;
 export const GREATEST_SPREAD_MS = 25;
 
 /** The delay; null where what was seen has nothing to do with what was drawn, or its parts disagree. */
-export function mirrorDelay(drawn: readonly Drawn[], seen: readonly Seen[]): MirrorDelay | null {
+export function mirrorDelay(drawn: readonly Drawn[], filmed: readonly Seen[]): MirrorDelay | null {
+  const seen = withoutTrend(filmed);
   const whole = crossing(drawn, seen);
   if (!whole || whole.correlation < LEAST_CORRELATION) return null;
   const alone = inParts(seen)
@@ -82,6 +82,16 @@ export function bestPlace(
   );
 }
 
+/** Less the straight line through it: daylight and exposure change slowly, the blink does not. */
+function withoutTrend(seen: readonly Seen[]): Seen[] {
+  const n = seen.length;
+  const meanT = seen.reduce((sum, { atMs }) => sum + atMs / n, 0);
+  const mean = seen.reduce((sum, { brightness }) => sum + brightness / n, 0);
+  const tt = seen.reduce((sum, { atMs }) => sum + (atMs - meanT) ** 2, 0);
+  const slope = tt ? seen.reduce((sum, { atMs, brightness }) => sum + (atMs - meanT) * (brightness - mean), 0) / tt : 0;
+  return seen.map(({ atMs, brightness }) => ({ atMs, brightness: brightness - mean - slope * (atMs - meanT) }));
+}
+
 /** Normalised correlation for one delay, -1 to 1; 0 where either does not change. */
 export function correlationAt(drawn: readonly Drawn[], seen: readonly Seen[], delayMs: number): number {
   let [n, sb, sl, sbb, sbl, sll] = [0, 0, 0, 0, 0, 0];
@@ -112,26 +122,26 @@ function peakOf(drawn: readonly Drawn[], seen: readonly Seen[]): { delayMs: numb
   return best;
 }
 
-/** Where the lines through the two flanks of the peak cross; null where there are no two flanks. */
+/** Where the lines through the two flanks of the peak cross; null where there are no two flanks. Found twice: from the top of the staircase, then from there. */
 function crossing(drawn: readonly Drawn[], seen: readonly Seen[]): { delayMs: number; correlation: number } | null {
-  const peak = peakOf(drawn, seen);
-  if (peak.correlation <= 0) return null;
-  const flank = (way: 1 | -1): { d: number; r: number }[] => {
-    const points: { d: number; r: number }[] = [];
-    for (let d = peak.delayMs; Math.abs(d - peak.delayMs) < LONGEST_MS; d += way * STEP_MS) {
-      const r = correlationAt(drawn, seen, d) / peak.correlation;
-      if (r < FLANK_FROM) break;
-      if (r <= FLANK_TO) points.push({ d, r });
-    }
-    return points;
-  };
-  const [rising, falling] = [lineThrough(flank(-1)), lineThrough(flank(1))];
-  if (!rising || !falling || rising.slope <= 0 || falling.slope >= 0) return null;
-  return { delayMs: (falling.at0 - rising.at0) / (rising.slope - falling.slope), correlation: peak.correlation };
+  const { delayMs: top, correlation } = peakOf(drawn, seen);
+  if (correlation <= 0) return null;
+  const flank = (from: number, way: 1 | -1) =>
+    Array.from({ length: FLANK_MS / STEP_MS }, (_, i) => {
+      const d = from + way * (i + 0.5) * STEP_MS;
+      return { d, r: correlationAt(drawn, seen, d) };
+    });
+  let delayMs = top;
+  for (let round = 0; round < 2; round++) {
+    const [rising, falling] = [lineThrough(flank(delayMs, -1)), lineThrough(flank(delayMs, 1))];
+    if (rising.slope <= 0 || falling.slope >= 0) return null;
+    delayMs = (falling.at0 - rising.at0) / (rising.slope - falling.slope);
+    if (Math.abs(delayMs - top) > FLANK_MS) return null;
+  }
+  return { delayMs, correlation };
 }
 
-function lineThrough(points: readonly { d: number; r: number }[]): { at0: number; slope: number } | null {
-  if (points.length < 5) return null;
+function lineThrough(points: readonly { d: number; r: number }[]): { at0: number; slope: number } {
   const n = points.length;
   const meanD = points.reduce((sum, { d }) => sum + d, 0) / n;
   const meanR = points.reduce((sum, { r }) => sum + r, 0) / n;

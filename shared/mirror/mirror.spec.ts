@@ -58,6 +58,12 @@ function filmed({ delayMs, noise = 0.3, jitterMs = 4, exposureMs = 10, phaseMs =
   });
 }
 
+/**
+ * A camera in step with the screen meets its changes at two phases only, half a camera's interval apart: within a quarter of that interval to
+ * either side all delays look alike. No estimator does better.
+ */
+const halfDisplayMs = 1000 / 60 / 2;
+
 describe('the delay in the mirror', () => {
   it('is found to a few milliseconds through noise, rough times and exposure', () => {
     fc.assert(
@@ -68,9 +74,9 @@ describe('the delay in the mirror', () => {
         fc.integer({ min: 1, max: 1000 }),
         (delayMs, phaseMs, exposureMs, seed) => {
           const found = mirrorDelay(drawn, filmed({ delayMs, phaseMs, exposureMs, seed }));
-          expect(Math.abs(found!.delayMs - delayMs)).toBeLessThan(7);
-          expect(Math.abs(found!.medianMs - delayMs)).toBeLessThan(14);
-          expect(found!.spreadMs).toBeLessThan(22);
+          expect(Math.abs(found!.delayMs - delayMs)).toBeLessThan(halfDisplayMs + 3);
+          expect(Math.abs(found!.medianMs - delayMs)).toBeLessThan(halfDisplayMs + 6);
+          expect(found!.spreadMs).toBeLessThan(12);
         },
       ),
       { numRuns: 40 },
