@@ -17,4 +17,9 @@ export interface EyeSample {
   /** Whether `capturedMs` is the camera's own time, and not that of arrival. */
   readonly captureTimeKnown: boolean;
   readonly timings: StageTimings;
+  /** Size of the frame looked at, px. */
+  readonly frameWidth: number;
+  readonly frameHeight: number;
+  /** x and y of each landmark in frame pixels, where `showLandmarks` asked for them and a face was found. */
+  readonly landmarks: Float32Array | null;
 }

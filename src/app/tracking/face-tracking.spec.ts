@@ -124,6 +124,18 @@ describe('FaceTracking', () => {
     expect(worker.told[1]).toMatchObject({ type: 'settings', settings: { viewer: { eyeDistanceMm: 60 } } });
   });
 
+  it('gives the camera’s picture while there is one, and landmarks only when they were asked for', async () => {
+    const { tracking, worker } = await following();
+    expect(tracking.picture()).not.toBeNull();
+    expect(worker.told.some(({ type }) => type === 'landmarks')).toBe(false);
+    tracking.showLandmarks(true);
+    expect(worker.told[1]).toEqual({ type: 'landmarks', wanted: true });
+    tracking.stop();
+    expect(tracking.picture()).toBeNull();
+    await tracking.start(SET_UP);
+    expect(workers[1].told[1]).toEqual({ type: 'landmarks', wanted: true });
+  });
+
   it('hands out the eye with its time of capture, keeps the last place where nobody is, and stops when told', async () => {
     const { tracking, worker } = await following();
     const seen: EyeSample[] = [];

@@ -40,6 +40,10 @@ export class FaceTracking {
   /** Faces followed a second, measured over the last second. */
   readonly facesPerSecond = this.rate.asReadonly();
 
+  private readonly camera = signal<MediaStream | null>(null);
+  /** The camera's own picture, for whoever set the screen up to look at on this screen; null while there is none. */
+  readonly picture = this.camera.asReadonly();
+
   private readonly listeners = new Set<(sample: EyeSample) => void>();
   private readonly sample: Mutable<EyeSample> = {
     found: false,
@@ -48,7 +52,11 @@ export class FaceTracking {
     receivedMs: 0,
     captureTimeKnown: false,
     timings: { cropMs: 0, detectMs: 0, landmarksMs: 0, totalMs: 0 },
+    frameWidth: 0,
+    frameHeight: 0,
+    landmarks: null,
   };
+  private landmarksWanted = false;
   private setUp: TrackingSetUp | null = null;
   private stream: MediaStream | null = null;
   private worker: Worker | null = null;
@@ -85,6 +93,7 @@ export class FaceTracking {
     }
     if (!answer.given) return this.goWithout(answer.why);
     this.stream = answer.stream;
+    this.camera.set(answer.stream);
     this.currentState.set('starting');
     answer.stream.getVideoTracks()[0].addEventListener('ended', () => {
       if (attempt === this.attempt) this.goWithout('no-camera');
@@ -97,6 +106,12 @@ export class FaceTracking {
   change(setUp: TrackingSetUp): void {
     this.setUp = setUp;
     this.tell({ type: 'settings', settings: this.settingsFor(setUp) });
+  }
+
+  /** Whether samples carry the landmarks, to be drawn over the picture; costs a small array a frame, so off unless asked for. */
+  showLandmarks(wanted: boolean): void {
+    this.landmarksWanted = wanted;
+    this.tell({ type: 'landmarks', wanted });
   }
 
   /** Releases the camera, ends the worker and forgets the viewer. */
@@ -124,6 +139,7 @@ export class FaceTracking {
     worker.onmessage = ({ data }: MessageEvent<FromTracker>) => this.hear(data);
     worker.onerror = () => this.goWithout('failed');
     this.tell({ type: 'start', settings: this.settingsFor(setUp) });
+    if (this.landmarksWanted) this.tell({ type: 'landmarks', wanted: true });
   }
 
   private hear(message: FromTracker): void {
@@ -141,7 +157,7 @@ export class FaceTracking {
     }
   }
 
-  private take({ timestampMs, face, timings }: SampleMessage): void {
+  private take({ timestampMs, face, timings, frameWidth, frameHeight, landmarks }: SampleMessage): void {
     if (!this.feed || !this.setUp) return;
     this.feed.answered(timestampMs);
     const { sample } = this;
@@ -151,6 +167,9 @@ export class FaceTracking {
     sample.captureTimeKnown = capturedMs !== null;
     sample.found = face !== null;
     sample.timings = timings;
+    sample.frameWidth = frameWidth;
+    sample.frameHeight = frameHeight;
+    sample.landmarks = landmarks ?? null;
     if (face) {
       this.faces++;
       sample.eye = face.eye;
@@ -176,6 +195,7 @@ export class FaceTracking {
     this.worker?.terminate();
     if (this.stream) endTracks(this.stream);
     this.feed = this.worker = this.stream = null;
+    this.camera.set(null);
     this.faces = 0;
     this.rate.set(0);
   }

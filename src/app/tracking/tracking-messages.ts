@@ -39,6 +39,8 @@ export type ToTracker =
   | FrameMessage
   | { readonly type: 'settings'; readonly settings: TrackerSettings }
   | { readonly type: 'forget' }
+  /** Whether samples should carry the landmarks, to be drawn at the bench; they do not unless asked. */
+  | { readonly type: 'landmarks'; readonly wanted: boolean }
   | { readonly type: 'stop' };
 
 /** Milliseconds spent on one frame, by stage; `totalMs` is from the frame in hand to the sample made. */
@@ -75,6 +77,8 @@ export interface SampleMessage {
   readonly frameHeight: number;
   /** The face followed, or null where nobody is. */
   readonly face: FaceSample | null;
+  /** x and y of each landmark in frame pixels; only where they were asked for and a face is followed. */
+  readonly landmarks?: Float32Array;
   readonly timings: StageTimings;
   /** Tensors alive in the worker: constant, or something leaks. */
   readonly tensors: number;

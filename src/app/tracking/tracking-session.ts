@@ -13,6 +13,7 @@ export class TrackingSession {
   private models: FaceModels | null = null;
   private tracker: Tracker | null = null;
   private settings: TrackerSettings | null = null;
+  private landmarksWanted = false;
   private reader: ReadableStreamDefaultReader<VideoFrame> | null = null;
 
   constructor(private readonly say: (message: FromTracker) => void) {}
@@ -39,6 +40,9 @@ export class TrackingSession {
         return this.follow(framesOf(message.track));
       case 'frame':
         return this.look(message.image, message.timestampMs);
+      case 'landmarks':
+        this.landmarksWanted = message.wanted;
+        return;
       case 'forget':
         this.tracker?.forget();
         return;
@@ -85,6 +89,7 @@ export class TrackingSession {
         frameWidth: picture.width,
         frameHeight: picture.height,
         face,
+        ...(face && this.landmarksWanted ? { landmarks: acrossAndDown(this.tracker.points) } : {}),
         timings: { cropMs: cropMs + readMs, detectMs, landmarksMs, totalMs: performance.now() - begun },
         tensors: this.models.tensors(),
       });
@@ -100,6 +105,10 @@ export class TrackingSession {
     models?.dispose();
   }
 }
+
+/** x and y of landmarks whose z is left out. */
+const acrossAndDown = (points: Float64Array): Float32Array =>
+  Float32Array.from({ length: (points.length / 3) * 2 }, (_, i) => points[3 * (i >> 1) + (i & 1)]);
 
 async function fetchFile(url: string): Promise<ArrayBuffer> {
   const reply = await fetch(url);
