@@ -2,7 +2,10 @@ import { readFile } from 'node:fs/promises';
 import { fileURLToPath } from 'node:url';
 import sharp, { type Sharp } from 'sharp';
 import { beforeAll, describe, expect, it } from 'vitest';
+import { LADDER_STEPS } from '@oriel/shared/ladder/steps';
+import { USUAL_VIEWER } from '@oriel/shared/viewer/eye-from-landmarks';
 import { leftEyeOf, rightEyeOf } from '../../src/app/tracking/face-landmarks';
+import { FaceMeasure } from '../../src/app/tracking/face-measure';
 import type { FaceModels } from '../../src/app/tracking/face-models';
 import type { Picture } from '../../src/app/tracking/picture';
 import { RgbaPicture } from '../../src/app/tracking/rgba-picture';
@@ -109,5 +112,45 @@ describe('the tracker on a photograph', () => {
     const before = models.tensors();
     for (let k = 0; k < 12; k++) tracker.look((k < 8 ? someone : nobody).picture, 33 * k);
     expect(models.tensors()).toBe(before);
+  });
+});
+
+describe('the steps of the ladder on a photograph', () => {
+  let models: FaceModels;
+  beforeAll(async () => {
+    models = await loadFaceModels({ folder, read });
+  });
+  const settings = {
+    assetsUrl: '',
+    camera: { position: { x: 0, y: 0, z: 0 }, pitchRad: 0, yawRad: 0, rollRad: 0, hfovRad: Math.PI / 3, mirrored: false },
+    viewer: USUAL_VIEWER,
+  };
+  /** The eye as the step measures it after eight frames, in the camera's mm. */
+  const eyeOn = (step: number, { picture }: Placed) => {
+    const tracker = new Tracker(models);
+    tracker.looking = LADDER_STEPS[step].looking;
+    let belief: number | null = null;
+    for (let k = 0; k < 8; k++) belief = tracker.look(picture, 33 * k);
+    expect(belief).not.toBeNull();
+    const measure = new FaceMeasure();
+    const face = tracker.detected
+      ? measure.measureEyes(tracker.detected, belief!, picture, settings)
+      : measure.measure(tracker.points, belief!, picture, settings);
+    return face.eyeInCamera;
+  };
+  const distances = [24, 40, 60, 84];
+
+  it.each(distances)('guarding seldom or often, or not, changes no landmark of a face at rest, eyes %i px apart', async (ipd) => {
+    const frame = await frameWith(640, 480, { x: 330, y: 210, ipd });
+    const landmarks = [0, 1, 2].map((step) => eyeOn(step, frame));
+    expect(landmarks[0]).toEqual(landmarks[1]);
+    expect(landmarks[2]).toEqual(landmarks[1]);
+  });
+
+  it.each(distances)('the detector alone measures the same eye, to 0.02 of its distance, eyes %i px apart', async (ipd) => {
+    const frame = await frameWith(640, 480, { x: 330, y: 210, ipd });
+    const fine = eyeOn(1, frame);
+    const coarse = eyeOn(3, frame);
+    expect(Math.hypot(coarse.x - fine.x, coarse.y - fine.y, coarse.z - fine.z)).toBeLessThan(0.02 * fine.z);
   });
 });

@@ -92,6 +92,7 @@ export class Player {
       if (found) this.playing?.face(eye, capturedMs);
       else this.playing?.nobody(capturedMs);
     });
+    this.tracking.minds(() => this.playing?.meter.framesPerSecond(performance.now()) ?? 0);
     inject(DestroyRef).onDestroy(() => {
       leaving.abort();
       awake();
@@ -197,6 +198,7 @@ export class Player {
       captureToDrawnMs: playing?.meter.captureToDrawnMs() ?? null,
       eye: { ...(playing?.eye ?? { x: 0, y: 0, z: 0 }) },
       renderer: playing?.facts?.name ?? 'nothing yet',
+      looking: this.tracking.ladder().words,
     });
   }
 

@@ -7,6 +7,8 @@ export interface Figures {
   readonly captureToDrawnMs: number | null;
   readonly eye: { readonly x: number; readonly y: number; readonly z: number };
   readonly renderer: string;
+  /** How finely is looked, in words. */
+  readonly looking: string;
 }
 
 /** Figures in the corner of the picture, for those who set up the room. */
@@ -25,6 +27,8 @@ export interface Figures {
       <dd>{{ shown.eye.x.toFixed(0) }}, {{ shown.eye.y.toFixed(0) }}, {{ shown.eye.z.toFixed(0) }}</dd>
       <dt>Drawn with</dt>
       <dd>{{ shown.renderer }}</dd>
+      <dt>Looking by</dt>
+      <dd>{{ shown.looking }}</dd>
     </dl>
   `,
   styles: `

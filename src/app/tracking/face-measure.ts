@@ -1,7 +1,13 @@
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
+import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
 import { leftEyeOf, rightEyeOf } from './face-landmarks';
+import type { Eyes } from './guard';
+import { eyeLineAngle } from './region';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
+
+/** The distance between the eyes as the fit of all landmarks gives it, against that between the detector's points: computed, tests/outside/tracking.spec.ts. */
+const DETECTOR_SPREAD = 0.983;
 
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
@@ -39,6 +45,29 @@ export class FaceMeasure {
       head: { ...headAngles },
       belief,
     };
+  }
+
+  /**
+   * What the detector's two eyes alone say: the distance is taken as if the head faced the camera, so a turned head seems farther away
+   * by 1/cos(yaw), 15 % at 30 degrees.
+   */
+  measureEyes(
+    { rightEye, leftEye }: Eyes,
+    belief: number,
+    frame: { readonly width: number; readonly height: number },
+    settings: TrackerSettings,
+  ): FaceSample {
+    const camera = this.cameraFor(frame, settings);
+    const { eyeDistanceMm, distanceFactor } = settings.viewer;
+    const f = focalPx(camera);
+    const ipdPx = Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y) * DETECTOR_SPREAD;
+    const eyePx = { x: (rightEye.x + leftEye.x) / 2, y: (rightEye.y + leftEye.y) / 2 };
+    const z = distanceFromSize(f, eyeDistanceMm, ipdPx) / distanceFactor;
+    const eyeInCamera = { x: ((eyePx.x - camera.widthPx / 2) * z) / f, y: ((eyePx.y - camera.heightPx / 2) * z) / f, z };
+    const eye = { x: 0, y: 0, z: 0 };
+    pointToGlass(camera, eyeInCamera, eye);
+    const head = { yawRad: 0, pitchRad: 0, rollRad: eyeLineAngle(rightEye, leftEye) };
+    return { rightEyePx: rightEye, leftEyePx: leftEye, eyePx, ipdPx, eye, eyeInCamera, head, belief };
   }
 
   private cameraFor(

@@ -3,6 +3,7 @@ import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
 import { requestCamera } from './camera-request';
 import type { EyeSample } from './eye-sample';
 import type { FrameFeed } from './frame-feed';
+import { LadderKeeper } from './ladder-keeper';
 import type { CameraSetUp, FromTracker, SampleMessage, ToTracker, TrackerSettings } from './tracking-messages';
 import type { TrackingState } from './tracking-state';
 import { CAMERAS, FRAME_FEED, TRACKING_WORKER } from './tracking-surroundings';
@@ -43,6 +44,11 @@ export class FaceTracking {
   private readonly camera = signal<MediaStream | null>(null);
   /** The camera's own picture, for whoever set the screen up to look at on this screen; null while there is none. */
   readonly picture = this.camera.asReadonly();
+  private readonly keeper = new LadderKeeper();
+  private readonly ladderState = signal(this.keeper.state);
+  /** How finely is looked, by what looking takes on this machine; kept over losses of the camera. */
+  readonly ladder = this.ladderState.asReadonly();
+  private framesPerSecond: (() => number) | null = null;
 
   private readonly listeners = new Set<(sample: EyeSample) => void>();
   private readonly sample: Mutable<EyeSample> = {
@@ -130,6 +136,11 @@ export class FaceTracking {
     return () => this.listeners.delete(listener);
   }
 
+  /** Whoever draws tells how many frames a second, so that tracking gives way where it hampers them. */
+  minds(framesPerSecond: () => number): void {
+    this.framesPerSecond = framesPerSecond;
+  }
+
   private readonly camerasChanged = (): void => {
     if (this.setUp && !this.stream && this.currentState() !== 'asking') void this.start(this.setUp);
   };
@@ -150,6 +161,8 @@ export class FaceTracking {
         return;
       case 'sample':
         return this.take(message);
+      case 'skipped':
+        return this.feed?.answered(message.timestampMs);
       case 'ended':
         return this.goWithout('no-camera');
       case 'failed':
@@ -172,6 +185,7 @@ export class FaceTracking {
     sample.landmarks = landmarks ?? null;
     if (face) {
       this.faces++;
+      this.keeper.note(timings.totalMs);
       sample.eye = face.eye;
     }
     this.currentState.set(face ? 'following' : 'nobody');
@@ -203,6 +217,10 @@ export class FaceTracking {
   private count(): void {
     this.rate.set(this.faces);
     this.faces = 0;
+    if (!this.keeper.second(performance.now(), this.framesPerSecond?.() ?? null)) return;
+    this.ladderState.set(this.keeper.state);
+    if (this.setUp) this.change(this.setUp);
+    if (this.keeper.step.looking.by === 'nothing' && this.feed) this.currentState.set('nobody');
   }
 
   private tell(message: ToTracker): void {
@@ -210,7 +228,7 @@ export class FaceTracking {
   }
 
   private settingsFor(setUp: TrackingSetUp): TrackerSettings {
-    return { assetsUrl: this.assetsUrl, camera: setUp.camera, viewer: setUp.viewer };
+    return { assetsUrl: this.assetsUrl, camera: setUp.camera, viewer: setUp.viewer, looking: this.keeper.step.looking };
   }
 }
 

@@ -39,11 +39,11 @@ export class Guard {
   private previous: Eyes | null = null;
 
   /** Takes in the landmarks' eyes of this frame; whether a guarding look is due now. */
-  due(eyes: Eyes): boolean {
+  due(eyes: Eyes, intervalFrames = INTERVAL_FRAMES): boolean {
     if (this.previous && differ(eyes, this.previous, 0.75, 1.2)) this.alert = ALERT_FRAMES;
     this.previous = eyes;
     this.sinceLook++;
-    if (this.alert === 0 && this.misses === 0 && this.sinceLook < INTERVAL_FRAMES) return false;
+    if (this.alert === 0 && this.misses === 0 && this.sinceLook < intervalFrames) return false;
     if (this.alert > 0) this.alert--;
     this.sinceLook = 0;
     return true;

@@ -1,3 +1,4 @@
+import type { Looking } from '@oriel/shared/ladder/steps';
 import type { Point3 } from '@oriel/shared/projection/types';
 import type { Camera } from '@oriel/shared/viewer/camera';
 import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
@@ -22,6 +23,8 @@ export interface TrackerSettings {
   readonly assetsUrl: string;
   readonly camera: CameraSetUp;
   readonly viewer: ViewerMeasure;
+  /** How finely to look; as on the ladder's first step where left out. */
+  readonly looking?: Looking;
 }
 
 /** One frame to look at; its `image` is transferred, and closed by the worker. */
@@ -58,12 +61,13 @@ export interface FaceSample {
   readonly leftEyePx: PixelPoint;
   /** Midway between the two eyes. */
   readonly eyePx: PixelPoint;
-  /** Distance between the eyes as it would be seen with the head facing the camera, from the fit of all landmarks. */
+  /** Distance between the eyes as it would be seen with the head facing the camera, from the fit of all landmarks; of the detector's points, as it is seen. */
   readonly ipdPx: number;
   /** The eye in millimetres from the centre of the glass: x to the viewer's right, y up, z out of the glass. */
   readonly eye: Point3;
   /** The same in the camera's coordinates. */
   readonly eyeInCamera: Point3;
+  /** Where only the detector looked, yaw and pitch are not known and are 0. */
   readonly head: Readonly<HeadAngles>;
   /** The landmark model's own belief that this is a face, 0 to 1. */
   readonly belief: number;
@@ -87,5 +91,7 @@ export interface SampleMessage {
 export type FromTracker =
   | { readonly type: 'ready'; readonly readsTracks: boolean }
   | SampleMessage
+  /** A frame passed over, as the ladder has it. */
+  | { readonly type: 'skipped'; readonly timestampMs: number }
   | { readonly type: 'ended' }
   | { readonly type: 'failed'; readonly reason: string };

@@ -1,15 +1,19 @@
+import { FIRST_STEP, LADDER_STEPS } from '@oriel/shared/ladder/steps';
 import { FaceMeasure } from './face-measure';
 import type { FaceModels } from './face-models';
 import { FrameReader } from './frame-picture';
+import type { Picture } from './picture';
+import { Pace } from './pace';
 import { loadFaceModels } from './tfjs-face-models';
 import { framesOf, readsTracks } from './track-processor';
 import { Tracker } from './tracker';
-import type { FromTracker, ToTracker, TrackerSettings } from './tracking-messages';
+import type { FaceSample, FromTracker, ToTracker, TrackerSettings } from './tracking-messages';
 
 /** What the worker does with each message; the worker itself only passes messages. Frames are closed whatever happens to them. */
 export class TrackingSession {
   private readonly frames = new FrameReader();
   private readonly measure = new FaceMeasure();
+  private readonly pace = new Pace();
   private models: FaceModels | null = null;
   private tracker: Tracker | null = null;
   private settings: TrackerSettings | null = null;
@@ -32,8 +36,7 @@ export class TrackingSession {
       case 'start':
         return this.start(message.settings);
       case 'settings':
-        this.settings = message.settings;
-        return;
+        return this.take(message.settings);
       case 'stream':
         return this.follow(message.frames);
       case 'track':
@@ -52,13 +55,20 @@ export class TrackingSession {
   }
 
   private async start(settings: TrackerSettings): Promise<void> {
-    this.settings = settings;
     this.models ??= await loadFaceModels({
       folder: settings.assetsUrl,
       read: (name) => fetchFile(settings.assetsUrl + name),
     });
     this.tracker = new Tracker(this.models);
+    this.take(settings);
     this.say({ type: 'ready', readsTracks: readsTracks() });
+  }
+
+  private take(settings: TrackerSettings): void {
+    this.settings = settings;
+    if (!this.tracker) return;
+    this.tracker.looking = settings.looking ?? LADDER_STEPS[FIRST_STEP].looking;
+    if (this.tracker.looking.by === 'nothing') this.tracker.forget();
   }
 
   /** Reads the camera's frames until it ends; the stream keeps only the newest, so that a slow look loses frames and not time. */
@@ -77,11 +87,12 @@ export class TrackingSession {
     try {
       if (!this.tracker || !this.models || !this.settings)
         throw new Error('A frame came before the tracker was started.');
+      if (!this.pace.due(timestampMs, this.tracker.looking.mostPerS)) return this.say({ type: 'skipped', timestampMs });
       const begun = performance.now();
       const picture = await this.frames.read(image);
       const readMs = performance.now() - begun;
       const belief = this.tracker.look(picture, timestampMs);
-      const face = belief === null ? null : this.measure.measure(this.tracker.points, belief, picture, this.settings);
+      const face = belief === null ? null : this.faceIn(this.tracker, belief, picture, this.settings);
       const { cropMs, detectMs, landmarksMs } = this.tracker.looks.times;
       this.say({
         type: 'sample',
@@ -96,6 +107,12 @@ export class TrackingSession {
     } finally {
       image.close();
     }
+  }
+
+  private faceIn(tracker: Tracker, belief: number, frame: Picture, settings: TrackerSettings): FaceSample {
+    return tracker.detected
+      ? this.measure.measureEyes(tracker.detected, belief, frame, settings)
+      : this.measure.measure(tracker.points, belief, frame, settings);
   }
 
   private async stop(): Promise<void> {
