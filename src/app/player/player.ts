@@ -169,6 +169,7 @@ export class Player {
         this.missing.set(missing);
         this.showing.set(true);
       },
+      handChanged: (byHand) => this.byHand.set(byHand),
     });
     this.playing.faceExpected = this.following.on();
     await this.playing.start();
@@ -217,20 +218,13 @@ export class Player {
     this.stillness.stir();
     const dragged = event.buttons > 0 && this.picture().nativeElement.contains(event.target as Node);
     const alone = this.tracking.state() !== 'following' && !this.following.still;
-    if (dragged || (alone && event.type === 'pointermove')) {
-      this.playing?.point(event.clientX, event.clientY);
-      this.byHand.set(true);
-    }
+    if (dragged || (alone && event.type === 'pointermove')) this.playing?.point(event.clientX, event.clientY);
   }
 
   private pressed(event: KeyboardEvent): void {
     if (event.ctrlKey || event.metaKey || event.altKey) return;
     this.stillness.stir();
-    if (this.playing?.press(event.key)) {
-      this.byHand.set(true);
-      event.preventDefault();
-      return;
-    }
+    if (this.playing?.press(event.key)) return event.preventDefault();
     switch (event.key) {
       case 'f':
         return void this.toggleFullScreen();

@@ -19,6 +19,8 @@ export interface PlayingSurroundings {
   readonly still: boolean;
   /** Called whenever pictures have come, with the names of the layers that have none. */
   readonly loaded: (missing: readonly string[]) => void;
+  /** Called when pointer or keys take the eye, and when they give it back. */
+  readonly handChanged: (byHand: boolean) => void;
 }
 
 /** A scene being played: it owns the renderer and the frame loop, and ends both. */
@@ -35,6 +37,7 @@ export class Playing {
   private judge: IntervalJudge | null = null;
   private frame = 0;
   private capturedMs = NaN;
+  private byHand = false;
   private over = false;
 
   /** @throws GeometryError where the scene's figures are impossible. */
@@ -50,10 +53,6 @@ export class Playing {
 
   get facts(): RendererFacts | null {
     return this.renderer?.facts ?? null;
-  }
-
-  get byHand(): boolean {
-    return this.viewpoint.byHand;
   }
 
   /** Loads the pictures and starts drawing. */
@@ -126,6 +125,7 @@ export class Playing {
   private readonly drawFrame = (tMs: number): void => {
     this.frame = this.window.requestAnimationFrame(this.drawFrame);
     this.viewpoint.at(tMs, this.faceExpected, this.eye);
+    if (this.byHand !== this.viewpoint.byHand) this.surroundings.handChanged((this.byHand = this.viewpoint.byHand));
     this.renderer?.draw(this.eye);
     this.meter.frame(tMs);
     if (!Number.isNaN(this.capturedMs)) this.meter.drawn(this.capturedMs, performance.now());

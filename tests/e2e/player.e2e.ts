@@ -1,0 +1,285 @@
+import { chromium, type Locator, type Page } from '@playwright/test';
+import { demoScene } from './player/asking';
+import { keepScreen } from './player/this-screen';
+import { expect, signIn, test } from './fixtures';
+import { demoAccount } from './demo-accounts';
+import { chromiumPath, ignoredDefaults } from './set-up/chromium';
+
+const line = (page: Page) => page.getByTestId('player-line');
+const layers = (page: Page) => page.locator('oriel-player .picture img');
+const control = (page: Page, name: RegExp | string) => page.getByRole('toolbar').getByRole('button', { name });
+const following = (page: Page) => page.getByRole('switch', { name: /Following/ });
+
+/** Opens the player on the demo's ridge and waits for its layers. */
+async function play(page: Page, query = ''): Promise<string> {
+  await page.goto('/scenes');
+  const scene = await demoScene(page);
+  await page.goto(`/play/${scene.id}${query}`);
+  await expect(layers(page)).toHaveCount(scene.document.layers.length);
+  // Sharp pictures take the place of the first ones: no element found before that may be used after it.
+  await page.waitForLoadState('networkidle');
+  return scene.id;
+}
+
+const shiftOf = (layer: Locator) => layer.evaluate((element) => new DOMMatrix(getComputedStyle(element).transform).e);
+
+test('before the first play the set-up is offered; played as it is, the camera is asked for and nobody is seen', async ({ signedInPage, expectAccessible }) => {
+  const page = await signedInPage('viewer');
+  await play(page);
+  await expect(line(page)).toContainText('This screen has not been measured');
+  await expectAccessible(page);
+  await page.getByRole('button', { name: 'Play as it is' }).click();
+  await expect(line(page)).toContainText('Nobody is in view', { timeout: 30_000 });
+  await expect(line(page)).toContainText('The camera’s pictures stay in this page and are not kept.');
+  await expect(line(page)).toBeHidden({ timeout: 15_000 });
+  await page.reload();
+  await expect(layers(page).first()).toBeVisible();
+  await expect(page.getByText('This screen has not been measured')).toHaveCount(0);
+});
+
+test('following is switched off by an ordinary control, which is remembered; pointer and keys stand in', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await play(page);
+  await following(page).click();
+  await expect(following(page)).toHaveAttribute('aria-checked', 'false');
+  await expect(line(page)).toContainText('Look around with the pointer');
+  await page.reload();
+  await expect(following(page)).toHaveAttribute('aria-checked', 'false');
+  await expect(layers(page).first()).toBeVisible();
+
+  const back = layers(page).first();
+  await page.mouse.move(1300, 450);
+  await page.waitForTimeout(1500);
+  const fromRight = await shiftOf(back);
+  await page.mouse.move(140, 450);
+  await page.waitForTimeout(1500);
+  const fromLeft = await shiftOf(back);
+  // Behind the glass a layer goes with the eye.
+  expect(fromRight - fromLeft).toBeGreaterThan(50);
+  await page.keyboard.press('ArrowRight');
+  await page.keyboard.press('ArrowRight');
+  await page.waitForTimeout(1500);
+  expect(await shiftOf(back)).toBeGreaterThan(fromLeft + 5);
+  await page.keyboard.press('Home');
+  await page.waitForTimeout(1500);
+  expect(await shiftOf(back)).toBeGreaterThan(fromLeft + 50);
+});
+
+test('dragging stands in for the face while following is on', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await play(page);
+  const back = layers(page).first();
+  await page.mouse.move(720, 450);
+  await page.mouse.down();
+  await page.mouse.move(1350, 450, { steps: 5 });
+  await page.waitForTimeout(1200);
+  const right = await shiftOf(back);
+  await page.mouse.move(90, 450, { steps: 5 });
+  await page.waitForTimeout(1200);
+  expect(right - (await shiftOf(back))).toBeGreaterThan(50);
+  await page.mouse.up();
+});
+
+test('the figures come and go with the letter i', async ({ signedInPage, expectAccessible }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await play(page);
+  const readOut = page.locator('oriel-read-out');
+  await expect(readOut).toHaveCount(0);
+  await page.keyboard.press('i');
+  for (const words of ['Frames drawn a second', 'Faces tracked a second', 'Capture to drawing, ms', 'Eye, mm', 'css']) await expect(readOut).toContainText(words);
+  await expect.poll(async () => Number(await readOut.locator('dd').first().textContent())).toBeGreaterThan(10);
+  await expectAccessible(page);
+  await page.keyboard.press('i');
+  await expect(readOut).toHaveCount(0);
+});
+
+test('less motion is honoured: nothing follows or drifts until it is asked for', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await page.emulateMedia({ reducedMotion: 'reduce' });
+  await keepScreen(page);
+  await play(page);
+  await expect(line(page)).toContainText('less motion');
+  await expect(following(page)).toHaveAttribute('aria-checked', 'false');
+  const before = await shiftOf(layers(page).first());
+  await page.mouse.move(1300, 300);
+  await page.waitForTimeout(2000);
+  expect(await shiftOf(layers(page).first())).toBe(before);
+  await page.getByRole('button', { name: 'Follow my face' }).click();
+  await expect(line(page)).toContainText(/camera|follow|Nobody/);
+});
+
+test('a camera refused is said, with how to allow it, and the picture plays on without', async ({ baseURL }) => {
+  await inBrowserWith(baseURL!, ['--use-fake-device-for-media-stream'], async (page) => {
+    await expect(line(page)).toContainText('The camera was refused. To allow it, click the sign left of the address', { timeout: 20_000 });
+    await page.getByRole('button', { name: 'Go on without' }).click();
+    await expect(line(page)).toContainText('Look around with the pointer');
+  });
+});
+
+test('a screen without a camera is told so', async ({ baseURL }) => {
+  await inBrowserWith(baseURL!, ['--use-fake-ui-for-media-stream'], async (page) => {
+    await expect(line(page)).toContainText('No camera was found', { timeout: 20_000 });
+    await page.mouse.move(1300, 450);
+    await page.waitForTimeout(1200);
+    const right = await shiftOf(layers(page).first());
+    await page.mouse.move(140, 450);
+    await page.waitForTimeout(1200);
+    expect(right - (await shiftOf(layers(page).first()))).toBeGreaterThan(50);
+  });
+});
+
+test('a camera in use elsewhere is told so, and taken up when it is free', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  // No second program can hold Chromium's fake camera: the browser's own answer is put in its place, once.
+  await page.addInitScript(() => {
+    const { mediaDevices } = navigator;
+    const real = mediaDevices.getUserMedia.bind(mediaDevices);
+    let busy = true;
+    mediaDevices.getUserMedia = (wanted) => {
+      if (!busy) return real(wanted);
+      busy = false;
+      return Promise.reject(new DOMException('Could not start video source', 'NotReadableError'));
+    };
+  });
+  await play(page);
+  await expect(line(page)).toContainText('in use elsewhere');
+  await expect(line(page)).toContainText('Nobody is in view', { timeout: 30_000 });
+});
+
+test('a scene that is not there, and a server that is not, are told with a way on', async ({ signedInPage, expectErrors }) => {
+  expectErrors(/404/, /ERR_FAILED|Failed to load/);
+  const page = await signedInPage('viewer');
+  await page.goto('/play/00000000-0000-4000-8000-000000000000');
+  await expect(page.getByRole('heading', { name: 'This scene is not here' })).toBeVisible();
+  await page.getByRole('link', { name: 'Back' }).click();
+  await expect(page).toHaveURL(/\/scenes/);
+
+  const scene = await demoScene(page);
+  await page.route('**/api/scenes/*', (route) => route.abort());
+  await page.goto(`/play/${scene.id}`);
+  await expect(page.getByText('The server cannot be reached.')).toBeVisible();
+  await page.unroute('**/api/scenes/*');
+  await page.getByRole('button', { name: 'Try again' }).click();
+  await expect(layers(page).first()).toBeVisible();
+});
+
+test('layers that do not come are named, and loaded on another try', async ({ signedInPage, expectErrors }) => {
+  expectErrors(/ERR_FAILED|Failed to load/);
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await page.goto('/scenes');
+  const scene = await demoScene(page);
+  const sky = scene.document.layers.find(({ name }) => name === 'Sky')!;
+  await page.route(`**/api/images/${sky.image.id}/*`, (route) => route.abort());
+  await page.goto(`/play/${scene.id}`);
+  await expect(line(page)).toContainText('The picture of the layer Sky could not be loaded.');
+  await page.unroute(`**/api/images/${sky.image.id}/*`);
+  await line(page).getByRole('button', { name: 'Try again' }).click();
+  await expect(layers(page)).toHaveCount(scene.document.layers.length);
+  await expect(page.getByText('could not be loaded')).toHaveCount(0);
+});
+
+test('Escape leads back to where the viewer came from', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await play(page);
+  await page.keyboard.press('Escape');
+  await expect(page).toHaveURL(/\/scenes$/);
+});
+
+test('full screen on demand', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await play(page);
+  await control(page, 'Full screen').click();
+  await expect.poll(() => page.evaluate(() => document.fullscreenElement?.tagName)).toBe('ORIEL-PLAYER');
+  await page.keyboard.press('f');
+  await expect.poll(() => page.evaluate(() => document.fullscreenElement)).toBeNull();
+});
+
+test('30 times opened and left, nothing stays behind', async ({ signedInPage }) => {
+  test.setTimeout(240_000);
+  const page = await signedInPage('viewer');
+  await keepScreen(page);
+  await page.addInitScript(() => {
+    const counts = { tracks: [] as MediaStreamTrack[], frames: 0 };
+    const { mediaDevices } = navigator;
+    const real = mediaDevices.getUserMedia.bind(mediaDevices);
+    mediaDevices.getUserMedia = async (wanted) => {
+      const stream = await real(wanted);
+      counts.tracks.push(...stream.getTracks());
+      return stream;
+    };
+    const frame = window.requestAnimationFrame.bind(window);
+    window.requestAnimationFrame = (callback) => {
+      counts.frames++;
+      return frame(callback);
+    };
+    Object.assign(window, { counts });
+  });
+  await page.goto('/scenes');
+  const scene = await demoScene(page);
+  const session = await page.context().newCDPSession(page);
+  await session.send('Performance.enable');
+  const measured = async () => {
+    await session.send('HeapProfiler.collectGarbage');
+    const { metrics } = await session.send('Performance.getMetrics');
+    const of = (name: string) => metrics.find((metric) => metric.name === name)!.value;
+    return { nodes: of('Nodes'), listeners: of('JSEventListeners'), heap: of('JSHeapUsedSize') };
+  };
+  const visit = async () => {
+    await page.evaluate((path) => {
+      history.pushState(null, '', path);
+      dispatchEvent(new PopStateEvent('popstate'));
+    }, `/play/${scene.id}`);
+    await expect(layers(page)).toHaveCount(scene.document.layers.length);
+    await page.waitForTimeout(700);
+    await page.evaluate(() => {
+      history.pushState(null, '', '/account');
+      dispatchEvent(new PopStateEvent('popstate'));
+    });
+    await expect(page.locator('oriel-player')).toHaveCount(0);
+  };
+  for (let i = 0; i < 6; i++) await visit();
+  await page.waitForTimeout(1000);
+  const early = await measured();
+  for (let i = 6; i < 30; i++) await visit();
+  await page.waitForTimeout(1000);
+  const late = await measured();
+  expect(late.nodes).toBeLessThan(early.nodes + 200);
+  expect(late.listeners).toBeLessThan(early.listeners + 40);
+  expect(late.heap).toBeLessThan(early.heap + 6e6);
+  expect(page.workers()).toEqual([]);
+  const left = await page.evaluate(async () => {
+    const { counts } = window as unknown as { counts: { tracks: MediaStreamTrack[]; frames: number } };
+    const before = counts.frames;
+    await new Promise((resolve) => setTimeout(resolve, 500));
+    return { tracks: counts.tracks.length, live: counts.tracks.filter(({ readyState }) => readyState === 'live').length, frames: counts.frames - before };
+  });
+  expect(left.tracks).toBeGreaterThanOrEqual(30);
+  expect(left.live).toBe(0);
+  expect(left.frames).toBe(0);
+});
+
+/** Plays the demo in a browser of its own with other answers about cameras. */
+async function inBrowserWith(baseURL: string, args: string[], check: (page: Page) => Promise<void>): Promise<void> {
+  const browser = await chromium.launch({
+    executablePath: chromiumPath,
+    args: ['--headless=new', '--no-sandbox', '--disable-gpu', '--disable-background-networking', ...args],
+    ignoreDefaultArgs: ignoredDefaults,
+  });
+  try {
+    const page = await (await browser.newContext({ baseURL, viewport: { width: 1440, height: 900 } })).newPage();
+    await keepScreen(page);
+    const { email, password } = demoAccount('viewer');
+    await signIn(page, email, password);
+    await play(page);
+    await check(page);
+  } finally {
+    await browser.close();
+  }
+}
