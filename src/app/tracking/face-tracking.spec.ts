@@ -182,6 +182,7 @@ describe('FaceTracking', () => {
     cameras.failing = 'NotFoundError';
     cameras.tracks[0].dispatchEvent(new Event('ended'));
     expect(tracking.state()).toBe('no-camera');
+    await vi.advanceTimersByTimeAsync(300);
     expect(workers[0].terminated).toBe(true);
     cameras.failing = null;
     cameras.dispatchEvent(new Event('devicechange'));
@@ -200,6 +201,8 @@ describe('FaceTracking', () => {
   it('frees everything at stop, and when its component goes', async () => {
     const { tracking, worker } = await following();
     tracking.stop();
+    expect(worker.told.at(-1)).toEqual({ type: 'stop' });
+    await vi.advanceTimersByTimeAsync(300);
     expect([tracking.state(), worker.terminated, cameras.tracks[0].stopped, answered.includes(-1)]).toEqual([
       'off',
       true,
@@ -208,6 +211,7 @@ describe('FaceTracking', () => {
     ]);
     await tracking.start(SET_UP);
     TestBed.resetTestingModule();
+    await vi.advanceTimersByTimeAsync(300);
     expect([workers[1].terminated, cameras.tracks[1].stopped]).toEqual([true, true]);
   });
 

@@ -19,6 +19,8 @@ export interface TrackingSetUp {
 /** Without a camera, or with one in use elsewhere, it is asked for again this often. */
 const RETRY_MS = 5000;
 const RATE_MS = 1000;
+/** How long a worker that is dismissed has to close its last frame. */
+const FAREWELL_MS = 300;
 
 type Mutable<T> = { -readonly [K in keyof T]: T[K] };
 
@@ -206,7 +208,7 @@ export class FaceTracking {
     clearTimeout(this.retry);
     clearInterval(this.counter);
     this.feed?.stop();
-    this.worker?.terminate();
+    if (this.worker) dismiss(this.worker);
     if (this.stream) endTracks(this.stream);
     this.feed = this.worker = this.stream = null;
     this.camera.set(null);
@@ -230,6 +232,14 @@ export class FaceTracking {
   private settingsFor(setUp: TrackingSetUp): TrackerSettings {
     return { assetsUrl: this.assetsUrl, camera: setUp.camera, viewer: setUp.viewer, looking: this.keeper.step.looking };
   }
+}
+
+/** Lets the worker close the frames it still holds before it ends; what it says meanwhile is not heard. */
+function dismiss(worker: Worker): void {
+  worker.onmessage = worker.onerror = null;
+  const stop: ToTracker = { type: 'stop' };
+  worker.postMessage(stop);
+  setTimeout(() => worker.terminate(), FAREWELL_MS);
 }
 
 function endTracks(stream: MediaStream): void {
