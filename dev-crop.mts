@@ -1,4 +1,0 @@
-import { build } from 'esbuild'; import { serveBench } from './tests/bench/tracking/serve'; import { chromium } from '@playwright/test';
-const f = '/tmp/tk/live'; await build({ entryPoints: { 'bench-page': '/tmp/tk/live/crop.ts' }, outdir: f, bundle: true, format: 'esm', tsconfig: 'tsconfig.json', logLevel: 'error' });
-const s = await serveBench(f, f, f + '/crop.ts'); const b = await chromium.launch({ executablePath: '/usr/bin/chromium', args: ['--headless=new', '--no-sandbox', '--disable-gpu'] }); const p = await b.newPage(); await p.goto(s.url); await p.waitForFunction(() => 'cropBench' in globalThis);
-for (const [w, h] of [[640, 480], [1280, 720]]) console.log(w, h, JSON.stringify(await p.evaluate(([w, h]) => (globalThis as any).cropBench(w, h), [w, h]))); await b.close(); await s.close();

@@ -1,6 +1,0 @@
-import { build } from 'esbuild'; import { bundleBench } from './tests/bench/tracking/bundle'; import { serveBench } from './tests/bench/tracking/serve'; import { chromium } from '@playwright/test';
-const f = '/tmp/tk/live'; await bundleBench(f); await build({ entryPoints: { 'bench-page': 'dev-live.ts' }, outdir: f, bundle: true, format: 'esm', tsconfig: 'tsconfig.json', logLevel: 'error' });
-const s = await serveBench(f, '/work/trees/tracking/assets/tracker', '/tmp/tk/v/own-train.mjpeg');
-for (const no of [false, true]) { const b = await chromium.launch({ executablePath: '/usr/bin/chromium', ignoreDefaultArgs: ['--headless', '--hide-scrollbars', '--mute-audio'], args: ['--headless=new', '--no-sandbox', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync', '--disable-gpu', '--use-fake-device-for-media-stream', '--use-fake-ui-for-media-stream', '--use-file-for-fake-video-capture=/tmp/tk/v/own-train.mjpeg'] });
-const p = await b.newPage(); p.on('console', (m) => console.log('page:', m.text())); p.on('pageerror', (e) => console.log('err', e.message)); await p.goto(s.url); await p.waitForFunction(() => 'live' in globalThis); console.log(no, JSON.stringify(await p.evaluate((n) => (globalThis as any).live(n), no))); await b.close(); }
-await s.close();
