@@ -29,10 +29,10 @@ export const findScene = (db: Database, id: string): Promise<SceneRow | undefine
 export const holdScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
   scenes(db).where('scene.id', '=', id).forUpdate('scene').executeTakeFirst();
 
-export const scenesOf = (db: Database, householdId: string): Promise<SceneRow[]> =>
+export const scenesOf = (db: Database, householdId: string, bin: boolean): Promise<SceneRow[]> =>
   scenes(db)
     .where('scene.household_id', '=', householdId)
-    .where('scene.binned_at', 'is', null)
+    .where('scene.binned_at', bin ? 'is not' : 'is', null)
     .orderBy('scene.saved_at', 'desc')
     .orderBy('scene.id')
     .execute();

@@ -12,7 +12,7 @@ export const sceneRoutes =
   (mount) => {
     const scenes = sceneService(db, storage, layerFiles);
 
-    mount(routes.listScenes, async ({ householdId }) => ({ scenes: await scenes.list(householdId) }));
+    mount(routes.listScenes, async ({ householdId, query }) => ({ scenes: await scenes.list(householdId, query.bin) }));
     mount(routes.createScene, async ({ body, householdId, accountId }) => ({
       scene: await scenes.create(body.name, body.photoIds, { householdId, accountId }),
     }));

@@ -70,7 +70,7 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
     });
 
   return {
-    list: async (householdId: string): Promise<Scene[]> => (await scenesOf(db, householdId)).map(toScene),
+    list: async (householdId: string, bin: boolean): Promise<Scene[]> => (await scenesOf(db, householdId, bin)).map(toScene),
 
     /** @throws in-bin (404). */
     read: async (id: string): Promise<Scene> => toScene(await open(id)),

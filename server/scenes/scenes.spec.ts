@@ -313,6 +313,8 @@ describe('the list', () => {
 
     expect((await owner.browser.ask('delete', `/api/scenes/${b.id}`)).status).toBe(200);
     expect(await names()).toEqual(['A again']);
+    const inBin = await owner.browser.ask('get', `/api/households/${household}/scenes?bin=true`);
+    expect(inBin.body.scenes.map(({ id }: Scene) => id)).toEqual([b.id]);
     expect((await owner.browser.ask('get', `/api/scenes/${b.id}`)).body.code).toBe('in-bin');
     expect((await save(b, b.document, owner)).body.code).toBe('in-bin');
     expect((await owner.browser.ask('post', `/api/scenes/${b.id}/restoration`)).body.scene.document).toEqual(

@@ -77,6 +77,7 @@ export const listScenes = defineRoute({
   path: '/api/households/:householdId/scenes',
   access: members('household', everyRole),
   params: HouseholdParams,
+  query: z.object({ bin: z.stringbool().default(false) }),
   reply: z.object({ scenes: z.array(Scene) }),
 });
 /** From one photo: it covers the glass as the back layer. From several: each becomes a layer, the first farthest. From none: an empty sheet. */

@@ -12,8 +12,9 @@ export class ScenePortfolio {
   /** Null until fetched. */
   readonly scenes = this.all.asReadonly();
 
-  async load(): Promise<void> {
-    this.all.set((await this.api.call(listScenes, { params: this.here() })).scenes);
+  /** The scenes at hand, or those in the bin. */
+  async load(bin = false): Promise<void> {
+    this.all.set((await this.api.call(listScenes, { params: this.here(), query: { bin: bin ? 'true' : 'false' } })).scenes);
   }
 
   /** An empty sheet. */
@@ -28,12 +29,16 @@ export class ScenePortfolio {
 
   async bin(scene: Scene): Promise<void> {
     await this.api.call(binScene, { params: { sceneId: scene.id } });
-    this.all.update((scenes) => scenes?.filter((known) => known.id !== scene.id) ?? null);
+    this.drop(scene);
   }
 
   async restore(scene: Scene): Promise<void> {
     await this.api.call(restoreScene, { params: { sceneId: scene.id } });
-    await this.load();
+    this.drop(scene);
+  }
+
+  private drop(scene: Scene): void {
+    this.all.update((scenes) => scenes?.filter((known) => known.id !== scene.id) ?? null);
   }
 
   private here() {

@@ -54,7 +54,14 @@ export class ScenesPage implements OnInit {
       this.snackBar
         .open(`“${scene.document.name}” moved to the bin`, 'Put back', { duration: 10_000 })
         .onAction()
-        .subscribe(() => void this.acting.run(() => this.portfolio.restore(scene)));
+        .subscribe(() => void this.putBack(scene));
+    });
+  }
+
+  private putBack(scene: Scene): Promise<void> {
+    return this.acting.run(async () => {
+      await this.portfolio.restore(scene);
+      await this.portfolio.load();
     });
   }
 }
