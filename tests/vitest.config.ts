@@ -12,8 +12,18 @@ export default defineConfig({
     testTimeout: 30_000,
     hookTimeout: 60_000,
     projects: [
-      { extends: true, test: { name: 'shared', include: ['shared/**/*.spec.ts', 'tests/{outside,packages,bench,video}/**/*.spec.ts'] } },
-      { extends: true, test: { name: 'server', include: ['server/**/*.spec.ts'], globalSetup: 'server/testing/global-setup.ts' } },
+      {
+        extends: true,
+        test: { name: 'shared', include: ['shared/**/*.spec.ts', 'tests/{outside,packages,bench,video}/**/*.spec.ts'] },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'server',
+          include: ['server/**/*.spec.ts', 'scripts/**/*.spec.ts'],
+          globalSetup: 'server/testing/global-setup.ts',
+        },
+      },
     ],
   },
 });
