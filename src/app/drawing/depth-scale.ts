@@ -1,17 +1,25 @@
 /*
- * How depth is drawn in plan and section. Linear from the viewer to `linearToMm` behind the glass, so that sightlines are
- * straight there; beyond it logarithmic,
+ * How depth is drawn in plan and section, d positive behind the glass. Three parts, each monotone and without a gap:
  *
- *     u(d) = L (1 + ln(d / L)),   d > L,
+ *     u(d) = L (1 + ln(d / L))      d > L         far behind: logarithmic, so that a sky ten metres away still fits the sheet
+ *     u(d) = d                      -F <= d <= L  the layers: linear, so that sightlines are straight through the glass
+ *     u(d) = -F + r (d + F)         d < -F        the viewers: linear again, shortened by r <= 1
  *
- * which meets the linear part with equal value and slope (u(L) = L, u'(L) = 1) and is monotone, so that a sky ten metres
- * away still fits the sheet and can still be dragged.
+ * The first two meet with equal value and slope. Where the viewers' part is shortened (r < 1), the drawing shows a break line
+ * at F, as is usual where a long empty stretch is cut short, and lines bend there.
  */
 export interface DepthScale {
-  /** Pixels to the millimetre in the linear part. */
+  /** Pixels to the millimetre among the layers. */
   readonly pxPerMm: number;
+  /** L, mm behind the glass. */
   readonly linearToMm: number;
+  /** F, mm before the glass. */
+  readonly breakMm: number;
+  /** r: what a millimetre beyond the break counts. */
+  readonly beyondBreak: number;
 }
+
+type Shape = Omit<DepthScale, 'pxPerMm'>;
 
 const LINEAR_TO_GLASSES = 1.25;
 
@@ -19,20 +27,28 @@ const LINEAR_TO_GLASSES = 1.25;
 export const linearDepthOf = (glass: { readonly widthMm: number; readonly heightMm: number }) =>
   LINEAR_TO_GLASSES * Math.max(glass.widthMm, glass.heightMm);
 
-/** Depth as it is drawn, still in mm: the identity up to `linearToMm`. */
-export function drawnDepth(depthMm: number, linearToMm: number): number {
-  return depthMm <= linearToMm ? depthMm : linearToMm * (1 + Math.log(depthMm / linearToMm));
+/** Depth as it is drawn, still in mm: the identity between the break and `linearToMm`. */
+export function drawnDepth(depthMm: number, { linearToMm, breakMm, beyondBreak }: Shape): number {
+  if (depthMm > linearToMm) return linearToMm * (1 + Math.log(depthMm / linearToMm));
+  return depthMm >= -breakMm ? depthMm : -breakMm + beyondBreak * (depthMm + breakMm);
 }
 
 /** Pixels from the glass, positive behind it. */
 export function depthToPx(scale: DepthScale, depthMm: number): number {
-  return scale.pxPerMm * drawnDepth(depthMm, scale.linearToMm);
+  return scale.pxPerMm * drawnDepth(depthMm, scale);
 }
 
 /** The inverse of `depthToPx`. */
-export function pxToDepth(scale: DepthScale, px: number): number {
-  const drawnMm = px / scale.pxPerMm;
-  return drawnMm <= scale.linearToMm ? drawnMm : scale.linearToMm * Math.exp(drawnMm / scale.linearToMm - 1);
+export function pxToDepth({ pxPerMm, linearToMm, breakMm, beyondBreak }: DepthScale, px: number): number {
+  const drawnMm = px / pxPerMm;
+  if (drawnMm > linearToMm) return linearToMm * Math.exp(drawnMm / linearToMm - 1);
+  return drawnMm >= -breakMm ? drawnMm : (drawnMm + breakMm) / beyondBreak - breakMm;
+}
+
+/** Pixels to the millimetre at a depth. */
+export function scaleAt({ pxPerMm, linearToMm, breakMm, beyondBreak }: DepthScale, depthMm: number): number {
+  if (depthMm > linearToMm) return (pxPerMm * linearToMm) / depthMm;
+  return depthMm >= -breakMm ? pxPerMm : pxPerMm * beyondBreak;
 }
 
 const ROUND = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000, 5000, 10_000] as const;
@@ -42,16 +58,19 @@ export function roundStep(pxPerMm: number, px: number): number {
   return ROUND.find((step) => step * pxPerMm >= px) ?? ROUND[ROUND.length - 1];
 }
 
-/** Depths to print beside the drawing: zero and round steps to either end. */
+/** Depths to print beside the drawing: the glass, and round steps from it to either end. */
 export function depthTicks(scale: DepthScale, nearestMm: number, farthestMm: number, leastPx = 44): number[] {
-  const step = roundStep(scale.pxPerMm, leastPx);
-  const ticks: number[] = [];
-  let last = -Infinity;
-  for (let depth = Math.ceil(nearestMm / step) * step; depth <= farthestMm; depth += step) {
-    const px = depthToPx(scale, depth);
-    if (px - last < leastPx * 0.9) continue;
-    ticks.push(depth === 0 ? 0 : depth);
-    last = px;
-  }
-  return ticks;
+  const away = (endMm: number, pxPerMm: number) => {
+    const step = roundStep(pxPerMm, leastPx) * Math.sign(endMm);
+    const ticks: number[] = [];
+    let last = 0;
+    for (let depth = step; Math.abs(depth) <= Math.abs(endMm); depth += step) {
+      const px = depthToPx(scale, depth);
+      if (Math.abs(px - last) < leastPx * 0.9) continue;
+      ticks.push(depth);
+      last = px;
+    }
+    return ticks;
+  };
+  return [...away(nearestMm, scale.pxPerMm * scale.beyondBreak).reverse(), 0, ...away(farthestMm, scale.pxPerMm)];
 }

@@ -27,7 +27,7 @@ export function depthRangeOf(frame: DepthFrame): { readonly behindMm: number; re
   const [start, length] = frame.view === 'plan' ? [frame.top, frame.height] : [frame.left, frame.width];
   return {
     behindMm: pxToDepth(frame.depth, frame.glassAt - start),
-    beforeMm: (start + length - frame.glassAt) / frame.depth.pxPerMm,
+    beforeMm: -pxToDepth(frame.depth, frame.glassAt - start - length),
   };
 }
 

@@ -32,13 +32,14 @@ export interface DrawnLine extends Line {
   readonly labelWidth: number;
 }
 
-/** The points of a line seen through the glass: straight before it, bent only where the depth scale is logarithmic. */
+/** The points of a line seen through the glass: straight through it, bent at the break and where the depth scale is logarithmic. */
 function sightline(frame: DepthFrame, eye: Point3, edge: number, behindMm: number): string {
   const e = acrossOf(frame.view, eye);
   const linear = Math.min(frame.depth.linearToMm, behindMm);
-  const depths = [0, linear, ...Array.from({ length: 12 }, (_, i) => linear + ((behindMm - linear) * (i + 1)) / 12)];
+  const before = eye.z > frame.depth.breakMm ? [-frame.depth.breakMm] : [];
+  const behind = Array.from({ length: 12 }, (_, i) => linear + ((behindMm - linear) * (i + 1)) / 12);
   const at = (depth: number) => drawnAt(frame, { across: edge + ((edge - e) * depth) / eye.z, z: -depth });
-  return asPoints([drawnAt(frame, { across: e, z: eye.z }), ...depths.map(at)]);
+  return asPoints([-eye.z, ...before, 0, linear, ...behind].map(at));
 }
 
 export const sightlines = (frame: DepthFrame, { glass }: SceneDocument, eye: Point3) =>
@@ -60,7 +61,10 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
     zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
     path: asPoints(path.map((eye) => drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z }))),
     lens,
-    cone: camera.slopes.map((slope) => ({ from: lens, to: drawnAt(frame, { across: camera.across + slope * beforeMm, z: beforeMm }) })),
+    cone: camera.slopes.map((slope) =>
+      asPoints([0, frame.depth.breakMm, beforeMm].map((z) => drawnAt(frame, { across: camera.across + slope * z, z }))),
+    ),
+    breakLine: frame.depth.beyondBreak < 1 ? breakLine(frame) : null,
     pitchDownDeg: camera.pitchDownDeg,
     home: drawnAt(frame, { across: acrossOf(frame.view, homeEye), z: homeEye.z }),
     ticks: depthTicks(frame.depth, -beforeMm, behindMm).map((depthMm) => ({
@@ -71,22 +75,38 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
   };
 }
 
+/** A long break across the drawing: a thin line with two zigzags. */
+function breakLine(frame: DepthFrame): string {
+  const plan = frame.view === 'plan';
+  const [start, length] = plan ? [frame.left, frame.width] : [frame.top, frame.height];
+  const at = drawnAt(frame, { across: 0, z: frame.depth.breakMm });
+  const point = (along: number, out: number) => (plan ? { x: along, y: at.y + out } : { x: at.x + out, y: along });
+  const zigzag = [0.04, 0.96].flatMap((share) => {
+    const middle = start + share * length;
+    return [point(middle - 6, 0), point(middle - 3, -4), point(middle + 3, 4), point(middle + 6, 0)];
+  });
+  return asPoints([point(start, 0), ...zigzag, point(start + length, 0)]);
+}
+
 /** The usual width of a character of a label at 11 px. */
 const CHARACTER_PX = 6;
 const LABEL_PX = 13;
+const BESIDE_LINE_PX = 10;
 
 /** The layers as lines at their depth, broken off where they run past the frame. */
 export function drawLines(frame: DepthFrame, layers: readonly DrawnLayer[], selectedId: string | null): DrawnLine[] {
   const lines = layers.flatMap((drawn) => (drawn.plane ? [drawLine(frame, drawn, drawn.plane, selectedId)] : []));
-  const labels = lines.map(({ id, wanted, labelWidth }) => ({
+  const labels = lines.map(({ id, from, to, wanted, labelWidth }) => ({
     id,
     x: wanted.x,
     y: wanted.y - LABEL_PX,
     width: labelWidth,
     height: LABEL_PX,
+    least: Math.max(frame.left, from.x - labelWidth - BESIDE_LINE_PX),
+    most: Math.min(frame.left + frame.width - labelWidth, to.x + BESIDE_LINE_PX),
   }));
   const first = (id: string) => (id === selectedId ? 0 : 1);
-  const spread = spreadLabels(labels.sort((a, b) => first(a.id) - first(b.id)), frame.left, frame.left + frame.width);
+  const spread = spreadLabels(labels.sort((a, b) => first(a.id) - first(b.id)));
   return lines.map(({ wanted, ...line }) => {
     const x = spread.get(line.id);
     return { ...line, label: x === undefined ? null : { x, y: wanted.y } };

@@ -31,7 +31,9 @@ export class DrawingSheet {
   private readonly size = observedSize(() => this.paper());
   protected readonly scales = computed(() => {
     const { elevation, plan } = this.view.layout();
-    return `across 1:${ratio(elevation.pxPerMm)}, depth 1:${ratio(plan.depth.pxPerMm)}`;
+    const { pxPerMm, beyondBreak } = plan.depth;
+    const viewers = beyondBreak < 1 ? `, viewers 1:${ratio(pxPerMm * beyondBreak)}` : '';
+    return `across 1:${ratio(elevation.pxPerMm)}, depth 1:${ratio(pxPerMm)}${viewers}`;
   });
 
   constructor() {

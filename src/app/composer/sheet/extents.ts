@@ -12,6 +12,7 @@ export function extentsOf({ glass, homeEye, zone, layers }: SceneDocument): Exte
   return {
     glass,
     behindMm: roundUp(Math.max(farthest * 1.15, 0.4 * Math.max(glass.widthMm, glass.heightMm))),
+    frontMm: Math.ceil(Math.max(0, ...layers.map((layer) => -layer.depthMm)) / 20) * 20,
     beforeMm: roundUp(Math.max(zone.farthestMm, homeEye.z) * 1.03),
   };
 }

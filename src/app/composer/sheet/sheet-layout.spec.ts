@@ -3,10 +3,11 @@ import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
 import type { DepthFrame, Frame } from '../../drawing/frames';
 import { enlarge, layOutPanes, layOutSheet, type SheetLayout } from './sheet-layout';
 
-const livingRoom = { glass: { widthMm: 1210, heightMm: 681 }, behindMm: 1750, beforeMm: 2500 };
+const livingRoom = { glass: { widthMm: 1210, heightMm: 681 }, behindMm: 1750, frontMm: 60, beforeMm: 2500 };
 const extents = fc.record({
   glass: fc.record({ widthMm: fc.double({ min: 100, max: 4000, noNaN: true }), heightMm: fc.double({ min: 100, max: 4000, noNaN: true }) }),
   behindMm: fc.double({ min: 100, max: 50_000, noNaN: true }),
+  frontMm: fc.double({ min: 0, max: 800, noNaN: true }),
   beforeMm: fc.double({ min: 300, max: 9000, noNaN: true }),
 });
 const rooms = fc.record({ width: fc.integer({ min: 560, max: 3000 }), height: fc.integer({ min: 480, max: 2000 }) });

@@ -15,6 +15,8 @@ export interface Extents {
   readonly glass: Glass;
   /** The farthest depth behind the glass, mm. */
   readonly behindMm: number;
+  /** The nearest layer before the glass, mm. */
+  readonly frontMm: number;
   /** The farthest eye before the glass, mm. */
   readonly beforeMm: number;
 }
@@ -37,7 +39,7 @@ export function layOutSheet(room: Room, extents: Extents): SheetLayout {
   const { glass } = extents;
   const across = Math.max(room.width - 2 * MARGIN - GAP, 120);
   const down = Math.max(room.height - 2 * MARGIN - GAP - FOOT, 120);
-  const leastPlan = Math.max(down * (glass.heightMm > glass.widthMm ? 0.28 : 0.37), 120);
+  const leastPlan = Math.max(down * (glass.heightMm > glass.widthMm ? 0.31 : 0.37), 120);
   // The title block stands under the section on a wide sheet, and the plan's figures before it.
   const leastSection = Math.max(across * 0.25, across > 780 ? UNDER_SECTION : 120);
   const pxPerMm = Math.max(
@@ -46,7 +48,7 @@ export function layOutSheet(room: Room, extents: Extents): SheetLayout {
   );
   const glassPx = { width: glass.widthMm * pxPerMm, height: glass.heightMm * pxPerMm };
   const planDepth = Math.min(down - glassPx.height - 2 * ABOVE, MOST_DEPTH_PX);
-  const sectionDepth = Math.min(across - glassPx.width - 2 * BESIDE, MOST_DEPTH_PX);
+  const sectionDepth = Math.min(across - glassPx.width - 2 * BESIDE, MOST_DEPTH_PX, Math.max(UNDER_SECTION, 1.5 * planDepth));
   const beside = BESIDE + (across - glassPx.width - 2 * BESIDE - sectionDepth) / 2;
   const above = ABOVE + Math.max(down - glassPx.height - 2 * ABOVE - planDepth, 0) / 2;
 
@@ -87,11 +89,22 @@ export function layOutPanes(elevation: Room, pane: Room, extents: Extents): Shee
   };
 }
 
-function alongDepth(start: number, length: number, { glass, behindMm, beforeMm }: Extents) {
+/** The layers' part of the depth axis is to be this share of it; the viewers' part is shortened for it. */
+const LAYERS_SHARE = 0.55;
+/** Shortened by more than this, sightlines would bend too sharply to be read. */
+const LEAST_BEYOND = 0.35;
+/** Room before the glass for its own figures, in longer sides of the glass. */
+const BEFORE_GLASS = 0.16;
+
+function alongDepth(start: number, length: number, { glass, behindMm, frontMm, beforeMm }: Extents) {
+  const wantedBreak = Math.max(1.3 * frontMm, BEFORE_GLASS * Math.max(glass.widthMm, glass.heightMm));
+  const breakMm = Math.min(wantedBreak, beforeMm / 2);
   const linearToMm = linearDepthOf(glass);
-  const behind = drawnDepth(behindMm, linearToMm);
-  const pxPerMm = Math.max(length, 10) / (behind + beforeMm);
-  return { glassAt: start + behind * pxPerMm, depth: { pxPerMm, linearToMm } };
+  const behind = drawnDepth(behindMm, { linearToMm, breakMm, beyondBreak: 1 });
+  const shortened = ((behind + breakMm) * (1 / LAYERS_SHARE - 1)) / (beforeMm - breakMm);
+  const beyondBreak = Math.min(Math.max(shortened, LEAST_BEYOND), 1);
+  const pxPerMm = Math.max(length, 10) / (behind + breakMm + beyondBreak * (beforeMm - breakMm));
+  return { glassAt: start + behind * pxPerMm, depth: { pxPerMm, linearToMm, breakMm, beyondBreak } };
 }
 
 /** The same sheet drawn larger: every place and scale by one factor, so that the views stay aligned. */

@@ -25,7 +25,7 @@ export class SheetView {
     source: () => ({ now: extentsOf(this.store.document()), frozen: this.store.gesturing() }),
     computation: ({ now, frozen }, before) => (frozen && before ? before.value : now),
     equal: (a, b) =>
-      a.behindMm === b.behindMm && a.beforeMm === b.beforeMm && a.glass.widthMm === b.glass.widthMm && a.glass.heightMm === b.glass.heightMm,
+      a.behindMm === b.behindMm && a.frontMm === b.frontMm && a.beforeMm === b.beforeMm && a.glass.widthMm === b.glass.widthMm && a.glass.heightMm === b.glass.heightMm,
   });
   private readonly base = computed(() => {
     const panes = this.panes();
