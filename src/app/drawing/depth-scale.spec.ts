@@ -1,7 +1,7 @@
 import * as fc from 'fast-check';
 import { depthTicks, depthToPx, pxToDepth, roundStep, scaleAt } from './depth-scale';
 
-const scale = { pxPerMm: 0.075, linearToMm: 1500, breakMm: 200, beyondBreak: 0.4 };
+const scale = { pxPerMm: 0.075, linearToMm: 1500, broken: { atMm: 200, beyond: 0.4 } };
 const depth = fc.double({ min: -5000, max: 90_000, noNaN: true });
 
 describe('the depth scale', () => {

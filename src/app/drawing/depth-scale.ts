@@ -13,13 +13,21 @@ export interface DepthScale {
   readonly pxPerMm: number;
   /** L, mm behind the glass. */
   readonly linearToMm: number;
+  /** Left out where the viewers' part is not shortened. */
+  readonly broken?: Break;
+}
+
+/** Where the way to the viewers is broken off, and what a millimetre beyond counts. */
+export interface Break {
   /** F, mm before the glass. */
-  readonly breakMm: number;
-  /** r: what a millimetre beyond the break counts. */
-  readonly beyondBreak: number;
+  readonly atMm: number;
+  /** r. */
+  readonly beyond: number;
 }
 
 type Shape = Omit<DepthScale, 'pxPerMm'>;
+
+const UNBROKEN: Break = { atMm: Infinity, beyond: 1 };
 
 const LINEAR_TO_GLASSES = 1.25;
 
@@ -28,9 +36,9 @@ export const linearDepthOf = (glass: { readonly widthMm: number; readonly height
   LINEAR_TO_GLASSES * Math.max(glass.widthMm, glass.heightMm);
 
 /** Depth as it is drawn, still in mm: the identity between the break and `linearToMm`. */
-export function drawnDepth(depthMm: number, { linearToMm, breakMm, beyondBreak }: Shape): number {
+export function drawnDepth(depthMm: number, { linearToMm, broken = UNBROKEN }: Shape): number {
   if (depthMm > linearToMm) return linearToMm * (1 + Math.log(depthMm / linearToMm));
-  return depthMm >= -breakMm ? depthMm : -breakMm + beyondBreak * (depthMm + breakMm);
+  return depthMm >= -broken.atMm ? depthMm : -broken.atMm + broken.beyond * (depthMm + broken.atMm);
 }
 
 /** Pixels from the glass, positive behind it. */
@@ -39,16 +47,16 @@ export function depthToPx(scale: DepthScale, depthMm: number): number {
 }
 
 /** The inverse of `depthToPx`. */
-export function pxToDepth({ pxPerMm, linearToMm, breakMm, beyondBreak }: DepthScale, px: number): number {
+export function pxToDepth({ pxPerMm, linearToMm, broken = UNBROKEN }: DepthScale, px: number): number {
   const drawnMm = px / pxPerMm;
   if (drawnMm > linearToMm) return linearToMm * Math.exp(drawnMm / linearToMm - 1);
-  return drawnMm >= -breakMm ? drawnMm : (drawnMm + breakMm) / beyondBreak - breakMm;
+  return drawnMm >= -broken.atMm ? drawnMm : (drawnMm + broken.atMm) / broken.beyond - broken.atMm;
 }
 
 /** Pixels to the millimetre at a depth. */
-export function scaleAt({ pxPerMm, linearToMm, breakMm, beyondBreak }: DepthScale, depthMm: number): number {
+export function scaleAt({ pxPerMm, linearToMm, broken = UNBROKEN }: DepthScale, depthMm: number): number {
   if (depthMm > linearToMm) return (pxPerMm * linearToMm) / depthMm;
-  return depthMm >= -breakMm ? pxPerMm : pxPerMm * beyondBreak;
+  return depthMm >= -broken.atMm ? pxPerMm : pxPerMm * broken.beyond;
 }
 
 const ROUND = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000, 5000, 10_000] as const;
@@ -72,5 +80,5 @@ export function depthTicks(scale: DepthScale, nearestMm: number, farthestMm: num
     }
     return ticks;
   };
-  return [...away(nearestMm, scale.pxPerMm * scale.beyondBreak).reverse(), 0, ...away(farthestMm, scale.pxPerMm)];
+  return [...away(nearestMm, scale.pxPerMm * (scale.broken?.beyond ?? 1)).reverse(), 0, ...away(farthestMm, scale.pxPerMm)];
 }

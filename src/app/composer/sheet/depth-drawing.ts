@@ -36,7 +36,8 @@ export interface DrawnLine extends Line {
 function sightline(frame: DepthFrame, eye: Point3, edge: number, behindMm: number): string {
   const e = acrossOf(frame.view, eye);
   const linear = Math.min(frame.depth.linearToMm, behindMm);
-  const before = eye.z > frame.depth.breakMm ? [-frame.depth.breakMm] : [];
+  const { broken } = frame.depth;
+  const before = broken && eye.z > broken.atMm ? [-broken.atMm] : [];
   const behind = Array.from({ length: 12 }, (_, i) => linear + ((behindMm - linear) * (i + 1)) / 12);
   const at = (depth: number) => drawnAt(frame, { across: edge + ((edge - e) * depth) / eye.z, z: -depth });
   return asPoints([-eye.z, ...before, 0, linear, ...behind].map(at));
@@ -62,9 +63,9 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
     path: asPoints(path.map((eye) => drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z }))),
     lens,
     cone: camera.slopes.map((slope) =>
-      asPoints([0, frame.depth.breakMm, beforeMm].map((z) => drawnAt(frame, { across: camera.across + slope * z, z }))),
+      asPoints([0, frame.depth.broken?.atMm ?? 0, beforeMm].map((z) => drawnAt(frame, { across: camera.across + slope * z, z }))),
     ),
-    breakLine: frame.depth.beyondBreak < 1 ? breakLine(frame) : null,
+    breakLine: frame.depth.broken ? breakLine(frame, frame.depth.broken.atMm) : null,
     pitchDownDeg: camera.pitchDownDeg,
     home: drawnAt(frame, { across: acrossOf(frame.view, homeEye), z: homeEye.z }),
     ticks: depthTicks(frame.depth, -beforeMm, behindMm).map((depthMm) => ({
@@ -76,10 +77,10 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
 }
 
 /** A long break across the drawing: a thin line with two zigzags. */
-function breakLine(frame: DepthFrame): string {
+function breakLine(frame: DepthFrame, atMm: number): string {
   const plan = frame.view === 'plan';
   const [start, length] = plan ? [frame.left, frame.width] : [frame.top, frame.height];
-  const at = drawnAt(frame, { across: 0, z: frame.depth.breakMm });
+  const at = drawnAt(frame, { across: 0, z: atMm });
   const point = (along: number, out: number) => (plan ? { x: along, y: at.y + out } : { x: at.x + out, y: along });
   const zigzag = [0.04, 0.96].flatMap((share) => {
     const middle = start + share * length;

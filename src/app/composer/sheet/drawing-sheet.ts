@@ -31,8 +31,8 @@ export class DrawingSheet {
   private readonly size = observedSize(() => this.paper());
   protected readonly scales = computed(() => {
     const { elevation, plan } = this.view.layout();
-    const { pxPerMm, beyondBreak } = plan.depth;
-    const viewers = beyondBreak < 1 ? `, viewers 1:${ratio(pxPerMm * beyondBreak)}` : '';
+    const { pxPerMm, broken } = plan.depth;
+    const viewers = broken ? `, viewers 1:${ratio(pxPerMm * broken.beyond)}` : '';
     return `across 1:${ratio(elevation.pxPerMm)}, depth 1:${ratio(pxPerMm)}${viewers}`;
   });
 

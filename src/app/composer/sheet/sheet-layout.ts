@@ -98,13 +98,13 @@ const BEFORE_GLASS = 0.16;
 
 function alongDepth(start: number, length: number, { glass, behindMm, frontMm, beforeMm }: Extents) {
   const wantedBreak = Math.max(1.3 * frontMm, BEFORE_GLASS * Math.max(glass.widthMm, glass.heightMm));
-  const breakMm = Math.min(wantedBreak, beforeMm / 2);
+  const atMm = Math.min(wantedBreak, beforeMm / 2);
   const linearToMm = linearDepthOf(glass);
-  const behind = drawnDepth(behindMm, { linearToMm, breakMm, beyondBreak: 1 });
-  const shortened = ((behind + breakMm) * (1 / LAYERS_SHARE - 1)) / (beforeMm - breakMm);
-  const beyondBreak = Math.min(Math.max(shortened, LEAST_BEYOND), 1);
-  const pxPerMm = Math.max(length, 10) / (behind + breakMm + beyondBreak * (beforeMm - breakMm));
-  return { glassAt: start + behind * pxPerMm, depth: { pxPerMm, linearToMm, breakMm, beyondBreak } };
+  const behind = drawnDepth(behindMm, { linearToMm });
+  const shortened = ((behind + atMm) * (1 / LAYERS_SHARE - 1)) / (beforeMm - atMm);
+  const beyond = Math.min(Math.max(shortened, LEAST_BEYOND), 1);
+  const pxPerMm = Math.max(length, 10) / (behind + atMm + beyond * (beforeMm - atMm));
+  return { glassAt: start + behind * pxPerMm, depth: { pxPerMm, linearToMm, broken: beyond < 1 ? { atMm, beyond } : undefined } };
 }
 
 /** The same sheet drawn larger: every place and scale by one factor, so that the views stay aligned. */
