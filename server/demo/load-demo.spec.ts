@@ -2,6 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { readFile } from 'node:fs/promises';
 import sharp from 'sharp';
 import type { Scene } from '@oriel/shared/contracts/scenes';
+import type { Wall } from '@oriel/shared/contracts/walls';
 import { Browser } from '../testing/browser';
 import { createTestApp, type TestApp } from '../testing/test-app';
 import { loadDemo } from './load-demo';
@@ -66,6 +67,19 @@ describe('the demo', () => {
       .toBe(true);
   });
 
+  it('has a wall that shows the ridge, and which its tuner may set up', async () => {
+    const { browser, account } = await signIn(accounts.find(({ role }) => role === 'tuner')!);
+    const { walls } = (await browser.ask('get', `/api/households/${account.memberships[0].householdId}/walls`)).body;
+    const scenes = await scenesOf({ browser, account });
+    const ridge = scenes.find(({ document }) => document.name === 'October on the ridge')!;
+    expect(walls).toMatchObject([
+      { setUp: { name: 'Landing wall', sceneId: ridge.id }, revision: 1, savedBy: 'Maud Aldermoor', pairedAt: null },
+    ]);
+    const [wall] = walls as Wall[];
+    const saved = await browser.ask('put', `/api/walls/${wall.id}`, { revision: 1, setUp: wall.setUp });
+    expect(saved.status, saved.text).toBe(200);
+  });
+
   it('is loaded once: what its people throw away stays away', async () => {
     const designer = await signIn(accounts.find(({ role }) => role === 'designer')!);
     const [scene, ...others] = await scenesOf(designer);
@@ -80,6 +94,7 @@ describe('the demo', () => {
     const before = await count();
     await Promise.all([loadDemo(app.parts), loadDemo(app.parts)]);
     expect(await count()).toBe(before);
-    expect((await app.db.selectFrom('household').select('id').execute()).length).toBe(1);
+    for (const table of ['household', 'wall'] as const)
+      expect((await app.db.selectFrom(table).select('id').execute()).length).toBe(1);
   });
 });

@@ -1,6 +1,5 @@
 import { randomUUID } from 'node:crypto';
 import { join } from 'node:path';
-import { sql } from 'kysely';
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import { placeTrimmedIn } from '@oriel/shared/projection/cover-glass';
 import { accountByEmail, createAccount } from '../accounts/account-store';
@@ -11,10 +10,11 @@ import { photoService } from '../photos/photo-service';
 import { sceneService, type SceneService } from '../scenes/scene-service';
 import type { Storage } from '../storage/storage';
 import { bringIn } from './bring-in';
-import { readDemoFiles, type DemoAccount, type DemoScene } from './demo-files';
+import { readDemoFiles, type DemoAccount, type DemoFiles, type DemoScene } from './demo-files';
+import { hangDemoWall } from './demo-wall';
+import { once } from './once';
 
 const householdName = 'The Aldermoor house';
-const done = 'demo loaded';
 
 type Members = ReadonlyMap<DemoAccount['role'], string>;
 
@@ -22,42 +22,31 @@ type Members = ReadonlyMap<DemoAccount['role'], string>;
  * Loads a household of our own invention, once in the life of the database, through the same services that people's uploads go through.
  * What its people then change or throw away stays changed. Cut off halfway, the next start begins where it ended.
  */
-export async function loadDemo({
-  config,
-  connection: { db },
-  storage,
-  jobs,
-  layerFiles,
-  passwords,
-  log,
-}: Parts): Promise<void> {
-  if (await isLoaded(db)) return;
+export async function loadDemo(parts: Parts): Promise<void> {
+  const { config, connection } = parts;
   const folder = join(config.assetsDir, 'demo');
   const files = await readDemoFiles(folder);
-  // One server of several that start together; the lock goes with the transaction that holds it.
-  await db.transaction().execute(async (transaction) => {
-    await sql`select pg_advisory_xact_lock(hashtextextended(${done}, 0))`.execute(transaction);
-    if (await isLoaded(transaction)) return;
-
-    const members = await demoMembers(db, files.accounts, passwords.hash);
-    const householdId = await demoHousehold(db, members);
-    const asker = { householdId, accountId: members.get('designer') ?? members.get('owner')! };
-    const photos = photoService(db, storage, jobs);
-    for (const path of files.photos) await bringIn(storage, path, (file) => photos.receive(file, asker));
-
-    const scenes = sceneService(db, storage, layerFiles);
-    const known = await sceneNames(db, householdId);
-    for (const scene of [...files.scenes].reverse())
-      if (!known.has(scene.name))
-        await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);
-
-    await transaction.insertInto('milestone').values({ name: done }).execute();
-    log.info({ photos: files.photos.length, scenes: files.scenes.length }, 'the demo household is loaded');
-  });
+  await once(connection.db, 'demo loaded', () => loadHousehold(parts, folder, files));
+  await once(connection.db, 'demo wall loaded', () => hangDemoWall(connection.db, householdName, files.accounts));
 }
 
-const isLoaded = async (db: Database) =>
-  (await db.selectFrom('milestone').select('name').where('name', '=', done).executeTakeFirst()) !== undefined;
+async function loadHousehold(
+  { connection: { db }, storage, jobs, layerFiles, passwords, log }: Parts,
+  folder: string,
+  files: DemoFiles,
+): Promise<void> {
+  const members = await demoMembers(db, files.accounts, passwords.hash);
+  const householdId = await demoHousehold(db, members);
+  const asker = { householdId, accountId: members.get('designer') ?? members.get('owner')! };
+  const photos = photoService(db, storage, jobs);
+  for (const path of files.photos) await bringIn(storage, path, (file) => photos.receive(file, asker));
+
+  const scenes = sceneService(db, storage, layerFiles);
+  const known = await sceneNames(db, householdId);
+  for (const scene of [...files.scenes].reverse())
+    if (!known.has(scene.name)) await scenes.add(await documentOf(scene, folder, householdId, scenes, storage), asker);
+  log.info({ photos: files.photos.length, scenes: files.scenes.length }, 'the demo household is loaded');
+}
 
 /** Binned ones too. */
 async function sceneNames(db: Database, householdId: string): Promise<Set<string>> {

@@ -114,7 +114,7 @@ describe('security: the role table', () => {
       .values({ household_id: householdId, document: JSON.stringify(document) })
       .returning('id')
       .executeTakeFirstOrThrow();
-    const wall = await wallService(app.db).create('A wall', { householdId, accountId });
+    const wall = await wallService(app.db).create(newWall('A wall'), { householdId, accountId });
     const run = await app.db
       .insertInto('run')
       .values({ household_id: householdId, name: 'A run', facts: JSON.stringify(facts), samples: '[]' })

@@ -1,3 +1,4 @@
+import { newWall } from '@oriel/shared/contracts/new-wall';
 import * as contract from '@oriel/shared/contracts/walls';
 import type { Feature } from '../http/mount';
 import type { Parts } from '../parts';
@@ -14,7 +15,7 @@ export const wallRoutes =
 
     mount(contract.listWalls, async ({ householdId }) => ({ walls: await walls.list(householdId) }));
     mount(contract.createWall, async ({ body, householdId, accountId }) => ({
-      wall: await walls.create(body.name, { householdId, accountId }),
+      wall: await walls.create(newWall(body.name), { householdId, accountId }),
     }));
     mount(contract.readWall, async ({ params }) => ({ wall: await walls.read(params.wallId) }));
     mount(contract.saveWall, async ({ params, body, householdId, accountId }) => ({

@@ -1,5 +1,4 @@
 import { isDeepStrictEqual } from 'node:util';
-import { newWall } from '@oriel/shared/contracts/new-wall';
 import type { Wall, WallSetUp } from '@oriel/shared/contracts/walls';
 import type { Database } from '../database/database';
 import { mustWrite } from '../database/revisions';
@@ -42,12 +41,17 @@ export function wallService(db: Database) {
 
     read,
 
-    async create(name: string, { householdId, accountId }: Asker): Promise<Wall> {
-      const { id } = await db
-        .insertInto('wall')
-        .values({ household_id: householdId, saved_by: accountId, ...columnsOf(newWall(name)) })
-        .returning('id')
-        .executeTakeFirstOrThrow();
+    /** @throws scene-not-here (422) */
+    async create(setUp: WallSetUp, { householdId, accountId }: Asker): Promise<Wall> {
+      const id = await db.transaction().execute(async (transaction) => {
+        if (setUp.sceneId) await holdSceneOf(transaction, householdId, setUp.sceneId);
+        const made = await transaction
+          .insertInto('wall')
+          .values({ household_id: householdId, saved_by: accountId, ...columnsOf(setUp) })
+          .returning('id')
+          .executeTakeFirstOrThrow();
+        return made.id;
+      });
       return read(id);
     },
 
