@@ -59,7 +59,7 @@ export function accountRoutes({ connection: { db }, config, mailer, passwords, s
         await changes.change(accountId, request.sessionID, body.current, body.next);
         return {};
       },
-      limits.passwords,
+      limits.ownPassword,
     );
     mount(
       contract.askPasswordReset,

@@ -57,7 +57,12 @@ describe('limits', () => {
 
   it('security: the present password cannot be guessed from a stolen session', async () => {
     const { browser } = await app.signedIn(null);
-    const attempt = () => browser.prepare('put', '/api/me/password', { current: 'wrong', next: 'cornice and sill' }).set('X-Forwarded-For', `192.0.2.${++hosts}`);
+    // Naming an address, which the route does not ask for, starts no new count.
+    const attempt = () => {
+      const host = ++hosts;
+      const guess = { current: 'wrong', next: 'cornice and sill', email: `x${host}@example.org` };
+      return browser.prepare('put', '/api/me/password', guess).set('X-Forwarded-For', `192.0.2.${host}`);
+    };
     for (let i = 0; i < 3; i++) expect((await attempt()).status).toBe(422);
     expect((await attempt()).status).toBe(429);
   });

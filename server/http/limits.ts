@@ -37,8 +37,10 @@ export const usualLimits: LimitSettings = {
  * restart forgets; rateLimit takes a shared `store` when that day comes.
  */
 export interface Limits {
-  /** For routes that try a password; only failures count. */
+  /** For signing in to the account of an address that someone typed; only failures count. */
   readonly passwords: RequestHandler;
+  /** For whoever is signed in and tries the password of that account; only failures count. */
+  readonly ownPassword: RequestHandler;
   /** For routes that send a mail to an address someone typed. */
   readonly mails: RequestHandler;
   /** For screens that ask for a pairing code, and those that claim what came of it. */
@@ -53,7 +55,6 @@ const typedEmail = (request: Request): string => {
   const email = typeof body === 'object' && body !== null && 'email' in body ? body.email : '';
   return typeof email === 'string' ? email.trim().toLowerCase() : '';
 };
-const account = (request: Request) => typedEmail(request) || (request.session.accountId ?? '');
 const signedIn = (request: Request) => request.session.accountId ?? '';
 const address = (request: Request) => ipKeyGenerator(request.ip ?? '');
 
@@ -68,9 +69,11 @@ export function createLimits(settings: LimitSettings): Limits {
   const both = (first: RequestHandler, second: RequestHandler): RequestHandler => (request, response, next) =>
     void first(request, response, (error?: unknown) => (error ? next(error) : void second(request, response, next)));
 
+  const passwordsByAddress = limit(settings.passwordsByAddress, address, true);
   return {
-    passwords: both(limit(settings.passwordsByAddress, address, true), limit(settings.passwordsByAccount, account, true)),
-    mails: both(limit(settings.mailsByAddress, address, false), limit(settings.mailsByAccount, account, false)),
+    passwords: both(passwordsByAddress, limit(settings.passwordsByAccount, typedEmail, true)),
+    ownPassword: both(passwordsByAddress, limit(settings.passwordsByAccount, signedIn, true)),
+    mails: both(limit(settings.mailsByAddress, address, false), limit(settings.mailsByAccount, typedEmail, false)),
     codesAsked: limit(settings.codesAskedByAddress, address, false),
     claims: limit(settings.claimsByAddress, address, false),
     codesTried: both(limit(settings.codesTriedByAddress, address, true), limit(settings.codesTriedByAccount, signedIn, true)),

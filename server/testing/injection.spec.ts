@@ -79,7 +79,8 @@ describe('security: hostile text', () => {
     expect((await stranger.ask('post', '/api/session', { email: text, password: text })).status).toBe(400);
     expect((await stranger.ask('post', '/api/session', { email: owner.email, password: text })).status).toBe(422);
     const token = text.padEnd(45, ' ').slice(0, 60);
-    for (const path of ['/api/accounts/confirmations', '/api/invitations/reading']) expect((await stranger.ask('post', path, { token })).status).toBe(410);
+    const holder = { name: 'A', password: testPassword, householdName: 'B' };
+    for (const path of ['/api/accounts/confirmations', '/api/invitations/reading']) expect((await stranger.ask('post', path, { token, ...holder })).status).toBe(410);
   });
 
   it.each(refused)('that cannot be kept, or makes two lines of one, is refused in plain words: %j', async (text) => {
