@@ -26,6 +26,6 @@ export async function hangDemoWall(
   const walls = wallService(db);
   const there = (await walls.list(tuner.householdId)).some(({ setUp }) => setUp.name === wallName);
   if (there) return;
-  const scene = (await scenesOf(db, tuner.householdId)).find(({ document }) => document.name === sceneName);
+  const scene = (await scenesOf(db, tuner.householdId, false)).find(({ document }) => document.name === sceneName);
   await walls.create({ ...newWall(wallName), sceneId: scene?.id ?? null }, tuner);
 }
