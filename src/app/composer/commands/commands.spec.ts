@@ -5,7 +5,7 @@ import { onGlassFrom, planeFromHome } from '@oriel/shared/projection/home-plane'
 import { beginHistory, MOST_STEPS, record, redo, undo } from '../history';
 import type { Change } from './change';
 import { hideLayer, place, renameLayer, setDepth, setOpacity, setWidth, showLayer } from './layer-commands';
-import { growLayersToCover, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from './setting-commands';
+import { creditScene, growLayersToCover, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from './setting-commands';
 import { addLayer, duplicateLayer, placedToCover, removeLayer, reorderLayer } from './stack-commands';
 import { layerIds, someScene } from './testing';
 
@@ -31,6 +31,7 @@ const anyChange: fc.Arbitrary<Change> = fc.oneof(
   fc.record({ x: mm, y: mm, z: mm }).map(setHomeEye),
   fc.record({ leftMm: mm, rightMm: mm, lowestMm: mm, highestMm: mm, nearestMm: mm, farthestMm: mm }, { requiredKeys: [] }).map(setZone),
   fc.string().map(renameScene),
+  fc.string({ maxLength: 300 }).map(creditScene),
   fc.constant(growLayersToCover),
 );
 

@@ -11,6 +11,11 @@ export const renameScene =
   (document) =>
     name.trim() === '' ? document : { ...document, name: name.trim().slice(0, 120) };
 
+/** Whose photograph it is; nothing typed takes the credit away. */
+export const creditScene =
+  (credit: string): Change =>
+  (document) => ({ ...document, credit: credit.trim().slice(0, 200) || undefined });
+
 /** Another glass before the same layers, which stay as large as they are. */
 export const setGlass =
   (glass: Glass): Change =>

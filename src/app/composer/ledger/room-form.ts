@@ -4,7 +4,7 @@ import { MatDialog } from '@angular/material/dialog';
 import type { Glass, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { Icon } from '../../core/icon/icon';
 import { eyeLimits } from '../commands/limits';
-import { renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
+import { creditScene, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
 import { SceneStore } from '../scene-store';
 import { FigureField } from '../../figures/figure-field';
 import { Viewer } from '../walk/viewer';
@@ -53,6 +53,10 @@ export class RoomForm {
 
   protected rename(name: string): void {
     this.store.edit(renameScene(name));
+  }
+
+  protected giveCredit(credit: string): void {
+    this.store.edit(creditScene(credit));
   }
 
   protected glass(sides: Partial<Glass>): void {
