@@ -76,6 +76,13 @@ describe('signing up', () => {
     expect(stored?.name).toBe('Test person');
   });
 
+  it('security: a made-up link costs no hashing', async () => {
+    passwords.taken();
+    const answer = await app.browser().ask('post', '/api/accounts/confirmations', confirmation('x'.repeat(43)));
+    expect(answer.body.code).toBe('link-spent');
+    expect(passwords.taken()).toEqual({ hashes: 0, comparisons: 0 });
+  });
+
   it('security: the database does not keep the link', async () => {
     await app.browser().ask('post', '/api/accounts', form('kept@example.org'));
     const row = await app.db.selectFrom('sign_up').selectAll().where('email', '=', 'kept@example.org').executeTakeFirstOrThrow();
