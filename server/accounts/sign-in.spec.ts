@@ -46,6 +46,24 @@ describe('signing in and out', () => {
     expect((await there.ask('get', '/api/me')).body.account).toBeNull();
   });
 
+  it('security: a session ended while it asks for something stays ended', async () => {
+    const { browser, id } = await app.signedIn(null);
+    const ofAccount = sql`sess ->> 'accountId' = ${id}`;
+    // Due to be renewed by the next request, which is held up by a lock until the session is gone.
+    await sql`update session set sess = jsonb_set(sess::jsonb, '{renewedAt}', '0') where ${ofAccount}`.execute(app.db);
+    const heldUp = async () =>
+      (await sql`select from pg_stat_activity where datname = current_database() and wait_event_type = 'Lock'`.execute(app.db)).rows.length;
+    const { asked } = await app.db.transaction().execute(async (holding) => {
+      await sql`lock table membership in access exclusive mode`.execute(holding);
+      const asked = Promise.resolve(browser.ask('get', '/api/me'));
+      await expect.poll(heldUp, { timeout: 10_000 }).toBe(1);
+      await sql`delete from session where ${ofAccount}`.execute(holding);
+      return { asked };
+    });
+    expect((await asked).body.account.id).toBe(id);
+    expect((await browser.ask('get', '/api/me')).body.account).toBeNull();
+  });
+
   it('security: an unknown address and a wrong password get the same answer for the same work', async () => {
     const { email } = await app.account();
     passwords.taken();

@@ -27,8 +27,11 @@ export function keepSession(pool: pg.Pool, secret: string, cookie: SessionCookie
       if (!accountId) return next();
       const now = Date.now();
       if (now - signedInAt > longestDays * dayMs) return request.session.regenerate(next);
-      if (now - renewedAt > dayMs) request.session.renewedAt = now;
-      next();
+      if (now - renewedAt <= dayMs) return next();
+      request.session.renewedAt = now;
+      request.session.touch();
+      // At once, not at the end of the answer: a long upload would bring back a session that was ended meanwhile.
+      request.session.save(next);
     },
   ];
 }
