@@ -1,7 +1,11 @@
-import { writeFile } from 'node:fs/promises';
+import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import express from 'express';
+import supertest from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { createTestApp, type TestApp } from '../testing/test-app';
+import { servePage } from './serve-page';
 
 describe('the page and its headers', () => {
   let app: TestApp;
@@ -20,6 +24,14 @@ describe('the page and its headers', () => {
       expect(answer.text).toContain('<title>Oriel</title>');
       expect(answer.get('Cache-Control')).toBe('no-cache');
     }
+  });
+
+  it('is served from a hidden folder too', async () => {
+    const hidden = await mkdtemp(join(tmpdir(), '.oriel-web-'));
+    await writeFile(join(hidden, 'index.html'), '<title>Oriel</title>');
+    const answer = await supertest(express().use(servePage(hidden))).get('/scenes').set('Accept', 'text/html');
+    expect(answer.text).toContain('<title>Oriel</title>');
+    await rm(hidden, { recursive: true });
   });
 
   it('keeps hashed files for good and others for no longer than they last', async () => {

@@ -1,4 +1,4 @@
-import { extname, join } from 'node:path';
+import { extname } from 'node:path';
 import express, { Router } from 'express';
 import { notFound } from './failure';
 
@@ -20,7 +20,7 @@ export function servePage(webDir: string): Router {
   router.get('/{*path}', (request, response, next) => {
     if (extname(request.path) || !request.accepts('html')) return next(notFound());
     response.setHeader('Cache-Control', 'no-cache');
-    response.sendFile(join(webDir, 'index.html'), (error) => error && next(error));
+    response.sendFile('index.html', { root: webDir }, (error) => error && next(error));
   });
   return router;
 }
