@@ -17,17 +17,20 @@ const shownInScene = sql<boolean>`exists (
 
 /** Deletes for good what has lain in the bin for its time, except photos that a scene shows. */
 export async function purgePhotos(db: Database, storage: Storage, now = new Date()): Promise<void> {
-  const due = (from: Database) =>
-    from
-      .selectFrom('photo')
-      .where('binned_at', '<', binnedBefore(now))
-      .where((where) => where.not(shownInScene));
-  for (const { id, sha256 } of await due(db).select(['id', 'sha256']).execute())
+  const due = await db
+    .selectFrom('photo')
+    .select(['id', 'sha256'])
+    .where('binned_at', '<', binnedBefore(now))
+    .where((where) => where.not(shownInScene))
+    .execute();
+  for (const { id, sha256 } of due)
     await forgetContent(db, storage, sha256, async (transaction) => {
-      // Looked at again, for it may have been taken out of the bin meanwhile.
+      // Asked again of the row itself, for it may be taken out of the bin at this very moment.
       await transaction
         .deleteFrom('photo')
-        .where('id', 'in', due(transaction).select('id').where('id', '=', id))
+        .where('id', '=', id)
+        .where('binned_at', '<', binnedBefore(now))
+        .where((where) => where.not(shownInScene))
         .execute();
     });
 }

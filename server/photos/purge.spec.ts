@@ -1,4 +1,5 @@
 import { readdir } from 'node:fs/promises';
+import { sql } from 'kysely';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { quadrants } from '../pictures/testing/quadrants';
 import { upload } from '../pictures/testing/upload';
@@ -59,6 +60,22 @@ describe('purging', () => {
     await purge(30.1);
     expect(await status(photoId, here)).toBe(404);
     expect(await objects(sha256)).toEqual([]);
+  });
+
+  it('spares a photo that is taken out of the bin while the purge is under way', async () => {
+    const { photoId, sha256 } = await add(await quadrants(404, 300).jpeg().toBuffer(), here);
+    await bin(photoId, here);
+    const waiting = async () =>
+      (await sql`select from pg_stat_activity where datname = current_database() and wait_event_type = 'Lock'`.execute(app.db)).rows.length;
+    const purging = await app.db.transaction().execute(async (restoring) => {
+      await restoring.updateTable('photo').set({ binned_at: null }).where('id', '=', photoId).execute();
+      const begun = purge(31);
+      await expect.poll(waiting, { timeout: 10_000 }).toBe(1);
+      return { begun };
+    });
+    await purging.begun;
+    expect(await status(photoId, here)).toBe(200);
+    expect(await objects(sha256)).toHaveLength(3);
   });
 
   it('keeps objects that another household still has a photo of', async () => {
