@@ -21,7 +21,7 @@ export function securityHeaders(secure: boolean, forGood: boolean): RequestHandl
           fontSrc: ["'self'"],
           connectSrc: ["'self'"],
           objectSrc: ["'none'"],
-          baseUri: ["'self'"],
+          baseUri: ["'none'"],
           formAction: ["'self'"],
           frameAncestors: ["'none'"],
           ...(secure ? { upgradeInsecureRequests: [] } : {}),

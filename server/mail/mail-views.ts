@@ -28,7 +28,7 @@ dd{overflow-wrap:anywhere}
 pre{margin:0;padding:24px 0;border-block:1px solid var(--hairline);white-space:pre-wrap;overflow-wrap:anywhere;font:inherit}`;
 
 const page = (title: string, body: string) => `<!doctype html>
-<html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>${escapeHtml(title)} · Oriel</title>
+<html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><link rel="icon" type="image/svg+xml" href="/assets/oriel.svg"><title>${escapeHtml(title)} · Oriel</title>
 <style>${style}</style></head>
 <body><main><header><a class="name" href="/">Oriel</a><span>Mail kept on this machine</span></header>
 ${body}

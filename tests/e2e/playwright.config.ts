@@ -12,6 +12,8 @@ export default defineConfig<object, BrowserChoice>({
   globalSetup: './set-up/serve-product.ts',
   workers: 1,
   retries: 0,
+  // Ends before `npm test` gives up on the whole part, so that what has been found is still counted.
+  globalTimeout: process.env['CI'] ? 9.5 * 60_000 : 0,
   timeout: 60_000,
   expect: { timeout: 10_000 },
   forbidOnly: true,

@@ -34,7 +34,7 @@ export class FaceTracking {
   private readonly cameras = inject(CAMERAS);
   private readonly makeWorker = inject(TRACKING_WORKER);
   private readonly feedFrames = inject(FRAME_FEED);
-  private readonly assetsUrl = new URL('assets/tracker/', inject(DOCUMENT).baseURI).href;
+  private readonly assetsUrl = new URL('/assets/tracker/', inject(DOCUMENT).baseURI).href;
 
   private readonly currentState = signal<TrackingState>('off');
   /** Where following stands. */
