@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { createFollower } from '../smoothing/follower';
 import { CALM_FOLLOWING } from '../smoothing/follower-settings';
 import { newWall, usualGlass } from './new-wall';
-import { PairingCode, WallSetUp } from './walls';
+import { PairingCode, TrackerTuning, WallSetUp } from './walls';
 
 describe('a new wall', () => {
   it('is as the contract has it, and every figure is kept', () => {
@@ -26,9 +26,51 @@ describe('a new wall', () => {
   it('follows as calmly as the player does by itself', () => {
     const { tuning } = newWall('Hall');
     expect(tuning.filter).toEqual(CALM_FOLLOWING.filter);
-    expect(() =>
-      createFollower({ ...CALM_FOLLOWING, homeEye: { x: 0, y: 0, z: 1800 }, filter: tuning.filter }),
-    ).not.toThrow();
+  });
+
+  it('may be tuned to the least and the most that the contract allows: the picture stays where eyes can be', () => {
+    const { tuning } = newWall('Hall');
+    const both = (minCutoffHz: number, beta: number, derivativeCutoffHz: number) => {
+      const filter = { minCutoffHz, beta, derivativeCutoffHz };
+      return { across: filter, along: filter };
+    };
+    const least = {
+      filter: both(1e-3, 0, 1e-3),
+      longestHorizonMs: 0,
+      appearMs: 1,
+      holdMs: 0,
+      returnMs: 1,
+      greatestMmPerS: 1e-3,
+    };
+    const [most, mostMs] = [both(60, 10, 60), 60_000];
+    const greatest = {
+      filter: most,
+      longestHorizonMs: mostMs,
+      appearMs: mostMs,
+      holdMs: mostMs,
+      returnMs: mostMs,
+      greatestMmPerS: 20_000,
+    };
+    for (const extreme of [least, greatest]) {
+      expect(TrackerTuning.safeParse({ ...tuning, ...extreme }).success).toBe(true);
+      const follower = createFollower({ ...CALM_FOLLOWING, ...extreme, homeEye: { x: 0, y: 0, z: 1800 } });
+      const eye = { x: 0, y: 0, z: 0 };
+      for (let i = 0; i < 300; i++) {
+        if (i < 100) follower.sample({ x: 5 * i, y: 10, z: 1500 - i }, i * 33);
+        else if (i < 200) follower.lost(i * 33);
+        else follower.sample({ x: -300, y: 0, z: 900 }, i * 33);
+        follower.at(i * 33 + 20, eye);
+        expect(Math.abs(eye.x) + Math.abs(eye.y)).toBeLessThan(5000);
+        expect(eye.z).toBeGreaterThanOrEqual(CALM_FOLLOWING.nearestMm);
+        expect(eye.z).toBeLessThan(10_000);
+      }
+    }
+  });
+
+  it('cannot be told to appear or to return in no time at all', () => {
+    const { tuning } = newWall('Hall');
+    for (const never of [{ appearMs: 0 }, { returnMs: 0 }, { greatestMmPerS: 0 }])
+      expect(TrackerTuning.safeParse({ ...tuning, ...never }).success).toBe(false);
   });
 });
 

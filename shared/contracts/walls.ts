@@ -8,6 +8,8 @@ import { Scene, ZoneSchema } from './scenes';
 const Radians = z.number().min(-Math.PI).max(Math.PI);
 const Positive = z.number().positive('Must be more than 0').max(100_000);
 const Milliseconds = z.number().min(0).max(60_000);
+/** In how long something is done; never in no time at all. */
+const Duration = z.number().min(1, 'At least 1 ms').max(60_000);
 
 export const WallGlass = z.object({
   widthMm: Positive,
@@ -70,9 +72,9 @@ export const TrackerTuning = z.object({
   /** Delay of screen and camera that prediction makes good beyond what is measured frame by frame, ms. */
   displayDelayMs: Milliseconds,
   longestHorizonMs: Milliseconds,
-  appearMs: Milliseconds,
+  appearMs: Duration,
   holdMs: Milliseconds,
-  returnMs: Milliseconds,
+  returnMs: Duration,
   greatestMmPerS: z.number().positive().max(20_000),
   choice: ViewerChoice,
   ipdMm: ViewerIpd,
