@@ -11,6 +11,7 @@ export const routes: Routes = [
       { path: '', pathMatch: 'full', redirectTo: 'scenes' },
       { path: 'scenes', loadChildren: () => import('./scenes/scenes.routes').then((m) => m.scenesRoutes) },
       { path: 'photos', loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
+      { path: 'bench', loadChildren: () => import('./bench/bench.routes').then((m) => m.benchRoutes) },
       { path: 'household', loadChildren: () => import('./household/household.routes').then((m) => m.householdRoutes) },
       { path: 'compose/:sceneId', loadChildren: () => import('./composer/composer.routes').then((m) => m.composerRoutes) },
       { path: 'screen', loadChildren: () => import('./screen/screen.routes').then((m) => m.screenRoutes) },

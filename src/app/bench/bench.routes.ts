@@ -1,0 +1,40 @@
+import { inject } from '@angular/core';
+import { type CanActivateFn, Router, type Routes } from '@angular/router';
+import { Session } from '../core/session';
+import { BenchSubject } from './subject/bench-subject';
+
+/** The bench is for owners and tuners. */
+const forTuners: CanActivateFn = () => inject(Session).mayTune() || inject(Router).createUrlTree(['/scenes']);
+
+export const benchRoutes: Routes = [
+  {
+    path: '',
+    canActivate: [forTuners],
+    providers: [BenchSubject],
+    loadComponent: () => import('./bench-page/bench-page').then((m) => m.BenchPage),
+    children: [
+      {
+        path: '',
+        pathMatch: 'full',
+        title: 'Bench · Oriel',
+        loadComponent: () => import('./live/live-page').then((m) => m.LivePage),
+      },
+      { path: 'runs', title: 'Runs · Oriel', loadComponent: () => import('./runs/runs-page').then((m) => m.RunsPage) },
+      {
+        path: 'runs/compare',
+        title: 'Two runs · Oriel',
+        loadComponent: () => import('./runs/compare-page').then((m) => m.ComparePage),
+      },
+      {
+        path: 'runs/:runId',
+        title: 'Replay · Oriel',
+        loadComponent: () => import('./replay/replay-page').then((m) => m.ReplayPage),
+      },
+      {
+        path: 'mirror',
+        title: 'Mirror test · Oriel',
+        loadComponent: () => import('./mirror/mirror-page').then((m) => m.MirrorPage),
+      },
+    ],
+  },
+];

@@ -1,0 +1,115 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import type { Point3 } from '@oriel/shared/projection/types';
+import { upFromAcross } from '@oriel/shared/viewer/field-of-view';
+import type { Subject } from '../subject/bench-subject';
+
+/** Cameras are taken to deliver 16:9; only the cone in the section depends on it. */
+const SHAPE = { width: 16, height: 9 };
+const LEAST_REACH_MM = 1200;
+
+/** Plan and section of the glass, the camera, the viewing zone and the eye, to one scale. Lengths in mm. */
+@Component({
+  selector: 'oriel-eye-drawing',
+  template: `
+    @for (view of views(); track view.name) {
+      <figure>
+        <svg [attr.viewBox]="view.box" role="img" [attr.aria-label]="view.name + ': glass, camera and eye'">
+          @if (view.zone; as zone) {
+            <rect
+              class="zone"
+              [attr.x]="zone.x"
+              [attr.y]="zone.y"
+              [attr.width]="zone.width"
+              [attr.height]="zone.height"
+            />
+          }
+          <path class="cone" [attr.d]="view.cone" />
+          <path class="glass" [attr.d]="view.glass" />
+          <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
+          @if (view.eye; as eye) {
+            <path class="sight" [attr.d]="view.sight" />
+            <circle class="eye" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
+          }
+        </svg>
+        <figcaption class="marginal">{{ view.name }}</figcaption>
+      </figure>
+    }
+  `,
+  styleUrl: './eye-drawing.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class EyeDrawing {
+  readonly subject = input.required<Subject>();
+  readonly eye = input<Point3 | null>(null);
+
+  /** How far into the room the drawing reaches; grows with the zone, and only when the eye is beyond. */
+  private readonly reach = computed(() => {
+    const { zone, glass } = this.subject();
+    const far = Math.max(LEAST_REACH_MM, 1.6 * glass.widthMm, 1.08 * (zone?.farthestMm ?? 0));
+    return Math.max(far, 500 * Math.ceil((1.05 * (this.eye()?.z ?? 0)) / 500));
+  });
+
+  protected readonly views = computed(() => {
+    const { glass, zone, tracking } = this.subject();
+    const { position, hfovRad, yawRad, pitchRad } = tracking.camera;
+    const eye = this.eye();
+    const up = upFromAcross(hfovRad, SHAPE.width, SHAPE.height);
+    return [
+      this.view('Plan, from above', (across, z) => ({ x: across, y: z }), {
+        half: glass.widthMm / 2,
+        lens: { across: position.x, z: position.z, turn: yawRad, field: hfovRad },
+        zone: zone && [zone.leftMm, zone.rightMm, zone.nearestMm, zone.farthestMm],
+        eye: eye && { across: eye.x, z: eye.z },
+      }),
+      this.view('Section, from the side', (across, z) => ({ x: z, y: -across }), {
+        half: glass.heightMm / 2,
+        lens: { across: position.y, z: position.z, turn: pitchRad, field: up },
+        zone: zone && [zone.lowestMm, zone.highestMm, zone.nearestMm, zone.farthestMm],
+        eye: eye && { across: eye.y, z: eye.z },
+      }),
+    ];
+  });
+
+  private view(name: string, place: (across: number, z: number) => { x: number; y: number }, room: Room) {
+    const reach = this.reach();
+    const side = Math.max(0.5 * reach, 1.2 * room.half);
+    const corner = (across: number, z: number) => {
+      const { x, y } = place(across, z);
+      return `${x},${y}`;
+    };
+    const { lens } = room;
+    const end = (half: number) =>
+      corner(lens.across + reach * Math.sin(lens.turn + half), lens.z + reach * Math.cos(lens.turn + half));
+    const boxFrom = place(-side, -0.06 * reach);
+    const boxTo = place(side, 1.02 * reach);
+    return {
+      name,
+      unit: reach / 80,
+      box: boxOf(boxFrom, boxTo).join(' '),
+      glass: `M${corner(-room.half, 0)} L${corner(room.half, 0)}`,
+      lens: place(lens.across, lens.z),
+      cone: `M${end(-lens.field / 2)} L${corner(lens.across, lens.z)} L${end(lens.field / 2)}`,
+      zone: room.zone && rectangleOf(boxOf(place(room.zone[0], room.zone[2]), place(room.zone[1], room.zone[3]))),
+      eye: room.eye && place(room.eye.across, room.eye.z),
+      sight: room.eye && `M${corner(-room.half, 0)} L${corner(room.eye.across, room.eye.z)} L${corner(room.half, 0)}`,
+    };
+  }
+}
+
+interface Room {
+  readonly half: number;
+  readonly lens: { readonly across: number; readonly z: number; readonly turn: number; readonly field: number };
+  readonly zone: readonly [number, number, number, number] | null;
+  readonly eye: { readonly across: number; readonly z: number } | null;
+}
+
+type Box = readonly [number, number, number, number];
+
+const boxOf = (a: { x: number; y: number }, b: { x: number; y: number }): Box => [
+  Math.min(a.x, b.x),
+  Math.min(a.y, b.y),
+  Math.abs(b.x - a.x),
+  Math.abs(b.y - a.y),
+];
+
+const rectangleOf = ([x, y, width, height]: Box) => ({ x, y, width, height });

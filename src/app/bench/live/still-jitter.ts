@@ -1,0 +1,53 @@
+import { jitterMm } from '@oriel/shared/replay/jitter';
+import { createTrack, type Track } from '@oriel/shared/replay/sample';
+import type { Point3 } from '@oriel/shared/projection/types';
+
+/** Over this long the eye is judged. */
+export const JUDGED_MS = 2000;
+/** Slower than this, the eye stands still (as in shared/replay/stretches.ts). */
+const STILL_MM_PER_S = 30;
+const CAPACITY = 400;
+
+/** The last two seconds of an eye: whether it stands still, and then how much it jitters. */
+export class StillJitter {
+  private readonly kept = createTrack(CAPACITY);
+  private taken = 0;
+
+  add(tMs: number, { x, y, z }: Point3): void {
+    const at = this.taken++ % CAPACITY;
+    this.kept.tMs[at] = tMs;
+    this.kept.x[at] = x;
+    this.kept.y[at] = y;
+    this.kept.z[at] = z;
+  }
+
+  clear(): void {
+    this.taken = 0;
+  }
+
+  /** Jitter across, mm; null while the eye moves or is known for less than two seconds. */
+  at(nowMs: number): number | null {
+    const track = this.last(nowMs - JUDGED_MS);
+    const { tMs, x, y } = track;
+    const n = tMs.length;
+    if (n < 10 || tMs[n - 1] - tMs[0] < 0.8 * JUDGED_MS) return null;
+    const half = n >> 1;
+    const mean = (values: Float64Array) => values.reduce((sum, value) => sum + value, 0) / values.length;
+    const gone = Math.hypot(
+      mean(x.subarray(half)) - mean(x.subarray(0, half)),
+      mean(y.subarray(half)) - mean(y.subarray(0, half)),
+    );
+    if (gone / (JUDGED_MS / 2000) > STILL_MM_PER_S) return null;
+    return jitterMm(track, [{ fromMs: tMs[0], toMs: tMs[n - 1] + 1 }], 'across');
+  }
+
+  private last(sinceMs: number): Track {
+    const indices: number[] = [];
+    for (let i = Math.max(0, this.taken - CAPACITY); i < this.taken; i++)
+      if (this.kept.tMs[i % CAPACITY] >= sinceMs) indices.push(i % CAPACITY);
+    const track = createTrack(indices.length);
+    for (const key of ['tMs', 'x', 'y', 'z'] as const)
+      indices.forEach((from, to) => (track[key][to] = this.kept[key][from]));
+    return track;
+  }
+}

@@ -1,0 +1,17 @@
+import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { Direction, ReplaySample } from '@oriel/shared/replay/sample';
+import type { SearchResult } from '@oriel/shared/replay/search-tuning';
+
+/** What the page and the replay worker say to each other. */
+export interface SearchAsked {
+  readonly samples: readonly ReplaySample[];
+  readonly today: TrackerTuning;
+}
+
+/** The search of one direction; where the run has too little of it, `refusal` says what to record. */
+export type Searched = { readonly found: SearchResult } | { readonly direction: Direction; readonly refusal: string };
+
+export type FromReplay =
+  | { readonly type: 'progress'; readonly share: number }
+  | { readonly type: 'done'; readonly across: Searched; readonly along: Searched }
+  | { readonly type: 'failed' };

@@ -1,0 +1,136 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  computed,
+  effect,
+  inject,
+  input,
+  linkedSignal,
+  signal,
+  untracked,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
+import { MatFormField, MatLabel } from '@angular/material/form-field';
+import { MatProgressBar } from '@angular/material/progress-bar';
+import { MatOption, MatSelect } from '@angular/material/select';
+import { RouterLink } from '@angular/router';
+import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import { type Wish, wishes } from '@oriel/shared/replay/wishes';
+import { FailureNotice } from '../../core/failure-notice';
+import { Submission } from '../../core/submission';
+import type { WholeRun } from '../runs/runs-store';
+import { RunsStore } from '../runs/runs-store';
+import { BenchSubject } from '../subject/bench-subject';
+import type { FromReplay, SearchAsked } from './replay-messages';
+import { REPLAY_WORKER } from './replay-worker';
+import { TradeOff } from './trade-off';
+
+/** A run through other settings: what they cost and bring, and the wished one onto a wall by one press. */
+@Component({
+  selector: 'oriel-replay-page',
+  imports: [
+    RouterLink,
+    MatButton,
+    MatButtonToggle,
+    MatButtonToggleGroup,
+    MatFormField,
+    MatLabel,
+    MatSelect,
+    MatOption,
+    MatProgressBar,
+    FailureNotice,
+    TradeOff,
+  ],
+  templateUrl: './replay-page.html',
+  styleUrl: './replay-page.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ReplayPage {
+  /** From the address. */
+  readonly runId = input.required<string>();
+
+  private readonly runs = inject(RunsStore);
+  private readonly makeWorker = inject(REPLAY_WORKER);
+  protected readonly bench = inject(BenchSubject);
+  protected readonly loading = new Submission();
+  protected readonly applying = new Submission();
+  protected readonly wishes = wishes;
+  protected readonly wish = signal<Wish>('balanced');
+  protected readonly whole = signal<WholeRun | null>(null);
+  protected readonly answer = signal<FromReplay | null>(null);
+  protected readonly share = computed(() => {
+    const answer = this.answer();
+    return answer?.type === 'progress' ? answer.share : 0;
+  });
+  protected readonly done = computed(() => {
+    const answer = this.answer();
+    return answer?.type === 'done' ? answer : null;
+  });
+  /** The wall to change: the run's own, else the one on the bench. */
+  protected readonly wallId = linkedSignal(() => {
+    const own = this.whole()?.run.wallId;
+    return this.bench.walls().find(({ id }) => id === own)?.id ?? this.bench.wall()?.id ?? null;
+  });
+  protected readonly wall = computed(() => this.bench.walls().find(({ id }) => id === this.wallId()) ?? null);
+  protected readonly said = signal<string | null>(null);
+  private worker: Worker | null = null;
+
+  constructor() {
+    effect(() => {
+      if (this.runId()) untracked(() => void this.load());
+    });
+    inject(DestroyRef).onDestroy(() => this.worker?.terminate());
+  }
+
+  protected load(): Promise<void> {
+    return this.loading.run(async () => {
+      const whole = await this.runs.read(this.runId());
+      this.whole.set(whole);
+      this.search(whole);
+    });
+  }
+
+  protected apply(): Promise<void> {
+    return this.applying.run(async () => {
+      const wallId = this.wallId();
+      if (!wallId) return;
+      this.said.set(null);
+      const applied = await this.bench.apply(wallId, (tuning) => this.wishedOver(tuning));
+      const name = this.wall()?.setUp.name ?? '';
+      this.said.set(
+        applied.kind === 'saved'
+          ? `${name} follows with this from now on.`
+          : `${applied.by} changed ${name} meanwhile. Their changes stay; nothing of yours is written yet. Press again to put only these settings over the newest.`,
+      );
+    });
+  }
+
+  /** A wall's tuning with only what was searched changed. */
+  private wishedOver(tuning: TrackerTuning): TrackerTuning {
+    const { across, along } = this.done()!;
+    const wish = this.wish();
+    const changed = { ...tuning, filter: { ...tuning.filter } };
+    if ('found' in across) {
+      const { tuning: best } = across.found.best[wish];
+      changed.filter.across = best.filter.across;
+      changed.longestHorizonMs = best.longestHorizonMs;
+    }
+    if ('found' in along) changed.filter.along = along.found.best[wish].tuning.filter.along;
+    return changed;
+  }
+
+  private search({ run, samples }: WholeRun): void {
+    this.worker?.terminate();
+    this.answer.set({ type: 'progress', share: 0 });
+    const worker = (this.worker = this.makeWorker());
+    worker.onmessage = ({ data }: MessageEvent<FromReplay>) => {
+      this.answer.set(data);
+      if (data.type !== 'progress') worker.terminate();
+    };
+    worker.onerror = () => this.answer.set({ type: 'failed' });
+    const asked: SearchAsked = { samples, today: run.tuning };
+    worker.postMessage(asked);
+  }
+}

@@ -1,0 +1,130 @@
+import { readFile } from 'node:fs/promises';
+import { keepMadeUpRun, makeWall, wallNow } from './bench/household';
+import { expect, test } from './fixtures';
+
+const sizes = [
+  { width: 1440, height: 900 },
+  { width: 1024, height: 768 },
+  { width: 390, height: 844 },
+];
+const unique = () => Math.random().toString(36).slice(2, 8);
+
+test('only owners and tuners find the bench', async ({ signedInPage }) => {
+  const page = await signedInPage('viewer');
+  await page.goto('/bench');
+  await expect(page).toHaveURL(/\/scenes/);
+  await expect(page.getByRole('link', { name: 'Bench' })).toHaveCount(0);
+});
+
+test('a run is replayed through other settings, and the wished one put on the wall; another’s save is not written over', async ({
+  signedInPage,
+  expectErrors,
+}) => {
+  test.setTimeout(120_000);
+  const page = await signedInPage('tuner');
+  await page.goto('/scenes');
+  const wall = await makeWall(page, `Landing ${unique()}`);
+  const runId = await keepMadeUpRun(page, `Made up ${unique()}`, wall.id);
+  await page.goto(`/bench/runs/${runId}`);
+  await expect(page.getByRole('heading', { name: 'From side to side' })).toBeVisible({ timeout: 60_000 });
+  await page.getByRole('radio', { name: 'Calmer' }).click();
+  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  await expect(page.getByText(`${wall.setUp.name} follows with this from now on.`)).toBeVisible();
+  const after = await wallNow(page, wall.id);
+  expect(after.revision).toBe(wall.revision + 1);
+  expect(after.setUp.tuning.filter).not.toEqual(wall.setUp.tuning.filter);
+  expect({ ...after.setUp, tuning: null }).toEqual({ ...wall.setUp, tuning: null });
+
+  expectErrors(/409 \(Conflict\)/);
+  // Somebody else tunes the same wall from another page.
+  const other = await signedInPage('owner');
+  await other.goto(`/bench/runs/${runId}`);
+  await expect(other.getByRole('button', { name: 'Apply to the wall' })).toBeVisible({ timeout: 60_000 });
+  await other.getByRole('button', { name: 'Apply to the wall' }).click();
+  await expect(other.getByText('from now on')).toBeVisible();
+
+  await page.getByRole('radio', { name: 'Quicker' }).click();
+  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  await expect(page.getByText('Their changes stay')).toBeVisible();
+  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 2);
+  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  await expect(page.getByText('from now on')).toBeVisible();
+  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 3);
+});
+
+test('runs are renamed, exported, compared and deleted', async ({ signedInPage }) => {
+  const page = await signedInPage('tuner');
+  await page.goto('/scenes');
+  const [first, second] = [`=1+1 ${unique()}`, `Slow ${unique()}`];
+  await keepMadeUpRun(page, first, null);
+  await keepMadeUpRun(page, second, null, 120);
+  await page.goto('/bench/runs');
+
+  const [csv] = await Promise.all([
+    page.waitForEvent('download'),
+    page.getByRole('button', { name: `CSV of ${first}` }).click(),
+  ]);
+  const lines = (await readFile(await csv.path(), 'utf8')).split('\r\n');
+  expect(lines.length).toBe(1 + 420 + 1);
+  expect(lines[1].startsWith(`'=1+1`)).toBe(true);
+  const [json] = await Promise.all([
+    page.waitForEvent('download'),
+    page.getByRole('button', { name: `JSON of ${first}` }).click(),
+  ]);
+  expect((JSON.parse(await readFile(await json.path(), 'utf8')) as { samples: unknown[] }).samples.length).toBe(420);
+
+  await page.getByRole('checkbox', { name: `Compare ${first}` }).check();
+  await page.getByRole('checkbox', { name: `Compare ${second}` }).check();
+  await page.getByRole('link', { name: 'Compare these two' }).click();
+  await expect(page.getByRole('row', { name: /Capture to the page/ })).toContainText('40.0 / 40.0');
+  await expect(page.getByRole('row', { name: /Capture to the page/ })).toContainText('120.0 / 120.0');
+  await page.getByRole('link', { name: 'All runs' }).click();
+
+  await page.getByRole('button', { name: `Rename ${second}` }).click();
+  const third = `Slower ${unique()}`;
+  await page.getByLabel('Name of the run').fill(third);
+  await page.getByRole('button', { name: 'Save the name' }).click();
+  await expect(page.getByRole('link', { name: third })).toBeVisible();
+
+  await page.getByRole('button', { name: `Delete ${third}` }).click();
+  await page.getByRole('button', { name: 'Keep' }).click();
+  await expect(page.getByRole('link', { name: third })).toBeVisible();
+  await page.getByRole('button', { name: `Delete ${third}` }).click();
+  await page.getByRole('button', { name: 'Delete now' }).click();
+  await expect(page.getByRole('link', { name: third })).toHaveCount(0);
+  await page.reload();
+  await expect(page.getByRole('link', { name: first })).toBeVisible();
+  await expect(page.getByRole('link', { name: third })).toHaveCount(0);
+});
+
+test('every page of the bench is accessible at three sizes in both lights, and none is wider than its screen', async ({
+  signedInPage,
+  expectAccessible,
+}) => {
+  test.setTimeout(180_000);
+  const page = await signedInPage('tuner');
+  await page.goto('/scenes');
+  const [a, b] = [await keepMadeUpRun(page, 'One', null), await keepMadeUpRun(page, 'Other', null)];
+  for (const path of [
+    '/bench',
+    '/bench/runs',
+    `/bench/runs/${a}`,
+    `/bench/runs/compare?a=${a}&b=${b}`,
+    '/bench/mirror',
+  ]) {
+    await page.goto(path);
+    await expect(page.getByRole('heading', { name: 'Bench', exact: true })).toBeVisible();
+    if (path.endsWith(a)) await expect(page.getByRole('heading', { name: 'Nearer' })).toBeVisible({ timeout: 60_000 });
+    for (const size of sizes)
+      for (const colorScheme of ['light', 'dark'] as const) {
+        await page.setViewportSize(size);
+        await page.emulateMedia({ colorScheme });
+        // Material's labels fade over when the light changes.
+        await page.waitForTimeout(400);
+        await expectAccessible(page);
+        expect(await page.evaluate(() => document.documentElement.scrollWidth - innerWidth), path).toBeLessThanOrEqual(
+          0,
+        );
+      }
+  }
+});
