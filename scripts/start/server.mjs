@@ -15,7 +15,8 @@ const recentCharacters = 32_768;
 /**
  * Starts the built server as a process of its own group and waits until it is ready: migrated, demo loaded, database answering.
  * @param {{ settings: NodeJS.ProcessEnv, logFile: string, signal?: AbortSignal }} options
- * @returns {Promise<{ stop: () => Promise<void>, ended: Promise<number> }>} ended: the exit code, once it has ended by itself or not
+ * @returns {Promise<{ stop: () => Promise<void>, kill: () => Promise<number>, ended: Promise<number> }>} ended: the exit code, once it has
+ *   ended by itself or not; kill ends it as a power cut would
  * @throws Error with what the server's log says
  */
 export async function startServer({ settings, logFile, signal }) {
@@ -64,7 +65,11 @@ export async function startServer({ settings, logFile, signal }) {
     await stop();
     throw error;
   }
-  return { stop, ended };
+  const kill = () => {
+    child.kill('SIGKILL');
+    return ended;
+  };
+  return { stop, kill, ended };
 }
 
 /** @returns {Promise<boolean>} */

@@ -1,11 +1,13 @@
 import { APP_BASE_HREF } from '@angular/common';
 import { provideHttpClient } from '@angular/common/http';
-import { type ApplicationConfig, inject, provideAppInitializer, provideBrowserGlobalErrorListeners, provideZonelessChangeDetection } from '@angular/core';
+import { type ApplicationConfig, inject, isDevMode, provideAppInitializer, provideBrowserGlobalErrorListeners, provideZonelessChangeDetection } from '@angular/core';
 import { MAT_FORM_FIELD_DEFAULT_OPTIONS } from '@angular/material/form-field';
 import { provideRouter, withComponentInputBinding, withInMemoryScrolling, withViewTransitions } from '@angular/router';
+import { provideServiceWorker } from '@angular/service-worker';
 import { routes } from './app.routes';
 import { Session } from './core/session';
 import { Light } from './core/light';
+import { onWall, whenOnWall } from './core/on-wall';
 
 export const appConfig: ApplicationConfig = {
   providers: [
@@ -16,9 +18,10 @@ export const appConfig: ApplicationConfig = {
     provideHttpClient(),
     provideRouter(routes, withComponentInputBinding(), withViewTransitions({ skipInitialTransition: true }), withInMemoryScrolling({ scrollPositionRestoration: 'enabled' })),
     { provide: MAT_FORM_FIELD_DEFAULT_OPTIONS, useValue: { appearance: 'outline', subscriptSizing: 'dynamic' } },
+    provideServiceWorker('wall-worker.js', { enabled: !isDevMode(), registrationStrategy: whenOnWall }),
     provideAppInitializer(() => {
       inject(Light);
-      return inject(Session).load();
+      return onWall() ? undefined : inject(Session).load();
     }),
   ],
 };

@@ -3,6 +3,7 @@ import { forMembers, forStrangers } from './core/guards';
 
 export const routes: Routes = [
   { path: 'play/:sceneId', canActivate: [forMembers], loadChildren: () => import('./player/player.routes').then((m) => m.playerRoutes) },
+  { path: 'wall', loadChildren: () => import('./wall/wall.routes').then((m) => m.wallRoutes) },
   {
     path: '',
     canActivate: [forMembers],

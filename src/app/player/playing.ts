@@ -1,10 +1,11 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { ViewingZone } from '@oriel/shared/projection/types';
 import { graphicsName, makeRenderer, rendererFor } from './choose-renderer';
 import { IntervalJudge } from './interval-judge';
 import { Meter } from './meter';
 import type { PictureAddress, Renderer, RendererFacts, RendererName } from './renderer';
 import { type SceneOnScreen, sceneOnScreen } from './scene-on-screen';
-import { Viewpoint } from './viewpoint';
+import { type Following, Viewpoint } from './viewpoint';
 import type { WindowOnScreen } from './window-on-screen';
 
 /** What a playing scene stands in. */
@@ -15,6 +16,9 @@ export interface PlayingSurroundings {
   readonly area: () => WindowOnScreen;
   /** `css` or `three` from the query; anything else chooses by the graphics processor. */
   readonly asked: string | undefined;
+  /** The viewing zone of this room, where it was measured; otherwise the scene's own. */
+  readonly zone?: ViewingZone;
+  readonly following?: Following;
   /** Whether less motion is asked for. */
   readonly still: boolean;
   /** Called whenever pictures have come, with the names of the layers that have none. */
@@ -46,8 +50,8 @@ export class Playing {
     private readonly surroundings: PlayingSurroundings,
   ) {
     this.window = surroundings.host.ownerDocument.defaultView!;
-    this.scene = sceneOnScreen(document, surroundings.area());
-    this.viewpoint = new Viewpoint(this.scene, surroundings.still);
+    this.scene = sceneOnScreen(document, surroundings.area(), surroundings.zone);
+    this.viewpoint = new Viewpoint(this.scene, surroundings.still, surroundings.following);
     Object.assign(this.eye, this.scene.homeEye);
   }
 
@@ -94,8 +98,8 @@ export class Playing {
 
   /** Fits the scene to an area that has changed. */
   resize(): void {
-    this.scene = sceneOnScreen(this.document, this.surroundings.area());
-    this.viewpoint = new Viewpoint(this.scene, this.surroundings.still);
+    this.scene = sceneOnScreen(this.document, this.surroundings.area(), this.surroundings.zone);
+    this.viewpoint = new Viewpoint(this.scene, this.surroundings.still, this.surroundings.following);
     this.renderer?.resize(this.scene);
   }
 

@@ -45,10 +45,11 @@ export interface SceneOnScreen {
   readonly layers: readonly LayerOnScreen[];
 }
 
-/** Carries a scene to the window's area of this screen. @throws GeometryError where the scene's figures are impossible. */
-export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen): SceneOnScreen {
+/** Carries a scene to the window's area of this screen, for the viewing zone of this room where it was measured. @throws GeometryError where the scene's figures are impossible. */
+export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen, zone?: ViewingZone): SceneOnScreen {
   const { pxPerMm } = area;
-  const scene = retarget(document, { widthMm: area.widthPx / pxPerMm, heightMm: area.heightPx / pxPerMm });
+  const carried = retarget(document, { widthMm: area.widthPx / pxPerMm, heightMm: area.heightPx / pxPerMm });
+  const scene = { ...carried, zone: zone ?? carried.zone };
   const shown = scene.layers.filter((layer) => layer.shown && layer.opacity > 0);
   const nearestEyeMm = Math.max(0, ...shown.map((layer) => -layer.depthMm)) + EYE_MARGIN_MM * Math.min(1, scene.factor);
   const farthest: Point3 = { x: 0, y: 0, z: Math.max(scene.zone.farthestMm, scene.homeEye.z, nearestEyeMm) };

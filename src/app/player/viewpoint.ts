@@ -1,7 +1,7 @@
 import type { Point3 } from '@oriel/shared/projection/types';
 import { NO_DRIFT } from '@oriel/shared/smoothing/drift';
 import { type Follower, createFollower } from '@oriel/shared/smoothing/follower';
-import { CALM_FOLLOWING } from '@oriel/shared/smoothing/follower-settings';
+import { CALM_FOLLOWING, type FollowerSettings } from '@oriel/shared/smoothing/follower-settings';
 import { HandEye } from './hand-eye';
 import type { SceneOnScreen } from './scene-on-screen';
 
@@ -9,6 +9,15 @@ import type { SceneOnScreen } from './scene-on-screen';
 const handOverMs = 4000;
 /** From drawing to the light of the screen, ms: measured with CSS at 60 frames a second. */
 const drawnToLitMs = 20;
+
+/** What was tuned of how the picture follows; the rest is as usual. */
+export interface Following {
+  readonly settings: Partial<FollowerSettings>;
+  /** Delay of screen and camera that no timestamp shows, ms: looked ahead for. */
+  readonly displayDelayMs: number;
+}
+
+export const usualFollowing: Following = { settings: {}, displayDelayMs: 0 };
 
 /**
  * Whose eye the picture is drawn for: a face, the hand in its place, or nobody. Both are sent through one follower, so that handing over,
@@ -27,11 +36,13 @@ export class Viewpoint {
   constructor(
     private readonly scene: SceneOnScreen,
     still: boolean,
+    private readonly following: Following = usualFollowing,
   ) {
     const { homeEye, nearestEyeMm } = scene;
     this.hand = new HandEye(scene);
     this.follower = createFollower({
       ...CALM_FOLLOWING,
+      ...following.settings,
       homeEye: { ...homeEye, z: Math.max(homeEye.z, nearestEyeMm) },
       nearestMm: nearestEyeMm,
       ...(still ? { drift: NO_DRIFT } : {}),
@@ -86,7 +97,7 @@ export class Viewpoint {
       this.follower.sample(this.hand.eye, tMs);
     }
     this.steppedMs = tMs;
-    this.follower.at(tMs + drawnToLitMs, out);
+    this.follower.at(tMs + drawnToLitMs + this.following.displayDelayMs, out);
     this.last.x = out.x;
     this.last.y = out.y;
     this.last.z = out.z;

@@ -5,6 +5,7 @@ import { LADDER_STEPS, type LadderStep } from '@oriel/shared/ladder/steps';
 export interface LadderState {
   readonly step: number;
   readonly words: string;
+  readonly lookedBy: LadderStep['looking']['by'];
   readonly changes: readonly LadderChange[];
 }
 
@@ -23,7 +24,7 @@ export class LadderKeeper {
   }
 
   get state(): LadderState {
-    return { step: this.ladder.step, words: this.step.words, changes: this.changes };
+    return { step: this.ladder.step, words: this.step.words, lookedBy: this.step.looking.by, changes: this.changes };
   }
 
   /** A look at the face that is followed took so long. */

@@ -100,7 +100,7 @@ export class TrackingSession {
         frameWidth: picture.width,
         frameHeight: picture.height,
         face,
-        ...(face && this.landmarksWanted ? { landmarks: acrossAndDown(this.tracker.points) } : {}),
+        ...(face && this.landmarksWanted && !this.tracker.detected ? { landmarks: acrossAndDown(this.tracker.points) } : {}),
         timings: { cropMs: cropMs + readMs, detectMs, landmarksMs, totalMs: performance.now() - begun },
         tensors: this.models.tensors(),
       });

@@ -1,0 +1,44 @@
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inject, output, signal } from '@angular/core';
+import { pairingMinutes } from '@oriel/shared/contracts/walls';
+import { Pairing } from './pairing';
+import { QrCode } from './qr-code';
+
+const tickMs = 1000;
+const minuteMs = 60_000;
+
+/** A screen without a wall: what to do, a code to type, and the same as a QR code. Read from across the room. */
+@Component({
+  selector: 'oriel-pairing-screen',
+  imports: [QrCode],
+  providers: [Pairing],
+  templateUrl: './pairing-screen.html',
+  styleUrl: './pairing-screen.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PairingScreen {
+  readonly paired = output();
+
+  private readonly pairing = inject(Pairing);
+  private readonly origin = inject(DOCUMENT).location.origin;
+  private readonly nowMs = signal(performance.now());
+
+  protected readonly trouble = this.pairing.trouble;
+  protected readonly place = `${this.origin}/walls`;
+  protected readonly code = computed(() => this.pairing.code()?.code ?? null);
+  /** In two halves, as people read it to one another. */
+  protected readonly halves = computed(() => this.code()?.match(/.{3}/g) ?? []);
+  protected readonly link = computed(() => `${this.place}?code=${this.code()}`);
+  protected readonly left = computed(() => {
+    const minutes = Math.min(pairingMinutes, Math.ceil(((this.pairing.code()?.untilMs ?? 0) - this.nowMs()) / minuteMs));
+    return minutes <= 1 ? 'Good for one more minute' : `Good for ${minutes} minutes`;
+  });
+
+  constructor() {
+    const tick = setInterval(() => this.nowMs.set(performance.now()), tickMs);
+    this.pairing.start(() => this.paired.emit());
+    inject(DestroyRef).onDestroy(() => {
+      clearInterval(tick);
+      this.pairing.stop();
+    });
+  }
+}

@@ -1,0 +1,43 @@
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, inject } from '@angular/core';
+import { keepAwake } from '../player/keep-awake';
+import { PairingScreen } from './pairing-screen';
+import { SelfCare } from './self-care';
+import { WallDevice } from './wall-device';
+import { WallEvents } from './wall-events';
+import { WallPicture } from './wall-picture';
+import { WallReporter } from './wall-reporter';
+
+/** The page of a screen on a wall: its picture, or the code that pairs it. It runs by itself for months. */
+@Component({
+  selector: 'oriel-wall',
+  imports: [PairingScreen, WallPicture],
+  providers: [WallDevice, WallEvents, WallReporter, SelfCare],
+  template: `
+    @if (device.unpaired()) {
+      <oriel-pairing-screen (paired)="device.open()" />
+    } @else if (device.showing(); as showing) {
+      <oriel-wall-picture [showing]="showing" />
+    } @else {
+      <p role="status">{{ device.trouble() ? 'The server cannot be reached, and no picture is kept on this screen yet. It is tried again by itself.' : '' }}</p>
+    }
+  `,
+  styles: `
+    :host { position: fixed; inset: 0; background: #000; color-scheme: dark; cursor: none; }
+    p { position: absolute; inset: 0; margin: auto; width: min(30em, 80%); height: fit-content; text-align: center; font-size: clamp(16px, 2.5vmin, 30px); color: #b8b4aa; }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class Wall {
+  protected readonly device = inject(WallDevice);
+
+  constructor() {
+    const awake = keepAwake(inject(DOCUMENT));
+    const unwatch = inject(SelfCare).watch();
+    this.device.open();
+    inject(DestroyRef).onDestroy(() => {
+      awake();
+      unwatch();
+      this.device.close();
+    });
+  }
+}

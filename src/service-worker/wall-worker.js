@@ -1,0 +1,13 @@
+// The service worker of a wall: Angular's own, which keeps the page and the tracker's files (ngsw-config.json), and before it the pictures
+// that the wall's page keeps (src/app/wall/kept-showing.ts). Pictures never change under their address, so what is kept is right.
+const pictureCache = 'oriel-wall-pictures';
+const pictures = '/api/wall/images/';
+
+self.addEventListener('fetch', (event) => {
+  const { method, url } = event.request;
+  if (method !== 'GET' || !new URL(url).pathname.startsWith(pictures)) return;
+  event.stopImmediatePropagation();
+  event.respondWith(caches.match(event.request, { cacheName: pictureCache, ignoreVary: true }).then((kept) => kept ?? fetch(event.request)));
+});
+
+importScripts('./ngsw-worker.js');

@@ -1,0 +1,104 @@
+import type { Page } from '@playwright/test';
+import { expect, test } from './fixtures';
+import { Desk } from './walls/desk';
+import { codeOn, picturesOn, readyForOffline, shownLayers } from './walls/screen';
+
+/** A screen in a context of its own, paired with a new wall that shows this scene. */
+async function pairedWall(desk: Desk, screen: Page, name: string, sceneName: string) {
+  const scenes = await desk.scenes();
+  const scene = scenes.find(({ document }) => document.name === sceneName)!;
+  const other = scenes.find(({ id }) => id !== scene.id)!;
+  const wall = await desk.newWall(name, scene.id);
+  await screen.goto('/wall');
+  await desk.pair(wall.id, await codeOn(screen));
+  await expect(shownLayers(screen)).toHaveCount(scene.document.layers.length, { timeout: 20_000 });
+  return { wall, scene, other };
+}
+
+const label = (page: Page) => page.getByRole('img', { name: /seen through the glass/ });
+
+test('a new screen shows a code, is paired from the desk, and follows what is changed there', async ({ page: screen, signedInPage, expectAccessible, expectErrors }) => {
+  // Before it is paired, it is told so; sharper pictures of a scene on their way are not to be had once another is shown.
+  expectErrors(/401/, /404.*\/api\/wall\/images/);
+  const tuner = await signedInPage('tuner');
+  await tuner.goto('/scenes');
+  const desk = new Desk(tuner);
+
+  await screen.goto('/wall');
+  expect(await codeOn(screen)).toMatch(/^[2-9A-HJ-NP-Z]{6}$/);
+  await expect(screen.getByText(/Good for (10|9) minutes/)).toBeVisible();
+  await expect(screen.getByRole('img', { name: new RegExp(`/walls\\?code=${await codeOn(screen)}$`) })).toBeVisible();
+  await expectAccessible(screen);
+
+  const { wall, other } = await pairedWall(desk, screen, 'Hall', 'October on the ridge');
+  await expect(label(screen)).toHaveAccessibleName(/October on the ridge/);
+  expect((await desk.wall(wall.id)).pairedAt).not.toBeNull();
+
+  const before = Date.now();
+  await desk.change(wall.id, { sceneId: other.id });
+  await expect(label(screen)).toHaveAccessibleName(new RegExp(other.document.name));
+  expect(Date.now() - before).toBeLessThan(5000);
+  await expect(shownLayers(screen)).toHaveCount(other.document.layers.length);
+
+  await desk.change(wall.id, { sceneId: null });
+  await expect(screen.getByText('Nothing is chosen to be shown on Hall.')).toBeVisible();
+  await expect(shownLayers(screen)).toHaveCount(0);
+
+  await desk.unpair(wall.id);
+  await codeOn(screen);
+  expect(await screen.evaluate(async () => [localStorage.getItem('oriel.wall'), await caches.has('oriel-wall-pictures')])).toEqual([null, false]);
+});
+
+test('a screen that starts without a network shows its picture, and hears of changes when the network is back', async ({ page: screen, context, signedInPage, expectErrors }) => {
+  expectErrors(/401/, /ERR_INTERNET_DISCONNECTED/, /Failed to load resource/);
+  const tuner = await signedInPage('tuner');
+  await tuner.goto('/scenes');
+  const desk = new Desk(tuner);
+  const { wall, scene, other } = await pairedWall(desk, screen, 'Stairs', 'October on the ridge');
+  await readyForOffline(screen);
+  const pictures = await picturesOn(screen);
+  expect(pictures.some((address) => !address.endsWith('/320'))).toBe(true);
+
+  await context.setOffline(true);
+  const afresh = await context.newPage();
+  await screen.close();
+  await afresh.goto('/wall');
+  await expect(shownLayers(afresh)).toHaveCount(scene.document.layers.length);
+  await expect.poll(() => picturesOn(afresh)).toEqual(pictures);
+
+  await desk.change(wall.id, { sceneId: other.id });
+  await context.setOffline(false);
+  await expect(label(afresh)).toHaveAccessibleName(new RegExp(other.document.name));
+});
+
+test('reports reach the desk, those of the time without a network too', async ({ page: screen, context, signedInPage, expectErrors }) => {
+  test.setTimeout(150_000);
+  expectErrors(/401/, /ERR_INTERNET_DISCONNECTED/, /Failed to load resource/);
+  const tuner = await signedInPage('tuner');
+  await tuner.goto('/scenes');
+  const desk = new Desk(tuner);
+  const { wall } = await pairedWall(desk, screen, 'Landing', 'October on the ridge');
+  await context.setOffline(true);
+  await screen.waitForTimeout(25_000);
+  expect(await desk.reports(wall.id)).toEqual([]);
+  await context.setOffline(false);
+  await expect.poll(async () => (await desk.reports(wall.id)).length, { timeout: 60_000 }).toBeGreaterThanOrEqual(2);
+  const { report } = await desk.wall(wall.id);
+  expect(report).toMatchObject({ renderer: 'css', temperatureC: null, tracking: 'nobody' });
+  expect(report!.framesPerS).toBeGreaterThan(0);
+});
+
+test('an ordinary page registers no service worker, and after a wall was shown in the same browser it still comes from the server', async ({ page, expectErrors }) => {
+  expectErrors(/401/);
+  await page.goto('/sign-in');
+  expect(await page.evaluate(async () => (await navigator.serviceWorker.getRegistrations()).length)).toBe(0);
+  await page.goto('/wall');
+  await page.waitForFunction(() => navigator.serviceWorker.controller !== null, undefined, { timeout: 60_000 });
+  const [reply] = await Promise.all([page.waitForResponse((response) => response.url().endsWith('/sign-in')), page.goto('/sign-in')]);
+  expect(reply.status()).toBe(200);
+  const kept = await page.evaluate(async () => {
+    const urls = await Promise.all((await caches.keys()).map(async (name) => (await (await caches.open(name)).keys()).map(({ url }) => new URL(url).pathname)));
+    return urls.flat();
+  });
+  expect(kept.filter((path) => /^\/(api|mail|health|ready)/.test(path))).toEqual([]);
+});
