@@ -1,5 +1,5 @@
 import type { Routes } from '@angular/router';
-import { forMembers, forStrangers } from './core/guards';
+import { forHouseholds, forMembers, forStrangers } from './core/guards';
 
 export const routes: Routes = [
   { path: 'play/:sceneId', canActivate: [forMembers], loadChildren: () => import('./player/player.routes').then((m) => m.playerRoutes) },
@@ -10,9 +10,9 @@ export const routes: Routes = [
     loadComponent: () => import('./shell/shell').then((m) => m.Shell),
     children: [
       { path: '', pathMatch: 'full', redirectTo: 'scenes' },
-      { path: 'scenes', loadChildren: () => import('./scenes/scenes.routes').then((m) => m.scenesRoutes) },
-      { path: 'photos', loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
-      { path: 'bench', loadChildren: () => import('./bench/bench.routes').then((m) => m.benchRoutes) },
+      { path: 'scenes', canActivate: [forHouseholds], loadChildren: () => import('./scenes/scenes.routes').then((m) => m.scenesRoutes) },
+      { path: 'photos', canActivate: [forHouseholds], loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
+      { path: 'bench', canActivate: [forHouseholds], loadChildren: () => import('./bench/bench.routes').then((m) => m.benchRoutes) },
       { path: 'household', loadChildren: () => import('./household/household.routes').then((m) => m.householdRoutes) },
       { path: 'compose/:sceneId', loadChildren: () => import('./composer/composer.routes').then((m) => m.composerRoutes) },
       { path: 'screen', loadChildren: () => import('./screen/screen.routes').then((m) => m.screenRoutes) },

@@ -23,11 +23,12 @@ export class Session {
   readonly mayTune = computed(() => this.hasRole('owner', 'tuner'));
   readonly isOwner = computed(() => this.hasRole('owner'));
 
-  /** Asks the server once at start; a server that cannot be reached leaves a stranger, and the sign-in page says so. */
+  /** Asks the server; one that cannot be reached changes nothing, which at start leaves a stranger. */
   async load(): Promise<void> {
-    const { account, mailPage } = await this.api.call(whoAmI).catch(() => ({ account: null, mailPage: null }));
-    this.account.set(account);
-    this.mailPage.set(mailPage);
+    const answer = await this.api.call(whoAmI).catch(() => null);
+    if (!answer) return;
+    this.account.set(answer.account);
+    this.mailPage.set(answer.mailPage);
   }
 
   enter(account: Account): void {
@@ -39,7 +40,7 @@ export class Session {
     this.chosenId.set(householdId);
   }
 
-  /** The present household's id. @throws Error when there is none; pages for members are only reached with one. */
+  /** The present household's id. @throws Error when there is none; pages that need one are only reached with one (guards.ts). */
   householdId(): string {
     const household = this.household();
     if (!household) throw new Error('No household chosen');

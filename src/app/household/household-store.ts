@@ -61,13 +61,13 @@ export class HouseholdStore {
   async leave(): Promise<void> {
     await this.api.call(leaveHousehold, { params: this.here() });
     await this.refreshSession();
+    this.current.set(null);
   }
 
   async create(name: string): Promise<void> {
     const { household } = await this.api.call(createHousehold, { body: { name } });
     await this.refreshSession();
     this.session.choose(household.id);
-    await this.load();
   }
 
   private here() {

@@ -35,6 +35,7 @@ export class HouseholdPage implements OnInit {
 
   protected load(): Promise<void> {
     return this.loading.run(async () => {
+      if (!this.session.household()) return;
       await this.store.load();
       this.nameForm.setValue({ name: this.store.household()?.name ?? '' });
     });
@@ -48,6 +49,7 @@ export class HouseholdPage implements OnInit {
     return this.creating.run(async () => {
       await this.store.create(this.anotherForm.controls.name.value);
       this.anotherForm.reset();
+      await this.load();
     });
   }
 }
