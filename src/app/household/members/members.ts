@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatFormField } from '@angular/material/form-field';
-import { MatOption, MatSelect } from '@angular/material/select';
+import { MatOption, MatSelect, type MatSelectChange } from '@angular/material/select';
 import { Router } from '@angular/router';
 import type { Member } from '@oriel/shared/contracts/households';
 import { everyRole, type Role } from '@oriel/shared/contracts/role';
@@ -33,8 +33,9 @@ export class Members {
     return member.accountId === this.session.account()?.id;
   }
 
-  protected changeRole(member: Member, role: Role): Promise<void> {
-    return this.change.run(() => this.store.changeRole(member.accountId, role));
+  protected async changeRole(member: Member, { source, value }: MatSelectChange<Role>): Promise<void> {
+    await this.change.run(() => this.store.changeRole(member.accountId, value));
+    if (this.change.failure()) source.value = member.role;
   }
 
   protected remove(member: Member): Promise<void> {
