@@ -25,10 +25,9 @@ import { Threshold } from '../threshold/threshold';
 export class InvitationPage implements OnInit {
   private readonly api = inject(Api);
   private readonly router = inject(Router);
-  private readonly token = mailedToken();
+  protected readonly token = mailedToken();
   protected readonly session = inject(Session);
   protected readonly passwordHint = `At least ${passwordMinCharacters} characters`;
-  protected readonly back = `/invitation#${this.token}`;
   protected readonly form = inject(NonNullableFormBuilder).group({ name: ['', accordingTo(Name)], password: ['', accordingTo(Password)] });
   protected readonly reading = new Submission();
   protected readonly joining = new Submission(this.form);

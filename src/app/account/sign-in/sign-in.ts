@@ -9,6 +9,7 @@ import { Session } from '../../core/session';
 import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
+import { mailedToken } from '../mailed-token';
 import { Threshold } from '../threshold/threshold';
 
 @Component({
@@ -25,6 +26,7 @@ export class SignIn {
   private readonly api = inject(Api);
   private readonly session = inject(Session);
   private readonly router = inject(Router);
+  private readonly token = mailedToken();
   protected readonly form = inject(NonNullableFormBuilder).group({
     email: ['', accordingTo(signIn.body.shape.email)],
     password: ['', accordingTo(signIn.body.shape.password)],
@@ -42,6 +44,7 @@ export class SignIn {
   /** Only an address of this page: `//elsewhere` would leave it. */
   private ownAddress(): string | null {
     const next = this.next();
-    return next?.startsWith('/') && !next.startsWith('//') ? next : null;
+    if (!next?.startsWith('/') || next.startsWith('//')) return null;
+    return this.token ? `${next}#${this.token}` : next;
   }
 }
