@@ -1,5 +1,5 @@
 import { HttpClient, HttpEventType } from '@angular/common/http';
-import { Injectable, computed, inject, signal } from '@angular/core';
+import { Injectable, computed, effect, inject, signal, untracked } from '@angular/core';
 import { type Observable, Subject, type Subscription } from 'rxjs';
 import { type Photo, photoMaxBytes, uploadPhoto } from '@oriel/shared/contracts/photos';
 import { addressOf } from '../../core/api';
@@ -35,6 +35,14 @@ export class UploadQueue {
   });
 
   constructor() {
+    // Whoever signs in next is not to see or send what another person chose.
+    effect(() => {
+      if (this.session.account()) return;
+      untracked(() => {
+        this.cancelAll();
+        this.clear();
+      });
+    });
     addEventListener('online', () => this.goOn());
     addEventListener('beforeunload', (event) => {
       if (this.open() > 0) event.preventDefault();
@@ -58,9 +66,7 @@ export class UploadQueue {
   }
 
   cancel(upload: Upload): void {
-    this.sending.get(upload)?.unsubscribe();
-    this.sending.delete(upload);
-    upload.state.set('cancelled');
+    this.end(upload);
     this.pump();
   }
 
@@ -72,12 +78,18 @@ export class UploadQueue {
   }
 
   cancelAll(): void {
-    for (const upload of this.list()) if (!isOver(upload.state())) this.cancel(upload);
+    for (const upload of this.list()) if (!isOver(upload.state())) this.end(upload);
   }
 
   /** Takes what is over off the list. */
   clear(): void {
     this.list.update((uploads) => uploads.filter((upload) => !isOver(upload.state())));
+  }
+
+  private end(upload: Upload): void {
+    this.sending.get(upload)?.unsubscribe();
+    this.sending.delete(upload);
+    upload.state.set('cancelled');
   }
 
   private goOn(): void {
