@@ -45,27 +45,28 @@ export class PhotoLibrary {
     return this.fetching;
   }
 
-  /** Takes in a photo just uploaded, in its place by date. */
+  /** Takes in a photo just uploaded, in its place by date; beyond what is fetched it comes with its own page. */
   take(photo: Photo): void {
     if (this.question.bin || this.question.search) return;
     const others = this.fetched().filter((known) => known.id !== photo.id);
     if (others.length === this.fetched().length) this.total.update((n) => n + 1);
     const at = others.findIndex((known) => isBefore(photo, known));
-    this.fetched.set(at < 0 ? [...others, photo] : [...others.slice(0, at), photo, ...others.slice(at)]);
+    if (at >= 0) this.fetched.set([...others.slice(0, at), photo, ...others.slice(at)]);
+    else this.fetched.set(this.next ? others : [...others, photo]);
     this.watchWaiting();
   }
 
   async bin(ids: readonly string[]): Promise<void> {
-    await this.inHundreds(ids, (photoIds) => this.api.call(binPhotos, { params: this.here(), body: { photoIds } }));
+    await this.inThousands(ids, (photoIds) => this.api.call(binPhotos, { params: this.here(), body: { photoIds } }));
     this.drop(ids);
   }
 
   async restore(ids: readonly string[]): Promise<void> {
-    await this.inHundreds(ids, (photoIds) => this.api.call(restorePhotos, { params: this.here(), body: { photoIds } }));
+    await this.inThousands(ids, (photoIds) => this.api.call(restorePhotos, { params: this.here(), body: { photoIds } }));
     this.drop(ids);
   }
 
-  private async inHundreds(ids: readonly string[], send: (some: string[]) => Promise<unknown>): Promise<void> {
+  private async inThousands(ids: readonly string[], send: (some: string[]) => Promise<unknown>): Promise<void> {
     for (let i = 0; i < ids.length; i += 1000) await send(ids.slice(i, i + 1000));
   }
 

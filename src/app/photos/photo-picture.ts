@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal } from '@angular/core';
 import { type Photo, photoDerivative } from '@oriel/shared/contracts/photos';
 import { thumbHashToDataURL } from 'thumbhash';
 import { addressOf } from '../core/api';
@@ -25,8 +25,9 @@ import { addressOf } from '../core/api';
 export class PhotoPicture {
   readonly photo = input.required<Photo>();
   readonly edge = input.required<320 | 800 | 1600 | 3200>();
-  protected readonly loaded = signal(false);
   protected readonly address = computed(() => addressOf(photoDerivative, { photoId: this.photo().id, edge: this.edge() }));
+  /** Whether the picture at this address is here: until then the one before it is not to be taken for it. */
+  protected readonly loaded = linkedSignal({ source: this.address, computation: () => false });
   protected readonly placeholder = computed(() => {
     const hash = this.photo().placeholder;
     return hash ? `url(${thumbHashToDataURL(Uint8Array.from(atob(hash), (c) => c.charCodeAt(0)))})` : null;

@@ -16,7 +16,7 @@ import {
 import type { Photo } from '@oriel/shared/contracts/photos';
 import { Icon } from '../../core/icon/icon';
 import { PhotoPicture } from '../photo-picture';
-import { layContactSheet, rowsBetween } from './contact-sheet-layout';
+import { headingPx, layContactSheet, rowsBetween } from './contact-sheet-layout';
 
 const overscanPx = 700;
 
@@ -45,6 +45,7 @@ export class ContactSheet {
   private readonly scrollPx = signal(0);
   private readonly rowPx = computed(() => (this.widthPx() < 600 ? 116 : 190));
 
+  protected readonly headingPx = headingPx;
   protected readonly layout = computed(() => layContactSheet(this.photos(), this.widthPx(), this.rowPx()));
   private readonly seen = computed(() => rowsBetween(this.layout().rows, this.scrollPx() - overscanPx, this.scrollPx() + this.viewPx() + overscanPx), {
     equal: (a, b) => a[0] === b[0] && a[1] === b[1],

@@ -51,6 +51,7 @@ export class PhotosPage implements OnInit {
   protected readonly selected = signal<ReadonlySet<string>>(new Set());
   private readonly lastMarked = signal<string | null>(null);
   protected readonly loading = new Submission();
+  protected readonly fetching = new Submission();
   protected readonly acting = new Submission();
   protected readonly isEmpty = computed(() => this.library.loaded() && this.library.photos().length === 0);
   private timer: ReturnType<typeof setTimeout> | undefined;
@@ -66,8 +67,15 @@ export class PhotosPage implements OnInit {
     void this.load();
   }
 
+  /** Until the list answers what is being searched for by then. */
   protected load(): Promise<void> {
-    return this.loading.run(() => this.library.open(this.search(), this.isBin));
+    return this.loading.run(async () => {
+      let search: string;
+      do {
+        search = this.search();
+        await this.library.open(search, this.isBin);
+      } while (search !== this.search());
+    });
   }
 
   protected searchFor(text: string): void {
@@ -77,7 +85,7 @@ export class PhotosPage implements OnInit {
   }
 
   protected more(): void {
-    void this.loading.run(() => this.library.more());
+    void this.fetching.run(() => this.library.more());
   }
 
   protected mark({ photo, through }: { photo: Photo; through: boolean }): void {
