@@ -16,6 +16,11 @@ describe('figures in words', () => {
     for (const wrong of ['', 'far', '1e9', '--3', '1.2.3']) expect(readFigure(wrong)).toBeNull();
   });
 
+  it('are not guessed where they could be read in two ways', () => {
+    for (const unclear of ['1,500', '\u22121,500 mm', '12,345', '1,234,567']) expect(readFigure(unclear)).toBeNull();
+    for (const [clear, figure] of [['0,125', 0.125], ['1500,5', 1500.5], ['1234,567', 1234.567]] as const) expect(readFigure(clear)).toBe(figure);
+  });
+
   it('say where a layer and an eye are', () => {
     expect(describeDepth(180)).toBe('180 mm behind the glass');
     expect(describeDepth(-60)).toBe('60 mm in front of the glass');

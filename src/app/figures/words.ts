@@ -17,9 +17,14 @@ export function signedMm(value: number, decimals = 1): string {
 
 const rounded = (value: number, decimals: number) => String(Number(value.toFixed(decimals)));
 
-/** Reads a figure as people type it: either minus sign, a decimal comma, a trailing unit; null where it is none. */
+/** 1,500: a thousand and a half to some, one and a half to others. */
+const AMBIGUOUS = /^\D?[1-9]\d{0,2}(,\d{3})+$/;
+
+/** Reads a figure as people type it: either minus sign, a decimal comma, a trailing unit; null where it is none, or could be two. */
 export function readFigure(text: string): number | null {
-  const plain = text.trim().replace(/[\u2212\u2013]/g, '-').replace(',', '.').replace(/\s*(mm|%|px)$/i, '').replace(/^\+/, '');
+  const bare = text.trim().replace(/\s*(mm|%|px)$/i, '');
+  if (AMBIGUOUS.test(bare)) return null;
+  const plain = bare.replace(/[\u2212\u2013]/g, '-').replace(',', '.').replace(/^\+/, '');
   if (!/^-?(\d+\.?\d*|\.\d+)$/.test(plain)) return null;
   return Number(plain);
 }
