@@ -6,7 +6,7 @@ import { livingRoom } from './living-room';
 const { glass } = livingRoom('landscape');
 
 describe('coverGlass', () => {
-  // Loss of a cover crop = 1 - min(a/b, b/a) (checks.md, computed).
+  // Loss of a cover crop = 1 - min(a/b, b/a), a and b the two ratios of width to height (computed).
   it.each([
     [3, 2, 16, 9, 0.15625],
     [4, 3, 16, 9, 0.25],
@@ -33,6 +33,13 @@ describe('coverGlass', () => {
 });
 
 describe('placeTrimmed', () => {
+  it('places a cut in register with the picture it came from (computed by hand)', () => {
+    // 1600 x 900 px covers 1200 x 675 mm at 0.75 mm a pixel; the cut's centre is at px (300, 200), 500 left of and 250 above the middle.
+    const image = { width: 400, height: 300, trim: { left: 100, top: 50, ofWidth: 1600, ofHeight: 900 } };
+    const placed = placeTrimmed({ widthMm: 1200, heightMm: 675 }, image);
+    expect(placed).toEqual({ xMm: -375, yMm: 187.5, widthMm: 300, heightMm: 225 });
+  });
+
   it('places a picture of which nothing was trimmed over the glass', () => {
     const image = { width: 3000, height: 2000, trim: { left: 0, top: 0, ofWidth: 3000, ofHeight: 2000 } };
     expect(placeTrimmed(glass, image)).toEqual(coverGlass(glass, 3000, 2000));

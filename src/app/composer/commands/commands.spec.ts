@@ -6,7 +6,7 @@ import { beginHistory, MOST_STEPS, record, redo, undo } from '../history';
 import type { Change } from './change';
 import { hideLayer, place, renameLayer, setDepth, setOpacity, setWidth, showLayer } from './layer-commands';
 import { creditScene, growLayersToCover, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from './setting-commands';
-import { addLayer, duplicateLayer, placedToCover, removeLayer, reorderLayer } from './stack-commands';
+import { addLayer, duplicateLayer, removeLayer, reorderLayer } from './stack-commands';
 import { layerIds, someScene } from './testing';
 
 const id = fc.constantFrom(...layerIds);
@@ -109,16 +109,11 @@ describe('commands', () => {
     expect(clearance(grown)).toEqual([]);
   });
 
-  it('keep every angle when the scene is carried to another glass: half the glass, half of everything (design.md)', () => {
+  it('keep every angle when the scene is carried to another glass: half the glass, half of everything (computed)', () => {
     const half = scaleToGlass({ widthMm: 600, heightMm: 337.5 })(someScene);
     expect(half.homeEye.z).toBe(900);
     expect(half.zone.rightMm).toBe(300);
     expect(half.layers[0].depthMm).toBe(450);
     expect(half.layers[0].placed.widthMm).toBe(660);
-  });
-
-  it('place a cut in register with the picture it came from (computed by hand)', () => {
-    // 1600 x 900 px covers 1200 x 675 mm at 0.75 mm a pixel; the cut's centre is at px (300, 200), 500 left of and 250 above the middle.
-    expect(placedToCover(image, someScene.glass)).toEqual({ xMm: -375, yMm: 187.5, widthMm: 300, heightMm: 225 });
   });
 });

@@ -1,22 +1,8 @@
 import type { Layer, LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
-import type { Glass, Rectangle } from '@oriel/shared/projection/types';
+import { placeTrimmed } from '@oriel/shared/projection/cover-glass';
 import type { Change } from './change';
 
 export const MOST_LAYERS = 64;
-
-/**
- * Where an image comes to lie when the picture it was cut from covers the glass: centred, as small as leaves no gap. A
- * trimmed image keeps its place in that picture, so several cuts of one picture come to lie in register.
- */
-export function placedToCover({ width, height, trim }: LayerImage, glass: Glass): Rectangle {
-  const mmPerPx = Math.max(glass.widthMm / trim.ofWidth, glass.heightMm / trim.ofHeight);
-  return {
-    xMm: (trim.left + width / 2 - trim.ofWidth / 2) * mmPerPx,
-    yMm: (trim.ofHeight / 2 - trim.top - height / 2) * mmPerPx,
-    widthMm: width * mmPerPx,
-    heightMm: height * mmPerPx,
-  };
-}
 
 /** Adds an image as the foremost layer on the glass itself. */
 export const addLayer =
@@ -28,7 +14,7 @@ export const addLayer =
       name: name.trim().slice(0, 120) || 'Layer',
       image,
       depthMm: 0,
-      placed: placedToCover(image, document.glass),
+      placed: placeTrimmed(document.glass, image),
       opacity: 1,
       shown: true,
     };
