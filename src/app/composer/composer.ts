@@ -3,6 +3,7 @@ import type { ElementRef} from '@angular/core';
 import { ChangeDetectionStrategy, Component, DestroyRef, type TemplateRef, computed, effect, inject, input, signal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
+import { MatSnackBar } from '@angular/material/snack-bar';
 import { Title } from '@angular/platform-browser';
 import { Router, RouterLink } from '@angular/router';
 import { toApiFailure } from '../core/api-failure';
@@ -48,6 +49,7 @@ export class Composer {
   private readonly bar = inject(PageBar);
   private readonly dialog = inject(MatDialog);
   private readonly router = inject(Router);
+  private readonly snackBar = inject(MatSnackBar);
   private readonly announcer = inject(LiveAnnouncer);
   private readonly title = inject(Title);
   private readonly place = viewChild.required<TemplateRef<unknown>>('place');
@@ -124,7 +126,8 @@ export class Composer {
       if (choice === 'over') await this.keeper.autosave.saveOver();
       if (choice === 'copy') await this.router.navigate(['/compose', await this.keeper.keepAsCopy()]);
     } catch (error) {
-      void this.announcer.announce(toApiFailure(error).message, 'assertive');
+      const { message, remedy } = toApiFailure(error).failure;
+      this.snackBar.open(`${message} ${remedy}`, 'Close');
     }
   }
 

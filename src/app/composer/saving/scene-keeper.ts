@@ -67,6 +67,8 @@ export class SceneKeeper {
 
   async open(sceneId: string): Promise<void> {
     this.failure.set(null);
+    // The answer to a save of the scene before must not be taken for one of this.
+    await this.autosave.flush();
     try {
       const { scene } = await this.api.call(readScene, { params: { sceneId } });
       this.show(scene);

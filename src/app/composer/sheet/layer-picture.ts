@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, effect, inject, input, signal, untracked } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, input, signal, untracked } from '@angular/core';
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
 import { type Edge, imageAddress } from './image-address';
 
@@ -28,35 +28,35 @@ export class LayerPicture {
   readonly edge = input.required<Edge>();
   protected readonly source = signal('');
   protected readonly missing = signal(false);
-  private timer: ReturnType<typeof setTimeout> | undefined;
 
   constructor() {
-    effect(() => {
+    effect((onCleanup) => {
       const [image, edge] = [this.image(), this.edge()];
-      untracked(() => void this.bringSmallFirst(image, edge));
+      const wanted = new AbortController();
+      onCleanup(() => wanted.abort());
+      untracked(() => void this.bring(image, edge, wanted.signal));
     });
-    inject(DestroyRef).onDestroy(() => clearTimeout(this.timer));
   }
 
-  /** Something to see at once, then what is sharp. */
-  private async bringSmallFirst(image: LayerImage, edge: Edge): Promise<void> {
-    if (!this.source() && edge > SMALL) await this.bring(imageAddress(image, SMALL), image);
-    await this.bring(imageAddress(image, edge), image);
+  /** Something to see at once, then what is sharp, for as long as it is wanted. */
+  private async bring(image: LayerImage, edge: Edge, wanted: AbortSignal): Promise<void> {
+    if (!this.source() && edge > SMALL) await this.show(imageAddress(image, SMALL), wanted);
+    while (!wanted.aborted && !(await this.show(imageAddress(image, edge), wanted))) await pause(AGAIN_MS);
   }
 
-  private async bring(address: string, image: LayerImage): Promise<void> {
-    clearTimeout(this.timer);
+  /** Returns whether it came. */
+  private async show(address: string, wanted: AbortSignal): Promise<boolean> {
     const picture = new Image();
     picture.src = address;
-    try {
-      await picture.decode();
-    } catch {
-      this.missing.set(true);
-      this.timer = setTimeout(() => void this.bring(address, image), AGAIN_MS);
-      return;
-    }
-    if (image !== this.image() && image.id !== this.image().id) return;
-    this.missing.set(false);
-    this.source.set(address);
+    const came = await picture.decode().then(
+      () => true,
+      () => false,
+    );
+    if (wanted.aborted) return came;
+    this.missing.set(!came);
+    if (came) this.source.set(address);
+    return came;
   }
 }
+
+const pause = (ms: number) => new Promise<void>((resolve) => setTimeout(resolve, ms));
