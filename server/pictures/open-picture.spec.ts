@@ -24,7 +24,7 @@ beforeAll(async () => {
 afterAll(() => rm(folder, { recursive: true }));
 
 describe('openPicture', () => {
-  // EXIF 2.32, tag 0x0112 (checks.md; secondary source read), beside sharp's own auto-orient on the same file.
+  // EXIF 2.32, tag 0x0112 (CIPA DC-008; secondary source read), beside sharp's own auto-orient on the same file.
   it.each([1, 2, 3, 4, 5, 6, 7, 8])('turns EXIF orientation %i upright', async (orientation) => {
     const file = await asKeptWith(orientation);
     const opened = await openPicture(await write(file));
