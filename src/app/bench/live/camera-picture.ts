@@ -63,8 +63,8 @@ export class CameraPicture {
     if (!context) return;
     context.clearRect(0, 0, width, height);
     if (!landmarks) return;
-    context.fillStyle = inksOf(canvas)['brass-line'];
-    const side = Math.max(1, width / 500);
+    context.fillStyle = inksOf(canvas).far;
+    const side = Math.max(2, width / 160);
     for (let at = 0; at < landmarks.length; at += 2)
       context.fillRect(landmarks[at] - side / 2, landmarks[at + 1] - side / 2, side, side);
   }

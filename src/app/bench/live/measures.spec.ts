@@ -66,6 +66,11 @@ describe('the instruments', () => {
     ).toBe('–');
   });
 
+  it('give none for somebody who turns about every second and a half: half of their way has no mean', () => {
+    const turning = played((tMs) => 150 * Math.sin((2 * Math.PI * tMs) / 3000));
+    expect(reading('Jitter at rest', turning).figure).toBe('–');
+  });
+
   it('count how often somebody was lost', () => {
     const lost = played((tMs) => (Math.floor(tMs / 1000) % 2 ? null : 0));
     expect(reading('Losses', lost).figure).toBe('5');

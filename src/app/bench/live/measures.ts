@@ -74,11 +74,11 @@ export class Measures {
     this.present = found;
   }
 
-  /** Judges rest; to be called a few times a second. */
+  /** Judges rest, NaN where there is none; to be called a few times a second. */
   judge(nowMs: number): void {
     const seen = this.seenStill.at(nowMs);
     const drawn = this.drawnStill.at(nowMs);
-    if (seen !== null) this.seenJitter.add(nowMs, seen);
-    if (seen !== null && drawn !== null) this.drawnJitter.add(nowMs, drawn);
+    this.seenJitter.add(nowMs, seen ?? NaN);
+    this.drawnJitter.add(nowMs, seen === null || drawn === null ? NaN : drawn);
   }
 }

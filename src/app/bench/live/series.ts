@@ -28,9 +28,12 @@ export class Series {
     return thinOut(points, COLUMNS);
   }
 
+  /** Of the figures that are known. */
   spread(sinceMs: number): Spread {
     const figures: number[] = [];
-    this.each(sinceMs, (_tMs, figure) => figures.push(figure));
+    this.each(sinceMs, (_tMs, figure) => {
+      if (!Number.isNaN(figure)) figures.push(figure);
+    });
     return spreadOf(figures);
   }
 

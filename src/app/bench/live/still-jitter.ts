@@ -6,6 +6,7 @@ import type { Point3 } from '@oriel/shared/projection/types';
 export const JUDGED_MS = 2000;
 /** Slower than this, the eye stands still (as in shared/replay/stretches.ts). */
 const STILL_MM_PER_S = 30;
+const PIECES = 4;
 const CAPACITY = 400;
 
 /** The last two seconds of an eye: whether it stands still, and then how much it jitters. */
@@ -28,16 +29,10 @@ export class StillJitter {
   /** Jitter across, mm; null while the eye moves or is known for less than two seconds. */
   at(nowMs: number): number | null {
     const track = this.last(nowMs - JUDGED_MS);
-    const { tMs, x, y } = track;
+    const { tMs } = track;
     const n = tMs.length;
     if (n < 10 || tMs[n - 1] - tMs[0] < 0.8 * JUDGED_MS) return null;
-    const half = n >> 1;
-    const mean = (values: Float64Array) => values.reduce((sum, value) => sum + value, 0) / values.length;
-    const gone = Math.hypot(
-      mean(x.subarray(half)) - mean(x.subarray(0, half)),
-      mean(y.subarray(half)) - mean(y.subarray(0, half)),
-    );
-    if (gone / (JUDGED_MS / 2000) > STILL_MM_PER_S) return null;
+    if (!isStill(track)) return null;
     return jitterMm(track, [{ fromMs: tMs[0], toMs: tMs[n - 1] + 1 }], 'across');
   }
 
@@ -50,4 +45,18 @@ export class StillJitter {
       indices.forEach((from, to) => (track[key][to] = this.kept[key][from]));
     return track;
   }
+}
+
+/** Whether the means of each quarter follow one another slowly: someone who turns about has halves with equal means. */
+function isStill({ x, y }: Track): boolean {
+  const quarter = x.length / PIECES;
+  const meanOf = (values: Float64Array, piece: number) => {
+    const part = values.subarray(Math.floor(piece * quarter), Math.floor((piece + 1) * quarter));
+    return part.reduce((sum, value) => sum + value, 0) / part.length;
+  };
+  for (let piece = 1; piece < PIECES; piece++) {
+    const gone = Math.hypot(meanOf(x, piece) - meanOf(x, piece - 1), meanOf(y, piece) - meanOf(y, piece - 1));
+    if (gone / (JUDGED_MS / PIECES / 1000) > STILL_MM_PER_S) return false;
+  }
+  return true;
 }
