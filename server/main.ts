@@ -47,7 +47,8 @@ async function start(): Promise<void> {
     if (draining) return;
     draining = true;
     parts.eventStreams.endAll();
-    const steps = [() => jobs.stop(), () => changes.stop(), () => parts.layerFiles.settled(), closePostOffice, () => connection.db.destroy()];
+    const work = () => Promise.all([jobs.stop(), changes.stop(), parts.layerFiles.settled()]);
+    const steps = [work, closePostOffice, () => connection.db.destroy()];
     void stopGracefully({ server, log, steps, exit: (code) => process.exit(code) });
   };
   process.on('SIGTERM', stop);
