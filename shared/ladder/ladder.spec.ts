@@ -89,6 +89,20 @@ describe('the ladder', () => {
     expect(blameless.step).toBeLessThanOrEqual(1);
   });
 
+  it('never ceases to track for the sake of drawing, and having ceased for its own, tries again whatever the drawing', () => {
+    const hampered = createLadder();
+    const noisy = (s: number) => (s % 7 < 5 ? 120 - (s % 50) : 20);
+    for (let s = 0; s < hour; s++) {
+      hampered.second({ tMs: s * 1000, lookMs: 60, frameMs: noisy(s) });
+      expect(hampered.step).toBeLessThan(6);
+    }
+    const ceased = createLadder();
+    run(ceased, machine(500), 0, 30);
+    expect(ceased.step).toBe(6);
+    for (let s = 30; s < 60; s++) ceased.second({ tMs: s * 1000, lookMs: null, frameMs: 90 });
+    expect(ceased.step).toBe(5);
+  });
+
   it('settles under any constant load: after an hour at most 4 changes an hour', () => {
     fc.assert(
       fc.property(anyMachine, (on) => {

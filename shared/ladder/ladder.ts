@@ -60,7 +60,7 @@ const CAMERA_PER_S = 30;
  * Chooses how finely to look by what looking takes. Down after a sustained excess over the step's budget, or while frames are drawn poorly;
  * up when the time foretold for the step above (this step's time by the ratio of the costs) has fitted into its budget for long. Whatever
  * comes, it cannot oscillate: each fall after a climb doubles the proof asked of the next climb. Where less tracking did not help the
- * drawing, tracking is not to blame and gives up nothing more for it. Pure, but for what it remembers.
+ * drawing, tracking is not to blame and gives up nothing more for it; and for the drawing's sake it is never given up altogether. Pure, but for what it remembers.
  */
 export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
   const { steps } = settings;
@@ -101,14 +101,18 @@ export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
       return null;
     }
     const least = RELIEF_SHARE * loadOf(steps[step], CAMERA_PER_S);
-    const to = steps.findIndex((candidate, index) => index > step && loadOf(candidate, CAMERA_PER_S) <= least);
+    const to = steps.findIndex(
+      (candidate, index) => index > step && candidate.looking.by !== 'nothing' && loadOf(candidate, CAMERA_PER_S) <= least,
+    );
+    excess = 0;
+    if (to < 0) return null;
     frameMsAtFall = frameMs;
     return fall(tMs, to, `frames were drawn every ${frameMs.toFixed(0)} ms, and ${settings.drawingBudgetMs} are allowed`);
   };
 
   const fitsAbove = ({ lookMs, frameMs }: LadderSecond): boolean | null => {
-    if (slowDrawing(frameMs) && !blameless) return false;
     if (steps[step].looking.by === 'nothing') return true;
+    if (slowDrawing(frameMs) && !blameless) return false;
     if (lookMs === null) return null;
     const above = steps[step - 1];
     return (lookMs * above.cost) / steps[step].cost <= settings.calmShare * above.budgetMs;
