@@ -30,8 +30,6 @@ export interface PhotoPage {
   readonly total: number;
 }
 
-export type PhotoService = ReturnType<typeof photoService>;
-
 export function photoService(db: Database, storage: Storage, jobs: Jobs) {
   /** Brings a photo back whose content is uploaded again: out of the bin, and to another try if its derivatives failed. */
   async function welcomeBack(existing: PhotoRow): Promise<PhotoRow> {

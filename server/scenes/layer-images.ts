@@ -28,8 +28,6 @@ export interface PhotoOfLayer {
 
 type Trimmed = Omit<LayerImage, 'id'>;
 
-export type LayerImages = ReturnType<typeof layerImages>;
-
 /** Makes layer images: the same content in one household is one image, however often it is taken. */
 export function layerImages(db: Database, storage: Storage, files: LayerFiles) {
   async function trimmed(path: string, of: Omit<PhotoOfLayer, 'sha256'>): Promise<Trimmed> {

@@ -45,6 +45,10 @@ export async function sendStored(
   }
   response.set('Content-Length', String(stored.bytes));
   await pipeline(stored.stream, response).catch((error: unknown) => {
-    if (!request.destroyed && !response.destroyed) throw error;
+    // Whoever asked went away, and nothing failed. A file that could not be read has ended the answer too, and is to be heard of.
+    if (!isPremature(error)) request.log.error({ err: error }, 'a stored picture could not be read to its end');
   });
 }
+
+const isPremature = (error: unknown) =>
+  error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE';

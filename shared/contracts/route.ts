@@ -88,7 +88,5 @@ export function defineRoute<
   };
 }
 
-export type ParamsOf<T> = T extends Route<infer P, z.ZodType, z.ZodType, z.ZodType> ? z.output<P> : never;
-export type QueryOf<T> = T extends Route<z.ZodType, infer Q, z.ZodType, z.ZodType> ? z.input<Q> : never;
 export type BodyOf<T> = T extends Route<z.ZodType, z.ZodType, infer B, z.ZodType> ? z.input<B> : never;
 export type ReplyOf<T> = T extends Route<z.ZodType, z.ZodType, z.ZodType, infer R> ? z.output<R> : never;
