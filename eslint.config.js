@@ -41,5 +41,5 @@ export default tseslint.config(
   },
   { files: ['src/**/*.html'], extends: [...angular.configs.templateRecommended, ...angular.configs.templateAccessibility] },
   { files: ['src/app/player/**/*.ts', 'src/app/tracking/**/*.ts'], ignores: ['**/*.spec.ts'], rules: forbid(noServer, useAlias, [['**/composer/**', '**/photos/**', '**/scenes/**'], 'The player and the tracking stand without the editor.']) },
-  { files: ['tests/**/*.ts', 'server/cli/**/*.ts'], rules: { 'no-console': 'off' } },
+  { files: ['tests/**/*.ts'], rules: { 'no-console': 'off' } },
 );
