@@ -8,6 +8,10 @@ describe('windowOnScreen', () => {
     expect(windowOnScreen(full, 0.25)).toEqual({ widthPx: 1920, heightPx: 1080, pxPerMm: 4, deviceRatio: 1, centreMm: { x: 0, y: 0 } });
   });
 
+  it('is centred then even where the browser reports its window as it was before', () => {
+    expect(windowOnScreen({ ...full, screenX: 10, screenY: 10 }, 0.25).centreMm).toEqual({ x: 0, y: 0 });
+  });
+
   it('places a window by its corner, its frame and the bars on top', () => {
     // Inner area from (110, 170) to (1110, 770): its middle is 350 px left of the screen's and 70 px above it.
     const area = windowOnScreen({ ...full, screenX: 100, screenY: 80, outerWidth: 1020, outerHeight: 690, innerWidth: 1000, innerHeight: 600 }, 0.25);

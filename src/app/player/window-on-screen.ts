@@ -35,14 +35,16 @@ export function windowOnScreen(facts: WindowFacts, devicePxMm: number): WindowOn
   const bars = Math.max(0, facts.outerHeight - facts.innerHeight);
   const left = facts.mozInnerScreenX ?? facts.screenX + frame / 2;
   const top = facts.mozInnerScreenY ?? facts.screenY + bars;
+  const { innerWidth, innerHeight, screen } = facts;
+  const fills = innerWidth >= screen.width && innerHeight >= screen.height;
   return {
-    widthPx: facts.innerWidth,
-    heightPx: facts.innerHeight,
+    widthPx: innerWidth,
+    heightPx: innerHeight,
     pxPerMm,
     deviceRatio: facts.devicePixelRatio,
     centreMm: {
-      x: (left + facts.innerWidth / 2 - facts.screen.width / 2) / pxPerMm,
-      y: (facts.screen.height / 2 - top - facts.innerHeight / 2) / pxPerMm,
+      x: fills ? 0 : (left + innerWidth / 2 - screen.width / 2) / pxPerMm,
+      y: fills ? 0 : (screen.height / 2 - top - innerHeight / 2) / pxPerMm,
     },
   };
 }

@@ -17,8 +17,8 @@ export function pixelAt({ data, width }: Pixels, x: number, y: number): [number,
   return [data[at], data[at + 1], data[at + 2]];
 }
 
-/** Centroid, in pixels from the upper left corner, of what differs from `ground` within `radius` of a place. */
-export function centroid(pixels: Pixels, ground: readonly number[], around: { x: number; y: number }, radius: number): { x: number; y: number; weight: number } {
+/** Centroid, in pixels from the upper left corner, of what differs from `ground` within `radius` of a place by at least `floor` levels. */
+export function centroid(pixels: Pixels, ground: readonly number[], around: { x: number; y: number }, radius: number, floor = 3): { x: number; y: number; weight: number } {
   let [sum, sumX, sumY] = [0, 0, 0];
   const from = (middle: number) => Math.max(0, Math.floor(middle - radius));
   for (let y = from(around.y); y < Math.min(pixels.height, around.y + radius); y++)
@@ -26,7 +26,7 @@ export function centroid(pixels: Pixels, ground: readonly number[], around: { x:
       const at = (y * pixels.width + x) * 3;
       let weight = 0;
       for (let channel = 0; channel < 3; channel++) weight += Math.abs(pixels.data[at + channel] - ground[channel]);
-      if (weight < 3) continue;
+      if (weight < floor) continue;
       sum += weight;
       sumX += weight * (x + 0.5);
       sumY += weight * (y + 0.5);

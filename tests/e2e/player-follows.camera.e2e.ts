@@ -1,0 +1,12 @@
+import { expectFollowed, watchRests } from './player/follow-checks';
+import { window as viewport } from './player/follow-scene';
+import { restingFace } from './player/rest-poses';
+import { test } from './fixtures';
+
+test.use({ filmedFace: restingFace, viewport });
+
+test('drawn with CSS, layers stand where the pinhole model puts them for the true eye, wherever it rests', async ({ signedInPage, filmed }) => {
+  test.setTimeout(240_000);
+  const page = await signedInPage('designer');
+  await expectFollowed(await watchRests(page, 'css'), filmed!.truth);
+});

@@ -1,0 +1,147 @@
+import type { Page } from '@playwright/test';
+import type { RendererName } from '../../../src/app/player/renderer';
+import { BLOCK_PX, readFrameNumber } from '../../bench/tracking/frame-number';
+import { expect } from '../fixtures';
+import type { FilmedTruth } from '../set-up/filmed-face';
+import { centroid, pixelsOf } from './centroid';
+import { discs, glass, ground, homeEye, makeFollowScene, pxPerMm, window as area } from './follow-scene';
+import { type Rest, restNames, restOf } from './rest-poses';
+import { keepScreen } from './this-screen';
+
+interface Point {
+  readonly x: number;
+  readonly y: number;
+}
+interface Eye extends Point {
+  readonly z: number;
+}
+
+/** As the screen is set up for the test: 60 degrees across, in the middle of the upper edge, looking straight ahead. */
+const fieldDegrees = 60;
+const usualEyeDistanceMm = 63;
+/** The tracker's eye is the middle of the corners of both, 1.6 to 2.7 mm from that of the pupils, which moves a layer 300 mm behind by 1 to 1.6 px. */
+const placeTolerancePx = 1.6;
+
+export interface Watched {
+  /** What the window showed when the face rested at each place. */
+  readonly pictures: Readonly<Record<Rest, Buffer>>;
+  /** The distance the player read out at the first rest, mm. */
+  readonly centreZMm: number;
+}
+
+/** Plays a scene of discs to a filmed face and keeps what is drawn when the face rests at each place. */
+export async function watchRests(page: Page, renderer: RendererName): Promise<Watched> {
+  await keepScreen(page, { widthMm: glass.widthMm, fieldDegrees });
+  await page.goto('/scenes');
+  const scene = await makeFollowScene(page);
+  await page.goto(`/play/${scene.id}?draw=${renderer}`);
+  await watchFrames(page);
+  await page.keyboard.press('f');
+  await page.waitForFunction(() => document.fullscreenElement);
+  await page.keyboard.press('i');
+  const readOut = page.locator('oriel-read-out');
+  await expect(readOut).toContainText(renderer);
+  const eyeText = await atRest(page, 'centre', async () => {
+    // The figures are half a second old at most.
+    await page.waitForTimeout(600);
+    return readOut.locator('dd').nth(3).textContent();
+  });
+  await page.keyboard.press('i');
+  // Controls and words have gone by then.
+  await page.waitForTimeout(4000);
+
+  const pictures: Partial<Record<Rest, Buffer>> = {};
+  for (const rest of restNames) pictures[rest] = await atRest(page, rest, () => page.screenshot());
+  return { pictures: pictures as Record<Rest, Buffer>, centreZMm: Number(eyeText!.split(',')[2]) };
+}
+
+/** Does something while the face rests at a place; does it again if the face has moved on meanwhile. */
+async function atRest<T>(page: Page, rest: Rest, act: () => Promise<T>): Promise<T> {
+  for (;;) {
+    if (restOf(await frameNow(page)) !== rest) continue;
+    const result = await act();
+    if (restOf(await frameNow(page)) === rest) return result;
+  }
+}
+
+/** Opens the fake camera a second time in the page, to know which frame it shows. */
+async function watchFrames(page: Page): Promise<void> {
+  await page.evaluate(async () => {
+    const video = document.createElement('video');
+    video.srcObject = await navigator.mediaDevices.getUserMedia({ video: { width: 640, height: 480 } });
+    await video.play();
+    Object.assign(window, { frames: video });
+  });
+}
+
+async function frameNow(page: Page): Promise<number> {
+  const green = await page.evaluate(async (rows) => {
+    const { frames } = window as unknown as { frames: HTMLVideoElement };
+    await new Promise((resolve) => frames.requestVideoFrameCallback(resolve));
+    const context = new OffscreenCanvas(640, rows).getContext('2d', { willReadFrequently: true })!;
+    context.drawImage(frames, 0, rows - 480);
+    const { data } = context.getImageData(0, 0, 640, rows);
+    return Array.from({ length: 640 * rows }, (_, pixel) => data[4 * pixel + 1]);
+  }, BLOCK_PX);
+  return readFrameNumber(Uint8Array.from(green), 640, BLOCK_PX) ?? -1;
+}
+
+/**
+ * The eye of each rest by the pinhole camera, mm from the middle of the screen, which the window fills: Z = f * 63 mm / eye distance in px, X and Y by the ray.
+ * Pictures cannot tell a viewer's size from their distance, so one factor, found at the first rest, scales what the camera sees.
+ */
+export function trueEyes(truth: FilmedTruth, centreZMm: number): Record<Rest, Eye> {
+  const focalPx = truth.W / 2 / Math.tan((fieldDegrees * Math.PI) / 360);
+  const depth = (ipdPx: number) => (focalPx * usualEyeDistanceMm) / ipdPx;
+  const frameOf = (rest: Rest) => truth.frames.find(({ i }) => restOf(i) === rest)!;
+  const factor = centreZMm / depth(frameOf('centre').ipd);
+  return Object.fromEntries(
+    restNames.map((rest) => {
+      const { ipd, re, le } = frameOf(rest);
+      const z = depth(ipd) * factor;
+      const x = (-((re[0] + le[0]) / 2 - truth.W / 2) * z) / focalPx;
+      const y = glass.heightMm / 2 - (((re[1] + le[1]) / 2 - truth.H / 2) * z) / focalPx;
+      return [rest, { x, y, z }];
+    }),
+  ) as Record<Rest, Eye>;
+}
+
+/** Where the pinhole model puts a disc: P = G (hz+d)/hz - H d/hz, S = P ez/(ez+d) + E d/(ez+d); px from the middle of the window. */
+export function predicted({ xMm, yMm, depthMm: d }: (typeof discs)[number], eye: Eye): Point {
+  const place = (onGlass: number, home: number, at: number) => {
+    const inPlane = (onGlass * (homeEye.z + d) - home * d) / homeEye.z;
+    return ((inPlane * eye.z + at * d) / (eye.z + d)) * pxPerMm;
+  };
+  return { x: place(xMm, homeEye.x, eye.x), y: place(yMm, homeEye.y, eye.y) };
+}
+
+/** Where a disc is drawn, px from the middle of the window; looked for about where it should be. */
+export async function drawn(png: Buffer, disc: (typeof discs)[number], about: Point): Promise<Point> {
+  const around = { x: area.width / 2 + about.x, y: area.height / 2 - about.y };
+  const { x, y } = centroid(await pixelsOf(png), ground, around, disc.widthMm * pxPerMm, 40);
+  return { x: x - area.width / 2, y: area.height / 2 - y };
+}
+
+/** Holds what was drawn against the pinhole model: from rest to rest, every disc has moved as it must, and the right way. */
+export async function expectFollowed({ pictures, centreZMm }: Watched, truth: FilmedTruth): Promise<void> {
+  const eyes = trueEyes(truth, centreZMm);
+  const faults: string[] = [];
+  for (const disc of discs) {
+    const start = { true: predicted(disc, eyes.centre), drawn: await drawn(pictures.centre, disc, predicted(disc, eyes.centre)) };
+    const astray = Math.hypot(start.drawn.x - start.true.x, start.drawn.y - start.true.y);
+    if (astray > placeTolerancePx) faults.push(`${disc.name} stands ${astray.toFixed(2)} px from its place at the first rest`);
+    for (const rest of restNames) {
+      const place = predicted(disc, eyes[rest]);
+      const seen = await drawn(pictures[rest], disc, place);
+      const shift = { x: place.x - start.true.x, y: place.y - start.true.y };
+      const moved = { x: seen.x - start.drawn.x, y: seen.y - start.drawn.y };
+      const error = Math.hypot(moved.x - shift.x, moved.y - shift.y);
+      const allowed = Math.max(1, 0.015 * Math.hypot(shift.x, shift.y));
+      const report = `${disc.name}, ${rest}: moved ${moved.x.toFixed(2)}, ${moved.y.toFixed(2)} px of ${shift.x.toFixed(2)}, ${shift.y.toFixed(2)}`;
+      if (error > allowed) faults.push(report);
+      for (const axis of ['x', 'y'] as const)
+        if (Math.abs(shift[axis]) > 3 && Math.sign(shift[axis]) !== Math.sign(moved[axis])) faults.push(`${report}: the wrong way`);
+    }
+  }
+  expect(faults).toEqual([]);
+}
