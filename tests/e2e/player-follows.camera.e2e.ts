@@ -1,9 +1,8 @@
 import { expectFollowed, watchRests } from './player/follow-checks';
-import { window as viewport } from './player/follow-scene';
 import { restingFace } from './player/rest-poses';
 import { test } from './fixtures';
 
-test.use({ filmedFace: restingFace, viewport });
+test.use({ filmedFace: restingFace, viewport: { width: 1280, height: 720 } });
 
 test('drawn with CSS, layers stand where the pinhole model puts them for the true eye, wherever it rests', async ({ signedInPage, filmed }) => {
   test.setTimeout(240_000);

@@ -3,10 +3,8 @@ import sharp from 'sharp';
 import type { Layer, LayerImage, Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
 import { ask, householdId } from './asking';
 
-/** The glass of the test's screen, mm, and the window that shows it, px. */
+/** The glass of the test's screen, mm. */
 export const glass = { widthMm: 640, heightMm: 360 };
-export const window = { width: 1280, height: 720 };
-export const pxPerMm = window.width / glass.widthMm;
 export const homeEye = { x: 0, y: 180, z: 700 };
 export const ground = [40, 60, 80] as const;
 

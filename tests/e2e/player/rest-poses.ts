@@ -13,11 +13,11 @@ export const rests = {
 export type Rest = keyof typeof rests;
 export const restNames = Object.keys(rests) as Rest[];
 
-const holdFrames = 150;
+const holdFrames = 210;
 const moveFrames = 15;
 const wholeFrames = holdFrames + moveFrames;
-/** Two seconds after the face has come to rest the picture has too. */
-const settledFrames = 60;
+/** By then the picture has come to rest too, on a busy machine as well. */
+const settledFrames = 120;
 
 const poseAt = (from: Rest, to: Rest, t: number): FacePose => {
   const eased = t * t * (3 - 2 * t);
@@ -25,7 +25,7 @@ const poseAt = (from: Rest, to: Rest, t: number): FacePose => {
   return { segment: from, on: true, x: between('x'), y: between('y'), ipd: between('ipd'), rollDeg: 0 };
 };
 
-/** A face that rests for five seconds at each place and moves on in half a second, over and over. */
+/** A face that rests for seven seconds at each place and moves on in half a second, over and over. */
 export const restingFace = {
   name: 'rests',
   poses: restNames.flatMap((name, index) => {
