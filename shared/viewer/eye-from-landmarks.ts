@@ -17,7 +17,7 @@ import { turnedByRay } from './viewing-ray';
  *
  * The simpler weak perspective, Z = f/s - (R c)_z, was measured beside it on rendered heads of known pose: over 0.45 to 3 m
  * its distances strayed from proportion by up to 1.9 % against 0.9 %, and for someone walking past 20 degrees off the axis by
- * 3.8 % against 0.4 %. Both err by about 3 % for a head turned 20 to 30 degrees from the camera.
+ * 3.8 % against 0.4 %.
  *
  * A viewer's size and distance cannot be told apart from pictures: a wrong eye distance scales X, Y and Z by one factor.
  */
@@ -25,11 +25,11 @@ import { turnedByRay } from './viewing-ray';
 /** What is known of a viewer. */
 export interface ViewerMeasure {
   readonly eyeDistanceMm: number;
-  /** k: by how much the landmarks draw a face too small. Measured 1.047 and 1.049 for a region of 1.5; best set once at a known distance. */
+  /** k: by how much the landmarks draw a face too small. Measured 1.033 to 1.046 for a region of 1.5; best set once at a known distance. */
   readonly distanceFactor: number;
 }
 
-export const USUAL_VIEWER: ViewerMeasure = { eyeDistanceMm: USUAL_EYE_DISTANCE_MM, distanceFactor: 1.048 };
+export const USUAL_VIEWER: ViewerMeasure = { eyeDistanceMm: USUAL_EYE_DISTANCE_MM, distanceFactor: 1.036 };
 
 /** The result, and the memory the fit works in: made once, then written to by every frame. */
 export interface LandmarkEye {
@@ -76,7 +76,7 @@ export function eyeFromLandmarks(
   const centreY = camera.heightPx / 2;
   similarityFit(model, landmarks, fit);
   turnedByRay((fit.mean[0] - centreX) / f, (fit.mean[1] - centreY) / f, fit.rotation, headPose);
-  if (!perspectivePlace(model, headPose, eyeDistanceMm, landmarks, centreX, centreY, f, inCamera)) {
+  if (!perspectivePlace(model, headPose, fit.rotation, eyeDistanceMm, landmarks, centreX, centreY, f, inCamera)) {
     throw new GeometryError(
       'landmarks',
       'The landmarks are those of no face in front of the camera: look for the face again.',

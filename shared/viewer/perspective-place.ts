@@ -10,16 +10,25 @@ import type { MutablePoint3 } from './camera';
  *
  * which is linear in the place (X, Y, Z): weighted normal equations in three unknowns, solved by elimination. (The step
  * of every linear PnP once the rotation is known; R. Hartley, A. Zisserman, ch. 7.)
+ *
+ * Landmarks that turn away from the camera are guessed more than seen: each is weighed by cos^1.5 of the angle between its
+ * normal and the line of sight, no less than LEAST. On rendered heads at 1 m that took the error of distance through a yaw of
+ * 35 degrees from 2.6 to 1.6 % rms, through a mixed turn from 3.0 to 1.8, walking past from 1.4 to 1.0; pitch rose from 0.8 to 1.2.
  */
+
+/** What a landmark counts at least, however it is turned. */
+const LEAST = 0.05;
 
 /**
  * Writes the place of the midpoint between the eyes in camera coordinates, mm. Allocates nothing.
  * @param rotation nine numbers by rows, from `turnedByRay`.
+ * @param apparent the same turn as it looks from the camera, of which the weights are taken.
  * @returns whether there is a place in front of the camera.
  */
 export function perspectivePlace(
   model: FaceModel,
   rotation: Float64Array,
+  apparent: Float64Array,
   eyeDistanceMm: number,
   landmarks: ArrayLike<number>,
   centreX: number,
@@ -27,7 +36,7 @@ export function perspectivePlace(
   focalLengthPx: number,
   out: MutablePoint3,
 ): boolean {
-  const { points, weights } = model;
+  const { points, placeWeights, normals } = model;
   const f = focalLengthPx;
   // Sums of w, w u, w v, w (u2 + v2), and of the right sides. u and v are over f: the equations stay well scaled.
   let n = 0,
@@ -38,7 +47,8 @@ export function perspectivePlace(
     by = 0,
     bz = 0;
   for (let i = 0; i < LANDMARK_COUNT; i++) {
-    const w = weights[i];
+    const facing = Math.max(0, -(apparent[6] * normals[2 * i] + apparent[8] * normals[2 * i + 1]));
+    const w = placeWeights[i] * Math.max(LEAST, facing * Math.sqrt(facing));
     const x = points[3 * i] * eyeDistanceMm;
     const y = points[3 * i + 1] * eyeDistanceMm;
     const z = points[3 * i + 2] * eyeDistanceMm;

@@ -157,7 +157,7 @@ describe('beside OpenCV', () => {
         const landmarks = landmarksOf(MODEL, pose, 63, 1000, WIDTH, HEIGHT);
         const { turn, place } = solve(landmarks, 63, 1000);
         const out = { x: 0, y: 0, z: 0 };
-        perspectivePlace(MODEL, turn, 63, landmarks, WIDTH / 2, HEIGHT / 2, 1000, out);
+        perspectivePlace(MODEL, turn, turn, 63, landmarks, WIDTH / 2, HEIGHT / 2, 1000, out);
         expect(Math.hypot(out.x - place[0], out.y - place[1], out.z - place[2])).toBeLessThan(0.05);
       }),
       { numRuns: 15 },

@@ -7,7 +7,7 @@ import { eyeLineAngle } from './region';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
 
 /** The distance between the eyes as the fit of all landmarks gives it, against that between the detector's points: computed, tests/outside/tracking.spec.ts. */
-const DETECTOR_SPREAD = 0.983;
+const DETECTOR_SPREAD = 0.994;
 
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
