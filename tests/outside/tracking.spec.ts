@@ -135,7 +135,7 @@ describe('the steps of the ladder on a photograph', () => {
     const measure = new FaceMeasure();
     const face = tracker.detected
       ? measure.measureEyes(tracker.detected, belief!, picture, settings)
-      : measure.measure(tracker.points, belief!, picture, settings);
+      : measure.measure(tracker.points, belief!, picture, settings, 0);
     return face.eyeInCamera;
   };
   const distances = [24, 40, 60, 84];

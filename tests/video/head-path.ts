@@ -97,11 +97,11 @@ const group = (who: number): HeadSegment[] => [
   },
   {
     name: 'third',
-    frames: 90,
+    frames: 120,
     heads: (t) => [
       { who, x: -350, y: -20, z: 1500 },
       { who: who + 1, x: 420, y: 0, z: 1900 },
-      { who: who + 2, x: 60, y: 20, z: 2800 - 1900 * eased(1.5 * t) },
+      { who: who + 2, x: 60, y: 20, z: 2800 - 1900 * eased(2.5 * t) },
     ],
   },
   {

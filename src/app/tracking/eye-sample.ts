@@ -1,5 +1,5 @@
 import type { Point3 } from '@oriel/shared/projection/types';
-import type { StageTimings } from './tracking-messages';
+import type { OtherSample, StageTimings } from './tracking-messages';
 
 /**
  * One look at the viewer. The tracking service hands out the same object every time, so that following allocates nothing:
@@ -22,4 +22,8 @@ export interface EyeSample {
   readonly frameHeight: number;
   /** x and y of each landmark in frame pixels, where `showLandmarks` asked for them and a face was found. */
   readonly landmarks: Float32Array | null;
+  /** Who is followed: a number that is theirs for as long as they are there; null while nobody is. */
+  readonly viewer: number | null;
+  /** Who else is there. */
+  readonly others: readonly OtherSample[];
 }

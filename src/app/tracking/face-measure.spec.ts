@@ -38,14 +38,14 @@ describe('FaceMeasure', () => {
     [150, -40, 1000],
     [-300, 60, 2000],
   ])('finds the eye of a face made at (%i, %i, %i) mm: to 2 mm across and 1 % away', (x, y, z) => {
-    const { eyeInCamera } = new FaceMeasure().measure(landmarksAt(x, y, z), 1, FRAME, SETTINGS);
+    const { eyeInCamera } = new FaceMeasure().measure(landmarksAt(x, y, z), 1, FRAME, SETTINGS, 0);
     expect(Math.abs(eyeInCamera.x - x)).toBeLessThan(2);
     expect(Math.abs(eyeInCamera.y - y)).toBeLessThan(2);
     expect(Math.abs(eyeInCamera.z / z - 1)).toBeLessThan(0.01);
   });
 
   it('carries it to the glass: the left of the picture is the right of the glass, and the camera is 170 mm up', () => {
-    const { eye, eyeInCamera } = new FaceMeasure().measure(landmarksAt(150, -40, 1000), 1, FRAME, SETTINGS);
+    const { eye, eyeInCamera } = new FaceMeasure().measure(landmarksAt(150, -40, 1000), 1, FRAME, SETTINGS, 0);
     expect(eye.x).toBeCloseTo(-eyeInCamera.x, 9);
     expect(eye.y).toBeCloseTo(170 - eyeInCamera.y, 9);
     expect(eye.z).toBeCloseTo(eyeInCamera.z, 9);
@@ -53,11 +53,11 @@ describe('FaceMeasure', () => {
 
   it('gives every sample a place of its own, and heeds a change of set-up', () => {
     const measure = new FaceMeasure();
-    const first = measure.measure(landmarksAt(0, 0, 600), 1, FRAME, SETTINGS);
+    const first = measure.measure(landmarksAt(0, 0, 600), 1, FRAME, SETTINGS, 0);
     const second = measure.measure(landmarksAt(0, 0, 600), 1, FRAME, {
       ...SETTINGS,
       viewer: { eyeDistanceMm: 126, distanceFactor: 1 },
-    });
+    }, 0);
     expect(second.eye).not.toBe(first.eye);
     expect(second.eyeInCamera.z / first.eyeInCamera.z).toBeCloseTo(2, 6);
   });

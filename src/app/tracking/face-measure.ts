@@ -1,3 +1,4 @@
+import { createBlurHold, holdThroughBlur } from '@oriel/shared/viewer/blur-hold';
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
@@ -11,10 +12,11 @@ const DETECTOR_SPREAD = 0.994;
 
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
- * the eyes. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
+ * the eyes, distance held through motion blur. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
  */
 export class FaceMeasure {
   private readonly result = createLandmarkEye();
+  private readonly hold = createBlurHold();
   private camera: Camera | null = null;
   private settings: TrackerSettings | null = null;
 
@@ -24,6 +26,7 @@ export class FaceMeasure {
     belief: number,
     frame: { readonly width: number; readonly height: number },
     settings: TrackerSettings,
+    timestampMs: number,
   ): FaceSample {
     const camera = this.cameraFor(frame, settings);
     eyeFromLandmarks(camera, landmarks, this.result, settings.viewer);
@@ -31,6 +34,7 @@ export class FaceMeasure {
     const rightEyePx = rightEyeOf(landmarks);
     const leftEyePx = leftEyeOf(landmarks);
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
+    inCamera.z = holdThroughBlur(this.hold, inCamera.z, eyePx.x, eyePx.y, fit.scalePx, timestampMs);
     const mmPerPx = inCamera.z / focalPx(camera);
     inCamera.x = (eyePx.x - frame.width / 2) * mmPerPx;
     inCamera.y = (eyePx.y - frame.height / 2) * mmPerPx;
@@ -63,7 +67,11 @@ export class FaceMeasure {
     const ipdPx = Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y) * DETECTOR_SPREAD;
     const eyePx = { x: (rightEye.x + leftEye.x) / 2, y: (rightEye.y + leftEye.y) / 2 };
     const z = distanceFromSize(f, eyeDistanceMm, ipdPx) / distanceFactor;
-    const eyeInCamera = { x: ((eyePx.x - camera.widthPx / 2) * z) / f, y: ((eyePx.y - camera.heightPx / 2) * z) / f, z };
+    const eyeInCamera = {
+      x: ((eyePx.x - camera.widthPx / 2) * z) / f,
+      y: ((eyePx.y - camera.heightPx / 2) * z) / f,
+      z,
+    };
     const eye = { x: 0, y: 0, z: 0 };
     pointToGlass(camera, eyeInCamera, eye);
     const head = { yawRad: 0, pitchRad: 0, rollRad: eyeLineAngle(rightEye, leftEye) };

@@ -59,7 +59,7 @@ class FakeWorker {
       head,
       belief: 1,
     };
-    const frame = { frameWidth: 640, frameHeight: 480, timings: TIMINGS, tensors: 472 };
+    const frame = { viewer: x === null ? null : 1, others: [], frameWidth: 640, frameHeight: 480, timings: TIMINGS, tensors: 472 };
     this.says({ type: 'sample', timestampMs, face: x === null ? null : face, ...frame });
   }
 }

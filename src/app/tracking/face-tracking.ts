@@ -1,10 +1,12 @@
 import { DOCUMENT, DestroyRef, Injectable, inject, signal } from '@angular/core';
 import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
+import type { ChoiceRule } from '@oriel/shared/viewer/choose-viewer';
 import { requestCamera } from './camera-request';
 import type { EyeSample } from './eye-sample';
 import type { FrameFeed } from './frame-feed';
 import { LadderKeeper } from './ladder-keeper';
 import type { CameraSetUp, FromTracker, SampleMessage, ToTracker, TrackerSettings } from './tracking-messages';
+import { askForShortExposure } from './short-exposure';
 import type { TrackingState } from './tracking-state';
 import { CAMERAS, FRAME_FEED, TRACKING_WORKER } from './tracking-surroundings';
 
@@ -14,6 +16,8 @@ export interface TrackingSetUp {
   readonly camera: CameraSetUp;
   /** The distance between the viewer's eyes, and the factor found by standing at a known distance; `USUAL_VIEWER` until measured. */
   readonly viewer: ViewerMeasure;
+  /** Whom to follow of several; the nearest, calmly, where left out. */
+  readonly choice?: ChoiceRule;
 }
 
 /** Without a camera, or with one in use elsewhere, it is asked for again this often. */
@@ -63,6 +67,8 @@ export class FaceTracking {
     frameWidth: 0,
     frameHeight: 0,
     landmarks: null,
+    viewer: null,
+    others: [],
   };
   private landmarksWanted = false;
   private setUp: TrackingSetUp | null = null;
@@ -106,6 +112,7 @@ export class FaceTracking {
     answer.stream.getVideoTracks()[0].addEventListener('ended', () => {
       if (attempt === this.attempt) this.goWithout('no-camera');
     });
+    void askForShortExposure(answer.stream.getVideoTracks()[0]);
     this.startWorker(this.makeWorker(), setUp);
     this.counter = setInterval(() => this.count(), RATE_MS);
   }
@@ -172,7 +179,7 @@ export class FaceTracking {
     }
   }
 
-  private take({ timestampMs, face, timings, frameWidth, frameHeight, landmarks }: SampleMessage): void {
+  private take({ timestampMs, face, viewer, others, timings, frameWidth, frameHeight, landmarks }: SampleMessage): void {
     if (!this.feed || !this.setUp) return;
     this.feed.answered(timestampMs);
     const { sample } = this;
@@ -185,6 +192,8 @@ export class FaceTracking {
     sample.frameWidth = frameWidth;
     sample.frameHeight = frameHeight;
     sample.landmarks = landmarks ?? null;
+    sample.viewer = viewer;
+    sample.others = others;
     if (face) {
       this.faces++;
       this.keeper.note(timings.totalMs);
@@ -230,7 +239,8 @@ export class FaceTracking {
   }
 
   private settingsFor(setUp: TrackingSetUp): TrackerSettings {
-    return { assetsUrl: this.assetsUrl, camera: setUp.camera, viewer: setUp.viewer, looking: this.keeper.step.looking };
+    const { camera, viewer, choice } = setUp;
+    return { assetsUrl: this.assetsUrl, camera, viewer, looking: this.keeper.step.looking, ...(choice && { choice }) };
   }
 }
 

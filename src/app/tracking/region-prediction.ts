@@ -30,6 +30,11 @@ export class RegionPrediction {
     this.lastMs = timestampMs;
   }
 
+  /** The region last measured. */
+  get latest(): Region {
+    return this.last;
+  }
+
   /** The region to look at in the frame of this time. */
   at(timestampMs: number): Region {
     const gapMs = Math.min(Math.max(timestampMs - this.lastMs, 0), LONGEST_GAP_MS);

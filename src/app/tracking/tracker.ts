@@ -1,5 +1,13 @@
+import {
+  CALM_CHOICE,
+  chooseViewer,
+  createViewerChoice,
+  type Candidate,
+  type ChoiceRule,
+} from '@oriel/shared/viewer/choose-viewer';
 import { FIRST_STEP, LADDER_STEPS, type Looking } from '@oriel/shared/ladder/steps';
 import { Acquisition, confirm, landmarkRegion } from './acquisition';
+import { Bystanders, type Bystander } from './bystanders';
 import type { Detection } from './detection';
 import { leftEyeOf, regionOfLandmarks, rightEyeOf } from './face-landmarks';
 import type { FaceModels } from './face-models';
@@ -15,8 +23,18 @@ const FACE_BELIEF = 0.5;
 const GUARD_WIDENING = 2.2 / 1.5;
 const DETECTION_PROBABILITY = 0.5;
 
+/**
+ * Frames from one look at everybody else to the next, when every fifth frame or more is guarded, and when there is less time. Never in a
+ * frame that is guarded; together with those fewer than half, so that the usual frame has one look.
+ */
+const BYSTANDERS_EVERY = 4;
+const BYSTANDERS_SELDOM = 12;
+const SELDOM_GUARDED = 5;
+
 /** Everything known of the viewer followed. */
 interface Following {
+  readonly id: number;
+  readonly sinceMs: number;
   readonly prediction: RegionPrediction;
   readonly guard: Guard;
 }
@@ -29,10 +47,17 @@ export class Tracker {
   readonly looks: Looks;
   /** How to look from the next frame on. */
   looking: Looking = LADDER_STEPS[FIRST_STEP].looking;
+  /** Whom to follow of several. */
+  choice: ChoiceRule = CALM_CHOICE;
   private readonly acquisition = new Acquisition();
   private following: Following | null = null;
   private belief = 0;
   private seen: Detection | null = null;
+  private guarded = false;
+  private sinceBystanders = 0;
+  private ids = 0;
+  private readonly bystanders = new Bystanders(() => ++this.ids);
+  private readonly chosen = createViewerChoice();
 
   constructor(models: FaceModels) {
     this.looks = new Looks(models);
@@ -48,19 +73,87 @@ export class Tracker {
     return this.seen;
   }
 
+  /** Who is followed: a number of their own for as long as they are there; null while nobody is. */
+  get viewer(): number | null {
+    return this.following && this.following.id;
+  }
+
+  /** Everybody else who is known to be there; the same array each time. */
+  get others(): readonly Bystander[] {
+    return this.bystanders.all;
+  }
+
   /** Looks at one frame: the belief in the face followed, its landmarks in `points`; or null where nobody is. */
   look(picture: Picture, timestampMs: number): number | null {
     this.looks.reset();
     this.seen = null;
-    if (this.following && this.follow(this.following, picture, timestampMs)) return this.belief;
-    if (this.following) this.forget();
-    return this.acquire(picture, timestampMs) ? this.belief : null;
+    this.guarded = false;
+    const viewer = this.following;
+    if (viewer && this.follow(viewer, picture, timestampMs)) {
+      this.lookAround(viewer, picture, timestampMs);
+      return this.belief;
+    }
+    this.following = null;
+    if (viewer) this.acquisition.restart();
+    return this.turnToAnother(picture, timestampMs) || this.acquire(picture, timestampMs) ? this.belief : null;
   }
 
-  /** Forgets the viewer, as at a change of camera. */
+  /** Forgets everybody, as at a change of camera. */
   forget(): void {
     this.following = null;
+    this.bystanders.clear();
     this.acquisition.restart();
+  }
+
+  /** Sees who else is there, now and then, and hands over to another where the rule says so: from the next frame on. */
+  private lookAround(viewer: Following, picture: Picture, timestampMs: number): void {
+    const every =
+      this.looking.by === 'landmarks' && this.looking.guardEvery <= SELDOM_GUARDED
+        ? BYSTANDERS_EVERY
+        : BYSTANDERS_SELDOM;
+    this.sinceBystanders++;
+    if (!this.guarded && (this.sinceBystanders >= every || this.bystanders.finding)) {
+      this.sinceBystanders = 0;
+      this.bystanders.look(this.looks, picture, viewer.prediction.latest, timestampMs);
+    }
+    if (this.bystanders.all.length === 0) {
+      this.chosen.chosen = viewer.id;
+      return;
+    }
+    const { cx, cy, size } = viewer.prediction.latest;
+    const followed = candidate(viewer, cx, cy, size, picture);
+    const id = chooseViewer(this.chosen, [followed, ...this.candidates(picture)], timestampMs, this.choice);
+    const another = id === viewer.id ? null : this.bystanders.take(id ?? 0);
+    if (!another) return;
+    const { rightEye, leftEye } = this.seen ?? this.eyes();
+    const box = size / BOX_TO_REGION;
+    const face = { score: this.belief, cx, cy, width: box, height: box, rightEye, leftEye };
+    this.bystanders.put({ id: viewer.id, sinceMs: viewer.sinceMs, misses: 0, face });
+    this.following = followingOf(another, timestampMs);
+  }
+
+  /** Where the one followed is gone but others are known, the best of these is followed at once. */
+  private turnToAnother(picture: Picture, timestampMs: number): boolean {
+    while (this.bystanders.all.length > 0) {
+      const id = chooseViewer(this.chosen, this.candidates(picture), timestampMs, this.choice);
+      const another = this.bystanders.take(id ?? 0);
+      if (!another) return false;
+      this.following = followingOf(another, timestampMs);
+      const seen = this.guardLook(picture, landmarkRegion(another.face));
+      if (seen && this.looking.by === 'detector') {
+        this.take(seen);
+        return true;
+      }
+      if (this.replace(this.following, picture, seen, timestampMs)) return true;
+      this.following = null;
+    }
+    return false;
+  }
+
+  private candidates(picture: Picture): Candidate[] {
+    return this.bystanders.all.map((one) =>
+      candidate(one, one.face.cx, one.face.cy, one.face.width * BOX_TO_REGION, picture),
+    );
   }
 
   private follow(viewer: Following, picture: Picture, timestampMs: number): boolean {
@@ -70,6 +163,7 @@ export class Tracker {
       return this.replace(viewer, picture, this.guardLook(picture, region), timestampMs);
     const eyes = this.eyes();
     if (viewer.guard.due(eyes, this.looking.guardEvery)) {
+      this.guarded = true;
       const seen = this.guardLook(picture, regionOfLandmarks(this.points));
       const verdict = viewer.guard.judge(eyes, seen);
       if (verdict === 'lost') return false;
@@ -105,18 +199,28 @@ export class Tracker {
     for (const face of this.acquisition.seek(this.looks, picture)) {
       if (this.looking.by === 'detector') {
         this.take(face);
-        this.following = { prediction: new RegionPrediction(landmarkRegion(face), timestampMs), guard: new Guard() };
+        this.begin(landmarkRegion(face), timestampMs);
         return true;
       }
       if (!this.place(picture, landmarkRegion(face))) continue;
       // A second look in the landmarks' own region: the detector's box is of another size, and measured scale depends on it.
       const region = regionOfLandmarks(this.points);
       if (!this.place(picture, region)) continue;
-      this.following = { prediction: new RegionPrediction(region, timestampMs), guard: new Guard() };
-      this.following.prediction.measure(regionOfLandmarks(this.points), timestampMs);
+      this.begin(region, timestampMs).prediction.measure(regionOfLandmarks(this.points), timestampMs);
       return true;
     }
     return false;
+  }
+
+  private begin(region: Region, timestampMs: number): Following {
+    const id = ++this.ids;
+    this.chosen.chosen = id;
+    return (this.following = {
+      id,
+      sinceMs: timestampMs,
+      prediction: new RegionPrediction(region, timestampMs),
+      guard: new Guard(),
+    });
   }
 
   private place(picture: Picture, region: Region): boolean {
@@ -132,3 +236,22 @@ export class Tracker {
     return { rightEye: rightEyeOf(this.points), leftEye: leftEyeOf(this.points) };
   }
 }
+
+/** The landmarks' region against the detector's box of the same face: measured on rendered heads at 1.5 and 1.9 m. */
+const BOX_TO_REGION = 1.67;
+
+const followingOf = ({ id, sinceMs, face }: Bystander, timestampMs: number): Following => ({
+  id,
+  sinceMs,
+  prediction: new RegionPrediction(landmarkRegion(face), timestampMs),
+  guard: new Guard(),
+});
+
+/** Someone as the choice knows them; off the axis in shares of the frame's width. */
+const candidate = (
+  { id, sinceMs }: { readonly id: number; readonly sinceMs: number },
+  cx: number,
+  cy: number,
+  sizePx: number,
+  { width, height }: Picture,
+): Candidate => ({ id, sinceMs, sizePx, offAxis: Math.hypot(cx - width / 2, cy - height / 2) / width });

@@ -2,6 +2,7 @@ import type { Looking } from '@oriel/shared/ladder/steps';
 import type { Point3 } from '@oriel/shared/projection/types';
 import type { Camera } from '@oriel/shared/viewer/camera';
 import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
+import type { ChoiceRule } from '@oriel/shared/viewer/choose-viewer';
 import type { HeadAngles } from '@oriel/shared/viewer/head-angles';
 import type { CameraTrack } from './track-processor';
 
@@ -25,6 +26,8 @@ export interface TrackerSettings {
   readonly viewer: ViewerMeasure;
   /** How finely to look; as on the ladder's first step where left out. */
   readonly looking?: Looking;
+  /** Whom to follow of several; the nearest, calmly, where left out. */
+  readonly choice?: ChoiceRule;
 }
 
 /** One frame to look at; its `image` is transferred, and closed by the worker. */
@@ -73,6 +76,14 @@ export interface FaceSample {
   readonly belief: number;
 }
 
+/** Someone else who is there and is not followed, as the detector sees them now and then. */
+export interface OtherSample {
+  readonly id: number;
+  readonly eyePx: PixelPoint;
+  /** In millimetres from the centre of the glass, as if the head faced the camera. */
+  readonly eye: Point3;
+}
+
 /** What the worker makes of one frame. */
 export interface SampleMessage {
   readonly type: 'sample';
@@ -81,6 +92,9 @@ export interface SampleMessage {
   readonly frameHeight: number;
   /** The face followed, or null where nobody is. */
   readonly face: FaceSample | null;
+  /** Who is followed: a number that is theirs for as long as they are there. */
+  readonly viewer: number | null;
+  readonly others: readonly OtherSample[];
   /** x and y of each landmark in frame pixels; only where they were asked for and a face is followed. */
   readonly landmarks?: Float32Array;
   readonly timings: StageTimings;

@@ -1,4 +1,5 @@
 import { FIRST_STEP, LADDER_STEPS } from '@oriel/shared/ladder/steps';
+import { CALM_CHOICE } from '@oriel/shared/viewer/choose-viewer';
 import { FaceMeasure } from './face-measure';
 import type { FaceModels } from './face-models';
 import { FrameReader } from './frame-picture';
@@ -7,7 +8,9 @@ import { Pace } from './pace';
 import { loadFaceModels } from './tfjs-face-models';
 import { framesOf, readsTracks } from './track-processor';
 import { Tracker } from './tracker';
-import type { FaceSample, FromTracker, ToTracker, TrackerSettings } from './tracking-messages';
+import type { FaceSample, FromTracker, OtherSample, ToTracker, TrackerSettings } from './tracking-messages';
+
+const NO_OTHERS: readonly OtherSample[] = [];
 
 /** What the worker does with each message; the worker itself only passes messages. Frames are closed whatever happens to them. */
 export class TrackingSession {
@@ -67,6 +70,7 @@ export class TrackingSession {
   private take(settings: TrackerSettings): void {
     this.settings = settings;
     if (!this.tracker) return;
+    this.tracker.choice = settings.choice ?? CALM_CHOICE;
     this.tracker.looking = settings.looking ?? LADDER_STEPS[FIRST_STEP].looking;
     if (this.tracker.looking.by === 'nothing') this.tracker.forget();
   }
@@ -92,7 +96,7 @@ export class TrackingSession {
       const picture = await this.frames.read(image);
       const readMs = performance.now() - begun;
       const belief = this.tracker.look(picture, timestampMs);
-      const face = belief === null ? null : this.faceIn(this.tracker, belief, picture, this.settings);
+      const face = belief === null ? null : this.faceIn(this.tracker, belief, picture, this.settings, timestampMs);
       const { cropMs, detectMs, landmarksMs } = this.tracker.looks.times;
       this.say({
         type: 'sample',
@@ -100,6 +104,8 @@ export class TrackingSession {
         frameWidth: picture.width,
         frameHeight: picture.height,
         face,
+        viewer: this.tracker.viewer,
+        others: this.othersIn(this.tracker, picture, this.settings),
         ...(face && this.landmarksWanted && !this.tracker.detected ? { landmarks: acrossAndDown(this.tracker.points) } : {}),
         timings: { cropMs: cropMs + readMs, detectMs, landmarksMs, totalMs: performance.now() - begun },
         tensors: this.models.tensors(),
@@ -109,10 +115,24 @@ export class TrackingSession {
     }
   }
 
-  private faceIn(tracker: Tracker, belief: number, frame: Picture, settings: TrackerSettings): FaceSample {
+  private faceIn(
+    tracker: Tracker,
+    belief: number,
+    frame: Picture,
+    settings: TrackerSettings,
+    timestampMs: number,
+  ): FaceSample {
     return tracker.detected
       ? this.measure.measureEyes(tracker.detected, belief, frame, settings)
-      : this.measure.measure(tracker.points, belief, frame, settings);
+      : this.measure.measure(tracker.points, belief, frame, settings, timestampMs);
+  }
+
+  private othersIn(tracker: Tracker, frame: Picture, settings: TrackerSettings): readonly OtherSample[] {
+    if (tracker.others.length === 0) return NO_OTHERS;
+    return tracker.others.map(({ id, face }) => {
+      const { eyePx, eye } = this.measure.measureEyes(face, face.score, frame, settings);
+      return { id, eyePx, eye };
+    });
   }
 
   private async stop(): Promise<void> {

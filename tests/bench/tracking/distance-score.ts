@@ -23,11 +23,10 @@ const isKnown = (hit: Hit | null): hit is KnownHit => hit !== null && hit.truth.
 export function scoreDistances(
   truths: readonly TruthFrame[],
   hits: readonly (Hit | null)[],
-  fps: number,
+  scale: number,
 ): Partial<DistanceScore> {
   const known = hits.filter(isKnown);
   if (known.length === 0) return {};
-  const scale = scaleAtRest(known, fps);
   const distanceErrors = known.map(({ found, truth }) => 100 * (found.eyeMm[2] / scale / truth.eyeMm[2] - 1));
   const lateral = known.map(({ found, truth }) =>
     Math.hypot(found.eyeMm[0] / scale - truth.eyeMm[0], found.eyeMm[1] / scale - truth.eyeMm[1]),
@@ -45,8 +44,10 @@ export function scoreDistances(
   };
 }
 
-/** Measured over true distance, from the segment `rest`, or else from the first second in which the head faces the camera. */
-function scaleAtRest(known: readonly KnownHit[], fps: number): number {
+/** Measured over true distance, from the segment `rest`, or else from the first second in which the head faces the camera; 1 where none is known. */
+export function scaleAtRest(hits: readonly (Hit | null)[], fps: number): number {
+  const known = hits.filter(isKnown);
+  if (known.length === 0) return 1;
   const rest = known.filter((hit) => hit.frame.segment === 'rest');
   const facing = known.filter((hit) => hit.truth.facing).slice(0, Math.round(fps));
   const chosen = [rest, facing].find((group) => group.length > 0) ?? known.slice(0, Math.round(fps));

@@ -8,7 +8,7 @@ import { bundleBench } from './bundle';
 import { matchTruth } from './match-truth';
 import { asMjpeg } from './mjpeg-file';
 import type { replay } from './bench-page';
-import { scoreLooks } from './score';
+import { scoreLooks, scoreSegments } from './score';
 import { serveBench } from './serve';
 import { truthSchema } from './truth';
 
@@ -51,17 +51,15 @@ async function main(): Promise<void> {
       );
       const { truths, matched } = matchTruth(truth, results);
       console.log(`${String(results.length)} frames, ${String(matched.length)} matched to their truth`);
-      const oriel = scoreLooks(
-        truths,
-        matched.map((frame) => frame.oriel),
-        truth.fps,
-      );
-      const reference = scoreLooks(
-        truths,
-        matched.map((frame) => frame.reference),
-        truth.fps,
-      );
-      console.log(JSON.stringify({ oriel, reference }));
+      const orielLooks = matched.map((frame) => frame.oriel);
+      const referenceLooks = matched.map((frame) => frame.reference);
+      const of = (score: typeof scoreLooks | typeof scoreSegments): string =>
+        JSON.stringify({
+          oriel: score(truths, orielLooks, truth.fps),
+          reference: score(truths, referenceLooks, truth.fps),
+        });
+      if (new Set(truths.map(({ segment }) => segment)).size > 1) console.log(of(scoreSegments));
+      console.log(of(scoreLooks));
     } finally {
       await browser.close();
       await server.close();

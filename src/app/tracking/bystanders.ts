@@ -1,0 +1,115 @@
+import { closerLook, confirm, landmarkRegion } from './acquisition';
+import type { Detection } from './detection';
+import type { Looks } from './looks';
+import type { Picture } from './picture';
+import { wholeFrame, type Region } from './region';
+import { tilesOf } from './tiles';
+
+/** Someone in the picture who is not followed, as the detectors see them now and then. */
+export interface Bystander {
+  readonly id: number;
+  readonly sinceMs: number;
+  face: Detection;
+  misses: number;
+}
+
+const FIND_PROBABILITY = 0.3;
+const SEEN_PROBABILITY = 0.5;
+/** Looks in a row that may not see a bystander before they are taken to have gone. */
+const MOST_MISSES = 2;
+const MOST_BYSTANDERS = 8;
+
+/**
+ * Keeps an eye on everybody else while one is followed, with one look each time it is asked: at a find that wants confirming, else by
+ * turns for newcomers (the whole frame and the next of its squares) and at those who are known.
+ */
+export class Bystanders {
+  readonly all: Bystander[] = [];
+  private find: Detection | null = null;
+  private turn = 0;
+  private nextTile = 0;
+  private nextKnown = 0;
+
+  constructor(private readonly newId: () => number) {}
+
+  /** Whether a find waits for a closer look. */
+  get finding(): boolean {
+    return this.find !== null;
+  }
+
+  /** Looks once; `followed` is the region of the face that is followed and is nobody else. */
+  look(looks: Looks, picture: Picture, followed: Region, timestampMs: number): void {
+    const { find } = this;
+    if (find) {
+      this.find = null;
+      const face = confirm(looks, picture, find);
+      if (face && !sameFace(landmarkRegion(face), followed) && !this.known(face)) this.add(face, timestampMs);
+    } else if (this.turn++ % 2 === 0 || this.all.length === 0) {
+      this.seek(looks, picture, followed);
+    } else {
+      this.lookAgain(looks, picture, followed);
+    }
+  }
+
+  /** Takes out the one of this id, who is followed from now on. */
+  take(id: number): Bystander | null {
+    const at = this.all.findIndex((one) => one.id === id);
+    return at < 0 ? null : this.all.splice(at, 1)[0];
+  }
+
+  /** Puts back one who is followed no longer. */
+  put(bystander: Bystander): void {
+    if (this.all.length < MOST_BYSTANDERS) this.all.push(bystander);
+  }
+
+  clear(): void {
+    this.all.length = 0;
+    this.find = null;
+  }
+
+  private add(face: Detection, timestampMs: number): void {
+    this.put({ id: this.newId(), sinceMs: timestampMs, face, misses: 0 });
+  }
+
+  private known(face: Detection): Bystander | undefined {
+    const region = landmarkRegion(face);
+    return this.all.find((one) => sameFace(landmarkRegion(one.face), region));
+  }
+
+  private seek(looks: Looks, picture: Picture, followed: Region): void {
+    const tiles = tilesOf(picture.width, picture.height);
+    const whole = tiles.length === 0 || this.turn % 4 < 2;
+    const region = whole ? wholeFrame(picture.width, picture.height) : tiles[this.nextTile++ % tiles.length];
+    for (const face of looks.full(picture, region, FIND_PROBABILITY)) {
+      if (sameFace(landmarkRegion(face), followed)) continue;
+      const known = this.known(face);
+      if (known) known.face = movedTo(known.face, face.cx, face.cy);
+      else this.find ??= face;
+    }
+  }
+
+  private lookAgain(looks: Looks, picture: Picture, followed: Region): void {
+    const at = this.nextKnown++ % this.all.length;
+    const one = this.all[at];
+    const seen = looks.short(picture, closerLook(one.face), SEEN_PROBABILITY)[0];
+    const other = seen && this.known(seen);
+    if (seen && !sameFace(landmarkRegion(seen), followed) && (!other || other === one)) {
+      one.face = seen;
+      one.misses = 0;
+    } else if (++one.misses >= MOST_MISSES) {
+      this.all.splice(at, 1);
+    }
+  }
+}
+
+/** Whether two landmark regions are of one face: their middles lie nearer than half of the larger. */
+const sameFace = (a: Region, b: Region): boolean => Math.hypot(a.cx - b.cx, a.cy - b.cy) < Math.max(a.size, b.size) / 2;
+
+/** The face at another place; the full-range detector's sizes are not to be trusted. */
+const movedTo = (face: Detection, cx: number, cy: number): Detection => {
+  const shift = ({ x, y }: { readonly x: number; readonly y: number }) => ({
+    x: x + cx - face.cx,
+    y: y + cy - face.cy,
+  });
+  return { ...face, cx, cy, rightEye: shift(face.rightEye), leftEye: shift(face.leftEye) };
+};
