@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { Found, Look } from './result';
-import { scoreLooks } from './score';
+import { scoreLooks, scoreSegments } from './score';
 import type { TruthFrame } from './truth';
 
 /** A level face whose eyes are 50 px apart about (x, 100), so many millimetres away where that is known. */
@@ -70,6 +70,27 @@ describe('scoreLooks', () => {
   it('counts the frames until someone who appears is found', () => {
     const truths = [truth(0, 0, false), ...[1, 2, 3].map((i) => truth(i, 100, true, 1000))];
     expect(scoreLooks(truths, [look(null), look(null), look(null), look(100)], FPS).acquiredFrames).toBe(2);
+  });
+
+  it('scores each segment by itself, with the scale of the whole', () => {
+    const truths = [truth(0, 100, true, 1000, 'rest'), truth(1, 110, true, 2000, 'walk')];
+    const segments = scoreSegments(truths, [look(100, 5, 50, 1100), look(110, 5, 25, 2420)], FPS);
+    expect(segments['rest'].distanceMaxPct).toBeCloseTo(0, 6);
+    expect(segments['walk'].distanceMaxPct).toBeCloseTo(10, 6);
+  });
+
+  it('draws for the eye it measured: 6 and 8 mm beside the true one 1 m away are 10 x 100/1100 mm on the glass (computed)', () => {
+    const truths = Array.from({ length: 150 }, (_, i) => truth(i, 100, true, 1000, 'rest'));
+    const score = scoreLooks(truths, truths.map(() => look(100)), FPS); // prettier-ignore
+    expect(score.glassErrorMmP50).toBeCloseTo(1000 / 1100, 2);
+    expect(score.glassErrorMmP95).toBeCloseTo(1000 / 1100, 2);
+  });
+
+  it('gives the unrest of the drawn point at rest', () => {
+    const truths = Array.from({ length: 150 }, (_, i) => truth(i, 100, true, 1000, 'rest'));
+    const rest = (noiseMm: number) =>
+      scoreLooks(truths, truths.map((_, k) => look(100, 5, 50, 1000 + noiseMm * (k % 2 ? 1 : -1))), FPS).glassRestSdMm!; // prettier-ignore
+    expect(rest(40)).toBeGreaterThan(rest(0));
   });
 
   it('has no distances where the truth has none', () => {
