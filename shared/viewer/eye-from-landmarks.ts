@@ -25,11 +25,11 @@ import { turnedByRay } from './viewing-ray';
 /** What is known of a viewer. */
 export interface ViewerMeasure {
   readonly eyeDistanceMm: number;
-  /** k: by how much the landmarks draw a face too small. Measured 1.033 to 1.046 for a region of 1.5; best set once at a known distance. */
+  /** k: by how much the landmarks draw a face too small. Measured 1.03 to 1.05 for a region of 1.5; best set once at a known distance. */
   readonly distanceFactor: number;
 }
 
-export const USUAL_VIEWER: ViewerMeasure = { eyeDistanceMm: USUAL_EYE_DISTANCE_MM, distanceFactor: 1.036 };
+export const USUAL_VIEWER: ViewerMeasure = { eyeDistanceMm: USUAL_EYE_DISTANCE_MM, distanceFactor: 1.03 };
 
 /** The result, and the memory the fit works in: made once, then written to by every frame. */
 export interface LandmarkEye {

@@ -38,8 +38,8 @@ export function jawWeights(chin = 0.3): Float64Array {
   return weights;
 }
 
-/** Share of the jaw in the place: 0.1 makes good what weighing by the normal costs in talking. */
-const PLACE_CHIN = 0.1;
+/** Share of the jaw in the place: from 0.3 to this the error while talking falls from 2.1 to 1.0 % rms, and that of yaw rises by a tenth. */
+const PLACE_CHIN = 0.02;
 /** Half axes, to the side and to the front, and axis (behind the origin) of a cylinder that stands for the face, cm of the canonical face. */
 const CYLINDER = { side: 7.5, front: 9, axis: -3 };
 

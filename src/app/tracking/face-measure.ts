@@ -7,9 +7,6 @@ import type { Eyes } from './guard';
 import { eyeLineAngle } from './region';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
 
-/** The distance between the eyes as the fit of all landmarks gives it, against that between the detector's points: computed, tests/outside/tracking.spec.ts. */
-const DETECTOR_SPREAD = 0.994;
-
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
  * the eyes, distance held through motion blur. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
@@ -64,7 +61,7 @@ export class FaceMeasure {
     const camera = this.cameraFor(frame, settings);
     const { eyeDistanceMm, distanceFactor } = settings.viewer;
     const f = focalPx(camera);
-    const ipdPx = Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y) * DETECTOR_SPREAD;
+    const ipdPx = Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y);
     const eyePx = { x: (rightEye.x + leftEye.x) / 2, y: (rightEye.y + leftEye.y) / 2 };
     const z = distanceFromSize(f, eyeDistanceMm, ipdPx) / distanceFactor;
     const eyeInCamera = {

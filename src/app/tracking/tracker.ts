@@ -53,6 +53,7 @@ export class Tracker {
   private following: Following | null = null;
   private belief = 0;
   private seen: Detection | null = null;
+  private lookedAt: number | null = null;
   private guarded = false;
   private sinceBystanders = 0;
   private ids = 0;
@@ -73,9 +74,9 @@ export class Tracker {
     return this.seen;
   }
 
-  /** Who is followed: a number of their own for as long as they are there; null while nobody is. */
+  /** Whom the last look was at: a number of their own for as long as they are there; null while nobody is followed. */
   get viewer(): number | null {
-    return this.following && this.following.id;
+    return this.lookedAt;
   }
 
   /** Everybody else who is known to be there; the same array each time. */
@@ -90,12 +91,15 @@ export class Tracker {
     this.guarded = false;
     const viewer = this.following;
     if (viewer && this.follow(viewer, picture, timestampMs)) {
+      this.lookedAt = viewer.id;
       this.lookAround(viewer, picture, timestampMs);
       return this.belief;
     }
     this.following = null;
     if (viewer) this.acquisition.restart();
-    return this.turnToAnother(picture, timestampMs) || this.acquire(picture, timestampMs) ? this.belief : null;
+    const found = this.turnToAnother(picture, timestampMs) || this.acquire(picture, timestampMs);
+    this.lookedAt = found ? this.chosen.chosen : null;
+    return found ? this.belief : null;
   }
 
   /** Forgets everybody, as at a change of camera. */
