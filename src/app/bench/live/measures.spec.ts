@@ -26,6 +26,8 @@ function played(path: (tMs: number) => number | null, untilMs = 10_000): { measu
         frameWidth: 640,
         frameHeight: 480,
         landmarks: null,
+        viewer: 1,
+        others: [],
       };
       measures.sample(sample);
     }

@@ -13,6 +13,8 @@ const sample = (receivedMs: number, found = true): EyeSample => ({
   frameWidth: 640,
   frameHeight: 480,
   landmarks: null,
+  viewer: 1,
+  others: [],
 });
 
 describe('recording a run', () => {
