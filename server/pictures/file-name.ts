@@ -1,22 +1,17 @@
+import { beginningOf } from '@oriel/shared/contracts/beginning-of';
+
 const photoNameMax = 200;
 const titleMax = 120;
 const unnamed = 'Untitled';
 
-/** The beginning of a text, without half characters (a surrogate that has lost its other half). */
-const beginning = (text: string, max: number) =>
-  text
-    .slice(0, max)
-    .replace(/\p{Cs}/gu, '')
-    .trim();
-
 /** The last part of a file's path as some browser or system wrote it, on one line, without control characters. */
 export function photoName(path: string): string {
   const name = path.split(/[\\/]/).at(-1) ?? '';
-  return beginning(name.replace(/\p{Cc}/gu, '').trim(), photoNameMax) || unnamed;
+  return beginningOf(name.replace(/\p{Cc}/gu, '').trim(), photoNameMax) || unnamed;
 }
 
 /** A photo's name without its extension, as the name of what is made from it. */
 export const titleFrom = (name: string): string =>
-  beginning(name.replace(/\.[a-z0-9]{2,5}$/i, '').trim(), titleMax) || unnamed;
+  beginningOf(name.replace(/\.[a-z0-9]{2,5}$/i, '').trim(), titleMax) || unnamed;
 
-export const titleOfCopy = (title: string): string => `${beginning(title, titleMax - ' copy'.length)} copy`;
+export const titleOfCopy = (title: string): string => `${beginningOf(title, titleMax - ' copy'.length)} copy`;

@@ -103,6 +103,14 @@ describe('commands', () => {
     expect(history.past).toHaveLength(MOST_STEPS);
   });
 
+  it('cut no character in half where a name is too long', () => {
+    const long = `${'x'.repeat(114)}\u{1f33e}\u{1f33e}\u{1f33e}`;
+    const copied = duplicateLayer(layerIds[0], 'copy')(renameLayer(layerIds[0], long)(someScene));
+    const names = copied.layers.map(({ name }) => name);
+    expect(names).toContain(`${'x'.repeat(114)} copy`);
+    for (const name of names) expect(name).not.toMatch(/\p{Cs}/u);
+  });
+
   it('grow the scene until it is clear', () => {
     const grown = growLayersToCover({ ...someScene, layers: someScene.layers.slice(0, 2) });
     expect(clearance({ ...someScene, layers: someScene.layers.slice(0, 2) })).not.toEqual([]);

@@ -1,3 +1,4 @@
+import { beginningOf } from '@oriel/shared/contracts/beginning-of';
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import { type Change, changeLayer } from './change';
 import { clamp, depthLimits, positionLimits, sizeLimits } from './limits';
@@ -32,7 +33,7 @@ export const setWidth =
 export const renameLayer =
   (id: string, name: string): Change =>
   (document) =>
-    name.trim() === '' ? document : changeLayer(document, id, (layer) => ({ ...layer, name: name.trim().slice(0, 120) }));
+    name.trim() === '' ? document : changeLayer(document, id, (layer) => ({ ...layer, name: beginningOf(name.trim(), 120) }));
 
 /** Opacity from 0 to 1. */
 export const setOpacity =

@@ -1,3 +1,4 @@
+import { beginningOf } from '@oriel/shared/contracts/beginning-of';
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import { EYE_MARGIN_MM } from '@oriel/shared/projection/clearance';
 import { growToCover, scaleRectangle } from '@oriel/shared/projection/grow-to-cover';
@@ -9,12 +10,12 @@ import { clamp, eyeLimits, positionLimits, sizeLimits } from './limits';
 export const renameScene =
   (name: string): Change =>
   (document) =>
-    name.trim() === '' ? document : { ...document, name: name.trim().slice(0, 120) };
+    name.trim() === '' ? document : { ...document, name: beginningOf(name.trim(), 120) };
 
 /** Whose photograph it is; nothing typed takes the credit away. */
 export const creditScene =
   (credit: string): Change =>
-  (document) => ({ ...document, credit: credit.trim().slice(0, 200) || undefined });
+  (document) => ({ ...document, credit: beginningOf(credit.trim(), 200) || undefined });
 
 /** Another glass before the same layers, which stay as large as they are. */
 export const setGlass =

@@ -1,3 +1,4 @@
+import { beginningOf } from '@oriel/shared/contracts/beginning-of';
 import type { Layer, LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
 import { placeTrimmed } from '@oriel/shared/projection/cover-glass';
 import type { Change } from './change';
@@ -11,7 +12,7 @@ export const addLayer =
     if (document.layers.length >= MOST_LAYERS) return document;
     const layer: Layer = {
       id,
-      name: name.trim().slice(0, 120) || 'Layer',
+      name: beginningOf(name.trim(), 120) || 'Layer',
       image,
       depthMm: 0,
       placed: placeTrimmed(document.glass, image),
@@ -28,7 +29,7 @@ export const duplicateLayer =
     const at = document.layers.findIndex((layer) => layer.id === id);
     if (at < 0 || document.layers.length >= MOST_LAYERS) return document;
     const original = document.layers[at];
-    const copy = { ...original, id: copyId, name: `${original.name.slice(0, 115)} copy` };
+    const copy = { ...original, id: copyId, name: `${beginningOf(original.name, 115)} copy` };
     return { ...document, layers: document.layers.toSpliced(at + 1, 0, copy) };
   };
 
