@@ -2,7 +2,7 @@ import type { TrackingState } from '../tracking/tracking-state';
 import { type PlayerSituation, howToAllow, playerLine } from './player-words';
 
 const usual: PlayerSituation = {
-  screenDecided: true, missing: [], following: true, tracking: 'following', still: false, privacyTold: false, byHand: false,
+  screenDecided: true, missing: [], following: true, tracking: 'following', tooSlow: false, still: false, privacyTold: false, byHand: false,
   userAgent: 'Mozilla/5.0 (X11; Linux x86_64) AppleWebKit/537.36 (KHTML, like Gecko) Chrome/140.0.0.0 Safari/537.36',
 };
 const lineFor = (part: Partial<PlayerSituation>) => playerLine({ ...usual, ...part });
@@ -12,6 +12,11 @@ describe('playerLine', () => {
   it('says that camera pictures stay here when the camera is asked for, and when following begins, until it was told', () => {
     for (const tracking of ['asking', 'starting', 'following', 'nobody'] as const) expect(lineFor({ tracking })?.words).toMatch(privacy);
     expect(lineFor({ privacyTold: true })?.words).not.toMatch(privacy);
+  });
+
+  it('says that the computer is too busy, and not that nobody is there, where it has given up looking', () => {
+    expect(lineFor({ tracking: 'nobody', tooSlow: true })).toMatchObject({ about: 'too-slow', fades: false });
+    expect(lineFor({ tracking: 'no-camera', tooSlow: true })?.about).toBe('no-camera');
   });
 
   it.each(['refused', 'no-camera', 'camera-busy', 'unsupported', 'failed'] as const)('stays and offers to go on without when %s', (tracking) => {

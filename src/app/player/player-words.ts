@@ -20,6 +20,8 @@ export interface PlayerSituation {
   readonly missing: readonly string[];
   readonly following: boolean;
   readonly tracking: TrackingState;
+  /** Whether the ladder has given up looking, because this computer cannot keep up. */
+  readonly tooSlow: boolean;
   /** Whether less motion is asked for. */
   readonly still: boolean;
   /** Whether it was already said that the camera's pictures stay here. */
@@ -45,6 +47,8 @@ export function playerLine(now: PlayerSituation): PlayerLine | null {
 }
 
 function trackingLine(now: PlayerSituation): PlayerLine | null {
+  if (now.tooSlow && (now.tracking === 'nobody' || now.tracking === 'following'))
+    return stays('too-slow', 'This computer is too busy to follow you just now. It tries again by itself; pointer and arrow keys still work.');
   const telling = (words: string) => (now.privacyTold ? words : `${words} ${privacy}`);
   switch (now.tracking) {
     case 'off':

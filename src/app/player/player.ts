@@ -71,6 +71,7 @@ export class Player {
       missing: this.missing(),
       following: this.following.on(),
       tracking: this.tracking.state(),
+      tooSlow: this.tracking.ladder().lookedBy === 'nothing',
       still: this.following.still,
       privacyTold: this.privacyTold(),
       byHand: this.byHand(),
