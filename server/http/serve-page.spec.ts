@@ -1,4 +1,4 @@
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import express from 'express';
@@ -14,6 +14,8 @@ describe('the page and its headers', () => {
     const { webDir } = app.parts.config;
     await writeFile(join(webDir, 'main-ABCD1234.js'), 'export {};');
     await writeFile(join(webDir, 'model.json'), '{}');
+    await mkdir(join(webDir, 'calibration'));
+    await writeFile(join(webDir, 'calibration', 'board-worker.js'), '');
   });
   afterAll(() => app.close());
   const get = (path: string, accept = 'text/html') => app.browser().agent.get(path).set('Accept', accept);
@@ -37,6 +39,12 @@ describe('the page and its headers', () => {
   it('keeps hashed files for good and others for no longer than they last', async () => {
     expect((await get('/main-ABCD1234.js')).get('Cache-Control')).toMatch(/immutable/);
     expect((await get('/model.json')).get('Cache-Control')).toBe('no-cache');
+  });
+
+  it('lets the one worker that runs OpenCV.js make functions from text, fetch nothing, and nobody else do so', async () => {
+    const policy = (await get('/calibration/board-worker.js', '*/*')).get('Content-Security-Policy');
+    expect(policy).toBe("default-src 'none'; script-src 'self' 'unsafe-eval'");
+    for (const path of ['/', '/main-ABCD1234.js', '/model.json']) expect((await get(path, '*/*')).get('Content-Security-Policy')).not.toContain("'unsafe-eval'");
   });
 
   it('says that a file of an earlier build is missing, instead of answering with the page', async () => {

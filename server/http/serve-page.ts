@@ -1,8 +1,13 @@
-import { extname } from 'node:path';
+import type { ServerResponse } from 'node:http';
+import { extname, join } from 'node:path';
 import express, { Router } from 'express';
 import { notFound } from './failure';
 
 const immutable = /-[A-Z0-9]{8}\.(js|css)$/;
+
+/** A worker has the policy of its own script's reply. This one runs OpenCV.js, which makes functions from text; it may do that and nothing else. */
+const boardWorker = join('calibration', 'board-worker.js');
+const boardWorkerPolicy = "default-src 'none'; script-src 'self' 'unsafe-eval'";
 
 /**
  * The built page: hashed files for good, everything else asked for anew; every other address is the page itself, which routes it. An
@@ -13,8 +18,7 @@ export function servePage(webDir: string): Router {
   router.use(
     express.static(webDir, {
       index: false,
-      setHeaders: (response, path) =>
-        response.setHeader('Cache-Control', immutable.test(path) ? 'public, max-age=31536000, immutable' : 'no-cache'),
+      setHeaders,
     }),
   );
   router.get('/{*path}', (request, response, next) => {
@@ -23,4 +27,9 @@ export function servePage(webDir: string): Router {
     response.sendFile('index.html', { root: webDir }, (error) => error && next(error));
   });
   return router;
+}
+
+function setHeaders(response: ServerResponse, path: string): void {
+  response.setHeader('Cache-Control', immutable.test(path) ? 'public, max-age=31536000, immutable' : 'no-cache');
+  if (path.endsWith(boardWorker)) response.setHeader('Content-Security-Policy', boardWorkerPolicy);
 }

@@ -12,6 +12,7 @@ export const routes: Routes = [
       { path: '', pathMatch: 'full', redirectTo: 'scenes' },
       { path: 'scenes', canActivate: [forHouseholds], loadChildren: () => import('./scenes/scenes.routes').then((m) => m.scenesRoutes) },
       { path: 'photos', canActivate: [forHouseholds], loadChildren: () => import('./photos/photos.routes').then((m) => m.photosRoutes) },
+      { path: 'walls', canActivate: [forHouseholds], loadChildren: () => import('./walls/walls.routes').then((m) => m.wallsRoutes) },
       { path: 'bench', canActivate: [forHouseholds], loadChildren: () => import('./bench/bench.routes').then((m) => m.benchRoutes) },
       { path: 'household', loadChildren: () => import('./household/household.routes').then((m) => m.householdRoutes) },
       { path: 'compose/:sceneId', loadChildren: () => import('./composer/composer.routes').then((m) => m.composerRoutes) },

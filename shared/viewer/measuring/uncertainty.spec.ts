@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { contributions, meanOf, measured, propagate } from './uncertainty';
+import { contributions, meanOf, measured, propagate, steadyMeanOf } from './uncertainty';
 
 describe('propagate', () => {
   it('adds in squares for a sum, and by the other factor for a product (by hand: √(0.03² + 0.04²) = 0.05; √((3·0.2)² + (4·0.1)²) = 0.72111)', () => {
@@ -32,5 +32,9 @@ describe('meanOf', () => {
 
   it('asks for two readings', () => {
     expect(() => meanOf([1])).toThrowError(expect.objectContaining({ value: 'readings' }));
+  });
+
+  it('stays as unsure as one reading where they follow each other closely (by hand: s = √(32/7))', () => {
+    expect(steadyMeanOf([2, 4, 4, 4, 5, 5, 7, 9])).toEqual({ value: 5, uncertainty: expect.closeTo(2.13809, 5) });
   });
 });

@@ -48,3 +48,12 @@ export function meanOf(readings: readonly number[]): Measured {
   const variance = readings.reduce((sum, x) => sum + (x - value) ** 2, 0) / (n - 1);
   return { value, uncertainty: Math.sqrt(variance / n) };
 }
+
+/**
+ * The mean of readings that follow each other closely, with the spread s of a single one: what disturbs one disturbs its neighbours too
+ * (sway, a tracker's smoothing), so that their number makes the mean no surer (GUM 4.2.7). At least two readings.
+ */
+export function steadyMeanOf(readings: readonly number[]): Measured {
+  const { value, uncertainty } = meanOf(readings);
+  return { value, uncertainty: uncertainty * Math.sqrt(readings.length) };
+}

@@ -49,6 +49,8 @@ export class FigureField {
   readonly least = input(-100_000);
   readonly most = input(100_000);
   readonly step = input(1);
+  /** Digits shown after the point. */
+  readonly decimals = input(1);
   /** Whether a plus is shown too, as for depths. */
   readonly signed = input(false);
   /** Whether label and unit stand elsewhere, as in a column. */
@@ -59,7 +61,7 @@ export class FigureField {
   protected readonly id = `figure-${(fields += 1)}`;
   protected readonly typed = signal<string | null>(null);
   protected readonly problem = signal('');
-  protected readonly shown = computed(() => (this.signed() ? signedMm(this.value()) : plainMm(this.value())));
+  protected readonly shown = computed(() => (this.signed() ? signedMm : plainMm)(this.value(), this.decimals()));
   private readonly injector = inject(Injector);
   private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
 
@@ -103,8 +105,8 @@ export class FigureField {
 
   private problemOf(figure: number | null): string {
     if (figure === null) return 'Write a figure, such as 180';
-    if (figure < this.least()) return `At least ${plainMm(this.least())} ${this.unit()}`;
-    if (figure > this.most()) return `At most ${plainMm(this.most())} ${this.unit()}`;
+    if (figure < this.least()) return `At least ${plainMm(this.least(), this.decimals())} ${this.unit()}`;
+    if (figure > this.most()) return `At most ${plainMm(this.most(), this.decimals())} ${this.unit()}`;
     return '';
   }
 }

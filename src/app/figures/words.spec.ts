@@ -13,6 +13,7 @@ describe('figures in words', () => {
     expect(readFigure('\u221260 mm')).toBe(-60);
     expect(readFigure('12,5')).toBe(12.5);
     expect(readFigure('80%')).toBe(80);
+    expect(readFigure('60,5°')).toBe(60.5);
     for (const wrong of ['', 'far', '1e9', '--3', '1.2.3']) expect(readFigure(wrong)).toBeNull();
   });
 

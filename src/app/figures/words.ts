@@ -22,7 +22,7 @@ const AMBIGUOUS = /^\D?[1-9]\d{0,2}(,\d{3})+$/;
 
 /** Reads a figure as people type it: either minus sign, a decimal comma, a trailing unit; null where it is none, or could be two. */
 export function readFigure(text: string): number | null {
-  const bare = text.trim().replace(/\s*(mm|%|px)$/i, '');
+  const bare = text.trim().replace(/\s*(mm|cm|in|%|px|°)$/i, '');
   if (AMBIGUOUS.test(bare)) return null;
   const plain = bare.replace(/[\u2212\u2013]/g, '-').replace(',', '.').replace(/^\+/, '');
   if (!/^-?(\d+\.?\d*|\.\d+)$/.test(plain)) return null;

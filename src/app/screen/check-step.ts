@@ -3,23 +3,12 @@ import { MatButton } from '@angular/material/button';
 import { MatCheckbox } from '@angular/material/checkbox';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { FaceTracking } from '../tracking/face-tracking';
-import type { TrackingState } from '../tracking/tracking-state';
+import { trackingWords } from '../tracking/tracking-words';
 import { CameraDrawing } from './camera-drawing';
 import type { ScreenSetUp } from './screen-set-up';
 import { trackingSetUp } from './tracking-set-up';
 
-const words: Readonly<Record<TrackingState, string>> = {
-  off: 'The camera is off.',
-  asking: 'The browser asks for the camera.',
-  starting: 'Getting ready to follow you.',
-  refused: 'The camera was refused. Allow it beside the address, then start again.',
-  'no-camera': 'No camera was found. Connect one, then start again.',
-  'camera-busy': 'The camera is in use elsewhere. Close what uses it, then start again.',
-  unsupported: 'This page cannot have a camera: the address must begin with https, or be on this computer.',
-  failed: 'Following stopped unexpectedly. Start again.',
-  nobody: 'Nobody is in view of the camera.',
-  following: 'Following you. Move your head to the left: in the plan the dot should move left.',
-};
+const words = { ...trackingWords, following: 'Following you. Move your head to the left: in the plan the dot should move left.' };
 
 /** The third step: the eye as this set-up sees it, live, and what to beware of. */
 @Component({

@@ -1,0 +1,37 @@
+import { newWall } from '@oriel/shared/contracts/new-wall';
+import { errorsOf, exampleDepths, meansWords, sourcesOf, together } from './sources';
+
+const setUp = newWall('Landing');
+const measured = { ...setUp, camera: { ...setUp.camera, uncertainty: { hfovRad: 0.0367, pitchRad: 0.005, positionMm: 2 } } };
+const sourceOf = (key: string) => sourcesOf(measured).find((source) => source.key === key)!;
+
+describe('what uncertainties mean', () => {
+  it('is said in plain words: 0.0367 rad is 2.1 degrees (computed)', () => {
+    expect(meansWords(measured, sourceOf('field'))).toMatch(/^±2.1° of view: ±\d\.\d+ mm on the glass for a layer 100 mm behind, ±\d\.\d+ mm for one 500 mm behind\.$/);
+  });
+
+  it('says so of what nobody measured', () => {
+    expect(meansWords(setUp, sourcesOf(setUp)[3])).toMatch(/^Not measured. Taken as ±5° of view: /);
+  });
+
+  it('moves a layer by d/(z + d) for each mm of the lens (by hand: two axes of 2 mm, z = 2200; distance adds little)', () => {
+    const [near] = errorsOf(measured, sourceOf('position').unsure)!;
+    const sideways = (2 * Math.SQRT2 * 100) / 2300;
+    expect(near).toBeGreaterThan(sideways);
+    expect(near).toBeLessThan(sideways * 1.1);
+  });
+
+  it('adds up in squares', () => {
+    const sources = sourcesOf(measured);
+    const each = sources.map((source) => errorsOf(measured, source.unsure)![1]);
+    const [, all] = errorsOf(measured, together(sources))!;
+    expect(all).toBeLessThanOrEqual(Math.hypot(...each) + 1e-9);
+    expect(all).toBeGreaterThan(Math.max(...each));
+    expect(exampleDepths).toHaveLength(2);
+  });
+
+  it('asks to turn a camera that looks away', () => {
+    const away = { ...measured, camera: { ...measured.camera, yawRad: 3 } };
+    expect(meansWords(away, sourceOf('field'))).toContain('turn it there');
+  });
+});

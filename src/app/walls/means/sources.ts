@@ -1,0 +1,71 @@
+import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import { CERTAIN, type SetUpUncertainty, glassErrorMm, middleOf } from '@oriel/shared/viewer/measuring/glass-error';
+import { GeometryError } from '@oriel/shared/projection/geometry-error';
+import { plainMm } from '../../figures/words';
+import { degrees } from '../../screen/screen-measure';
+import { cameraOf } from '../room/wall-room';
+
+/** One figure of a set-up that is not certain. */
+export interface Source {
+  readonly key: 'glass' | 'position' | 'tilt' | 'field' | 'viewer';
+  readonly name: string;
+  /** Its standard uncertainty in words, "±2.1° of view". */
+  readonly words: string;
+  /** Whether nobody measured it, and the uncertainty is what is usual of such guesses. */
+  readonly assumed: boolean;
+  readonly unsure: SetUpUncertainty;
+}
+
+/** What a figure is taken to be wrong by until it is measured (practice): a sold size, a guess by eye, a maker's field of view. */
+const unmeasured = { glassScale: 0.01, positionMm: 10, tiltRad: (2 * Math.PI) / 180, hfovRad: (5 * Math.PI) / 180 } as const;
+
+/** The depths for which it is said what an uncertainty means, mm. */
+export const exampleDepths = [100, 500] as const;
+
+export function sourcesOf({ glass, camera, tuning }: WallSetUp): Source[] {
+  const { uncertainty } = camera;
+  const scale = glass.uncertainty ?? unmeasured.glassScale;
+  const place = uncertainty.positionMm ?? unmeasured.positionMm;
+  const tilt = uncertainty.pitchRad ?? unmeasured.tiltRad;
+  const field = uncertainty.hfovRad ?? unmeasured.hfovRad;
+  const viewer = tuning.ipdMm.uncertainty / tuning.ipdMm.value;
+  return [
+    { key: 'glass', name: 'Glass', words: `±${plainMm(scale * 100, 2)} % of its width`, assumed: glass.uncertainty === null, unsure: { ...CERTAIN, glassScale: scale } },
+    { key: 'position', name: 'Place of the lens', words: `±${plainMm(place)} mm of the lens`, assumed: uncertainty.positionMm === null, unsure: { ...CERTAIN, positionMm: place } },
+    { key: 'tilt', name: 'Turn', words: `±${plainMm(degrees(tilt), 2)}° of turn`, assumed: uncertainty.pitchRad === null, unsure: { ...CERTAIN, tiltRad: tilt } },
+    { key: 'field', name: 'Field of view', words: `±${plainMm(degrees(field), 2)}° of view`, assumed: uncertainty.hfovRad === null, unsure: { ...CERTAIN, hfovRad: field } },
+    { key: 'viewer', name: 'Viewer', words: `±${plainMm(viewer * 100)} % of distance`, assumed: false, unsure: { ...CERTAIN, viewerScale: viewer } },
+  ];
+}
+
+/** All of them at once. */
+export const together = (sources: readonly Source[]): SetUpUncertainty =>
+  sources.reduce<SetUpUncertainty>(
+    (all, { unsure }) => ({
+      hfovRad: all.hfovRad + unsure.hfovRad,
+      tiltRad: all.tiltRad + unsure.tiltRad,
+      positionMm: all.positionMm + unsure.positionMm,
+      viewerScale: all.viewerScale + unsure.viewerScale,
+      glassScale: all.glassScale + unsure.glassScale,
+    }),
+    CERTAIN,
+  );
+
+/** mm on the glass for each example depth, seen from the middle of the zone; null where the camera does not see it or the set-up is impossible. */
+export function errorsOf({ glass, camera, zone }: WallSetUp, unsure: SetUpUncertainty): number[] | null {
+  try {
+    return exampleDepths.map((depthMm) => glassErrorMm(glass, cameraOf(camera), unsure, depthMm, middleOf(zone)));
+  } catch (cause) {
+    if (cause instanceof GeometryError) return null;
+    throw cause;
+  }
+}
+
+/** "±2.1° of view: ±0.4 mm on the glass for a layer 100 mm behind, ±1.7 mm for one 500 mm behind." */
+export function meansWords(setUp: WallSetUp, { words, unsure, assumed }: Source): string {
+  const errors = errorsOf(setUp, unsure);
+  if (!errors) return 'The camera does not see the middle of the viewing zone: turn it there, or move the zone.';
+  const [near, far] = errors.map((error) => plainMm(error, error < 0.1 ? 2 : 1));
+  const means = `±${near} mm on the glass for a layer ${exampleDepths[0]} mm behind, ±${far} mm for one ${exampleDepths[1]} mm behind`;
+  return assumed ? `Not measured. Taken as ${words}: ${means}.` : `${words}: ${means}.`;
+}

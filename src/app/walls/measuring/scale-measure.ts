@@ -1,0 +1,88 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { TrackerTuning } from '@oriel/shared/contracts/walls';
+import { factorFromSpot } from '@oriel/shared/viewer/measuring/scale-from-spot';
+import { type Measured, measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
+import { plainMm } from '../../figures/words';
+import { FaceTracking } from '../../tracking/face-tracking';
+import { limitsOf } from '../set-up/limits';
+import { WallKeeper } from '../set-up/wall-keeper';
+import { MarkedSpot } from './marked-spot';
+import { SpotFields } from './spot-fields';
+import { Standing } from './standing';
+
+const factorLimits = limitsOf(TrackerTuning.shape.scaleFactor);
+
+/** A viewer's own scale from standing at the marked spot. Only with the wall's own camera on this computer. */
+@Component({
+  selector: 'oriel-scale-measure',
+  imports: [MatButton, SpotFields],
+  providers: [FaceTracking, Standing],
+  template: `
+    <oriel-spot-fields />
+    <p class="marginal">Measure the camera first: its field of view counts here as it is. Pictures are looked at on this page only, and not kept.</p>
+    <div class="row">
+      @if (standing.busy()) {
+        <button matButton="outlined" type="button" (click)="standing.stop()">Stop</button>
+      } @else {
+        <button matButton="outlined" type="button" (click)="measure()">Start, and walk to the spot</button>
+      }
+    </div>
+    <p class="live" role="status">
+      @if (standing.seconds(); as seconds) {
+        <span class="count figures" aria-hidden="true">{{ seconds }}</span>
+      }
+      {{ standing.words() }}
+    </p>
+    @if (factor(); as k) {
+      <p class="result figures" role="status">{{ words() }}</p>
+      @if (possible()) {
+        <button matButton="filled" type="button" (click)="take(k)">Take it</button>
+      } @else {
+        <p class="problem" role="alert">That is no head’s scale. Check the spot, the field of view and the distance between the eyes.</p>
+      }
+    }
+  `,
+  styleUrl: './measure.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ScaleMeasure {
+  private readonly keeper = inject(WallKeeper);
+  private readonly spot = inject(MarkedSpot);
+  protected readonly standing = inject(Standing);
+  /** Ranges from the lens to the eye as they were seen, mm, and with which factor. */
+  private readonly seen = signal<{ ranges: readonly number[]; factor: number } | null>(null);
+
+  protected readonly factor = computed<Measured | null>(() => {
+    const seen = this.seen();
+    if (!seen) return null;
+    const { position, uncertainty } = this.keeper.setUp()!.camera;
+    const u = uncertainty.positionMm ?? 0;
+    const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
+    return factorFromSpot(seen.factor, steadyMeanOf(seen.ranges), lens, this.spot.measured());
+  });
+  protected readonly possible = computed(() => {
+    const value = this.factor()?.value ?? 0;
+    return value >= factorLimits.least && value <= factorLimits.most;
+  });
+  protected readonly words = computed(() => {
+    const k = this.factor();
+    return k ? `Factor ${plainMm(k.value, 3)} ± ${plainMm(k.uncertainty, 3)}: distances are then right to ±${plainMm((100 * k.uncertainty) / k.value)} %.` : '';
+  });
+
+  protected async measure(): Promise<void> {
+    const { camera, tuning } = this.keeper.setUp()!;
+    const { position } = camera;
+    const factor = tuning.scaleFactor;
+    this.seen.set(null);
+    const eyes = await this.standing.read({ camera, viewer: { eyeDistanceMm: tuning.ipdMm.value, distanceFactor: factor } });
+    if (eyes) this.seen.set({ ranges: eyes.map(({ x, y, z }) => Math.hypot(x - position.x, y - position.y, z - position.z)), factor });
+  }
+
+  /** The factor makes up for the distance between the eyes, so that only its own uncertainty is left. */
+  protected take({ value, uncertainty }: Measured): void {
+    const { ipdMm } = this.keeper.setUp()!.tuning;
+    this.keeper.tuning({ scaleFactor: value, ipdMm: { value: ipdMm.value, uncertainty: (ipdMm.value * uncertainty) / value } });
+    this.seen.set(null);
+  }
+}

@@ -1,0 +1,75 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { GeometryError } from '@oriel/shared/projection/geometry-error';
+import type { Point3 } from '@oriel/shared/projection/types';
+import { type Tilt, tiltFromSpot } from '@oriel/shared/viewer/measuring/tilt-from-spot';
+import { measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
+import { plainMm } from '../../figures/words';
+import { degrees } from '../../screen/screen-measure';
+import { FaceTracking } from '../../tracking/face-tracking';
+import { WallKeeper } from '../set-up/wall-keeper';
+import { MarkedSpot } from './marked-spot';
+import { SpotFields } from './spot-fields';
+import { Standing } from './standing';
+
+/** A lens whose place nobody measured is taken to be known to this, mm (practice). */
+const unmeasuredPlaceMm = 10;
+
+/** The camera's pitch and yaw from someone standing at the marked spot. Only with the wall's own camera on this computer. */
+@Component({
+  selector: 'oriel-tilt-measure',
+  imports: [MatButton, SpotFields],
+  providers: [FaceTracking, Standing],
+  templateUrl: './tilt-measure.html',
+  styleUrl: './measure.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class TiltMeasure {
+  private readonly keeper = inject(WallKeeper);
+  private readonly spot = inject(MarkedSpot);
+  protected readonly standing = inject(Standing);
+  private readonly readings = signal<readonly Point3[] | null>(null);
+
+  private readonly found = computed<{ tilt: Tilt | null; problem: string } | null>(() => {
+    const readings = this.readings();
+    if (!readings) return null;
+    const { position, uncertainty } = this.keeper.setUp()!.camera;
+    const u = uncertainty.positionMm ?? unmeasuredPlaceMm;
+    const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
+    const axis = (of: (point: Point3) => number) => steadyMeanOf(readings.map(of));
+    try {
+      return { tilt: tiltFromSpot(lens, this.spot.measured(), { x: axis(({ x }) => x), y: axis(({ y }) => y), z: axis(({ z }) => z) }), problem: '' };
+    } catch (cause) {
+      if (cause instanceof GeometryError) return { tilt: null, problem: cause.message };
+      throw cause;
+    }
+  });
+  protected readonly problem = computed(() => this.found()?.problem ?? '');
+  protected readonly tilt = computed(() => this.found()?.tilt ?? null);
+  protected readonly words = computed(() => {
+    const tilt = this.tilt();
+    if (!tilt) return '';
+    const said = (rad: number, positive: string, negative: string) => `${plainMm(Math.abs(degrees(rad)))}° ${rad >= 0 ? positive : negative}`;
+    const { pitchRad, yawRad } = tilt;
+    return `Turned ${said(pitchRad.value, 'up', 'down')} (±${plainMm(degrees(pitchRad.uncertainty), 2)}°) and ${said(yawRad.value, 'to the right', 'to the left')} (±${plainMm(degrees(yawRad.uncertainty), 2)}°).`;
+  });
+
+  protected async measure(): Promise<void> {
+    const { camera, tuning } = this.keeper.setUp()!;
+    const untilted = { position: { x: 0, y: 0, z: 0 }, pitchRad: 0, yawRad: 0, rollRad: camera.rollRad, hfovRad: camera.hfovRad, mirrored: camera.mirrored };
+    this.readings.set(null);
+    this.readings.set(await this.standing.read({ camera: untilted, viewer: { eyeDistanceMm: tuning.ipdMm.value, distanceFactor: tuning.scaleFactor } }));
+  }
+
+  protected take(): void {
+    const tilt = this.tilt();
+    if (!tilt) return;
+    const { uncertainty } = this.keeper.setUp()!.camera;
+    this.keeper.camera({
+      pitchRad: tilt.pitchRad.value,
+      yawRad: tilt.yawRad.value,
+      uncertainty: { ...uncertainty, pitchRad: Math.max(tilt.pitchRad.uncertainty, tilt.yawRad.uncertainty) },
+    });
+    this.readings.set(null);
+  }
+}

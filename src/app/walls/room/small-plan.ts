@@ -1,0 +1,49 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import { coneOf, roomExtents } from './wall-room';
+
+/** A wall from above, to scale: the glass, what its camera sees, the viewing zone. */
+@Component({
+  selector: 'oriel-small-plan',
+  template: `
+    @let it = drawn();
+    <svg [attr.viewBox]="it.box" role="img" [attr.aria-label]="'Plan of ' + setUp().name + ', from above, to scale'">
+      <rect class="zone" [attr.x]="it.zone.x" [attr.y]="it.zone.y" [attr.width]="it.zone.width" [attr.height]="it.zone.height" />
+      <path class="cone" [attr.d]="it.cone" />
+      <path class="reach" [attr.d]="it.ticks" />
+      <line class="glass" [attr.x1]="-it.half" [attr.x2]="it.half" y1="0" y2="0" />
+      <circle class="lens" [attr.cx]="it.lens.x" [attr.cy]="it.lens.z" [attr.r]="it.unit * 1.5" />
+    </svg>
+  `,
+  styles: `
+    :host, svg { display: block; width: 100%; height: 100%; }
+    line, path, circle { vector-effect: non-scaling-stroke; fill: none; }
+    .zone { fill: var(--zone); }
+    .cone { stroke: var(--brass-line); stroke-dasharray: 5 4; }
+    .reach { stroke: var(--line); }
+    .glass { stroke: var(--ink); stroke-width: 3.4px; }
+    .lens { fill: var(--ink); }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class SmallPlan {
+  readonly setUp = input.required<WallSetUp>();
+
+  /** x to the viewer's right, y into the room, mm. */
+  protected readonly drawn = computed(() => {
+    const { glass, camera, zone } = this.setUp();
+    const { left, right, before } = roomExtents(glass, camera.position, zone, null);
+    const unit = before / 100;
+    const ends = coneOf('plan', camera, before).map(([lens, end]) => `M${lens.across},${lens.z}L${end.across},${end.z}`);
+    const metres = Array.from({ length: Math.floor(before / 1000) }, (_, i) => `M${right - 3 * unit},${(i + 1) * 1000}h${3 * unit}`);
+    return {
+      box: `${left} ${-4 * unit} ${right - left} ${before + 4 * unit}`,
+      zone: { x: zone.leftMm, y: zone.nearestMm, width: Math.max(zone.rightMm - zone.leftMm, 0), height: Math.max(zone.farthestMm - zone.nearestMm, 0) },
+      cone: ends.join(''),
+      ticks: metres.join(''),
+      half: glass.widthMm / 2,
+      lens: camera.position,
+      unit,
+    };
+  });
+}

@@ -1,0 +1,97 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
+import { MatCheckbox } from '@angular/material/checkbox';
+import { WallCamera } from '@oriel/shared/contracts/walls';
+import type { Point3 } from '@oriel/shared/projection/types';
+import { acrossFromDiagonal } from '@oriel/shared/viewer/field-of-view';
+import { FigureField } from '../../figures/figure-field';
+import { degrees, radians } from '../../screen/screen-measure';
+import { Means } from '../means/means';
+import { BoardMeasure } from '../measuring/board-measure';
+import { CardMeasure } from '../measuring/card-measure';
+import { TiltMeasure } from '../measuring/tilt-measure';
+import { degreeLimitsOf, limitsOf } from './limits';
+import { WallKeeper } from './wall-keeper';
+
+type Side = 'above' | 'below' | 'left' | 'right' | 'anywhere';
+
+/** From the edge of the glass to a lens in or on its frame, mm, until one measures (practice). */
+const fromEdgeMm = 15;
+const shape = WallCamera.shape;
+
+/** The second step: where the camera is, how it is turned, how much it sees. */
+@Component({
+  selector: 'oriel-wall-camera-step',
+  imports: [MatButton, MatButtonToggle, MatButtonToggleGroup, MatCheckbox, FigureField, Means, CardMeasure, BoardMeasure, TiltMeasure],
+  templateUrl: './camera-step.html',
+  styleUrl: './step.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CameraStep {
+  protected readonly keeper = inject(WallKeeper);
+  protected readonly measuring = signal<'card' | 'board' | 'tilt' | null>(null);
+  protected readonly sides: readonly { side: Side; word: string }[] = [
+    { side: 'above', word: 'Above' },
+    { side: 'below', word: 'Below' },
+    { side: 'left', word: 'Left' },
+    { side: 'right', word: 'Right' },
+    { side: 'anywhere', word: 'Anywhere' },
+  ];
+  protected readonly place = limitsOf(shape.position.shape.x);
+  protected readonly turn = degreeLimitsOf(shape.pitchRad);
+  protected readonly field = degreeLimitsOf(shape.hfovRad);
+  protected readonly degrees = degrees;
+  protected readonly radians = radians;
+
+  protected readonly camera = computed(() => this.keeper.setUp()!.camera);
+  private readonly glass = computed(() => this.keeper.setUp()!.glass);
+  /** The middle of which edge the lens stands outside of. */
+  protected readonly side = computed<Side>(() => {
+    const { x, y } = this.camera().position;
+    const { widthMm, heightMm } = this.glass();
+    if (x === 0 && Math.abs(y) > heightMm / 2) return y > 0 ? 'above' : 'below';
+    if (y === 0 && Math.abs(x) > widthMm / 2) return x > 0 ? 'right' : 'left';
+    return 'anywhere';
+  });
+  protected readonly beyond = computed(() => {
+    const { x, y } = this.camera().position;
+    const { widthMm, heightMm } = this.glass();
+    return Math.max(Math.abs(x) - widthMm / 2, Math.abs(y) - heightMm / 2);
+  });
+  /** As makers print it, across the diagonal of 16:9. */
+  protected readonly diagonal = computed(() => {
+    const half = Math.tan(this.camera().hfovRad / 2);
+    return degrees(2 * Math.atan((half * Math.hypot(16, 9)) / 16));
+  });
+
+  protected toSide(side: Side, offset = fromEdgeMm): void {
+    const { widthMm, heightMm } = this.glass();
+    const z = this.camera().position.z;
+    const at: Readonly<Record<Side, Point3>> = {
+      above: { x: 0, y: heightMm / 2 + offset, z },
+      below: { x: 0, y: -heightMm / 2 - offset, z },
+      left: { x: -widthMm / 2 - offset, y: 0, z },
+      right: { x: widthMm / 2 + offset, y: 0, z },
+      anywhere: this.camera().position,
+    };
+    this.keeper.camera({ position: at[side] });
+  }
+
+  protected move(part: Partial<Point3>): void {
+    this.keeper.camera({ position: { ...this.camera().position, ...part } });
+  }
+
+  protected byDiagonal(diagonalDegrees: number): void {
+    this.seeAcross(acrossFromDiagonal(radians(diagonalDegrees), 16, 9));
+  }
+
+  /** A typed field of view is no longer the measured one. */
+  protected seeAcross(hfovRad: number): void {
+    this.keeper.camera({ hfovRad, uncertainty: { ...this.camera().uncertainty, hfovRad: null } });
+  }
+
+  protected show(which: 'card' | 'board' | 'tilt'): void {
+    this.measuring.update((shown) => (shown === which ? null : which));
+  }
+}

@@ -1,0 +1,81 @@
+import { ChangeDetectionStrategy, Component, DOCUMENT, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
+import { WallGlass } from '@oriel/shared/contracts/walls';
+import { FigureField } from '../../figures/figure-field';
+import { CardOutline } from '../../screen/card-outline';
+import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-measure';
+import { ID1_WIDTH } from '@oriel/shared/viewer/measuring/two-distances';
+import { Means } from '../means/means';
+import { limitsOf } from './limits';
+import { WallKeeper } from './wall-keeper';
+
+type Way = 'rule' | 'diagonal' | 'card';
+type Unit = 'in' | 'cm';
+
+const unitMm: Readonly<Record<Unit, number>> = { in: mmPerInch, cm: 10 };
+/** How well each way measures a width until one says otherwise (practice): a rule's reading, a maker's rounding to half an inch, the edge of a card in px. */
+const usual = { ruleMm: 1, diagonalShare: 0.006, cardPx: 0.7 } as const;
+const { widthMm, heightMm, widthPx, heightPx } = WallGlass.shape;
+
+/** The first step: how large the glass is, and how sure that is. */
+@Component({
+  selector: 'oriel-wall-glass-step',
+  imports: [MatButton, MatButtonToggle, MatButtonToggleGroup, FigureField, CardOutline, Means],
+  templateUrl: './glass-step.html',
+  styleUrl: './step.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class GlassStep {
+  protected readonly keeper = inject(WallKeeper);
+  private readonly window = inject(DOCUMENT).defaultView!;
+  protected readonly way = signal<Way>('rule');
+  protected readonly unit = signal<Unit>('in');
+  protected readonly mm = limitsOf(widthMm);
+  protected readonly highMm = limitsOf(heightMm);
+  protected readonly px = { least: 1, most: limitsOf(widthPx).most };
+  protected readonly highPx = { least: 1, most: limitsOf(heightPx).most };
+
+  protected readonly glass = computed(() => this.keeper.setUp()!.glass);
+  protected readonly diagonal = computed(() => diagonalOf(this.glass()) / unitMm[this.unit()]);
+  protected readonly sureMm = computed(() => (this.glass().uncertainty ?? 0) * this.glass().widthMm);
+  protected readonly pxMm = computed(() => this.glass().widthMm / this.window.screen.width);
+  /** px of the picture are not square where sides and px disagree by more than a screen's rounding. */
+  protected readonly oddPx = computed(() => {
+    const { widthMm: w, heightMm: h, widthPx: pw, heightPx: ph } = this.glass();
+    return Math.abs((w / pw) / (h / ph) - 1) > 0.02;
+  });
+
+  protected byRule(part: Partial<WallGlass>): void {
+    const uncertainty = this.glass().uncertainty ?? usual.ruleMm / this.glass().widthMm;
+    this.keeper.glass({ ...part, uncertainty });
+  }
+
+  protected byDiagonal(length: number): void {
+    const { widthPx: w, heightPx: h } = this.glass();
+    this.keeper.glass({ ...glassFromDiagonal(length * unitMm[this.unit()], w, h), uncertainty: usual.diagonalShare });
+  }
+
+  /** The page runs on the wall's own screen: a px of the page is one of the glass. */
+  protected byCard(pxMm: number): void {
+    const { screen, devicePixelRatio } = this.window;
+    this.keeper.glass({
+      widthMm: screen.width * pxMm,
+      heightMm: screen.height * pxMm,
+      widthPx: Math.round(screen.width * devicePixelRatio),
+      heightPx: Math.round(screen.height * devicePixelRatio),
+      uncertainty: Math.hypot(ID1_WIDTH.uncertainty, usual.cardPx * pxMm) / ID1_WIDTH.value,
+    });
+  }
+
+  protected readonly round = Math.round;
+
+  protected sure(mm: number): void {
+    this.keeper.glass({ uncertainty: mm / this.glass().widthMm });
+  }
+
+  protected turn(): void {
+    const { widthMm: w, heightMm: h, widthPx: pw, heightPx: ph } = this.glass();
+    this.keeper.glass({ widthMm: h, heightMm: w, widthPx: ph, heightPx: pw });
+  }
+}

@@ -1,0 +1,51 @@
+import { type Wall, silentAfterMs } from '@oriel/shared/contracts/walls';
+import { clockTime, sayMoment } from '../core/moments';
+
+/** A wall's state in words, and whether all is well, something is amiss, or it simply is not running yet. */
+export interface WallState {
+  readonly tone: 'well' | 'amiss' | 'idle';
+  readonly words: string;
+}
+
+const minuteMs = 60_000;
+const plural = (count: number, one: string) => `${count} ${one}${count === 1 ? '' : 's'}`;
+
+/** A span of time in its largest whole unit: "3 hours". */
+export function sayLong(ms: number): string {
+  const minutes = Math.floor(ms / minuteMs);
+  if (minutes < 1) return plural(Math.floor(ms / 1000), 'second');
+  if (minutes < 60) return plural(minutes, 'minute');
+  if (minutes < 24 * 60) return plural(Math.floor(minutes / 60), 'hour');
+  return plural(Math.floor(minutes / (24 * 60)), 'day');
+}
+
+/** What a wall does now. `sceneName` is that of the scene it is to show; null where none is chosen or it is gone. */
+export function stateOf(wall: Wall, sceneName: string | null, now: Date): WallState {
+  const heard = wall.heardAt === null ? null : new Date(wall.heardAt);
+  if (wall.pairedAt === null) {
+    return { tone: 'idle', words: heard ? `No screen is paired; one was last heard ${sayMoment(heard, now)}` : 'Never paired' };
+  }
+  if (!heard) return { tone: 'idle', words: 'Paired; its screen has not reported yet' };
+  const silentMs = now.getTime() - heard.getTime();
+  if (silentMs > silentAfterMs) {
+    const last = heard.toDateString() === now.toDateString() ? clockTime(heard) : sayMoment(heard, now);
+    return { tone: 'amiss', words: `Silent for ${sayLong(silentMs)} (last heard ${last})` };
+  }
+  if (!sceneName) return { tone: 'idle', words: 'Running, with nothing to show: choose a scene' };
+  const { report } = wall;
+  if (!report) return { tone: 'well', words: `Showing ${sceneName}` };
+  return {
+    tone: 'well',
+    words: `Showing ${sceneName}, ${plural(Math.round(report.trackedPerS), 'face')} a second, ${plural(Math.round(report.framesPerS), 'frame')}`,
+  };
+}
+
+/** What else its newest report tells, a line each: how it follows, how late, how warm, what went wrong. */
+export function reportLines({ report }: Wall): string[] {
+  if (!report) return [];
+  const late = report.latencyMs === null ? '' : `, ${Math.round(report.latencyMs)} ms behind`;
+  return [
+    `${report.tracking}: ${report.ladderWords || `step ${report.ladderStep} of the ladder`}${late}`,
+    ...(report.temperatureC === null ? [] : [`${Math.round(report.temperatureC)} °C inside`]),
+  ];
+}
