@@ -87,9 +87,10 @@ export function kioskSteps({ origin, upright }: KioskFacts): KioskStep[] {
       blocks: [
         commands(`sudo apt update
 sudo apt install --no-install-recommends \\
-  cage chromium chromium-sandbox fonts-noto-core libpam-systemd v4l-utils${secure ? ' libnss3-tools' : ''}
+  cage chromium chromium-sandbox libgl1-mesa-dri fonts-noto-core libpam-systemd v4l-utils${secure ? ' libnss3-tools' : ''}
 sudo adduser --disabled-password --gecos "" wall
-sudo usermod -aG video,render,input wall`),
+sudo usermod -aG video,render,input wall
+sudo mkdir -p /etc/chromium/policies/managed /etc/systemd/system.conf.d`),
       ],
     },
     {

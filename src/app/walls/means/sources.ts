@@ -17,7 +17,7 @@ export interface Source {
 }
 
 /** What a figure is taken to be wrong by until it is measured (practice): a sold size, a guess by eye, a maker's field of view. */
-const unmeasured = { glassScale: 0.01, positionMm: 10, tiltRad: (2 * Math.PI) / 180, hfovRad: (5 * Math.PI) / 180 } as const;
+export const unmeasured = { glassScale: 0.01, positionMm: 10, tiltRad: (2 * Math.PI) / 180, hfovRad: (5 * Math.PI) / 180 } as const;
 
 /** The depths for which it is said what an uncertainty means, mm. */
 export const exampleDepths = [100, 500] as const;
@@ -61,11 +61,14 @@ export function errorsOf({ glass, camera, zone }: WallSetUp, unsure: SetUpUncert
   }
 }
 
+/** A length on the glass: to a tenth of a mm, below that to a hundredth. */
+export const sayError = (mm: number): string => mm.toFixed(mm < 0.095 ? 2 : 1);
+
 /** "±2.1° of view: ±0.4 mm on the glass for a layer 100 mm behind, ±1.7 mm for one 500 mm behind." */
 export function meansWords(setUp: WallSetUp, { words, unsure, assumed }: Source): string {
   const errors = errorsOf(setUp, unsure);
   if (!errors) return 'The camera does not see the middle of the viewing zone: turn it there, or move the zone.';
-  const [near, far] = errors.map((error) => plainMm(error, error < 0.1 ? 2 : 1));
+  const [near, far] = errors.map(sayError);
   const means = `±${near} mm on the glass for a layer ${exampleDepths[0]} mm behind, ±${far} mm for one ${exampleDepths[1]} mm behind`;
   return assumed ? `Not measured. Taken as ${words}: ${means}.` : `${words}: ${means}.`;
 }

@@ -1,7 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
-import { plainMm } from '../../figures/words';
-import { errorsOf, exampleDepths, sourcesOf, together } from './sources';
+import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './sources';
 
 /** The title block of a wall's drawing: what is not certain about it, and what each uncertainty means on the glass. */
 @Component({
@@ -24,7 +23,7 @@ import { errorsOf, exampleDepths, sourcesOf, together } from './sources';
         <tbody>
           @for (row of rows(); track row.key) {
             <tr [class.assumed]="row.assumed">
-              <th scope="row">{{ row.words }}{{ row.assumed ? ', not measured' : '' }}</th>
+              <th scope="row">{{ row.words }}{{ row.assumed ? ', assumed' : '' }}</th>
               @for (error of row.errors; track $index) {
                 <td>{{ error }}</td>
               }
@@ -62,4 +61,4 @@ export class UncertaintyBlock {
   protected readonly blind = computed(() => this.sum() === null);
 }
 
-const said = (errors: readonly number[] | null) => (errors ?? exampleDepths.map(() => null)).map((error) => (error === null ? '–' : `±${plainMm(error, error < 0.1 ? 2 : 1)}`));
+const said = (errors: readonly number[] | null) => (errors ?? exampleDepths.map(() => null)).map((error) => (error === null ? '–' : `±${sayError(error)}`));

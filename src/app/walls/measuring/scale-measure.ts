@@ -5,6 +5,7 @@ import { factorFromSpot } from '@oriel/shared/viewer/measuring/scale-from-spot';
 import { type Measured, measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
 import { plainMm } from '../../figures/words';
 import { FaceTracking } from '../../tracking/face-tracking';
+import { unmeasured } from '../means/sources';
 import { limitsOf } from '../set-up/limits';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
@@ -57,7 +58,7 @@ export class ScaleMeasure {
     const seen = this.seen();
     if (!seen) return null;
     const { position, uncertainty } = this.keeper.setUp()!.camera;
-    const u = uncertainty.positionMm ?? 0;
+    const u = uncertainty.positionMm ?? unmeasured.positionMm;
     const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
     return factorFromSpot(seen.factor, steadyMeanOf(seen.ranges), lens, this.spot.measured());
   });

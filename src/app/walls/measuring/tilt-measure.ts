@@ -7,13 +7,11 @@ import { measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertain
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { FaceTracking } from '../../tracking/face-tracking';
+import { unmeasured } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
-
-/** A lens whose place nobody measured is taken to be known to this, mm (practice). */
-const unmeasuredPlaceMm = 10;
 
 /** The camera's pitch and yaw from someone standing at the marked spot. Only with the wall's own camera on this computer. */
 @Component({
@@ -34,7 +32,7 @@ export class TiltMeasure {
     const readings = this.readings();
     if (!readings) return null;
     const { position, uncertainty } = this.keeper.setUp()!.camera;
-    const u = uncertainty.positionMm ?? unmeasuredPlaceMm;
+    const u = uncertainty.positionMm ?? unmeasured.positionMm;
     const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
     const axis = (of: (point: Point3) => number) => steadyMeanOf(readings.map(of));
     try {

@@ -2,7 +2,7 @@ import type { WallSetUp } from '@oriel/shared/contracts/walls';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { acrossOf, glassAcross, sidesOf } from '../../drawing/across';
 import { roundStep } from '../../drawing/depth-scale';
-import { type DepthFrame, type ElevationFrame, boxOf } from '../../drawing/frames';
+import { type DepthFrame, type ElevationFrame, type Frame, boxOf } from '../../drawing/frames';
 import { depthRangeOf, drawnAt, drawnOnGlass } from '../../drawing/placing';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
@@ -11,7 +11,7 @@ import { coneOf } from './wall-room';
 const leastTickPx = 54;
 
 /** A view of the wall in which distance is seen, as lines and places on the paper. */
-export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, spot: Point3 | null) {
+export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, spot: Point3 | null, clip: Frame) {
   const { beforeMm } = depthRangeOf(frame);
   const { low, high } = sidesOf(frame.view);
   const [from, to] = glassAcross(frame.view, glass).map((across) => drawnAt(frame, { across, z: 0 }));
@@ -19,6 +19,7 @@ export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, 
   const plan = frame.view === 'plan';
   return {
     frame,
+    clip,
     plan,
     title: plan ? 'Plan' : 'Section',
     glass: { from, to },
@@ -26,7 +27,7 @@ export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, 
     zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
     cone: coneOf(frame.view, camera, beforeMm).map(([lens, end]) => ({ from: drawnAt(frame, lens), to: drawnAt(frame, end) })),
     lens: drawnAt(frame, { across: acrossOf(frame.view, camera.position), z: camera.position.z }),
-    cameraText: plan ? `camera, ${plainMm(degrees(camera.hfovRad))}° across` : turnWords(camera.pitchRad, 'up', 'down'),
+    cameraText: plan ? `camera, ${plainMm(degrees(camera.hfovRad))}° across` : `camera ${turnWords(camera.pitchRad, 'up', 'down')}`,
     ticks: Array.from({ length: Math.floor(beforeMm / step) }, (_, i) => ({ text: plainMm((i + 1) * step), at: drawnAt(frame, { across: 0, z: (i + 1) * step }) })),
     spot: spot && drawnAt(frame, { across: acrossOf(frame.view, spot), z: spot.z }),
   };

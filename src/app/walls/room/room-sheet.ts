@@ -3,12 +3,12 @@ import type { WallSetUp } from '@oriel/shared/contracts/walls';
 import type { Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { sidesOf } from '../../drawing/across';
 import { followPointer } from '../../drawing/follow-pointer';
-import type { DepthFrame } from '../../drawing/frames';
+import type { DepthFrame, Frame } from '../../drawing/frames';
 import { observedSize } from '../../drawing/observed-size';
 import { pointedAt } from '../../drawing/placing';
 import { zoneSideAt } from '../../drawing/zone-side';
 import { drawElevation, drawView } from './room-drawing';
-import { layOutRoom, stackRoom } from './room-layout';
+import { type RoomLayout, layOutRoom, stackRoom } from './room-layout';
 import { roomExtents } from './wall-room';
 
 const stackBelowPx = 560;
@@ -45,7 +45,7 @@ export class RoomSheet {
     return width < stackBelowPx ? stackRoom(Math.max(width, 200), extents) : layOutRoom({ width, height: Math.min(tallestPx, width * 0.86) }, extents);
   });
   protected readonly ready = computed(() => this.size().width > 0);
-  protected readonly views = computed(() => [this.layout().plan, this.layout().section].map((frame) => drawView(frame, this.setUp(), this.spot())));
+  protected readonly views = computed(() => [this.layout().plan, this.layout().section].map((frame) => drawView(frame, this.setUp(), this.spot(), clipOf(this.layout(), frame))));
   protected readonly elevation = computed(() => {
     const frame = this.layout().elevation;
     return frame && drawElevation(frame, this.setUp());
@@ -119,6 +119,14 @@ export class RoomSheet {
     const box = this.svg()!.nativeElement.getBoundingClientRect();
     return { x: event.clientX - box.left, y: event.clientY - box.top };
   }
+}
+
+/** What a view may draw on: its own frame, and where nothing else stands beside it. */
+function clipOf(layout: RoomLayout, frame: DepthFrame): Frame {
+  const right = layout.width - frame.left;
+  return frame.view === 'plan'
+    ? { left: 0, top: frame.top, width: layout.width, height: frame.height }
+    : { left: frame.left, top: frame.top - 6, width: right, height: frame.height + 12 };
 }
 
 interface Held {

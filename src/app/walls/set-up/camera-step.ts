@@ -8,6 +8,7 @@ import { acrossFromDiagonal } from '@oriel/shared/viewer/field-of-view';
 import { FigureField } from '../../figures/figure-field';
 import { degrees, radians } from '../../screen/screen-measure';
 import { Means } from '../means/means';
+import { unmeasured } from '../means/sources';
 import { BoardMeasure } from '../measuring/board-measure';
 import { CardMeasure } from '../measuring/card-measure';
 import { TiltMeasure } from '../measuring/tilt-measure';
@@ -41,6 +42,7 @@ export class CameraStep {
   protected readonly place = limitsOf(shape.position.shape.x);
   protected readonly turn = degreeLimitsOf(shape.pitchRad);
   protected readonly field = degreeLimitsOf(shape.hfovRad);
+  protected readonly unmeasured = unmeasured;
   protected readonly degrees = degrees;
   protected readonly radians = radians;
 

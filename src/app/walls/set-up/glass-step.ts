@@ -7,6 +7,7 @@ import { CardOutline } from '../../screen/card-outline';
 import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-measure';
 import { ID1_WIDTH } from '@oriel/shared/viewer/measuring/two-distances';
 import { Means } from '../means/means';
+import { unmeasured } from '../means/sources';
 import { limitsOf } from './limits';
 import { WallKeeper } from './wall-keeper';
 
@@ -38,7 +39,7 @@ export class GlassStep {
 
   protected readonly glass = computed(() => this.keeper.setUp()!.glass);
   protected readonly diagonal = computed(() => diagonalOf(this.glass()) / unitMm[this.unit()]);
-  protected readonly sureMm = computed(() => (this.glass().uncertainty ?? 0) * this.glass().widthMm);
+  protected readonly sureMm = computed(() => (this.glass().uncertainty ?? unmeasured.glassScale) * this.glass().widthMm);
   protected readonly pxMm = computed(() => this.glass().widthMm / this.window.screen.width);
   /** px of the picture are not square where sides and px disagree by more than a screen's rounding. */
   protected readonly oddPx = computed(() => {

@@ -12,9 +12,9 @@ import { WallKeeper } from './wall-keeper';
   selector: 'oriel-wall-scene-step',
   imports: [RouterLink, FailureNotice, SceneView],
   template: `
-    <oriel-failure-notice [failure]="loading.failure()" [retryable]="true" (retry)="load()" />
     <fieldset>
       <legend>What the wall shows</legend>
+      <oriel-failure-notice [failure]="loading.failure()" [retryable]="true" (retry)="load()" />
       @if (scenes(); as scenes) {
         @if (scenes.length === 0) {
           <p class="what">There is no scene yet. <a routerLink="/scenes">Compose one</a> first; everything else can be set up meanwhile.</p>
@@ -23,7 +23,9 @@ import { WallKeeper } from './wall-keeper';
           @for (scene of scenes; track scene.id) {
             <label [class.chosen]="scene.id === chosen()">
               <input type="radio" name="scene" [checked]="scene.id === chosen()" [disabled]="!keeper.mayTune()" (change)="choose(scene.id)" />
-              <oriel-scene-view [document]="scene.document" [label]="scene.document.name" [edge]="320" />
+              <span class="window" [class.upright]="scene.document.glass.heightMm > scene.document.glass.widthMm">
+                <oriel-scene-view [document]="scene.document" [label]="scene.document.name" [edge]="320" />
+              </span>
               <span>{{ scene.document.name }}</span>
             </label>
           }

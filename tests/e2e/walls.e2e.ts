@@ -1,0 +1,262 @@
+import type { Page } from '@playwright/test';
+import type { Wall } from '@oriel/shared/contracts/walls';
+import { expect, test } from './fixtures';
+
+/** Asks the server as the page itself would, forgery token and all. */
+async function ask<T>(page: Page, method: string, path: string, body?: unknown): Promise<T> {
+  return page.evaluate(
+    async ([way, address, text]) => {
+      const token = /XSRF-TOKEN=([^;]+)/.exec(document.cookie)?.[1] ?? '';
+      const headers = { 'content-type': 'application/json', 'x-xsrf-token': decodeURIComponent(token) };
+      const reply = await fetch(address, { method: way, headers, body: text });
+      if (!reply.ok) throw new Error(`${way} ${address}: ${reply.status} ${await reply.text()}`);
+      return (await reply.json()) as never;
+    },
+    [method, path, body === undefined ? undefined : JSON.stringify(body)] as const,
+  );
+}
+
+const read = async (page: Page, id: string) => (await ask<{ wall: Wall }>(page, 'GET', `/api/walls/${id}`)).wall;
+const idOf = (page: Page) => new URL(page.url()).pathname.split('/')[2];
+const saved = (page: Page) => page.getByTestId('save-state');
+const step = (page: Page, name: string) => page.getByRole('list', { name: 'Steps' }).getByRole('button', { name });
+const field = (page: Page, name: string | RegExp) => page.getByRole('spinbutton', { name });
+
+async function type(page: Page, name: string, text: string): Promise<void> {
+  await field(page, name).fill(text);
+  await field(page, name).press('Enter');
+}
+
+/** Hangs a wall of this test's own and opens its set-up. */
+async function hang(page: Page, name = `Landing ${Date.now()}`): Promise<string> {
+  await page.goto('/walls');
+  await page.getByRole('button', { name: 'New wall' }).click();
+  await page.getByLabel('Name of the wall').fill(name);
+  await page.getByRole('button', { name: 'Set it up' }).click();
+  await expect(page.getByLabel('Name of the wall')).toHaveValue(name);
+  return idOf(page);
+}
+
+async function removeWall(page: Page, id: string): Promise<void> {
+  await page.evaluate(async (path) => {
+    const token = /XSRF-TOKEN=([^;]+)/.exec(document.cookie)?.[1] ?? '';
+    await fetch(path, { method: 'DELETE', headers: { 'x-xsrf-token': decodeURIComponent(token) } });
+  }, `/api/walls/${id}`);
+}
+
+test('a tuner hangs a wall, and every figure typed is on the drawing and saved by itself', async ({ signedInPage }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await type(page, 'Width', '527,04 mm');
+  await type(page, 'Height', '296.46');
+  await type(page, 'The width is sure to within ±', '1');
+  await expect(page.getByTestId('Plan')).toHaveAccessibleName(/glass, 527 mm/);
+  await expect(page.getByText(/^±0.19 % of its width: ±/)).toBeVisible();
+
+  await step(page, 'Camera').click();
+  await page.getByRole('radio', { name: 'Below' }).click();
+  await type(page, 'As printed, across the diagonal of 16:9', '78');
+  await type(page, 'Up (down is negative)', '6');
+  await expect(page.getByTestId('Plan')).toHaveAccessibleName(/camera, 70.4° across/); // 78 diagonal is 70.43 across (computed)
+  await expect(page.getByTestId('Section')).toHaveAccessibleName(/6° up/);
+
+  await step(page, 'Room').click();
+  await type(page, 'Nearest', '900');
+  await expect(saved(page)).toContainText(/^Saved/);
+  await expect.poll(async () => (await read(page, id)).setUp.zone.nearestMm).toBe(900);
+  const { setUp } = await read(page, id);
+  expect(setUp.glass).toMatchObject({ widthMm: 527.04, heightMm: 296.46 });
+  expect(setUp.camera.position).toMatchObject({ x: 0, y: -(296.46 / 2 + 15) });
+  expect((setUp.camera.hfovRad * 180) / Math.PI).toBeCloseTo(70.43, 1);
+
+  await page.reload();
+  await expect(field(page, 'Nearest')).toHaveValue('900');
+  await removeWall(page, id);
+});
+
+test('the viewing zone is dragged on the drawing, and Escape puts it back', async ({ signedInPage }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await step(page, 'Room').click();
+  const side = async () => {
+    const box = (await page.getByTestId('Plan').locator('rect.zone').boundingBox())!;
+    return { x: box.x + box.width, y: box.y + box.height / 2 };
+  };
+  const before = Number(await field(page, 'Right end').getAttribute('aria-valuenow'));
+  const from = await side();
+  await page.mouse.move(from.x, from.y);
+  await page.mouse.down();
+  await page.mouse.move(from.x - 30, from.y, { steps: 6 });
+  await expect.poll(async () => Number(await field(page, 'Right end').getAttribute('aria-valuenow'))).toBeLessThan(before);
+  await page.keyboard.press('Escape');
+  await page.mouse.up();
+  await expect(field(page, 'Right end')).toHaveAttribute('aria-valuenow', String(before));
+
+  await page.mouse.move(from.x, from.y);
+  await page.mouse.down();
+  await page.mouse.move(from.x - 30, from.y, { steps: 6 });
+  await page.mouse.up();
+  const after = Number(await field(page, 'Right end').getAttribute('aria-valuenow'));
+  expect(after).toBeLessThan(before);
+  await expect.poll(async () => (await read(page, id)).setUp.zone.rightMm).toBe(after);
+  await removeWall(page, id);
+});
+
+test('a figure that cannot be stays with its reason, and nothing is saved over it', async ({ signedInPage }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await type(page, 'Width', 'wide');
+  await expect(page.getByText('Write a figure, such as 180')).toBeVisible();
+  await expect(field(page, 'Width')).toHaveValue('wide');
+  await field(page, 'Width').press('Escape');
+  await step(page, 'Room').click();
+  await type(page, 'Farthest', '500');
+  await expect(page.getByText('Farthest must not be nearer than nearest. Nothing is saved until then.')).toBeVisible();
+  await expect(saved(page)).toContainText('Not saved');
+  expect((await read(page, id)).setUp.zone.farthestMm).toBe(3200);
+  await type(page, 'Nearest', '400');
+  await expect.poll(async () => (await read(page, id)).setUp.zone.farthestMm).toBe(500);
+  await removeWall(page, id);
+});
+
+test('two people at one wall: the second is told and decides', async ({ signedInPage, expectErrors }) => {
+  expectErrors(/409/);
+  const [page, other] = [await signedInPage('tuner'), await signedInPage('owner')];
+  const id = await hang(page);
+  const theirs = await (async () => {
+    await other.goto('/walls');
+    return read(other, id);
+  })();
+  await ask(other, 'PUT', `/api/walls/${id}`, { revision: theirs.revision, setUp: { ...theirs.setUp, name: 'Theirs' } });
+  await type(page, 'Width', '600');
+  const notice = page.getByRole('alert').filter({ hasText: 'saved this wall' });
+  await expect(notice).toBeVisible();
+  expect((await read(page, id)).setUp.name).toBe('Theirs');
+  await notice.getByRole('button', { name: 'Save mine over theirs' }).click();
+  await expect(notice).toBeHidden();
+  expect((await read(page, id)).setUp.glass.widthMm).toBe(600);
+  await removeWall(page, id);
+});
+
+test('without a network the set-up is kept and saved when it is back', async ({ signedInPage, expectErrors }) => {
+  expectErrors(/ERR_INTERNET_DISCONNECTED/);
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await page.context().setOffline(true);
+  await type(page, 'Width', '601');
+  await expect(saved(page)).toContainText('no network');
+  await page.context().setOffline(false);
+  await expect.poll(async () => (await read(page, id)).setUp.glass.widthMm).toBe(601);
+  await expect(saved(page)).toContainText(/^Saved/);
+  await removeWall(page, id);
+});
+
+test('a screen is paired by its code, reports, falls silent in words, and is unpaired', async ({ signedInPage, browser, baseURL, expectErrors }) => {
+  expectErrors(/422/);
+  const page = await signedInPage('tuner');
+  const name = `Hall ${Date.now()}`;
+  const id = await hang(page, name);
+  await step(page, 'Scene').click();
+  await page.getByRole('radio', { name: /October on the ridge/ }).check();
+  await step(page, 'Pair').click();
+  await expect(page.getByText('No screen is paired.')).toBeVisible();
+  await page.getByLabel('Code on the screen').fill('2222');
+  await page.getByRole('button', { name: 'Pair', exact: true }).click();
+  await expect(page.getByText(/six letters and figures, as the screen shows them/)).toBeVisible();
+
+  const context = await browser.newContext({ baseURL });
+  const screen = await context.newPage();
+  await screen.goto('/sign-in');
+  const { code, claim } = await ask<{ code: string; claim: string }>(screen, 'POST', '/api/pairings', {});
+  await page.getByLabel('Code on the screen').fill(`${code.slice(0, 3)} ${code.slice(3).toLowerCase()}`);
+  await page.getByRole('button', { name: 'Pair', exact: true }).click();
+  await expect(page.getByText('The code is right.')).toBeVisible();
+  expect(await ask(screen, 'POST', '/api/pairings/claims', { claim })).toEqual({ state: 'paired' });
+  await expect(page.getByText(/^Paired at/)).toBeVisible();
+
+  const report = { at: new Date().toISOString(), framesPerS: 40.1, trackedPerS: 28.8, ladderStep: 0, ladderWords: 'landmarks with a guard', renderer: 'css', tracking: 'following', latencyMs: 60, temperatureC: 48, lastError: 'camera unplugged for 3 s' };
+  await ask(screen, 'POST', '/api/wall/reports', { reports: [report] });
+  await page.goto('/walls');
+  const shown = page.getByRole('listitem').filter({ has: page.getByRole('heading', { name }) });
+  await expect(shown).toContainText('Showing October on the ridge, 29 faces a second, 40 frames');
+  await expect(shown).toContainText('48 °C inside');
+  await expect(shown).toContainText('Last error: camera unplugged for 3 s');
+  await page.clock.install({ time: Date.now() + 3 * 3_600_000 });
+  await page.reload();
+  await expect(shown).toContainText(/Silent for 3 hours \(last heard/);
+
+  await page.goto(`/walls/${id}?step=pair`);
+  await page.getByRole('button', { name: 'Unpair', exact: true }).click();
+  await page.getByRole('button', { name: 'Unpair it' }).click();
+  await expect(page.getByText('No screen is paired.')).toBeVisible();
+  await page.getByRole('button', { name: 'Remove this wall' }).click();
+  await page.getByRole('button', { name: `Remove ${name}` }).click();
+  await expect(page).toHaveURL(/\/walls$/);
+  await expect(shown).toHaveCount(0);
+  await context.close();
+});
+
+test('a viewer’s scale is kept by name and used again', async ({ signedInPage }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  const name = `Ada ${Date.now()}`;
+  await step(page, 'Viewer').click();
+  await type(page, 'Between the eyes', '61.5');
+  await page.getByLabel('Keep these figures for').fill(name);
+  await page.getByRole('button', { name: 'Keep', exact: true }).click();
+  const kept = page.getByRole('listitem').filter({ hasText: name });
+  await expect(kept).toContainText('61.5 mm between the eyes');
+  await type(page, 'Between the eyes', '64');
+  await kept.getByRole('button', { name: `Use the scale of ${name}` }).click();
+  await expect(field(page, 'Between the eyes')).toHaveValue('61.5');
+  await kept.getByRole('button', { name: `Forget the scale of ${name}` }).click();
+  await expect(kept).toHaveCount(0);
+  await removeWall(page, id);
+});
+
+test('who may not tune sees the set-up and cannot change it', async ({ signedInPage }) => {
+  const tuner = await signedInPage('tuner');
+  const id = await hang(tuner);
+  const page = await signedInPage('viewer');
+  await page.goto('/walls');
+  await expect(page.getByRole('button', { name: 'New wall' })).toHaveCount(0);
+  await page.goto(`/walls/${id}`);
+  await expect(saved(page)).toHaveText('To look at');
+  await expect(field(page, 'Width')).toHaveAttribute('readonly');
+  await removeWall(tuner, id);
+});
+
+test('the printed pages hold what they promise', async ({ signedInPage, expectAccessible }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await page.goto(`/walls/${id}/kiosk`);
+  await expect(page.getByText('"VideoCaptureAllowedUrls"')).toContainText(new URL(page.url()).origin);
+  await expectAccessible(page);
+  await page.goto('/walls/board');
+  const board = page.getByRole('img', { name: /^The board/ });
+  const width = await board.evaluate((svg) => svg.getBoundingClientRect().width);
+  expect(width).toBeCloseTo((245 * 96) / 25.4, 0); // 245 mm in CSS px, an inch being 96 (CSS Values and Units 4)
+  await expectAccessible(page);
+  await removeWall(page, id);
+});
+
+for (const [width, height] of [[1440, 900], [1024, 768], [390, 844]] as const) {
+  for (const colorScheme of ['light', 'dark'] as const) {
+    test(`the pages of walls read well at ${width} x ${height}, ${colorScheme}`, async ({ signedInPage, expectAccessible }) => {
+      const page = await signedInPage('tuner');
+      await page.setViewportSize({ width, height });
+      await page.emulateMedia({ colorScheme });
+      const id = await hang(page);
+      for (const name of ['Glass', 'Camera', 'Room', 'Viewer', 'Scene', 'Pair']) {
+        await step(page, name).click();
+        await expect(page.getByRole('region', { name, exact: true })).toBeVisible();
+        await expectAccessible(page);
+        expect(await page.evaluate(() => document.documentElement.scrollWidth - innerWidth), `${name} overflows`).toBeLessThanOrEqual(0);
+      }
+      await page.goto('/walls');
+      await expect(page.getByRole('listitem').first()).toBeVisible();
+      await expectAccessible(page);
+      await removeWall(page, id);
+    });
+  }
+}
