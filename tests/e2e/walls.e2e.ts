@@ -20,7 +20,7 @@ const read = async (page: Page, id: string) => (await ask<{ wall: Wall }>(page, 
 const idOf = (page: Page) => new URL(page.url()).pathname.split('/')[2];
 const saved = (page: Page) => page.getByTestId('save-state');
 const step = (page: Page, name: string) => page.getByRole('list', { name: 'Steps' }).getByRole('button', { name });
-const field = (page: Page, name: string | RegExp) => page.getByRole('spinbutton', { name });
+const field = (page: Page, name: string) => page.getByRole('spinbutton', { name, exact: true });
 
 async function type(page: Page, name: string, text: string): Promise<void> {
   await field(page, name).fill(text);
@@ -33,6 +33,7 @@ async function hang(page: Page, name = `Landing ${Date.now()}`): Promise<string>
   await page.getByRole('button', { name: 'New wall' }).click();
   await page.getByLabel('Name of the wall').fill(name);
   await page.getByRole('button', { name: 'Set it up' }).click();
+  await expect(page).toHaveURL(/\/walls\/[0-9a-f-]{36}/);
   await expect(page.getByLabel('Name of the wall')).toHaveValue(name);
   return idOf(page);
 }

@@ -1,7 +1,8 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, type TemplateRef, computed, effect, inject, input, untracked, viewChild } from '@angular/core';
+import { Location } from '@angular/common';
+import { ChangeDetectionStrategy, Component, DestroyRef, type TemplateRef, computed, effect, inject, input, linkedSignal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Title } from '@angular/platform-browser';
-import { Router, RouterLink } from '@angular/router';
+import { RouterLink } from '@angular/router';
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
 import { FailureNotice } from '../../core/failure-notice';
 import { Icon } from '../../core/icon/icon';
@@ -41,14 +42,14 @@ export class SetUpPage {
   protected readonly keeper = inject(WallKeeper);
   protected readonly spot = inject(MarkedSpot);
   private readonly bar = inject(PageBar);
-  private readonly router = inject(Router);
+  private readonly location = inject(Location);
   private readonly title = inject(Title);
   private readonly place = viewChild.required<TemplateRef<unknown>>('place');
   private readonly tools = viewChild.required<TemplateRef<unknown>>('tools');
 
   protected readonly steps = steps;
   protected readonly names = names;
-  protected readonly here = computed<Step>(() => steps.find((step) => step === this.step()) ?? 'glass');
+  protected readonly here = linkedSignal<Step>(() => steps.find((step) => step === this.step()) ?? 'glass');
   protected readonly at = computed(() => steps.indexOf(this.here()));
   protected readonly acting = new Submission();
   protected readonly saveState = this.keeper.autosave.state;
@@ -77,7 +78,8 @@ export class SetUpPage {
   }
 
   protected go(step: Step): void {
-    void this.router.navigate([], { queryParams: { step }, replaceUrl: true });
+    this.here.set(step);
+    this.location.replaceState(`/walls/${this.wallId()}`, `step=${step}`);
   }
 
   protected reopen(): void {
