@@ -28,6 +28,10 @@ describe('holdThroughBlur', () => {
     expect(holdThroughBlur(hold, 1700, 900, 0, 30, 400)).toBe(1700);
   });
 
+  it('believes another face at once, as at a hand-over', () => {
+    expect(read([2000, 1200], 300)).toEqual([2000, 1200]);
+  });
+
   it('stays within what blur can do, whatever is read', () => {
     fc.assert(
       fc.property(fc.array(figure(400, 5000), { minLength: 1, maxLength: 40 }), figure(0, 60), (readings, pxAFrame) => {

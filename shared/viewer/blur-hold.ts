@@ -10,6 +10,8 @@
 
 /** Blur from which distance is held, in eye distances. */
 const HELD_FROM = 0.15;
+/** More blur than this is no walker but another face, as at a hand-over: believed at once. */
+const ANOTHER_FROM = 1.2;
 /** The most that blur takes from the distance, for each eye distance of blur. */
 const MOST_LOSS = 0.3;
 /** How long a webcam indoors exposes when asked for a shorter time; its own figure is seldom told. */
@@ -43,7 +45,8 @@ export function holdThroughBlur(
   const gapMs = tMs - hold.tMs;
   const fresh = !(gapMs > 0 && gapMs <= LONGEST_GAP_MS);
   const blur = fresh ? 0 : (Math.hypot(xPx - hold.xPx, yPx - hold.yPx) * exposureMs) / (gapMs * eyeDistancePx);
-  hold.heldMm = blur < HELD_FROM ? readMm : Math.min(Math.max(hold.heldMm, readMm), readMm * (1 + MOST_LOSS * blur));
+  const holds = blur >= HELD_FROM && blur < ANOTHER_FROM;
+  hold.heldMm = !holds ? readMm : Math.min(Math.max(hold.heldMm, readMm), readMm * (1 + MOST_LOSS * blur));
   hold.xPx = xPx;
   hold.yPx = yPx;
   hold.tMs = tMs;
