@@ -20,6 +20,7 @@ describe('what a wall is tuned to', () => {
     expect(trackingOn({ camera, tuning })).toEqual({
       camera: { position: camera.position, pitchRad: -0.1, yawRad: 0, rollRad: 0, hfovRad: camera.hfovRad, mirrored: true },
       viewer: { eyeDistanceMm: 60, distanceFactor: 1.1 },
+      choice: tuning.choice,
     });
   });
 

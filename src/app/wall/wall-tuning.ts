@@ -14,6 +14,7 @@ export function trackingOn({ camera, tuning }: Pick<WallSetUp, 'camera' | 'tunin
   return {
     camera: { position, pitchRad, yawRad, rollRad, hfovRad, mirrored },
     viewer: { eyeDistanceMm: tuning.ipdMm.value, distanceFactor: tuning.scaleFactor },
+    choice: tuning.choice,
   };
 }
 

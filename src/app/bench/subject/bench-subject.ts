@@ -8,6 +8,7 @@ import { Session } from '../../core/session';
 import { ThisScreen } from '../../screen/this-screen';
 import { trackingSetUp } from '../../screen/tracking-set-up';
 import type { TrackingSetUp } from '../../tracking/face-tracking';
+import { trackingOn } from '../../wall/wall-tuning';
 
 /** What stands on the bench: a wall's set-up and tuning, or those of this screen. */
 export interface Subject {
@@ -91,16 +92,12 @@ export class BenchSubject {
 
 function subjectOf({ id, setUp }: Wall): Subject {
   const { name, glass, zone, tuning } = setUp;
-  const { position, pitchRad, yawRad, rollRad, hfovRad, mirrored } = setUp.camera;
   return {
     wallId: id,
     name,
     glass,
     zone,
     tuning,
-    tracking: {
-      camera: { position, pitchRad, yawRad, rollRad, hfovRad, mirrored },
-      viewer: { eyeDistanceMm: tuning.ipdMm.value, distanceFactor: tuning.scaleFactor },
-    },
+    tracking: trackingOn(setUp),
   };
 }
