@@ -8,7 +8,7 @@ import { stopSignal } from '../stop-signal.mjs';
 import { installPrograms, programsPresent } from './programs.mjs';
 import { parts } from './parts.mjs';
 
-const partMs = 10 * 60_000;
+const partMs = 30 * 60_000;
 
 /**
  * `npm test`: everything, to the end, whatever fails on the way. The last line counts the tests.

@@ -36,7 +36,7 @@ test('a new screen shows a code, is paired from the desk, and follows what is ch
 
   const before = Date.now();
   await desk.change(wall.id, { sceneId: other.id });
-  await expect(label(screen)).toHaveAccessibleName(new RegExp(other.document.name));
+  await expect(label(screen)).toHaveAccessibleName(`${other.document.name}, seen through the glass`);
   expect(Date.now() - before).toBeLessThan(5000);
   await expect(shownLayers(screen)).toHaveCount(other.document.layers.length);
 
@@ -68,7 +68,7 @@ test('a screen that starts without a network shows its picture, and hears of cha
 
   await desk.change(wall.id, { sceneId: other.id });
   await context.setOffline(false);
-  await expect(label(afresh)).toHaveAccessibleName(new RegExp(other.document.name));
+  await expect(label(afresh)).toHaveAccessibleName(`${other.document.name}, seen through the glass`);
 });
 
 test('reports reach the desk, those of the time without a network too', async ({ page: screen, context, signedInPage, expectErrors }) => {

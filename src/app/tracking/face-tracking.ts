@@ -78,6 +78,8 @@ export class FaceTracking {
   private retry: ReturnType<typeof setTimeout> | undefined;
   private counter: ReturnType<typeof setInterval> | undefined;
   private faces = 0;
+  /** Takes the listener off a track that is let go: Chromium keeps a stream for seconds after, and all that listens to it. */
+  private released = new AbortController();
   /** Counts starts and stops, so that an answer that comes after a stop is known for stale. */
   private attempt = 0;
 
@@ -109,9 +111,7 @@ export class FaceTracking {
     this.stream = answer.stream;
     this.camera.set(answer.stream);
     this.currentState.set('starting');
-    answer.stream.getVideoTracks()[0].addEventListener('ended', () => {
-      if (attempt === this.attempt) this.goWithout('no-camera');
-    });
+    answer.stream.getVideoTracks()[0].addEventListener('ended', () => this.goWithout('no-camera'), { signal: this.released.signal });
     void askForShortExposure(answer.stream.getVideoTracks()[0]);
     this.startWorker(this.makeWorker(), setUp);
     this.counter = setInterval(() => this.count(), RATE_MS);
@@ -214,6 +214,8 @@ export class FaceTracking {
 
   private release(): void {
     this.attempt++;
+    this.released.abort();
+    this.released = new AbortController();
     clearTimeout(this.retry);
     clearInterval(this.counter);
     this.feed?.stop();
