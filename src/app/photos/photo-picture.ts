@@ -29,7 +29,9 @@ export class PhotoPicture {
   /** Whether the picture at this address is here: until then the one before it is not to be taken for it. */
   protected readonly loaded = linkedSignal({ source: this.address, computation: () => false });
   protected readonly placeholder = computed(() => {
-    const hash = this.photo().placeholder;
+    const { placeholder: hash, hasAlpha } = this.photo();
+    // It would show through what is transparent.
+    if (hasAlpha && this.loaded()) return null;
     return hash ? `url(${thumbHashToDataURL(Uint8Array.from(atob(hash), (c) => c.charCodeAt(0)))})` : null;
   });
 }

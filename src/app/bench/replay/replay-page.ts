@@ -68,10 +68,13 @@ export class ReplayPage {
     const answer = this.answer();
     return answer?.type === 'done' ? answer : null;
   });
-  /** The wall to change: the run's own, else the one on the bench. */
-  protected readonly wallId = linkedSignal(() => {
-    const own = this.whole()?.run.wallId;
-    return this.bench.walls().find(({ id }) => id === own)?.id ?? this.bench.wall()?.id ?? null;
+  /** The wall to change: the one chosen here as long as it is there, else the run's own, else the one on the bench. */
+  protected readonly wallId = linkedSignal<string | null, string | null>({
+    source: () => {
+      const own = this.whole()?.run.wallId;
+      return this.bench.walls().find(({ id }) => id === own)?.id ?? this.bench.wall()?.id ?? null;
+    },
+    computation: (usual, before) => this.bench.walls().find(({ id }) => id === before?.value)?.id ?? usual,
   });
   protected readonly wall = computed(() => this.bench.walls().find(({ id }) => id === this.wallId()) ?? null);
   protected readonly said = signal<string | null>(null);
@@ -97,8 +100,8 @@ export class ReplayPage {
       const wallId = this.wallId();
       if (!wallId) return;
       this.said.set(null);
-      const applied = await this.bench.apply(wallId, (tuning) => this.wishedOver(tuning));
       const name = this.wall()?.setUp.name ?? '';
+      const applied = await this.bench.apply(wallId, (tuning) => this.wishedOver(tuning));
       this.said.set(
         applied.kind === 'saved'
           ? `${name} follows with this from now on.`

@@ -9,6 +9,7 @@ import { Session } from '../../core/session';
 import { Autosave, type Stored } from '../../saving/autosave';
 import { sameBy } from '../../saving/draft';
 import { DraftShelf } from '../../saving/draft-shelf';
+import { cameraOnFrame } from './camera-on-frame';
 
 const lookMs = 10_000;
 const asStored = (wall: Wall): Stored<WallSetUp> => ({ revision: wall.revision, savedAt: wall.savedAt, savedBy: wall.savedBy, document: wall.setUp });
@@ -81,8 +82,12 @@ export class WallKeeper {
     if (WallSetUp.safeParse(after).success) this.autosave.changed(after);
   }
 
+  /** Another glass; a camera on its frame goes with the edge it stands at. */
   glass(part: Partial<WallGlass>): void {
-    this.edit((before) => ({ ...before, glass: { ...before.glass, ...part } }));
+    this.edit((before) => {
+      const glass = { ...before.glass, ...part };
+      return { ...before, glass, camera: { ...before.camera, position: cameraOnFrame(before.camera.position, before.glass, glass) } };
+    });
   }
 
   camera(part: Partial<WallCamera>): void {
