@@ -17,6 +17,8 @@ const MOST_LOOKS = 4;
 /** Finds tried in one frame: more are left to the next frame. */
 const MOST_FINDS = 2;
 
+/** Frames from one full-range look at the whole frame to the next; between them it is the squares' turn. */
+const WHOLE_EVERY = 30;
 /** Squares less than this many times sharper than the whole frame take turns with it. */
 const LITTLE_MORE = 1.5;
 
@@ -50,10 +52,10 @@ export function confirm(looks: Looks, picture: Picture, find: Detection): Detect
 }
 
 /**
- * Seeks a face where nobody is followed, with full-range looks whose finds are confirmed by closer looks. Each frame has one look at the
- * next of a ring of squares, and every second frame one at the whole frame; where the squares would show little more than the whole
- * frame does, they take turns with it. So a small face far away is found within one round of the ring, and a frame with nobody in it
- * costs little.
+ * Seeks a face where nobody is followed, with at most one full-range look a frame, whose finds are confirmed by closer looks: the whole
+ * frame first, then a ring of squares, and a short-range look at the whole frame beside every second square, which sees at once who is
+ * near. Where the squares would show little more than the whole frame does, they take turns with it. So a small face far away is found
+ * within one round of the ring.
  */
 export class Acquisition {
   private frame = 0;
@@ -63,26 +65,29 @@ export class Acquisition {
   seek(looks: Looks, picture: Picture): Detection[] {
     const whole = wholeFrame(picture.width, picture.height);
     const tiles = tilesOf(picture.width, picture.height);
+    const frame = this.frame++;
     const takeTurns = tiles.length > 0 && whole.size < LITTLE_MORE * tiles[0].size;
-    const wholeDue = tiles.length === 0 || this.frame++ % 2 === 0;
-    if (wholeDue) {
-      const faces = this.confirmed(looks, picture, whole);
-      if (faces.length > 0) return faces;
+    if (tiles.length === 0 || frame % WHOLE_EVERY === 0 || (takeTurns && frame % 2 === 0))
+      return confirmed(looks, picture, looks.full(picture, whole, FIND_PROBABILITY));
+    if (!takeTurns && frame % 2 === 0) {
+      const near = confirmed(looks, picture, looks.short(picture, whole, CONFIRM_PROBABILITY));
+      if (near.length > 0) return near;
     }
-    if (tiles.length === 0 || (takeTurns && wholeDue)) return [];
-    return this.confirmed(looks, picture, tiles[this.nextTile++ % tiles.length]);
+    return confirmed(
+      looks,
+      picture,
+      looks.full(picture, tiles[this.nextTile++ % tiles.length], FIND_PROBABILITY),
+    );
   }
 
   /** Starts anew with a look at the whole frame, as after losing someone. */
   restart(): void {
     this.frame = 0;
   }
-
-  private confirmed(looks: Looks, picture: Picture, region: Region): Detection[] {
-    return looks
-      .full(picture, region, FIND_PROBABILITY)
-      .slice(0, MOST_FINDS)
-      .map((find) => confirm(looks, picture, find))
-      .filter((face) => face !== null);
-  }
 }
+
+const confirmed = (looks: Looks, picture: Picture, finds: readonly Detection[]): Detection[] =>
+  finds
+    .slice(0, MOST_FINDS)
+    .map((find) => confirm(looks, picture, find))
+    .filter((face) => face !== null);

@@ -18,23 +18,28 @@ const SEEN_PROBABILITY = 0.5;
 /** Looks in a row that may not see a bystander before they are taken to have gone. */
 const MOST_MISSES = 2;
 const MOST_BYSTANDERS = 8;
+/** While somebody is known, one look of so many is for newcomers. */
+const SEEK_EVERY = 4;
 
 /**
- * Keeps an eye on everybody else while one is followed, with one look each time it is asked: at a find that wants confirming, else by
- * turns for newcomers (the whole frame and the next of its squares) and at those who are known.
+ * Keeps an eye on everybody else while one is followed, with one cheap look each time it is asked: the second half of a full-range look,
+ * or at a find that wants confirming; else at those who are known, or the first half of a full-range look for newcomers (by turns at the
+ * whole frame and at the next of its squares).
  */
 export class Bystanders {
   readonly all: Bystander[] = [];
   private find: Detection | null = null;
+  private halfSought = false;
   private turn = 0;
+  private sought = 0;
   private nextTile = 0;
   private nextKnown = 0;
 
   constructor(private readonly newId: () => number) {}
 
-  /** Whether a find waits for a closer look. */
-  get finding(): boolean {
-    return this.find !== null;
+  /** Whether a look is half done, or a find waits for a closer look. */
+  get unfinished(): boolean {
+    return this.halfSought || this.find !== null;
   }
 
   /** Looks once; `followed` is the region of the face that is followed and is nobody else. */
@@ -44,8 +49,12 @@ export class Bystanders {
       this.find = null;
       const face = confirm(looks, picture, find);
       if (face && !sameFace(landmarkRegion(face), followed) && !this.known(face)) this.add(face, timestampMs);
-    } else if (this.turn++ % 2 === 0 || this.all.length === 0) {
-      this.seek(looks, picture, followed);
+    } else if (this.halfSought) {
+      this.halfSought = false;
+      this.takeIn(looks.finishFull(FIND_PROBABILITY), followed);
+    } else if (this.turn++ % SEEK_EVERY === 0 || this.all.length === 0) {
+      this.halfSought = true;
+      looks.beginFull(picture, this.nextRegion(picture));
     } else {
       this.lookAgain(looks, picture, followed);
     }
@@ -65,6 +74,7 @@ export class Bystanders {
   clear(): void {
     this.all.length = 0;
     this.find = null;
+    this.halfSought = false;
   }
 
   private add(face: Detection, timestampMs: number): void {
@@ -76,11 +86,15 @@ export class Bystanders {
     return this.all.find((one) => sameFace(landmarkRegion(one.face), region));
   }
 
-  private seek(looks: Looks, picture: Picture, followed: Region): void {
-    const tiles = tilesOf(picture.width, picture.height);
-    const whole = tiles.length === 0 || this.turn % 4 < 2;
-    const region = whole ? wholeFrame(picture.width, picture.height) : tiles[this.nextTile++ % tiles.length];
-    for (const face of looks.full(picture, region, FIND_PROBABILITY)) {
+  /** The whole frame, where most newcomers are seen, and a square by turns. */
+  private nextRegion({ width, height }: Picture): Region {
+    const tiles = tilesOf(width, height);
+    const whole = tiles.length === 0 || this.sought++ % 2 === 0;
+    return whole ? wholeFrame(width, height) : tiles[this.nextTile++ % tiles.length];
+  }
+
+  private takeIn(faces: readonly Detection[], followed: Region): void {
+    for (const face of faces) {
       if (sameFace(landmarkRegion(face), followed)) continue;
       const known = this.known(face);
       if (known) known.face = movedTo(known.face, face.cx, face.cy);

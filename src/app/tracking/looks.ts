@@ -22,6 +22,7 @@ export class Looks {
   private readonly fullAnchors = anchorsOf(FULL_RANGE);
   private readonly shortInput = new Float32Array(SHORT_RANGE.inputSize ** 2 * 3);
   private readonly fullInput = new Float32Array(FULL_RANGE.inputSize ** 2 * 3);
+  private begunRegion: Region = { cx: 0, cy: 0, size: 1, angleRad: 0 };
   private readonly landmarkInput = new Float32Array(LANDMARK_INPUT ** 2 * 3);
 
   constructor(private readonly models: FaceModels) {}
@@ -44,6 +45,24 @@ export class Looks {
       this.models.detectFull(input),
     );
     return mergeDetections(decodeDetections(output, this.fullAnchors, FULL_RANGE.inputSize, region, threshold));
+  }
+
+  /** Does half of a full-range look now; `finishFull` does the rest, of what was seen now, in a later frame. */
+  beginFull(picture: Picture, region: Region): void {
+    this.begunRegion = region;
+    this.timed(picture, region, FULL_RANGE.inputSize, -1, this.fullInput, 'detectMs', (input) =>
+      this.models.beginFull(input),
+    );
+  }
+
+  /** The faces that the look begun last sees, best first, as `full` gives them. */
+  finishFull(threshold: number): Detection[] {
+    const begun = performance.now();
+    const output = this.models.finishFull();
+    this.times.detectMs += performance.now() - begun;
+    return mergeDetections(
+      decodeDetections(output, this.fullAnchors, FULL_RANGE.inputSize, this.begunRegion, threshold),
+    );
   }
 
   /** Places `points` for the face in this region; returns the model's belief that there is one. */

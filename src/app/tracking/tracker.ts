@@ -24,11 +24,13 @@ const GUARD_WIDENING = 2.2 / 1.5;
 const DETECTION_PROBABILITY = 0.5;
 
 /**
- * Frames from one look at everybody else to the next, when every fifth frame or more is guarded, and when there is less time. Never in a
+ * Frames from one look at everybody else to the next: while nobody else is known (the look is for newcomers and has two halves), and
+ * while somebody is. Three times as many where there is less time, which is where fewer than every fifth frame is guarded. Never in a
  * frame that is guarded; together with those fewer than half, so that the usual frame has one look.
  */
-const BYSTANDERS_EVERY = 4;
-const BYSTANDERS_SELDOM = 12;
+const NEWCOMERS_EVERY = 15;
+const BYSTANDERS_EVERY = 6;
+const SELDOM = 3;
 const SELDOM_GUARDED = 5;
 
 /** Everything known of the viewer followed. */
@@ -111,12 +113,10 @@ export class Tracker {
 
   /** Sees who else is there, now and then, and hands over to another where the rule says so: from the next frame on. */
   private lookAround(viewer: Following, picture: Picture, timestampMs: number): void {
-    const every =
-      this.looking.by === 'landmarks' && this.looking.guardEvery <= SELDOM_GUARDED
-        ? BYSTANDERS_EVERY
-        : BYSTANDERS_SELDOM;
+    const often = this.looking.by === 'landmarks' && this.looking.guardEvery <= SELDOM_GUARDED;
+    const every = (this.bystanders.all.length > 0 ? BYSTANDERS_EVERY : NEWCOMERS_EVERY) * (often ? 1 : SELDOM);
     this.sinceBystanders++;
-    if (!this.guarded && (this.sinceBystanders >= every || this.bystanders.finding)) {
+    if (!this.guarded && (this.sinceBystanders >= every || this.bystanders.unfinished)) {
       this.sinceBystanders = 0;
       this.bystanders.look(this.looks, picture, viewer.prediction.latest, timestampMs);
     }
