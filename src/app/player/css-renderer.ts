@@ -1,4 +1,5 @@
 import type { Point3 } from '@oriel/shared/projection/types';
+import { pixelBytes } from './graphics-bytes';
 import { LayerPictures, type PictureShelf } from './layer-pictures';
 import { type PlacedOnStage, placeLayer } from './place-layer';
 import type { Edge } from './picture-edge';
@@ -39,7 +40,8 @@ export class CssRenderer implements Renderer, PictureShelf<HTMLImageElement> {
     return {
       name: 'css',
       layers: this.drawn.length,
-      pictureBytes: this.pictures?.bytes ?? 0,
+      pictureBytes: this.pictures?.bytes(pixelBytes) ?? 0,
+      graphicsBytes: (this.pictures?.bytes(pixelBytes) ?? 0) + this.rasterBytes(),
       held: this.element.childElementCount + (this.element.isConnected ? 1 : 0),
       sharp: this.pictures?.sharp ?? false,
     };
@@ -120,6 +122,12 @@ export class CssRenderer implements Renderer, PictureShelf<HTMLImageElement> {
     drawn.element.style.width = `${drawn.widthPx}px`;
     drawn.element.style.height = `${drawn.heightPx}px`;
     this.drawLayer(drawn);
+  }
+
+  /** Under a transform of its own, each element is a surface of its size. */
+  private rasterBytes(): number {
+    const ratio = this.stage?.deviceRatio ?? 1;
+    return this.drawn.reduce((sum, { element, widthPx, heightPx }) => sum + (element ? pixelBytes(widthPx * ratio, heightPx * ratio) : 0), 0);
   }
 
   private drawLayer({ layer, element, widthPx, heightPx }: DrawnLayer): void {

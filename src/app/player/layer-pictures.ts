@@ -27,8 +27,9 @@ export class LayerPictures<P> {
     this.edges = layers.map(() => 0);
   }
 
-  get bytes(): number {
-    return this.layers.reduce((sum, layer, index) => sum + (this.edges[index] ? decodedBytes(layer, this.edges[index]) : 0), 0);
+  /** What the pictures shown take up together, by width and height in px of each. */
+  bytes(bytesOf: (widthPx: number, heightPx: number) => number): number {
+    return this.layers.reduce((sum, layer, index) => sum + (this.edges[index] ? decodedBytes(layer, this.edges[index], bytesOf) : 0), 0);
   }
 
   get sharp(): boolean {

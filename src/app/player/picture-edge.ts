@@ -17,9 +17,9 @@ export function sharpEdge(layer: LayerOnScreen, greatestPx = Infinity): Edge {
   return held.find((edge) => edge >= wanted) ?? held.at(-1) ?? firstEdge;
 }
 
-/** Bytes a derivative takes up decoded: 4 a pixel. */
-export function decodedBytes(layer: LayerOnScreen, edge: Edge): number {
+/** What a derivative takes up decoded, by its width and height in px. */
+export function decodedBytes(layer: LayerOnScreen, edge: Edge, bytesOf: (widthPx: number, heightPx: number) => number): number {
   const { width, height } = layer.image;
   const share = Math.min(1, edge / Math.max(width, height));
-  return Math.round(width * share) * Math.round(height * share) * 4;
+  return bytesOf(Math.round(width * share), Math.round(height * share));
 }

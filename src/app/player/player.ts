@@ -200,6 +200,7 @@ export class Player {
       captureToDrawnMs: playing?.meter.captureToDrawnMs() ?? null,
       eye: { ...(playing?.eye ?? { x: 0, y: 0, z: 0 }) },
       renderer: playing?.facts?.name ?? 'nothing yet',
+      graphicsBytes: playing?.facts?.graphicsBytes ?? null,
       looking: this.tracking.ladder().words,
     });
   }

@@ -7,6 +7,8 @@ export interface Figures {
   readonly captureToDrawnMs: number | null;
   readonly eye: { readonly x: number; readonly y: number; readonly z: number };
   readonly renderer: string;
+  /** What pictures and drawing take up on the graphics side, bytes; null before anything is drawn. */
+  readonly graphicsBytes: number | null;
   /** How finely is looked, in words. */
   readonly looking: string;
 }
@@ -27,6 +29,8 @@ export interface Figures {
       <dd>{{ shown.eye.x.toFixed(0) }}, {{ shown.eye.y.toFixed(0) }}, {{ shown.eye.z.toFixed(0) }}</dd>
       <dt>Drawn with</dt>
       <dd>{{ shown.renderer }}</dd>
+      <dt>Graphics memory, MB</dt>
+      <dd>{{ shown.graphicsBytes === null ? '–' : (shown.graphicsBytes / 1e6).toFixed(0) }}</dd>
       <dt>Looking by</dt>
       <dd>{{ shown.looking }}</dd>
     </dl>

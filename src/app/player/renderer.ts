@@ -10,6 +10,8 @@ export interface RendererFacts {
   readonly layers: number;
   /** Decoded pictures, bytes, without mipmaps. */
   readonly pictureBytes: number;
+  /** What the graphics side holds: pictures with their mipmaps, and what they are drawn into; bytes, computed. */
+  readonly graphicsBytes: number;
   /** Things that must be freed: elements, or textures and geometries. */
   readonly held: number;
   /** Whether every layer shows its sharp picture. */

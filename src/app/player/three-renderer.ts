@@ -4,6 +4,7 @@ import {
 } from 'three';
 import { writeOffAxisMatrix } from '@oriel/shared/projection/frustum';
 import type { Point3 } from '@oriel/shared/projection/types';
+import { mippedBytes, pixelBytes } from './graphics-bytes';
 import { LayerPictures, type PictureShelf } from './layer-pictures';
 import type { Edge } from './picture-edge';
 import type { LoadOutcome, PictureAddress, Renderer, RendererFacts } from './renderer';
@@ -61,7 +62,8 @@ export class ThreeRenderer implements Renderer, PictureShelf<ImageBitmap> {
     return {
       name: 'three',
       layers: this.drawn.length,
-      pictureBytes: this.pictures?.bytes ?? 0,
+      pictureBytes: this.pictures?.bytes(pixelBytes) ?? 0,
+      graphicsBytes: (this.pictures?.bytes(mippedBytes) ?? 0) + this.drawnIntoBytes(),
       held: textures + geometries + (this.gl.domElement.isConnected ? 1 : 0),
       sharp: this.pictures?.sharp ?? false,
     };
@@ -165,6 +167,13 @@ export class ThreeRenderer implements Renderer, PictureShelf<ImageBitmap> {
       mesh.position.set(plane.xMm, plane.yMm, -depthMm);
       mesh.updateMatrix();
     });
+  }
+
+  /** What is drawn into: a colour buffer of several samples a pixel, and the one it is resolved to and shown from. */
+  private drawnIntoBytes(): number {
+    const gl = this.gl.getContext();
+    const samples = Number(gl.getParameter(gl.SAMPLES)) || 0;
+    return (samples + 2) * pixelBytes(gl.drawingBufferWidth, gl.drawingBufferHeight);
   }
 
   private clear(): void {

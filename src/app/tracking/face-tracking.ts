@@ -232,6 +232,7 @@ export class FaceTracking {
     this.faces = 0;
     if (!this.keeper.second(performance.now(), this.framesPerSecond?.() ?? null)) return;
     this.ladderState.set(this.keeper.state);
+    performance.mark('oriel ladder', { detail: this.keeper.state.changes.at(-1) });
     if (this.setUp) this.change(this.setUp);
     if (this.keeper.step.looking.by === 'nothing' && this.feed) this.currentState.set('nobody');
   }

@@ -45,6 +45,8 @@ const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b)
 })
 export class WallPicture {
   readonly showing = input.required<Showing>();
+  /** `css` or `three`, to compare them; otherwise the graphics processor decides. */
+  readonly draw = input<string>();
 
   private readonly window = inject(DOCUMENT).defaultView!;
   private readonly kept = inject(KeptShowing);
@@ -124,7 +126,7 @@ export class WallPicture {
           return address;
         },
         area: () => windowOnScreen(this.window, devicePxMmOn(glass, this.window)),
-        asked: undefined,
+        asked: this.draw(),
         zone,
         following,
         still: false,
@@ -185,6 +187,6 @@ export class WallPicture {
   private read(): Figures {
     const { framesPerS, trackedPerS, ladderWords, renderer, latencyMs } = this.facts();
     const eye = this.stage?.playing?.eye ?? { x: 0, y: 0, z: 0 };
-    return { framesPerSecond: framesPerS, facesPerSecond: trackedPerS, captureToDrawnMs: latencyMs, eye: { ...eye }, renderer, looking: ladderWords };
+    return { framesPerSecond: framesPerS, facesPerSecond: trackedPerS, captureToDrawnMs: latencyMs, eye: { ...eye }, renderer, graphicsBytes: this.stage?.playing?.facts?.graphicsBytes ?? null, looking: ladderWords };
   }
 }

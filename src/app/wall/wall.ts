@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, inject, input } from '@angular/core';
 import { keepAwake } from '../player/keep-awake';
 import { PairingScreen } from './pairing-screen';
 import { SelfCare } from './self-care';
@@ -16,7 +16,7 @@ import { WallReporter } from './wall-reporter';
     @if (device.unpaired()) {
       <oriel-pairing-screen (paired)="device.open()" />
     } @else if (device.showing(); as showing) {
-      <oriel-wall-picture [showing]="showing" />
+      <oriel-wall-picture [showing]="showing" [draw]="draw()" />
     } @else {
       <p role="status">{{ device.trouble() ? 'The server cannot be reached, and no picture is kept on this screen yet. It is tried again by itself.' : '' }}</p>
     }
@@ -28,6 +28,8 @@ import { WallReporter } from './wall-reporter';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Wall {
+  /** `css` or `three` in the query `?draw=`, to compare them. */
+  readonly draw = input<string>();
   protected readonly device = inject(WallDevice);
 
   constructor() {

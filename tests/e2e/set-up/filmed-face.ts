@@ -3,12 +3,14 @@ import { existsSync } from 'node:fs';
 import { mkdir, readFile, rename } from 'node:fs/promises';
 import { inProject } from '../../../scripts/project.mjs';
 import type { FacePose } from '../../video/face-path';
-import { VGA, makeFaceVideo, testFace } from '../../video/face-video';
+import { VGA, makeFaceVideo, testFace, type VideoSize } from '../../video/face-video';
 
 /** What the fake camera shows: a face on a path of the test's own. */
 export interface FilmedFace {
   readonly name: string;
   readonly poses: readonly FacePose[];
+  /** 640 x 480 at 30 a second where left out. */
+  readonly size?: VideoSize;
 }
 
 /** The truth of each frame in pixels, in the form of `npm run bench:tracking`. */
@@ -27,11 +29,11 @@ export interface FilmedTruth {
 }
 
 /**
- * The video of a face, 640 x 480 at 30 a second, and its truth. Made once and kept in .oriel/videos, under a name that changes with the
+ * The video of a face and its truth. Made once and kept in .oriel/videos, under a name that changes with the
  * path and with the code that draws it.
  */
-export async function filmFace({ name, poses }: FilmedFace): Promise<{ video: string; truth: FilmedTruth }> {
-  const hash = createHash('sha256').update(JSON.stringify({ poses, size: VGA }));
+export async function filmFace({ name, poses, size = VGA }: FilmedFace): Promise<{ video: string; truth: FilmedTruth }> {
+  const hash = createHash('sha256').update(JSON.stringify({ poses, size }));
   for (const part of ['background.ts', 'face-video.ts', 'face.png', 'flat-face.ts', 'numbered-video.ts', 'random.ts']) {
     hash.update(await readFile(inProject('tests', 'video', part)));
   }
@@ -40,7 +42,7 @@ export async function filmFace({ name, poses }: FilmedFace): Promise<{ video: st
   if (!existsSync(`${base}.mjpeg`)) {
     await mkdir(folder, { recursive: true });
     const unfinished = `${base}.unfinished-${process.pid}`;
-    await makeFaceVideo(unfinished, await testFace(), poses, VGA);
+    await makeFaceVideo(unfinished, await testFace(), poses, size);
     await rename(`${unfinished}.json`, `${base}.json`);
     await rename(`${unfinished}.mjpeg`, `${base}.mjpeg`);
   }
