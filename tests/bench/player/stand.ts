@@ -59,7 +59,7 @@ export class Stand {
     try {
       const context = await browser.newContext({ baseURL: product.url, locale: 'en-GB' });
       const page = await context.newPage();
-      const { email, password } = demoAccount('tuner');
+      const { email, password } = demoAccount('owner');
       await signIn(page, email, password);
       const desk = new Desk(page);
       const scenes = new BenchScenes(page);
