@@ -16,7 +16,7 @@ export interface PlayingSurroundings {
   readonly area: () => WindowOnScreen;
   /** `css` or `three` from the query; anything else chooses by the graphics processor. */
   readonly asked: string | undefined;
-  /** The viewing zone of this room, where it was measured; otherwise the scene's own. */
+  /** The viewing zone of this room, where it was measured: the scene is drawn for eyes there too, if it is clear from there. */
   readonly zone?: ViewingZone;
   readonly following?: Following;
   /** Whether less motion is asked for. */
@@ -30,7 +30,7 @@ export interface PlayingSurroundings {
 /** A scene being played: it owns the renderer and the frame loop, and ends both. */
 export class Playing {
   readonly meter = new Meter();
-  /** The eye of the last frame, mm from the centre of the stage. */
+  /** The eye the last frame was drawn for, mm from the centre of the stage. */
   readonly eye = { x: 0, y: 0, z: 1 };
   /** Whether a face is looked for, so that the hand gives way to it. */
   faceExpected = false;

@@ -19,12 +19,12 @@ describe('sceneOnScreen', () => {
 
   it('fills the middle of a window of another shape, and scales depths with the glass', () => {
     const scene = sceneOnScreen(testScene([testLayer({ name: 'a', depthMm: 300 })]), { ...fullArea, widthPx: 1000, heightPx: 801, centreMm: { x: 20, y: -10 } });
-    expect(scene.stage).toMatchObject({ widthPx: 1000, heightPx: 563, leftPx: 0, topPx: 119 });
+    expect(scene.stage).toMatchObject({ widthPx: 1000, heightPx: 562, leftPx: 0, topPx: 119 });
     expect(scene.layers[0].depthMm).toBeCloseTo((300 * 1000) / 1920, 9);
     expect(scene.homeEye.z).toBeCloseTo((600 * 1000) / 1920, 9);
-    // 119 + 563/2 = 801/2: the stage's middle is the window's.
+    // 562.5 px are covered, of which 562 are whole; their middle is half a px above the window's: 119 + 562/2 against 801/2.
     expect(scene.stage.centreMm.x).toBeCloseTo(20, 9);
-    expect(scene.stage.centreMm.y).toBeCloseTo(-10, 9);
+    expect(scene.stage.centreMm.y).toBeCloseTo(-10 + 0.5 / 4, 9);
   });
 
   it('keeps the eye a hand’s breadth away from the foremost layer', () => {

@@ -1,5 +1,6 @@
 import type { LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
 import { EYE_MARGIN_MM } from '@oriel/shared/projection/clearance';
+import { type EyeRoom, clearRoom } from '@oriel/shared/projection/eye-room';
 import { planeFromHome } from '@oriel/shared/projection/home-plane';
 import { layerScale } from '@oriel/shared/projection/layer-on-glass';
 import { retarget } from '@oriel/shared/projection/retarget';
@@ -39,17 +40,21 @@ export interface SceneOnScreen {
   readonly stage: Stage;
   readonly homeEye: Point3;
   readonly zone: ViewingZone;
+  /** The eyes it is drawn for: from none of them does an edge show that is clear in the zone. */
+  readonly room: EyeRoom;
   /** The eye must not come nearer than this, or it would pass a layer; mm. */
   readonly nearestEyeMm: number;
   /** Farthest first, as painters work; of equal depths the later in the ledger stands before the earlier. Hidden layers are left out. */
   readonly layers: readonly LayerOnScreen[];
 }
 
-/** Carries a scene to the window's area of this screen, for the viewing zone of this room where it was measured. @throws GeometryError where the scene's figures are impossible. */
-export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen, zone?: ViewingZone): SceneOnScreen {
+/**
+ * Carries a scene to the window's area of this screen. It is drawn for eyes of its own zone, scaled with the glass, and of the zone
+ * measured for this room where it is clear from there. @throws GeometryError where the scene's figures are impossible.
+ */
+export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen, roomZone?: ViewingZone): SceneOnScreen {
   const { pxPerMm } = area;
-  const carried = retarget(document, { widthMm: area.widthPx / pxPerMm, heightMm: area.heightPx / pxPerMm });
-  const scene = { ...carried, zone: zone ?? carried.zone };
+  const scene = retarget(document, { widthMm: area.widthPx / pxPerMm, heightMm: area.heightPx / pxPerMm });
   const shown = scene.layers.filter((layer) => layer.shown && layer.opacity > 0);
   const nearestEyeMm = Math.max(0, ...shown.map((layer) => -layer.depthMm)) + EYE_MARGIN_MM * Math.min(1, scene.factor);
   const farthest: Point3 = { x: 0, y: 0, z: Math.max(scene.zone.farthestMm, scene.homeEye.z, nearestEyeMm) };
@@ -58,6 +63,7 @@ export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen, zon
     stage: stageOf(scene.glass, area),
     homeEye: scene.homeEye,
     zone: scene.zone,
+    room: clearRoom({ ...scene, layers: shown }, roomZone),
     nearestEyeMm,
     layers: shown
       .toSorted((a, b) => b.depthMm - a.depthMm)
@@ -74,11 +80,17 @@ export function sceneOnScreen(document: SceneDocument, area: WindowOnScreen, zon
   };
 }
 
-/** Whole px, so that both renderers clip alike; what rounding moves the centre by is in `centreMm`. */
+/** Far less than a px: what reckoning with fractions may lose of a whole one. */
+const roundingPx = 1e-6;
+
+/**
+ * Whole px, so that both renderers clip alike, and no more than the scene covers, so that no edge shows; what rounding moves the centre by
+ * is in `centreMm`.
+ */
 function stageOf(fitted: Glass, area: WindowOnScreen): Stage {
   const { pxPerMm } = area;
-  const widthPx = Math.max(1, Math.min(area.widthPx, Math.round(fitted.widthMm * pxPerMm)));
-  const heightPx = Math.max(1, Math.min(area.heightPx, Math.round(fitted.heightMm * pxPerMm)));
+  const widthPx = Math.max(1, Math.min(area.widthPx, Math.floor(fitted.widthMm * pxPerMm + roundingPx)));
+  const heightPx = Math.max(1, Math.min(area.heightPx, Math.floor(fitted.heightMm * pxPerMm + roundingPx)));
   const leftPx = Math.floor((area.widthPx - widthPx) / 2);
   const topPx = Math.floor((area.heightPx - heightPx) / 2);
   return {

@@ -1,3 +1,4 @@
+import { holdEye } from '@oriel/shared/projection/hold-eye';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { NO_DRIFT } from '@oriel/shared/smoothing/drift';
 import { type Follower, createFollower } from '@oriel/shared/smoothing/follower';
@@ -21,7 +22,8 @@ export const usualFollowing: Following = { settings: {}, displayDelayMs: 0 };
 
 /**
  * Whose eye the picture is drawn for: a face, the hand in its place, or nobody. Both are sent through one follower, so that handing over,
- * easing and the limit of comfort are the same for all. Nothing is allocated after creation.
+ * easing and the limit of comfort are the same for all; and both are held to the room from which the scene is clear, so that it never
+ * tears. Nothing is allocated after creation.
  */
 export class Viewpoint {
   private readonly follower: Follower;
@@ -86,7 +88,7 @@ export class Viewpoint {
     return true;
   }
 
-  /** Writes the eye, mm from the centre of the stage, for the frame at `tMs`. With `faceExpected` the hand gives way after a while. */
+  /** Writes the eye to draw for, mm from the centre of the stage, in the frame at `tMs`. With `faceExpected` the hand gives way after a while. */
   at(tMs: number, faceExpected: boolean, out: { x: number; y: number; z: number }): void {
     if (this.handHolds && faceExpected && tMs > this.steeredMs + handOverMs) {
       this.handHolds = false;
@@ -98,6 +100,8 @@ export class Viewpoint {
     }
     this.steppedMs = tMs;
     this.follower.at(tMs + drawnToLitMs + this.following.displayDelayMs, out);
+    holdEye(this.scene.room, out, out);
+    out.z = Math.max(out.z, this.scene.nearestEyeMm);
     this.last.x = out.x;
     this.last.y = out.y;
     this.last.z = out.z;

@@ -1,4 +1,5 @@
 import { type Wall, silentAfterMs } from '@oriel/shared/contracts/walls';
+import type { ViewingZone } from '@oriel/shared/projection/types';
 import { clockTime, sayMoment } from '../core/moments';
 
 /** A wall's state in words, and whether all is well, something is amiss, or it simply is not running yet. */
@@ -48,4 +49,14 @@ export function reportLines({ report }: Wall): string[] {
     `${report.tracking}: ${report.ladderWords || `step ${report.ladderStep} of the ladder`}${late}`,
     ...(report.temperatureC === null ? [] : [`${Math.round(report.temperatureC)} °C inside`]),
   ];
+}
+
+/** "1500 to 3200 mm away, 500 mm left to 500 mm right, 200 mm down to 200 mm up". */
+export function describeZone(zone: ViewingZone): string {
+  const end = (mm: number, positive: string, negative: string) => `${Math.abs(Math.round(mm))} mm ${mm < 0 ? negative : positive}`;
+  return [
+    `${Math.round(zone.nearestMm)} to ${Math.round(zone.farthestMm)} mm away`,
+    `${end(zone.leftMm, 'right', 'left')} to ${end(zone.rightMm, 'right', 'left')}`,
+    `${end(zone.lowestMm, 'up', 'down')} to ${end(zone.highestMm, 'up', 'down')}`,
+  ].join(', ');
 }

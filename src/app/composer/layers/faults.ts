@@ -10,6 +10,8 @@ export interface StatedFault {
   /** From where it is seen, in words; empty where from everywhere. */
   readonly from: string;
   readonly layerId: string | null;
+  /** By how much, mm; 0 where it has no measure. */
+  readonly shortMm: number;
   readonly eye: Point3 | null;
 }
 
@@ -19,7 +21,7 @@ export function statedFaults(document: SceneDocument): StatedFault[] {
   try {
     return clearance({ ...document, layers: shown }).map((fault) => state(fault, (index) => shown[index]));
   } catch (error) {
-    if (error instanceof GeometryError) return [{ words: error.message, from: '', layerId: null, eye: null }];
+    if (error instanceof GeometryError) return [{ words: error.message, from: '', layerId: null, shortMm: 0, eye: null }];
     throw error;
   }
 }
@@ -34,13 +36,13 @@ function state(fault: Fault, layerAt: (index: number) => { id: string; name: str
     case 'edgeShows': {
       const { id, name } = layerAt(fault.layer);
       const words = `${name}, ${sideWords[fault.side]} edge: ${shortness(fault.shortMm)} short`;
-      return { words, from: `from ${describeEye(fault.eye)}`, layerId: id, eye: fault.eye };
+      return { words, from: `from ${describeEye(fault.eye)}`, layerId: id, shortMm: fault.shortMm, eye: fault.eye };
     }
     case 'tooNear': {
       const { id, name } = layerAt(fault.layer);
-      return { words: `${name}: ${shortness(fault.shortMm)} too near the nearest eye`, from: '', layerId: id, eye: fault.eye };
+      return { words: `${name}: ${shortness(fault.shortMm)} too near the nearest eye`, from: '', layerId: id, shortMm: fault.shortMm, eye: fault.eye };
     }
     case 'sideOpen':
-      return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, from: '', layerId: null, eye: null };
+      return { words: `Nothing covers the ${sideWords[fault.side]} side of the glass`, from: '', layerId: null, shortMm: 0, eye: null };
   }
 }

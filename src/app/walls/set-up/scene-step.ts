@@ -1,16 +1,18 @@
 import { ChangeDetectionStrategy, Component, type OnInit, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { type Scene, listScenes } from '@oriel/shared/contracts/scenes';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { SceneView } from '../../scene-view/scene-view';
+import { sceneOnWall } from './scene-on-wall';
 import { WallKeeper } from './wall-keeper';
 
 /** The fifth step: which scene the wall shows. */
 @Component({
   selector: 'oriel-wall-scene-step',
-  imports: [RouterLink, FailureNotice, SceneView],
+  imports: [MatButton, RouterLink, FailureNotice, SceneView],
   template: `
     <fieldset>
       <legend>What the wall shows</legend>
@@ -35,8 +37,24 @@ import { WallKeeper } from './wall-keeper';
             <span>Nothing for now</span>
           </label>
         </div>
-        @if (otherShape(); as words) {
-          <p class="what" role="status">{{ words }}</p>
+        @if (onWall(); as it) {
+          <section class="judged" role="status" aria-label="The scene on this wall">
+            <p><span class="mark" [class.clear]="it.clear" aria-hidden="true"></span><strong>{{ it.verdict }}</strong></p>
+            @if (it.layers.length > 0) {
+              <ul class="figures">
+                @for (layer of it.layers; track layer.name) {
+                  <li>{{ layer.name }}: {{ layer.worst }}</li>
+                }
+              </ul>
+            }
+            @for (remedy of it.remedies; track remedy) {
+              <p class="what">{{ remedy }}</p>
+            }
+            <p class="what figures">{{ it.scaled }}</p>
+            @if (!it.clear) {
+              <a matButton="outlined" [routerLink]="['/compose', chosen()]">Open it in the composer</a>
+            }
+          </section>
         }
       } @else if (!loading.failure()) {
         <p class="what" role="status">Fetching the scenes…</p>
@@ -52,15 +70,9 @@ export class SceneStep implements OnInit {
   protected readonly loading = new Submission();
   protected readonly scenes = signal<readonly Scene[] | null>(null);
   protected readonly chosen = computed(() => this.keeper.setUp()!.sceneId);
-  /** Depths and zone scale with the glass; another shape is said beforehand. */
-  protected readonly otherShape = computed(() => {
+  protected readonly onWall = computed(() => {
     const scene = this.scenes()?.find(({ id }) => id === this.chosen());
-    if (!scene) return '';
-    const { glass } = this.keeper.setUp()!;
-    const composed = scene.document.glass;
-    const shape = (glass.widthMm / glass.heightMm) * (composed.heightMm / composed.widthMm);
-    if (Math.abs(shape - 1) > 0.02) return 'This scene was composed for a glass of another shape: it will be fitted whole, with something empty beside it.';
-    return `Composed for ${Math.round(composed.widthMm)} mm across; here it is scaled by ${(glass.widthMm / composed.widthMm).toFixed(2)}, depths and all.`;
+    return scene ? sceneOnWall(scene.document, this.keeper.setUp()!) : null;
   });
 
   ngOnInit(): void {
