@@ -30,14 +30,18 @@ async function owningHousehold(db: Database, of: Owned, id: string): Promise<str
   return row?.household_id ?? null;
 }
 
+/** The wall whose screen holds this credential; undefined where none does. */
+export async function wallOfScreen(db: Database, credential: string | null) {
+  if (!credential) return undefined;
+  return db
+    .selectFrom('wall')
+    .select(['id', 'household_id'])
+    .where('credential_hash', '=', hashOfToken(credential))
+    .executeTakeFirst();
+}
+
 async function admitScreen(db: Database, credential: string | null): Promise<Asker> {
-  const wall =
-    credential &&
-    (await db
-      .selectFrom('wall')
-      .select(['id', 'household_id'])
-      .where('credential_hash', '=', hashOfToken(credential))
-      .executeTakeFirst());
+  const wall = await wallOfScreen(db, credential);
   if (!wall) throw notPaired();
   return { accountId: null, member: null, wall: { id: wall.id, householdId: wall.household_id } };
 }

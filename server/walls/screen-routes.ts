@@ -1,4 +1,5 @@
 import * as contract from '@oriel/shared/contracts/walls';
+import { wallOfScreen } from '../http/access';
 import { notFound } from '../http/failure';
 import type { Feature } from '../http/mount';
 import type { Parts } from '../parts';
@@ -7,7 +8,7 @@ import { keepReports } from './reports';
 import { wallEvents } from './wall-events';
 import { wallScreen } from './wall-screen';
 
-/** What a paired screen asks, by its credential. */
+/** What a screen asks, by its credential; and first of all whether it has one that holds. */
 export const screenRoutes =
   (parts: Parts): Feature =>
   (mount) => {
@@ -15,6 +16,10 @@ export const screenRoutes =
     const screen = wallScreen(connection.db);
     const openEvents = wallEvents(parts);
 
+    mount(contract.screenPairing, async ({ request }) => {
+      const wall = await wallOfScreen(connection.db, wallCookie.read(request));
+      return { paired: wall !== undefined };
+    });
     mount(contract.wallShows, async ({ wallId, request, response }) => {
       await screen.heard(wallId);
       wallCookie.give(response, wallCookie.read(request) ?? '');

@@ -1,6 +1,6 @@
 import type { Request, Response } from 'express';
+import { wallOfScreen } from '../http/access';
 import { notPaired } from '../http/failure';
-import { hashOfToken } from '../http/secret-token';
 import type { Parts } from '../parts';
 import { wallTopic } from './wall-changes';
 
@@ -9,13 +9,7 @@ export function wallEvents({ connection: { db }, changes, eventStreams, wallCook
   return (wallId: string, request: Request, response: Response): void => {
     const credential = wallCookie.read(request);
     if (!credential) throw notPaired();
-    const isPaired = async () =>
-      (await db
-        .selectFrom('wall')
-        .select('id')
-        .where('id', '=', wallId)
-        .where('credential_hash', '=', hashOfToken(credential))
-        .executeTakeFirst()) !== undefined;
+    const isPaired = async () => (await wallOfScreen(db, credential))?.id === wallId;
 
     const stream = eventStreams.open(response, () => unsubscribe());
     const tell = () =>

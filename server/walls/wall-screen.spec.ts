@@ -51,6 +51,19 @@ const show = async (wall: Wall, sceneId: string | null, who = owner): Promise<Wa
 };
 const imageOf = (scene: Scene) => scene.document.layers[0].image.id;
 
+describe('whether a screen is paired', () => {
+  it('is answered to anyone, and is no longer so once it is unpaired', async () => {
+    expect((await app.browser().ask('get', '/api/wall/pairing')).body).toEqual({ paired: false });
+    expect((await owner.browser.ask('get', '/api/wall/pairing')).body).toEqual({ paired: false });
+    const wall = await hang(null);
+    const screen = await pairedScreen(app, wall.id);
+    expect((await screen.ask('get', '/api/wall/pairing')).body).toEqual({ paired: true });
+    await owner.browser.ask('delete', `/api/walls/${wall.id}/pairing`);
+    const answer = await screen.ask('get', '/api/wall/pairing');
+    expect([answer.status, answer.body]).toEqual([200, { paired: false }]);
+  });
+});
+
 describe('what a screen is shown', () => {
   it('is its wall’s set-up and scene, with the pictures of its layers', async () => {
     const scene = await photoScene();

@@ -235,6 +235,13 @@ export const unpairWall = defineRoute({
   reply: WallReply,
 });
 
+/** Whether whoever asks is some wall's own screen. Answered to anyone without an error, so that a new screen may ask before it shows a code. */
+export const screenPairing = defineRoute({
+  method: 'GET',
+  path: '/api/wall/pairing',
+  access: anyone,
+  reply: z.object({ paired: z.boolean() }),
+});
 /** What the screen itself may use, by its own credential and for nothing but its own wall: otherwise 401 `not-paired`. `scene` is null when none is chosen or it is in the bin. */
 export const wallShows = defineRoute({
   method: 'GET',

@@ -194,6 +194,24 @@ describe('FaceTracking', () => {
     const { tracking, worker } = await following();
     worker.says({ type: 'failed', reason: 'no wasm' });
     expect(tracking.state()).toBe('failed');
+    await vi.advanceTimersByTimeAsync(6000);
+    expect(tracking.state()).toBe('starting');
+  });
+
+  it('waits longer each time a worker fails, five minutes at most, and no longer once it has seen a frame', async () => {
+    vi.spyOn(Math, 'random').mockReturnValue(0.5);
+    const { tracking } = await following();
+    const waits: number[] = [];
+    for (let failure = 0; failure < 9; failure++) {
+      workers.at(-1)!.says({ type: 'failed', reason: 'no wasm' });
+      let waitedMs = 0;
+      for (; tracking.state() === 'failed'; waitedMs += 1000) await vi.advanceTimersByTimeAsync(1000);
+      waits.push(waitedMs / 1000);
+    }
+    expect(waits).toEqual([5, 10, 20, 40, 80, 160, 300, 300, 300]);
+    workers.at(-1)!.says({ type: 'ready', readsTracks: true });
+    workers.at(-1)!.sees(null);
+    workers.at(-1)!.says({ type: 'failed', reason: 'no wasm' });
     await vi.advanceTimersByTimeAsync(5000);
     expect(tracking.state()).toBe('starting');
   });

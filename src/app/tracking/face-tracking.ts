@@ -1,6 +1,7 @@
 import { DOCUMENT, DestroyRef, Injectable, inject, signal } from '@angular/core';
 import type { ViewerMeasure } from '@oriel/shared/viewer/eye-from-landmarks';
 import type { ChoiceRule } from '@oriel/shared/viewer/choose-viewer';
+import { Backoff } from '../core/backoff';
 import { requestCamera } from './camera-request';
 import type { EyeSample } from './eye-sample';
 import type { FrameFeed } from './frame-feed';
@@ -22,6 +23,8 @@ export interface TrackingSetUp {
 
 /** Without a camera, or with one in use elsewhere, it is asked for again this often. */
 const RETRY_MS = 5000;
+/** What failed of itself is tried again after longer and longer, up to this. */
+const LONGEST_RETRY_MS = 300_000;
 const RATE_MS = 1000;
 /** How long a worker that is dismissed has to close its last frame. */
 const FAREWELL_MS = 300;
@@ -76,6 +79,7 @@ export class FaceTracking {
   private worker: Worker | null = null;
   private feed: FrameFeed | null = null;
   private retry: ReturnType<typeof setTimeout> | undefined;
+  private readonly failures = new Backoff(RETRY_MS, LONGEST_RETRY_MS);
   private counter: ReturnType<typeof setInterval> | undefined;
   private faces = 0;
   /** Takes the listener off a track that is let go: Chromium keeps a stream for seconds after, and all that listens to it. */
@@ -184,6 +188,7 @@ export class FaceTracking {
     this.feed.answered(timestampMs);
     const { sample } = this;
     const capturedMs = this.feed.capturedMs(timestampMs);
+    this.failures.succeeded();
     sample.receivedMs = performance.now();
     sample.capturedMs = capturedMs ?? sample.receivedMs;
     sample.captureTimeKnown = capturedMs !== null;
@@ -203,13 +208,13 @@ export class FaceTracking {
     for (const listener of this.listeners) listener(sample);
   }
 
-  /** Says why there is no following, frees everything, and tries again later where that can help. */
+  /** Says why there is no following, frees everything, and tries again later where that can help: a tracker that fails, after longer each time. */
   private goWithout(why: TrackingState): void {
     const { setUp } = this;
     this.release();
     this.currentState.set(why);
     if (setUp && why !== 'refused' && why !== 'unsupported')
-      this.retry = setTimeout(() => void this.start(setUp), RETRY_MS);
+      this.retry = setTimeout(() => void this.start(setUp), why === 'failed' ? this.failures.next() : RETRY_MS);
   }
 
   private release(): void {

@@ -1,5 +1,6 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inject, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
 import { pairingMinutes } from '@oriel/shared/contracts/walls';
+import type { ApiFailure } from '../core/api-failure';
 import { Pairing } from './pairing';
 import { QrCode } from './qr-code';
 
@@ -16,13 +17,17 @@ const minuteMs = 60_000;
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PairingScreen {
+  /** Whether the server said that this screen is not paired: a code is asked for then, and not before. */
+  readonly unpaired = input.required<boolean>();
+  /** Why the server has not said anything, where it could not be asked. */
+  readonly unanswered = input<ApiFailure | null>(null);
   readonly paired = output();
 
   private readonly pairing = inject(Pairing);
   private readonly origin = inject(DOCUMENT).location.origin;
   private readonly nowMs = signal(performance.now());
 
-  protected readonly trouble = this.pairing.trouble;
+  protected readonly trouble = computed(() => this.pairing.trouble() ?? this.unanswered());
   protected readonly place = `${this.origin}/walls`;
   protected readonly code = computed(() => this.pairing.code()?.code ?? null);
   /** In two halves, as people read it to one another. */
@@ -35,7 +40,9 @@ export class PairingScreen {
 
   constructor() {
     const tick = setInterval(() => this.nowMs.set(performance.now()), tickMs);
-    this.pairing.start(() => this.paired.emit());
+    effect(() => {
+      if (this.unpaired()) untracked(() => this.pairing.start(() => this.paired.emit()));
+    });
     inject(DestroyRef).onDestroy(() => {
       clearInterval(tick);
       this.pairing.stop();

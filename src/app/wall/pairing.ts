@@ -2,7 +2,7 @@ import { Injectable, inject, signal } from '@angular/core';
 import { askPairing, claimPairing, pairingMinutes } from '@oriel/shared/contracts/walls';
 import { Api } from '../core/api';
 import { type ApiFailure, toApiFailure } from '../core/api-failure';
-import { Backoff } from './backoff';
+import { Backoff } from '../core/backoff';
 
 const claimMs = 2000;
 const lifeMs = pairingMinutes * 60_000;

@@ -1,8 +1,8 @@
 import { Injectable, inject, signal } from '@angular/core';
-import { wallShows } from '@oriel/shared/contracts/walls';
+import { screenPairing, wallShows } from '@oriel/shared/contracts/walls';
 import { Api } from '../core/api';
 import { type ApiFailure, toApiFailure } from '../core/api-failure';
-import { Backoff } from './backoff';
+import { Backoff } from '../core/backoff';
 import { KeptShowing, type Showing } from './kept-showing';
 import { WallEvents } from './wall-events';
 
@@ -18,6 +18,8 @@ export class WallDevice {
   private readonly backoff = new Backoff(2000, 60_000);
   private asking = false;
   private askAgain = false;
+  /** Whether this screen may not be paired: it is asked about before anything that only a paired one may have. */
+  private doubtful = false;
   private retry: ReturnType<typeof setTimeout> | undefined;
 
   /** What to show; null before anything is known and while the screen is not paired. */
@@ -28,10 +30,12 @@ export class WallDevice {
   readonly trouble = signal<ApiFailure | null>(null);
 
   open(): void {
+    const kept = this.kept.read();
     this.unpaired.set(false);
-    this.showing.set(this.kept.read());
+    this.showing.set(kept);
+    this.doubtful = kept === null;
+    if (kept) this.listen();
     void this.refresh();
-    this.events.listen(() => void this.refresh());
   }
 
   close(): void {
@@ -54,13 +58,26 @@ export class WallDevice {
     this.asking = false;
   }
 
+  private listen(): void {
+    this.events.listen({
+      changed: () => void this.refresh(),
+      lost: () => {
+        this.doubtful = true;
+        void this.refresh();
+      },
+    });
+  }
+
   private async ask(): Promise<void> {
     try {
+      if (this.doubtful && !(await this.api.call(screenPairing)).paired) return await this.leave();
+      this.doubtful = false;
       const showing = await this.api.call(wallShows);
       this.kept.keep(showing);
       this.backoff.succeeded();
       this.trouble.set(null);
       this.showing.set(showing);
+      if (!this.events.listening) this.listen();
     } catch (error) {
       const failure = toApiFailure(error);
       if (failure.failure.code === 'not-paired') return this.leave();

@@ -1,7 +1,7 @@
 import { DOCUMENT, Injectable, inject } from '@angular/core';
 import { wallEvents } from '@oriel/shared/contracts/walls';
 import { addressOf } from '../core/api';
-import { Backoff } from './backoff';
+import { Backoff } from '../core/backoff';
 
 /** The service worker would only be one more thing that can break the line. */
 const address = `${addressOf(wallEvents)}?ngsw-bypass=true`;
@@ -9,8 +9,9 @@ const address = `${addressOf(wallEvents)}?ngsw-bypass=true`;
 const askAnywayMs = 10 * 60_000;
 
 /**
- * Hears from the server when something has changed. `ask` is called then, when a line was lost (it may have ended because the screen was
- * unpaired), when the network comes back, and every ten minutes in case a line is dead without anyone noticing.
+ * Hears from the server when something has changed: `changed` is called then, when the network comes back, and every ten minutes in case a
+ * line is dead without anyone noticing; `lost` when a line has ended, which may be because the screen was unpaired. A lost line is taken up
+ * again after a while that grows.
  */
 @Injectable()
 export class WallEvents {
@@ -19,18 +20,23 @@ export class WallEvents {
   private source: EventSource | null = null;
   private reopening: ReturnType<typeof setTimeout> | undefined;
   private asking: ReturnType<typeof setInterval> | undefined;
-  private ask: () => void = () => undefined;
+  private told: { readonly changed: () => void; readonly lost: () => void } | null = null;
+
+  get listening(): boolean {
+    return this.told !== null;
+  }
 
   /** Listens until `stop`. */
-  listen(ask: () => void): void {
+  listen(told: { readonly changed: () => void; readonly lost: () => void }): void {
     this.stop();
-    this.ask = ask;
+    this.told = told;
     this.window.addEventListener('online', this.online);
     this.asking = setInterval(this.online, askAnywayMs);
     this.open();
   }
 
   stop(): void {
+    this.told = null;
     this.window.removeEventListener('online', this.online);
     clearTimeout(this.reopening);
     clearInterval(this.asking);
@@ -41,7 +47,7 @@ export class WallEvents {
   /** The line is taken up anew as well: the old one may be dead. */
   private readonly online = (): void => {
     this.open();
-    this.ask();
+    this.told?.changed();
   };
 
   private open(): void {
@@ -50,12 +56,13 @@ export class WallEvents {
     const source = (this.source = new EventSource(address));
     source.addEventListener('changed', () => {
       this.backoff.succeeded();
-      this.ask();
+      this.told?.changed();
     });
     source.addEventListener('error', () => {
       if (this.source !== source) return;
       source.close();
-      this.reopening = setTimeout(() => this.online(), this.backoff.next());
+      this.reopening = setTimeout(this.online, this.backoff.next());
+      this.told?.lost();
     });
   }
 }

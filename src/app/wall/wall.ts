@@ -13,17 +13,14 @@ import { WallReporter } from './wall-reporter';
   imports: [PairingScreen, WallPicture],
   providers: [WallDevice, WallEvents, WallReporter, SelfCare],
   template: `
-    @if (device.unpaired()) {
-      <oriel-pairing-screen (paired)="device.open()" />
-    } @else if (device.showing(); as showing) {
+    @if (device.showing(); as showing) {
       <oriel-wall-picture [showing]="showing" [draw]="draw()" />
     } @else {
-      <p role="status">{{ device.trouble() ? 'The server cannot be reached, and no picture is kept on this screen yet. It is tried again by itself.' : '' }}</p>
+      <oriel-pairing-screen [unpaired]="device.unpaired()" [unanswered]="device.trouble()" (paired)="device.open()" />
     }
   `,
   styles: `
     :host { position: fixed; inset: 0; background: #000; color-scheme: dark; cursor: none; }
-    p { position: absolute; inset: 0; margin: auto; width: min(30em, 80%); height: fit-content; text-align: center; font-size: clamp(16px, 2.5vmin, 30px); color: #b8b4aa; }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
