@@ -1,7 +1,8 @@
-import { createBlurHold, holdThroughBlur } from '@oriel/shared/viewer/blur-hold';
+import { correctionForBlur, createBlurCorrection } from '@oriel/shared/viewer/blur-correction';
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
+import { faceWidening } from '@oriel/shared/viewer/face-widening';
 import { leftEyeOf, rightEyeOf } from './face-landmarks';
 import type { Eyes } from './guard';
 import { eyeLineAngle } from './region';
@@ -9,29 +10,41 @@ import type { FaceSample, TrackerSettings } from './tracking-messages';
 
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
- * the eyes, distance held through motion blur. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
+ * the eyes, distance corrected for motion blur. The fit's own midpoint lies between the corners of the eyes, a millimetre lower than the pupils.
  */
 export class FaceMeasure {
   private readonly result = createLandmarkEye();
-  private readonly hold = createBlurHold();
+  private readonly blur = createBlurCorrection();
   private camera: Camera | null = null;
   private settings: TrackerSettings | null = null;
 
-  /** What these landmarks, in pixels of a frame of this size, say of the viewer. */
+  /**
+   * What these landmarks, in pixels of a frame of this size, say of the viewer.
+   * @param detailAlong how much the face's picture holds along a direction against across it; 1 is a sharp one.
+   */
   measure(
     landmarks: Float64Array,
     belief: number,
     frame: { readonly width: number; readonly height: number },
     settings: TrackerSettings,
     timestampMs: number,
+    detailAlong: (directionRad: number) => number = () => 1,
   ): FaceSample {
     const camera = this.cameraFor(frame, settings);
     eyeFromLandmarks(camera, landmarks, this.result, settings.viewer);
-    const { inCamera, eye, fit, headAngles } = this.result;
+    const { inCamera, eye, fit, headAngles, model } = this.result;
     const rightEyePx = rightEyeOf(landmarks);
     const leftEyePx = leftEyeOf(landmarks);
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
-    inCamera.z = holdThroughBlur(this.hold, inCamera.z, eyePx.x, eyePx.y, fit.scalePx, timestampMs);
+    inCamera.z *= correctionForBlur(this.blur, {
+      tMs: timestampMs,
+      xPx: eyePx.x,
+      yPx: eyePx.y,
+      eyeDistancePx: fit.scalePx,
+      eyeLineRad: eyeLineAngle(rightEyePx, leftEyePx),
+      widening: () => faceWidening(model, landmarks, fit),
+      detailAlong,
+    });
     const mmPerPx = inCamera.z / focalPx(camera);
     inCamera.x = (eyePx.x - frame.width / 2) * mmPerPx;
     inCamera.y = (eyePx.y - frame.height / 2) * mmPerPx;

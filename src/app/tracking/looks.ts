@@ -1,3 +1,4 @@
+import { detailAlong } from './detail-along';
 import { decodeDetections, type Detection } from './detection';
 import { anchorsOf, FULL_RANGE, SHORT_RANGE } from './detector-anchors';
 import { LANDMARK_COUNT, LANDMARK_INPUT, placeLandmarks } from './face-landmarks';
@@ -23,6 +24,7 @@ export class Looks {
   private readonly shortInput = new Float32Array(SHORT_RANGE.inputSize ** 2 * 3);
   private readonly fullInput = new Float32Array(FULL_RANGE.inputSize ** 2 * 3);
   private begunRegion: Region = { cx: 0, cy: 0, size: 1, angleRad: 0 };
+  private landmarkAngleRad = 0;
   private readonly landmarkInput = new Float32Array(LANDMARK_INPUT ** 2 * 3);
 
   constructor(private readonly models: FaceModels) {}
@@ -77,8 +79,13 @@ export class Looks {
       (input) => this.models.landmarks(input),
     );
     placeLandmarks(points, region, this.points);
+    this.landmarkAngleRad = region.angleRad;
     return belief;
   }
+
+  /** Detail along a direction of the frame against detail across it, in the region where landmarks were placed last. */
+  readonly detailAlong = (directionRad: number): number =>
+    detailAlong(this.landmarkInput, LANDMARK_INPUT, directionRad - this.landmarkAngleRad);
 
   private timed<T>(
     picture: Picture,

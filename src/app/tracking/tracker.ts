@@ -28,7 +28,7 @@ const DETECTION_PROBABILITY = 0.5;
  * while somebody is. Three times as many where there is less time, which is where fewer than every fifth frame is guarded. Never in a
  * frame that is guarded; together with those fewer than half, so that the usual frame has one look.
  */
-const NEWCOMERS_EVERY = 15;
+const NEWCOMERS_EVERY = 18;
 const BYSTANDERS_EVERY = 6;
 const SELDOM = 3;
 const SELDOM_GUARDED = 5;

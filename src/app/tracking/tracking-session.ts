@@ -124,7 +124,7 @@ export class TrackingSession {
   ): FaceSample {
     return tracker.detected
       ? this.measure.measureEyes(tracker.detected, belief, frame, settings)
-      : this.measure.measure(tracker.points, belief, frame, settings, timestampMs);
+      : this.measure.measure(tracker.points, belief, frame, settings, timestampMs, tracker.looks.detailAlong);
   }
 
   private othersIn(tracker: Tracker, frame: Picture, settings: TrackerSettings): readonly OtherSample[] {
