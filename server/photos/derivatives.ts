@@ -1,11 +1,11 @@
 import sharp from 'sharp';
 import { rgbaToThumbHash } from 'thumbhash';
-import { derivativeEdges } from '@oriel/shared/contracts/photos';
+import { type DerivativeEdge, derivativeEdges } from '@oriel/shared/contracts/photos';
 import { openPicture } from '../pictures/open-picture';
-import { edgesFor, type Edge } from '../storage/keys';
+import { edgesFor } from '../storage/keys';
 
 export interface Derivatives {
-  readonly files: readonly { readonly edge: Edge; readonly bytes: Buffer }[];
+  readonly files: readonly { readonly edge: DerivativeEdge; readonly bytes: Buffer }[];
   /** ThumbHash (E. Wallace, 2023), base64. */
   readonly placeholder: string;
 }

@@ -1,10 +1,10 @@
 import sharp from 'sharp';
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
-import { derivativeEdges } from '@oriel/shared/contracts/photos';
+import { type DerivativeEdge, derivativeEdges } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
 import { openPicture } from '../pictures/open-picture';
 import { lockContent } from '../storage/content';
-import { edgesFor, layerKey, originalKey, type Edge } from '../storage/keys';
+import { edgesFor, layerKey, originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
 
 /** What the files of a layer are made from. */
@@ -16,7 +16,7 @@ const quality = 88;
 const largestEdge = Math.max(...derivativeEdges);
 const largestAtOnce = 2;
 
-async function makeFiles(path: string, { width, height, trim }: LayerSource): Promise<{ edge: Edge; bytes: Buffer }[]> {
+async function makeFiles(path: string, { width, height, trim }: LayerSource): Promise<{ edge: DerivativeEdge; bytes: Buffer }[]> {
   const picture = await openPicture(path);
   const { data, info } = await picture
     .extract({ left: trim.left, top: trim.top, width, height })
@@ -35,7 +35,7 @@ async function makeFiles(path: string, { width, height, trim }: LayerSource): Pr
 /** Makes the files of layers, all of a layer at once. Several who ask at the same moment wait for the same making. */
 export interface LayerFiles {
   /** Makes them now unless they are there: a killed server leaves nothing to catch up on. */
-  ensure(source: LayerSource, edge: Edge): Promise<void>;
+  ensure(source: LayerSource, edge: DerivativeEdge): Promise<void>;
   /** Begins to make them, so that whoever asks soon need not wait; what fails then fails again, and is told, when it is asked for. */
   prepare(source: LayerSource): void;
   /** When nothing is under way. */
@@ -74,7 +74,7 @@ export function layerFiles(db: Database, storage: Storage): LayerFiles {
     });
   }
 
-  async function ensure(source: LayerSource, edge: Edge): Promise<void> {
+  async function ensure(source: LayerSource, edge: DerivativeEdge): Promise<void> {
     if (await storage.exists(layerKey(source.sha256, edge))) return;
     const begun = underWay.get(source.sha256);
     if (begun) return begun;

@@ -1,6 +1,7 @@
 import type { Request, Response } from 'express';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { Parts } from '../parts';
-import { edgeKept, layerKey, type Edge } from '../storage/keys';
+import { edgeKept, layerKey } from '../storage/keys';
 import { sendStored } from '../storage/send-stored';
 import type { LayerSource } from './layer-files';
 
@@ -10,7 +11,7 @@ export async function sendLayerImage(
   request: Request,
   response: Response,
   image: LayerSource,
-  asked: Edge,
+  asked: DerivativeEdge,
 ): Promise<void> {
   const edge = edgeKept(image.width, image.height, asked);
   await layerFiles.ensure(image, edge);

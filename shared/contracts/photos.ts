@@ -5,9 +5,10 @@ import { defineRoute, members } from './route';
 
 /** Long edges of the derivatives, px. */
 export const derivativeEdges = [320, 800, 1600, 3200] as const;
+export type DerivativeEdge = (typeof derivativeEdges)[number];
 export const DerivativeEdge = z.coerce
   .number()
-  .refine((edge): edge is (typeof derivativeEdges)[number] => derivativeEdges.some((known) => known === edge), 'Ask for 320, 800, 1600 or 3200');
+  .refine((edge): edge is DerivativeEdge => derivativeEdges.some((known) => known === edge), 'Ask for 320, 800, 1600 or 3200');
 
 export const photoMaxBytes = 100 * 1024 * 1024;
 export const photoMaxPixels = 120_000_000;

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, linkedSignal } from '@angular/core';
-import { type Photo, photoDerivative } from '@oriel/shared/contracts/photos';
+import { type DerivativeEdge, type Photo, photoDerivative } from '@oriel/shared/contracts/photos';
 import { thumbHashToDataURL } from 'thumbhash';
 import { addressOf } from '../core/api';
 
@@ -24,7 +24,7 @@ import { addressOf } from '../core/api';
 })
 export class PhotoPicture {
   readonly photo = input.required<Photo>();
-  readonly edge = input.required<320 | 800 | 1600 | 3200>();
+  readonly edge = input.required<DerivativeEdge>();
   protected readonly address = computed(() => addressOf(photoDerivative, { photoId: this.photo().id, edge: this.edge() }));
   /** Whether the picture at this address is here: until then the one before it is not to be taken for it. */
   protected readonly loaded = linkedSignal({ source: this.address, computation: () => false });

@@ -1,8 +1,8 @@
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { pixelBytes } from './graphics-bytes';
 import { LayerPictures, type PictureShelf } from './layer-pictures';
 import { type PlacedOnStage, placeLayer } from './place-layer';
-import type { Edge } from './picture-edge';
 import type { LoadOutcome, PictureAddress, Renderer, RendererFacts } from './renderer';
 import type { LayerOnScreen, SceneOnScreen, Stage } from './scene-on-screen';
 
@@ -49,11 +49,13 @@ export class CssRenderer implements Renderer, PictureShelf<HTMLImageElement> {
 
   async load(scene: SceneOnScreen): Promise<LoadOutcome> {
     this.clear();
+    this.element.style.visibility = 'hidden';
     this.drawn = scene.layers.map((layer) => ({ layer, element: null, widthPx: 1, heightPx: 1 }));
     copyEye(scene.homeEye, this.eye);
     const pictures = (this.pictures = new LayerPictures(scene.layers, this));
     this.fit(scene);
     const missing = await pictures.loadFirst();
+    this.element.style.visibility = '';
     pictures.sharpen();
     return { missing };
   }
@@ -74,7 +76,7 @@ export class CssRenderer implements Renderer, PictureShelf<HTMLImageElement> {
     this.element.remove();
   }
 
-  fetch(imageId: string, edge: Edge, signal: AbortSignal): Promise<HTMLImageElement> {
+  fetch(imageId: string, edge: DerivativeEdge, signal: AbortSignal): Promise<HTMLImageElement> {
     const image = this.element.ownerDocument.createElement('img');
     image.alt = '';
     image.draggable = false;

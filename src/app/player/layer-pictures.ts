@@ -1,4 +1,5 @@
-import { type Edge, decodedBytes, firstEdge, sharpEdge } from './picture-edge';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
+import { decodedBytes, firstEdge, sharpEdge } from './picture-edge';
 import { loadPicture } from './picture-load';
 import type { LayerOnScreen } from './scene-on-screen';
 
@@ -7,7 +8,7 @@ export interface PictureShelf<P> {
   /** Largest edge it can hold, px. */
   readonly greatestPx: number;
   /** Fetches and decodes; rejects when that fails. */
-  fetch(imageId: string, edge: Edge, signal: AbortSignal): Promise<P>;
+  fetch(imageId: string, edge: DerivativeEdge, signal: AbortSignal): Promise<P>;
   /** Shows a decoded picture as the layer at `index`, in place of the one before. */
   put(index: number, picture: P): void;
   /** Frees a picture that came too late to be shown. */
@@ -17,7 +18,7 @@ export interface PictureShelf<P> {
 /** The pictures of one scene's layers on their way to a renderer: a small one first, then the sharp one. */
 export class LayerPictures<P> {
   private readonly leaving = new AbortController();
-  private readonly edges: (Edge | 0)[];
+  private readonly edges: (DerivativeEdge | 0)[];
   private sharpening: Promise<void> | null = null;
 
   constructor(
@@ -61,7 +62,7 @@ export class LayerPictures<P> {
     }
   }
 
-  private async bring(index: number, edge: Edge): Promise<void> {
+  private async bring(index: number, edge: DerivativeEdge): Promise<void> {
     const { signal } = this.leaving;
     const picture = await loadPicture(() => this.shelf.fetch(this.layers[index].image.id, edge, signal), signal);
     if (picture === null) return;
@@ -70,7 +71,7 @@ export class LayerPictures<P> {
     this.edges[index] = edge;
   }
 
-  private sharpEdgeOf(layer: LayerOnScreen): Edge {
+  private sharpEdgeOf(layer: LayerOnScreen): DerivativeEdge {
     return sharpEdge(layer, this.shelf.greatestPx);
   }
 }

@@ -1,16 +1,14 @@
-import { derivativeEdges } from '@oriel/shared/contracts/photos';
+import { type DerivativeEdge, derivativeEdges } from '@oriel/shared/contracts/photos';
 import type { LayerOnScreen } from './scene-on-screen';
 
-export type Edge = (typeof derivativeEdges)[number];
-
 /** The first picture of every layer: small, so that something is there at once. */
-export const firstEdge: Edge = derivativeEdges[0];
+export const firstEdge: DerivativeEdge = derivativeEdges[0];
 
 /**
  * The smallest derivative that is as fine as this screen can show the layer from anywhere in the viewing zone, or as the image itself is;
  * `greatestPx` is the largest the renderer can hold.
  */
-export function sharpEdge(layer: LayerOnScreen, greatestPx = Infinity): Edge {
+export function sharpEdge(layer: LayerOnScreen, greatestPx = Infinity): DerivativeEdge {
   const own = Math.max(layer.image.width, layer.image.height);
   const wanted = Math.min(layer.largestPx, own);
   const held = derivativeEdges.filter((edge) => edge <= greatestPx);
@@ -18,7 +16,7 @@ export function sharpEdge(layer: LayerOnScreen, greatestPx = Infinity): Edge {
 }
 
 /** What a derivative takes up decoded, by its width and height in px. */
-export function decodedBytes(layer: LayerOnScreen, edge: Edge, bytesOf: (widthPx: number, heightPx: number) => number): number {
+export function decodedBytes(layer: LayerOnScreen, edge: DerivativeEdge, bytesOf: (widthPx: number, heightPx: number) => number): number {
   const { width, height } = layer.image;
   const share = Math.min(1, edge / Math.max(width, height));
   return bytesOf(Math.round(width * share), Math.round(height * share));

@@ -1,5 +1,5 @@
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { Point3 } from '@oriel/shared/projection/types';
-import type { Edge } from './picture-edge';
 import type { SceneOnScreen } from './scene-on-screen';
 
 export type RendererName = 'css' | 'three';
@@ -24,13 +24,14 @@ export interface LoadOutcome {
 }
 
 /** The address of a layer's picture. */
-export type PictureAddress = (imageId: string, edge: Edge) => string;
+export type PictureAddress = (imageId: string, edge: DerivativeEdge) => string;
 
 /** Draws one scene in an element. Both implementations are fed by `sceneOnScreen` and put every layer where `placeLayer` says. */
 export interface Renderer {
   readonly facts: RendererFacts;
   /**
-   * Settles when the small pictures are there; the sharp ones follow by themselves, each decoded before it is swapped in.
+   * Settles when the small pictures are there, and shows nothing before; the sharp ones follow by themselves, each decoded before
+   * it is swapped in.
    * Takes the place of what was loaded before.
    */
   load(scene: SceneOnScreen): Promise<LoadOutcome>;

@@ -3,10 +3,10 @@ import {
   PlaneGeometry, Scene, ShaderMaterial, Texture, WebGLRenderer,
 } from 'three';
 import { writeOffAxisMatrix } from '@oriel/shared/projection/frustum';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { mippedBytes, pixelBytes } from './graphics-bytes';
 import { LayerPictures, type PictureShelf } from './layer-pictures';
-import type { Edge } from './picture-edge';
 import type { LoadOutcome, PictureAddress, Renderer, RendererFacts } from './renderer';
 import type { SceneOnScreen, Stage } from './scene-on-screen';
 
@@ -71,11 +71,13 @@ export class ThreeRenderer implements Renderer, PictureShelf<ImageBitmap> {
 
   async load(scene: SceneOnScreen): Promise<LoadOutcome> {
     this.clear();
+    this.gl.domElement.style.visibility = 'hidden';
     this.drawn = scene.layers.map(({ opacity }, order) => this.addMesh(opacity, order));
     const pictures = (this.pictures = new LayerPictures(scene.layers, this));
     this.fit(scene);
     this.draw(scene.homeEye);
     const missing = await pictures.loadFirst();
+    this.gl.domElement.style.visibility = '';
     pictures.sharpen();
     return { missing };
   }
@@ -109,7 +111,7 @@ export class ThreeRenderer implements Renderer, PictureShelf<ImageBitmap> {
     this.gl.domElement.remove();
   }
 
-  async fetch(imageId: string, edge: Edge, signal: AbortSignal): Promise<ImageBitmap> {
+  async fetch(imageId: string, edge: DerivativeEdge, signal: AbortSignal): Promise<ImageBitmap> {
     const reply = await fetch(this.addressOf(imageId, edge), { signal });
     if (!reply.ok) throw new Error(`The picture answered ${reply.status}`);
     return createImageBitmap(await reply.blob(), { imageOrientation: 'flipY', premultiplyAlpha: 'premultiply' });

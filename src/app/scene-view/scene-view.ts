@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, type ElementRef, computed, inject, input, signal, viewChild, DestroyRef } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, afterNextRender, computed, inject, input, signal, viewChild } from '@angular/core';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import { layerImageFile } from '@oriel/shared/contracts/scenes';
 import type { Layer, SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Point3 } from '@oriel/shared/projection/types';
@@ -6,10 +7,12 @@ import { addressOf } from '../core/api';
 import { layerMotion } from './layer-motion';
 
 const settleMs = 180;
+/** Pictures are fetched when the window is as near to what is seen of the page, px. */
+const nearPx = 800;
 
 /**
- * A scene as seen through a small window, moving as the pointer passes over it like a viewer walking by.
- * Still under reduced motion. `edge` is the long edge of the pictures to load, px.
+ * A scene as seen through a small window, moving as the pointer passes over it like a viewer walking by. It appears whole: when
+ * the pictures of all its layers are decoded. Still under reduced motion. `edge` is the long edge of the pictures to load, px.
  */
 @Component({
   selector: 'oriel-scene-view',
@@ -21,13 +24,17 @@ const settleMs = 180;
 export class SceneView {
   readonly document = input.required<SceneDocument>();
   readonly label = input.required<string>();
-  readonly edge = input<320 | 800 | 1600 | 3200>(800);
+  readonly edge = input<DerivativeEdge>(800);
   /** Where a layer's picture is, for scenes that do not come from the server's household. */
   readonly pictureOf = input<(layer: Layer, edge: number) => string>((layer, edge) =>
     addressOf(layerImageFile, { imageId: layer.image.id, edge }),
   );
 
   private readonly glassElement = viewChild.required<ElementRef<HTMLElement>>('glass');
+  /** Whether this window is, or was, near enough to what is seen of the page to be worth its pictures. */
+  protected readonly near = signal(false);
+  /** The addresses of pictures that are decoded, or will not come. */
+  private readonly settled = signal<ReadonlySet<string>>(new Set());
   private readonly still = matchMedia('(prefers-reduced-motion: reduce)');
   private readonly eye = signal<Point3 | null>(null);
   private aim: Point3 | null = null;
@@ -41,6 +48,7 @@ export class SceneView {
       .sort((a, b) => b.layer.depthMm - a.layer.depthMm || a.index - b.index)
       .map(({ layer }) => ({ layer, picture: this.pictureOf()(layer, this.edge()), box: this.boxOf(layer) })),
   );
+  protected readonly whole = computed(() => this.layers().every(({ picture }) => this.settled().has(picture)));
   protected readonly motions = computed(() => {
     const { homeEye, glass } = this.document();
     const eye = this.eye() ?? homeEye;
@@ -51,7 +59,20 @@ export class SceneView {
   });
 
   constructor() {
-    inject(DestroyRef).onDestroy(() => cancelAnimationFrame(this.frame));
+    const destroyed = inject(DestroyRef);
+    destroyed.onDestroy(() => cancelAnimationFrame(this.frame));
+    afterNextRender(() => {
+      const observer = new IntersectionObserver(
+        ([{ isIntersecting }]) => {
+          if (!isIntersecting) return;
+          this.near.set(true);
+          observer.disconnect();
+        },
+        { rootMargin: `${nearPx}px` },
+      );
+      observer.observe(this.glassElement().nativeElement);
+      destroyed.onDestroy(() => observer.disconnect());
+    });
   }
 
   /** Takes the pointer's place over the window as a viewer's place in the viewing zone. */
@@ -71,6 +92,16 @@ export class SceneView {
       y: zone.highestMm - within(down) * (zone.highestMm - zone.lowestMm),
       z: homeEye.z,
     });
+  }
+
+  /** A picture has come: decoded before it counts, so that no layer appears after the others. */
+  protected async came(picture: HTMLImageElement, address: string): Promise<void> {
+    await picture.decode().catch(() => undefined);
+    this.settle(address);
+  }
+
+  protected settle(address: string): void {
+    this.settled.update((before) => new Set(before).add(address));
   }
 
   protected goHome(): void {

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, ElementRef, computed, effect, inject, input, linkedSignal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, ElementRef, computed, effect, inject, input, linkedSignal, signal, viewChild } from '@angular/core';
 import type { Point2, Rectangle } from '@oriel/shared/projection/types';
 import { place, setWidth } from '../commands/layer-commands';
 import { type DrawnLayer, placedPerSeen, seenFrom } from '../layers/drawn-layer';
@@ -64,6 +64,12 @@ export class Elevation {
         return [{ drawn, height, transform: `translate(${at}) scale(${(box.width / LAID_OUT_PX).toFixed(6)})` }];
       });
   });
+  private readonly come = signal<ReadonlySet<string>>(new Set());
+  /** Whether all there is to see at first has come; layers added later appear as they come. */
+  protected readonly whole = linkedSignal<boolean, boolean>({
+    source: () => this.painted().every(({ drawn }) => this.come().has(drawn.layer.id)),
+    computation: (all, before) => before?.value || all,
+  });
   /** Sharp enough for how large layers are drawn; never given back, so nothing flickers. */
   protected readonly edge = linkedSignal<number, ReturnType<typeof edgeFor>>({
     source: () => this.glass().width,
@@ -87,6 +93,10 @@ export class Elevation {
 
   constructor() {
     effect(() => this.store.layers().forEach(({ layer }) => void this.alpha.learn(layer.image)));
+  }
+
+  protected settle(layerId: string): void {
+    if (!this.whole()) this.come.update((before) => new Set(before).add(layerId));
   }
 
   /** Handles of a layer larger than the sheet stay within reach, at the edge of the view. */

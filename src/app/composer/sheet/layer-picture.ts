@@ -1,10 +1,11 @@
-import { ChangeDetectionStrategy, Component, effect, input, signal, untracked } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, input, output, signal, untracked } from '@angular/core';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
-import { type Edge, imageAddress } from './image-address';
+import { imageAddress } from './image-address';
 
 /** How long to wait before asking again for a picture that did not come, ms. */
 const AGAIN_MS = 5000;
-const SMALL: Edge = 320;
+const SMALL: DerivativeEdge = 320;
 
 /** The picture of one layer: a sharper one replaces it only once it is decoded, and one that did not come is asked for again. */
 @Component({
@@ -25,7 +26,9 @@ const SMALL: Edge = 320;
 })
 export class LayerPicture {
   readonly image = input.required<LayerImage>();
-  readonly edge = input.required<Edge>();
+  readonly edge = input.required<DerivativeEdge>();
+  /** There is something to see, or to say, of the picture. */
+  readonly settled = output();
   protected readonly source = signal('');
   protected readonly missing = signal(false);
 
@@ -39,7 +42,7 @@ export class LayerPicture {
   }
 
   /** Something to see at once, then what is sharp, for as long as it is wanted. */
-  private async bring(image: LayerImage, edge: Edge, wanted: AbortSignal): Promise<void> {
+  private async bring(image: LayerImage, edge: DerivativeEdge, wanted: AbortSignal): Promise<void> {
     if (!this.source() && edge > SMALL) await this.show(imageAddress(image, SMALL), wanted);
     while (!wanted.aborted && !(await this.show(imageAddress(image, edge), wanted))) await pause(AGAIN_MS);
   }
@@ -55,6 +58,7 @@ export class LayerPicture {
     if (wanted.aborted) return came;
     this.missing.set(!came);
     if (came) this.source.set(address);
+    this.settled.emit();
     return came;
   }
 }
