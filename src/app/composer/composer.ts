@@ -9,6 +9,7 @@ import { Router, RouterLink } from '@angular/router';
 import { toApiFailure } from '../core/api-failure';
 import { FailureNotice } from '../core/failure-notice';
 import { Icon } from '../core/icon/icon';
+import { Crumb } from '../shell/crumb';
 import { PageBar } from '../shell/page-bar';
 import { AddLayersDialog, type AddLayersTo, type NewLayer } from './adding/add-layers-dialog';
 import { MOST_LAYERS, addLayer } from './commands/stack-commands';
@@ -34,7 +35,7 @@ const PHONE_PX = 760;
 /** The page on which a scene is composed. */
 @Component({
   selector: 'oriel-composer',
-  imports: [MatButton, RouterLink, FailureNotice, Icon, DrawingSheet, Ledger, TitleBlock],
+  imports: [MatButton, RouterLink, Crumb, FailureNotice, Icon, DrawingSheet, Ledger, TitleBlock],
   providers: [SceneStore, SceneKeeper, Viewer, SheetView, RoomFigures, LayerAlpha],
   templateUrl: './composer.html',
   styleUrl: './composer.scss',

@@ -1,9 +1,12 @@
-import { ChangeDetectionStrategy, Component, type ElementRef, Injector, afterNextRender, computed, inject, input, output, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, Injector, afterNextRender, computed, inject, input, linkedSignal, output, viewChild } from '@angular/core';
 import { plainMm, readFigure, signedMm } from './words';
 
 let fields = 0;
 
-/** One figure, typed or stepped: arrows by one step, with Shift by ten. What cannot be read stays there and says why. */
+/**
+ * One figure, typed or stepped: arrows by one step, with Shift by ten. What cannot be taken stays there and says why, until it is mended,
+ * Escape puts the figure back, or the figure changes elsewhere.
+ */
 @Component({
   selector: 'oriel-figure-field',
   template: `
@@ -39,7 +42,7 @@ let fields = 0;
     }
   `,
   styleUrl: './figure-field.scss',
-  host: { '[class.bare]': 'bare()' },
+  host: { '[class.bare]': 'bare()', '(document:keydown.escape)': 'giveUp()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FigureField {
@@ -59,8 +62,8 @@ export class FigureField {
   readonly figure = output<number>();
 
   protected readonly id = `figure-${(fields += 1)}`;
-  protected readonly typed = signal<string | null>(null);
-  protected readonly problem = signal('');
+  protected readonly typed = linkedSignal<number, string | null>({ source: this.value, computation: () => null });
+  protected readonly problem = linkedSignal({ source: this.value, computation: () => '' });
   protected readonly shown = computed(() => (this.signed() ? signedMm : plainMm)(this.value(), this.decimals()));
   private readonly injector = inject(Injector);
   private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
@@ -96,6 +99,11 @@ export class FigureField {
     this.figure.emit(next);
     // A row that moves in the ledger takes the focus from its field.
     afterNextRender(() => this.focus(), { injector: this.injector });
+  }
+
+  /** Escape is heard from everywhere: what was refused when the field was left has no focus any more. */
+  protected giveUp(): void {
+    if (this.problem()) this.putBack();
   }
 
   private putBack(): void {

@@ -80,6 +80,29 @@ function missingWords(missing: readonly string[]): string {
     : `The pictures of ${missing.length} layers could not be loaded: ${missing.join(', ')}.`;
 }
 
+/** Words for the switch that has a face followed, and whether a camera is at work or to be. `long` may be left unseen where there is little room. */
+export function followingWords(state: TrackingState): { readonly long: string; readonly short: string; readonly camera: boolean } {
+  switch (state) {
+    case 'refused':
+      return { long: 'Following:', short: 'camera refused', camera: false };
+    case 'no-camera':
+    case 'unsupported':
+      return { long: 'Following:', short: 'no camera', camera: false };
+    case 'camera-busy':
+      return { long: 'Following:', short: 'camera busy', camera: false };
+    case 'failed':
+      return { long: 'Following:', short: 'stopped', camera: false };
+    case 'off':
+      return { long: 'Following', short: 'off', camera: false };
+    default:
+      return { long: 'Following', short: 'on', camera: true };
+  }
+}
+
+/** How is looked, in the ladder's words, while there is looking at all. */
+export const lookingWords = (state: TrackingState, ladder: string): string =>
+  state === 'nobody' || state === 'following' ? ladder : 'nothing: no camera on';
+
 /** Where this browser keeps its permission for the camera. */
 export function howToAllow(userAgent: string): string {
   if (/Firefox\//.test(userAgent)) return 'To allow it, click the crossed-out camera left of the address, then try again.';

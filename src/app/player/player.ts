@@ -13,7 +13,7 @@ import { trackingSetUp } from '../screen/tracking-set-up';
 import { FaceTracking } from '../tracking/face-tracking';
 import { FollowingChoice } from './following-choice';
 import { keepAwake } from './keep-awake';
-import { type PlayerLine, type PlayerOffer, offerWords, playerLine } from './player-words';
+import { type PlayerLine, type PlayerOffer, followingWords, lookingWords, offerWords, playerLine } from './player-words';
 import { Playing } from './playing';
 import { type Figures, ReadOut } from './read-out';
 import { Stillness } from './stillness';
@@ -78,6 +78,8 @@ export class Player {
       userAgent: this.window.navigator.userAgent,
     });
   });
+  /** What the switch says: whether a face is followed if it can be, and why it is not where it cannot. */
+  protected readonly followingSays = computed(() => followingWords(this.following.on() ? this.tracking.state() : 'off'));
   protected readonly lineSeen = computed(() => {
     const line = this.line();
     return line !== null && !(line.fades && this.faded().includes(line.about));
@@ -199,9 +201,9 @@ export class Player {
       facesPerSecond: this.tracking.facesPerSecond(),
       captureToDrawnMs: playing?.meter.captureToDrawnMs() ?? null,
       eye: { ...(playing?.eye ?? { x: 0, y: 0, z: 0 }) },
-      renderer: playing?.facts?.name ?? 'nothing yet',
+      renderer: playing?.facts?.name ?? null,
       graphicsBytes: playing?.facts?.graphicsBytes ?? null,
-      looking: this.tracking.ladder().words,
+      looking: lookingWords(this.tracking.state(), this.tracking.ladder().words),
     });
   }
 

@@ -1,4 +1,6 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { plainMm } from '../figures/words';
+import type { RendererName } from './renderer';
 
 /** What the corner shows of drawing and following. */
 export interface Figures {
@@ -6,12 +8,15 @@ export interface Figures {
   readonly facesPerSecond: number;
   readonly captureToDrawnMs: number | null;
   readonly eye: { readonly x: number; readonly y: number; readonly z: number };
-  readonly renderer: string;
+  /** Null until there is one. */
+  readonly renderer: RendererName | null;
   /** What pictures and drawing take up on the graphics side, bytes; null before anything is drawn. */
   readonly graphicsBytes: number | null;
   /** How finely is looked, in words. */
   readonly looking: string;
 }
+
+const drawnBy: Readonly<Record<RendererName, string>> = { css: 'the processor', three: 'the graphics processor' };
 
 /** Figures in the corner of the picture, for those who set up the room. */
 @Component({
@@ -26,9 +31,9 @@ export interface Figures {
       <dt>Capture to drawing, ms</dt>
       <dd>{{ shown.captureToDrawnMs === null ? '–' : shown.captureToDrawnMs.toFixed(0) }}</dd>
       <dt>Eye, mm</dt>
-      <dd>{{ shown.eye.x.toFixed(0) }}, {{ shown.eye.y.toFixed(0) }}, {{ shown.eye.z.toFixed(0) }}</dd>
-      <dt>Drawn with</dt>
-      <dd>{{ shown.renderer }}</dd>
+      <dd>{{ eye() }}</dd>
+      <dt>Drawn by</dt>
+      <dd>{{ shown.renderer ? drawnBy[shown.renderer] : 'nothing yet' }}</dd>
       <dt>Graphics memory, MB</dt>
       <dd>{{ shown.graphicsBytes === null ? '–' : (shown.graphicsBytes / 1e6).toFixed(0) }}</dd>
       <dt>Looking by</dt>
@@ -44,4 +49,9 @@ export interface Figures {
 })
 export class ReadOut {
   readonly figures = input.required<Figures>();
+  protected readonly drawnBy = drawnBy;
+  protected readonly eye = computed(() => {
+    const { x, y, z } = this.figures().eye;
+    return [x, y, z].map((mm) => plainMm(mm, 0)).join(', ');
+  });
 }

@@ -17,7 +17,7 @@ function cone(x: number, y: number, axisRad: number, half: number, reach: number
 @Component({
   selector: 'oriel-camera-drawing',
   templateUrl: './camera-drawing.html',
-  styleUrl: './camera-drawing.scss',
+  styleUrl: '../drawing/views.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class CameraDrawing {

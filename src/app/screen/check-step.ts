@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, injec
 import { MatButton } from '@angular/material/button';
 import { MatCheckbox } from '@angular/material/checkbox';
 import type { Point3 } from '@oriel/shared/projection/types';
+import { plainMm } from '../figures/words';
 import { FaceTracking } from '../tracking/face-tracking';
 import { trackingWords } from '../tracking/tracking-words';
 import { CameraDrawing } from './camera-drawing';
@@ -24,6 +25,7 @@ export class CheckStep {
 
   private readonly tracking = inject(FaceTracking);
   private readonly seen = signal<Point3 | null>(null);
+  protected readonly mm = (figure: number) => plainMm(figure, 0);
   protected readonly words = computed(() => words[this.tracking.state()]);
   protected readonly running = computed(() => ['asking', 'starting', 'nobody', 'following'].includes(this.tracking.state()));
   protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));

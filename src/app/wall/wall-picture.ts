@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type ElementR
 import type { Scene } from '@oriel/shared/contracts/scenes';
 import { type WallSetUp, wallImageFile } from '@oriel/shared/contracts/walls';
 import { addressOf } from '../core/api';
+import { lookingWords } from '../player/player-words';
 import { type Figures, ReadOut } from '../player/read-out';
 import { windowOnScreen } from '../player/window-on-screen';
 import { FaceTracking } from '../tracking/face-tracking';
@@ -185,8 +186,16 @@ export class WallPicture {
   }
 
   private read(): Figures {
-    const { framesPerS, trackedPerS, ladderWords, renderer, latencyMs } = this.facts();
-    const eye = this.stage?.playing?.eye ?? { x: 0, y: 0, z: 0 };
-    return { framesPerSecond: framesPerS, facesPerSecond: trackedPerS, captureToDrawnMs: latencyMs, eye: { ...eye }, renderer, graphicsBytes: this.stage?.playing?.facts?.graphicsBytes ?? null, looking: ladderWords };
+    const { framesPerS, trackedPerS, ladderWords, latencyMs } = this.facts();
+    const playing = this.stage?.playing;
+    return {
+      framesPerSecond: framesPerS,
+      facesPerSecond: trackedPerS,
+      captureToDrawnMs: latencyMs,
+      eye: { ...(playing?.eye ?? { x: 0, y: 0, z: 0 }) },
+      renderer: playing?.facts?.name ?? null,
+      graphicsBytes: playing?.facts?.graphicsBytes ?? null,
+      looking: lookingWords(this.tracking.state(), ladderWords),
+    };
   }
 }

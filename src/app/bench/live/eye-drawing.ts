@@ -35,7 +35,7 @@ const LEAST_REACH_MM = 1200;
       </figure>
     }
   `,
-  styleUrl: './eye-drawing.scss',
+  styleUrl: '../../drawing/views.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class EyeDrawing {

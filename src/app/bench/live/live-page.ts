@@ -16,6 +16,7 @@ import { RecordRun } from '../runs/record-run';
 import { RunRecorder } from '../runs/run-recorder';
 import { BenchSubject } from '../subject/bench-subject';
 import { CameraPicture } from './camera-picture';
+import { plainMm } from '../../figures/words';
 import { EyeDrawing } from './eye-drawing';
 import { Instrument } from './instrument';
 import { readingsOf } from './instruments';
@@ -51,6 +52,7 @@ export class LivePage {
     () => this.tracking.state() === 'following' || this.tracking.state() === 'nobody',
   );
   protected readonly pictureShown = signal(false);
+  protected readonly mm = (figure: number) => plainMm(figure, 0);
   protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));
   protected readonly readings = computed(() => readingsOf(this.measures, this.renewed() || performance.now()));
 

@@ -19,7 +19,7 @@ import { FigureField } from '../../figures/figure-field';
       }
     </mat-dialog-content>
     <mat-dialog-actions>
-      <button matButton mat-dialog-close>Leave it</button>
+      <button matButton mat-dialog-close>Cancel</button>
       <button matButton="filled" [mat-dialog-close]="{ widthMm: widthMm(), heightMm: heightMm() }">Scale the scene</button>
     </mat-dialog-actions>
   `,

@@ -3,9 +3,11 @@ import { MatIconButton } from '@angular/material/button';
 import { MatTooltip } from '@angular/material/tooltip';
 import { shiftInPixels, shiftOverZone } from '@oriel/shared/projection/zone-shift';
 import { Icon } from '../../core/icon/icon';
+import { Term } from '../../core/term/term';
 import { hideLayer, place, renameLayer, setOpacity, setWidth, showLayer } from '../commands/layer-commands';
 import { duplicateLayer, removeLayer, reorderLayer } from '../commands/stack-commands';
 import type { DrawnLayer } from '../layers/drawn-layer';
+import { meanings } from '../meanings';
 import { SceneStore } from '../scene-store';
 import { plainMm } from '../../figures/words';
 import { FigureField } from '../../figures/figure-field';
@@ -16,7 +18,7 @@ const SCREEN_PX = 1920;
 /** The selected layer's figures, and what can be done with it. */
 @Component({
   selector: 'oriel-layer-figures',
-  imports: [FigureField, MatIconButton, MatTooltip, Icon],
+  imports: [FigureField, MatIconButton, MatTooltip, Icon, Term],
   templateUrl: './layer-figures.html',
   styleUrl: './layer-figures.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -35,6 +37,7 @@ export class LayerFigures {
     const px = shiftInPixels(mm, SCREEN_PX / Math.max(glass.widthMm, glass.heightMm));
     return { mm: plainMm(Math.abs(mm.across)), px: Math.abs(px.across).toFixed(0) };
   });
+  protected readonly meanings = meanings;
   protected readonly screenPx = SCREEN_PX;
 
   protected rename(name: string): void {

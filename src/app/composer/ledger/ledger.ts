@@ -2,10 +2,12 @@ import { ChangeDetectionStrategy, Component, computed, inject, output } from '@a
 import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatTooltip } from '@angular/material/tooltip';
 import { Icon } from '../../core/icon/icon';
+import { Term } from '../../core/term/term';
 import { growLayersToCover, growthToCover } from '../commands/setting-commands';
 import { setDepth } from '../commands/layer-commands';
 import { depthLimits } from '../commands/limits';
 import type { DrawnLayer } from '../layers/drawn-layer';
+import { meanings } from '../meanings';
 import { SceneStore } from '../scene-store';
 import { signedMm } from '../../figures/words';
 import { FigureField } from '../../figures/figure-field';
@@ -21,7 +23,7 @@ interface BleedWords {
 /** The layers and the room as figures, the farthest layer first. */
 @Component({
   selector: 'oriel-ledger',
-  imports: [MatButton, MatIconButton, MatTooltip, Icon, FigureField, LayerFigures, RoomForm],
+  imports: [MatButton, MatIconButton, MatTooltip, Icon, Term, FigureField, LayerFigures, RoomForm],
   templateUrl: './ledger.html',
   styleUrl: './ledger.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -29,6 +31,7 @@ interface BleedWords {
 export class Ledger {
   readonly addLayers = output();
   protected readonly store = inject(SceneStore);
+  protected readonly meanings = meanings;
   protected readonly limits = computed(() => depthLimits(this.store.document()));
   protected readonly growth = computed(() => (this.store.faults().length > 0 ? growthToCover(this.store.document()) : 1));
   protected readonly rows = computed(() =>

@@ -3,8 +3,10 @@ import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import type { Glass, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { Icon } from '../../core/icon/icon';
+import { Term } from '../../core/term/term';
 import { eyeLimits } from '../commands/limits';
 import { creditScene, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
+import { meanings } from '../meanings';
 import { SceneStore } from '../scene-store';
 import { FigureField } from '../../figures/figure-field';
 import { Viewer } from '../walk/viewer';
@@ -23,7 +25,7 @@ const ZONE_LABELS: readonly { readonly side: keyof ViewingZone; readonly label: 
 /** The figures of the room a scene is drawn for: its name, glass, home eye and viewing zone. */
 @Component({
   selector: 'oriel-room-form',
-  imports: [FigureField, MatButton, Icon],
+  imports: [FigureField, MatButton, Icon, Term],
   templateUrl: './room-form.html',
   styleUrl: './room-form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -34,6 +36,7 @@ export class RoomForm {
   protected readonly viewer = inject(Viewer);
   private readonly dialog = inject(MatDialog);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
+  protected readonly meanings = meanings;
   protected readonly zoneLabels = ZONE_LABELS;
   protected readonly eyeLimits = computed(() => eyeLimits(this.store.document()));
 

@@ -2,11 +2,11 @@ import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Point2, Point3, Rectangle } from '@oriel/shared/projection/types';
 import { walkPath } from '../walk/walk-path';
 import { type DrawnLayer, seenFrom } from '../layers/drawn-layer';
-import { describeDepth, signedMm } from '../../figures/words';
+import { describeDepth, plainMm, signedMm } from '../../figures/words';
 import { acrossOf, glassAcross, sidesOf, spanAcross } from '../../drawing/across';
 import { assumedCamera } from './assumed-camera';
 import { depthTicks } from '../../drawing/depth-scale';
-import { type DepthFrame, asPoints, boxOf } from '../../drawing/frames';
+import { type DepthFrame, type Frame, asPoints, boxOf } from '../../drawing/frames';
 import { spreadLabels } from './labels';
 import { depthRangeOf, drawnAt } from '../../drawing/placing';
 
@@ -53,13 +53,16 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
   const [from, to] = glassAcross(frame.view, glass);
   const { low, high } = sidesOf(frame.view);
   const camera = assumedCamera(frame.view, glass, zone);
+  const zoneBox = boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm }));
+  // From here on only eyes stand before the glass: their distance is printed as z, without a sign, and not as a depth.
+  const eyesFromMm = frame.depth.broken?.atMm ?? Math.min(zone.nearestMm, homeEye.z);
   const lens = drawnAt(frame, { across: camera.across, z: 0 });
   // Seen from the side there and back lie on one line: half a turn draws it once.
   const [start, turns] = frame.view === 'plan' ? [0, 1] : [0.25, 0.5];
   const path = Array.from({ length: 73 }, (_, i) => walkPath(zone, homeEye, start + (turns * i) / 72));
   return {
     glass: { from: drawnAt(frame, { across: from, z: 0 }), to: drawnAt(frame, { across: to, z: 0 }) },
-    zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
+    zone: zoneBox,
     path: asPoints(path.map((eye) => drawnAt(frame, { across: acrossOf(frame.view, eye), z: eye.z }))),
     lens,
     cone: camera.slopes.map((slope) =>
@@ -68,12 +71,20 @@ export function drawSetting(frame: DepthFrame, document: SceneDocument) {
     breakLine: frame.depth.broken ? breakLine(frame, frame.depth.broken.atMm) : null,
     pitchDownDeg: camera.pitchDownDeg,
     home: drawnAt(frame, { across: acrossOf(frame.view, homeEye), z: homeEye.z }),
+    zoneLabel: zoneLabel(frame, zoneBox),
     ticks: depthTicks(frame.depth, -beforeMm, behindMm).map((depthMm) => ({
       depthMm,
-      text: depthMm === 0 ? '0' : signedMm(depthMm),
+      text: -depthMm >= eyesFromMm ? plainMm(-depthMm) : signedMm(depthMm),
       at: drawnAt(frame, { across: 0, z: -depthMm }),
     })),
   };
+}
+
+/** Where the zone's name may stand: in its lower left corner, and in its upper one, as far as the drawing shows them. */
+function zoneLabel(frame: DepthFrame, zone: Frame): { readonly low: Point2; readonly high: Point2 } {
+  const x = Math.max(zone.left, frame.left) + 8;
+  const bottom = Math.min(zone.top + zone.height, frame.top + frame.height);
+  return { low: { x, y: bottom - 8 }, high: { x, y: zone.top + 16 } };
 }
 
 /** A long break across the drawing: a thin line with two zigzags. */

@@ -15,6 +15,9 @@ import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
 import { type DepthFrame, type ElevationFrame, asPoints } from '../../drawing/frames';
 import { snapToRound, toMillimetre } from './snapping';
 
+/** So near to the eye its own words stand, px. */
+const besideEyePx = 90;
+
 /** Plan or section: the views in which depth is seen, and dragged. */
 @Component({
   selector: 'oriel-depth-view',
@@ -51,6 +54,12 @@ export class DepthView {
     const eye = this.viewer.eye();
     const at = drawnAt(this.frame(), { across: acrossOf(this.frame().view, eye), z: eye.z });
     return { at, words: `${this.viewer.atHome() ? 'home eye' : 'eye'} ${describeEye(eye)}` };
+  });
+  /** Out of the way of what is written beside the eye. */
+  protected readonly zoneLabel = computed(() => {
+    const { low, high } = this.setting().zoneLabel;
+    const { x, y } = this.eye().at;
+    return y > low.y - besideEyePx && x < low.x + besideEyePx ? high : low;
   });
   protected readonly limits = computed(() => depthLimits(this.store.document()));
 

@@ -9,6 +9,7 @@ import { Icon } from '../../core/icon/icon';
 import { Submission } from '../../core/submission';
 import { saveWords } from '../../saving/save-words';
 import { sayMoment } from '../../core/moments';
+import { Crumb } from '../../shell/crumb';
 import { PageBar } from '../../shell/page-bar';
 import { UncertaintyBlock } from '../means/uncertainty-block';
 import { MarkedSpot } from '../measuring/marked-spot';
@@ -28,7 +29,7 @@ const names: Readonly<Record<Step, string>> = { glass: 'Glass', camera: 'Camera'
 /** The set-up of one wall: six short steps beside a drawing that follows what is typed. */
 @Component({
   selector: 'oriel-set-up-page',
-  imports: [MatButton, RouterLink, FailureNotice, Icon, UncertaintyBlock, RoomSheet, GlassStep, CameraStep, RoomStep, ViewerStep, SceneStep, PairStep],
+  imports: [MatButton, RouterLink, Crumb, FailureNotice, Icon, UncertaintyBlock, RoomSheet, GlassStep, CameraStep, RoomStep, ViewerStep, SceneStep, PairStep],
   providers: [WallKeeper, MarkedSpot],
   templateUrl: './set-up-page.html',
   styleUrl: './set-up-page.scss',
