@@ -28,7 +28,7 @@ export function mustWrite(
   if (last.revision === asked.revision) return true;
   if (last.revision === asked.revision + 1 && last.saved_by === asked.accountId && asked.isSame) return false;
   const savedBy = saverOf(last);
-  const detail = { revision: last.revision, savedBy, savedAt: last.saved_at.toISOString() };
+  const detail = { revision: last.revision, savedBy, savedById: last.saved_by, savedAt: last.saved_at.toISOString() };
   throw new DomainFailure(
     409,
     'revision-moved',

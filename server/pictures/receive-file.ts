@@ -17,7 +17,7 @@ export interface ReceivedFile {
   readonly sha256: string;
   readonly bytes: number;
   readonly name: string;
-  /** When the file was last changed, if the page said so. */
+  /** When the file was last changed by the sender's clock, if the page said so. */
   readonly modifiedAt: Date | null;
 }
 
@@ -53,7 +53,10 @@ function hashingEngine(incomingDir: string): StorageEngine {
   };
 }
 
-/** Receives the one file of a multipart request. The page sends the file's own date in the field `lastModified`, before the file. */
+/**
+ * Receives the one file of a multipart request. The page sends the file's own date in the field `lastModified`, before the file: what its clock
+ * showed then, as if it were UTC.
+ */
 export function receiveFile(incomingDir: string): RequestHandler {
   return multer({
     storage: hashingEngine(incomingDir),

@@ -10,23 +10,17 @@ const dayMs = 24 * 3600 * 1000;
 export const plausibleMoment = (date: Date | null | undefined): Date | null =>
   date && date.getTime() >= earliest && date.getTime() <= Date.now() + dayMs ? date : null;
 
-/** EXIF 2.32, tag OffsetTimeOriginal: "+02:00" or "-05:30". Minutes east of UTC. */
-function offsetMinutes(text: unknown): number {
-  const match = typeof text === 'string' ? /^([+-])(\d\d):(\d\d)/.exec(text) : null;
-  return match ? (match[1] === '-' ? -1 : 1) * (Number(match[2]) * 60 + Number(match[3])) : 0;
-}
-
 /**
- * When the photograph was taken, by EXIF DateTimeOriginal and OffsetTimeOriginal; without an offset the camera's wall clock is taken as UTC.
+ * What the camera's clock showed when the photograph was taken, by EXIF DateTimeOriginal, as if it were UTC. OffsetTimeOriginal is left alone:
+ * few cameras write it, and a day at the sea belongs to the day it was there, in the order in which the clock counted.
  * Null when EXIF says nothing, or nothing that can be.
  */
 export function takenDate(exif: Buffer | undefined): Date | null {
   if (!exif) return null;
   try {
-    const tags = readExif(exif).Photo;
-    const wallClock = tags?.DateTimeOriginal;
+    const wallClock = readExif(exif).Photo?.DateTimeOriginal;
     if (!(wallClock instanceof Date) || wallClock.getTime() === neverSet) return null;
-    return plausibleMoment(new Date(wallClock.getTime() - offsetMinutes(tags?.['OffsetTimeOriginal']) * 60_000));
+    return plausibleMoment(wallClock);
   } catch {
     // Damaged EXIF is no reason to refuse a picture.
     return null;

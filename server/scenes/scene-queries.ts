@@ -13,6 +13,7 @@ export const toScene = (row: SceneRow): Scene => ({
   revision: row.revision,
   savedAt: row.saved_at.toISOString(),
   savedBy: saverOf(row),
+  savedById: row.saved_by,
 });
 
 const scenes = (db: Database) =>

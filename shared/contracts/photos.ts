@@ -24,6 +24,7 @@ export const Photo = z.object({
   bytes: z.number().int(),
   mime: z.string(),
   hasAlpha: z.boolean(),
+  /** What the camera's clock showed, wherever it was, written as if it were UTC: to be shown as it is, in no zone. */
   takenAt: Moment,
   uploadedAt: Moment,
   uploadedBy: z.string(),

@@ -65,6 +65,8 @@ export const Scene = z.object({
   revision: z.number().int(),
   savedAt: Moment,
   savedBy: z.string(),
+  /** The account that saved it; null once that is gone. */
+  savedById: Id.nullable(),
 });
 export type Scene = z.infer<typeof Scene>;
 
@@ -97,7 +99,7 @@ export const readScene = defineRoute({
   reply: SceneReply,
 });
 /**
- * Saves over `revision`, which must be the newest: otherwise 409 `revision-moved` with `detail` {revision, savedBy, savedAt},
+ * Saves over `revision`, which must be the newest: otherwise 409 `revision-moved` with `detail` {revision, savedBy, savedById, savedAt},
  * and nothing is written.
  */
 export const saveScene = defineRoute({

@@ -159,7 +159,7 @@ export const readWall = defineRoute({
   reply: WallReply,
 });
 /**
- * Saves over `revision`, which must be the newest: otherwise 409 `revision-moved` with `detail` {revision, savedBy, savedAt}, and nothing is
+ * Saves over `revision`, which must be the newest: otherwise 409 `revision-moved` with `detail` {revision, savedBy, savedById, savedAt}, and nothing is
  * written. 422 `scene-not-here` for a scene that is binned or not of this household. The screen hears of it within a second.
  */
 export const saveWall = defineRoute({

@@ -89,7 +89,7 @@ test('the figures come and go with the letter i', async ({ signedInPage, expectA
   const readOut = page.locator('oriel-read-out');
   await expect(readOut).toHaveCount(0);
   await page.keyboard.press('i');
-  for (const words of ['Frames drawn a second', 'Faces tracked a second', 'Capture to drawing, ms', 'Eye, mm', 'css']) await expect(readOut).toContainText(words);
+  for (const words of ['Frames drawn a second', 'Faces tracked a second', 'Capture to drawing, ms', 'Eye, mm', 'Drawn by', 'the processor']) await expect(readOut).toContainText(words);
   await expect.poll(async () => Number(await readOut.locator('dd').first().textContent())).toBeGreaterThan(10);
   await expectAccessible(page);
   await page.keyboard.press('i');

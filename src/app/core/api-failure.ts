@@ -1,6 +1,9 @@
 import { HttpErrorResponse } from '@angular/common/http';
 import { Failure } from '@oriel/shared/contracts/failure';
 
+/** Of HTTP's refusals those that time or signing in can change: not signed in, too slow, in conflict, too early, too many. */
+const passing: readonly number[] = [401, 408, 409, 425, 429];
+
 /** What the page knows of something that went wrong: the server's own words, or ours when it could not be reached. */
 export class ApiFailure extends Error {
   constructor(
@@ -14,6 +17,11 @@ export class ApiFailure extends Error {
 
   get offline(): boolean {
     return this.status === 0;
+  }
+
+  /** Whether the same request may yet succeed: what was refused for what it is will be refused again. */
+  get mayPass(): boolean {
+    return this.status < 400 || this.status >= 500 || passing.includes(this.status);
   }
 }
 

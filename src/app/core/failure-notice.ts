@@ -18,21 +18,25 @@ import { Icon } from './icon/icon';
             <span class="marginal">Reference {{ shown.failure.reference }}</span>
           }
         </div>
-        @if (retryable()) {
+        @if (retryable() && shown.mayPass) {
           <button matButton="outlined" type="button" (click)="retry.emit()">Try again</button>
         }
       </div>
     }
   `,
   styles: `
+    :host { display: block; }
+    :host(.none) { display: none; }
     .notice { display: flex; gap: 12px; align-items: flex-start; padding: 12px 14px; border: 1px solid var(--not-clear); border-radius: var(--corner); background: var(--sheet); }
     oriel-icon { color: var(--not-clear); margin-top: 1px; }
     div > div { flex: 1; display: grid; gap: 2px; }
   `,
+  host: { '[class.none]': '!failure()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FailureNotice {
   readonly failure = input<ApiFailure | null>(null);
+  /** Whether trying again is offered, where it can help. */
   readonly retryable = input(false);
   readonly retry = output();
 }

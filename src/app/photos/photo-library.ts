@@ -5,34 +5,35 @@ import { Session } from '../core/session';
 
 const askAgainMs = 1500;
 
-/** The household's photos as far as they are fetched, newest taken first; either those at hand or those in the bin. */
+/** A household's photos as far as they are fetched, newest taken first; either those at hand or those in the bin. */
 @Injectable()
 export class PhotoLibrary {
   private readonly api = inject(Api);
   private readonly session = inject(Session);
   private readonly fetched = signal<readonly Photo[]>([]);
-  private next: string | null = null;
+  private readonly next = signal<string | null>(null);
   private fetching: Promise<void> | null = null;
-  private question = { search: '', bin: false };
+  private question = { search: '', bin: false, householdId: '' };
   private timer: ReturnType<typeof setTimeout> | undefined;
 
   readonly photos = this.fetched.asReadonly();
   readonly total = signal(0);
   readonly loaded = signal(false);
+  readonly hasMore = computed(() => this.next() !== null);
   readonly waiting = computed(() => this.fetched().filter((photo) => photo.state === 'waiting'));
 
   constructor() {
     inject(DestroyRef).onDestroy(() => clearTimeout(this.timer));
   }
 
-  /** Starts over with another question. */
-  async open(search: string, bin: boolean): Promise<void> {
-    this.question = { search, bin };
+  /** Starts over with another question; of the household one is in, unless another is named. */
+  async open(search: string, bin: boolean, householdId = this.session.householdId()): Promise<void> {
+    this.question = { search, bin, householdId };
     const asked = this.question;
     const page = await this.api.call(listPhotos, { params: this.here(), query: this.query() });
     if (asked !== this.question) return;
     this.fetched.set(page.photos);
-    this.next = page.next;
+    this.next.set(page.next);
     this.total.set(page.total);
     this.loaded.set(true);
     this.watchWaiting();
@@ -40,7 +41,7 @@ export class PhotoLibrary {
 
   /** Fetches the next page, if there is one and it is not being fetched. */
   more(): Promise<void> {
-    if (!this.next) return Promise.resolve();
+    if (!this.next()) return Promise.resolve();
     this.fetching ??= this.fetchMore().finally(() => (this.fetching = null));
     return this.fetching;
   }
@@ -52,7 +53,7 @@ export class PhotoLibrary {
     if (others.length === this.fetched().length) this.total.update((n) => n + 1);
     const at = others.findIndex((known) => isBefore(photo, known));
     if (at >= 0) this.fetched.set([...others.slice(0, at), photo, ...others.slice(at)]);
-    else this.fetched.set(this.next ? others : [...others, photo]);
+    else this.fetched.set(this.next() ? others : [...others, photo]);
     this.watchWaiting();
   }
 
@@ -78,11 +79,11 @@ export class PhotoLibrary {
 
   private async fetchMore(): Promise<void> {
     const asked = this.question;
-    const page = await this.api.call(listPhotos, { params: this.here(), query: { ...this.query(), after: this.next ?? undefined } });
+    const page = await this.api.call(listPhotos, { params: this.here(), query: { ...this.query(), after: this.next() ?? undefined } });
     if (asked !== this.question) return;
     const known = new Set(this.fetched().map((photo) => photo.id));
     this.fetched.update((photos) => [...photos, ...page.photos.filter((photo) => !known.has(photo.id))]);
-    this.next = page.next;
+    this.next.set(page.next);
     this.watchWaiting();
   }
 
@@ -107,7 +108,7 @@ export class PhotoLibrary {
   }
 
   private here() {
-    return { householdId: this.session.householdId() };
+    return { householdId: this.question.householdId };
   }
 }
 

@@ -1,5 +1,5 @@
 import type { TrackingState } from '../tracking/tracking-state';
-import { type PlayerSituation, howToAllow, playerLine } from './player-words';
+import { type PlayerSituation, followingWords, howToAllow, lookingWords, playerLine } from './player-words';
 
 const usual: PlayerSituation = {
   screenDecided: true, missing: [], following: true, tracking: 'following', tooSlow: false, still: false, privacyTold: false, byHand: false,
@@ -43,6 +43,26 @@ describe('playerLine', () => {
   it('says that less motion is honoured, and promises no drift', () => {
     expect(lineFor({ following: false, still: true })).toMatchObject({ offers: ['follow'], words: expect.stringContaining('less motion') as unknown });
     expect(lineFor({ tracking: 'nobody', still: true })?.words).not.toContain('drift');
+  });
+});
+
+describe('what the switch and the figures say of following', () => {
+  it('is on while a face is looked for, and off where that is chosen', () => {
+    for (const state of ['asking', 'starting', 'nobody', 'following'] as const) expect(followingWords(true, state)).toMatchObject({ short: 'on', camera: true });
+    for (const state of ['off', 'following', 'refused'] as const) expect(followingWords(false, state)).toMatchObject({ short: 'off', camera: false });
+  });
+
+  it.each([
+    ['refused', 'camera refused'],
+    ['no-camera', 'no camera'],
+    ['unsupported', 'no camera'],
+    ['camera-busy', 'camera busy'],
+    ['failed', 'stopped'],
+  ] as const)('is not said to be on when %s', (state, short) => expect(followingWords(true, state)).toMatchObject({ short, camera: false }));
+
+  it('claims no looking without a camera', () => {
+    expect(lookingWords('following', 'zoomed detector')).toBe('zoomed detector');
+    expect(lookingWords('refused', 'zoomed detector')).toBe('nothing: no camera on');
   });
 });
 

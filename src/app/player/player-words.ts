@@ -80,8 +80,17 @@ function missingWords(missing: readonly string[]): string {
     : `The pictures of ${missing.length} layers could not be loaded: ${missing.join(', ')}.`;
 }
 
-/** Words for the switch that has a face followed, and whether a camera is at work or to be. `long` may be left unseen where there is little room. */
-export function followingWords(state: TrackingState): { readonly long: string; readonly short: string; readonly camera: boolean } {
+/** What the switch that has a face followed says; `long` may be left unseen where there is little room. */
+export interface FollowingWords {
+  readonly long: string;
+  readonly short: string;
+  /** Whether a camera is at work, or to be. */
+  readonly camera: boolean;
+}
+
+/** Whether a face is to be followed, and, where it is and cannot be, why not. */
+export function followingWords(wanted: boolean, state: TrackingState): FollowingWords {
+  if (!wanted) return { long: 'Following', short: 'off', camera: false };
   switch (state) {
     case 'refused':
       return { long: 'Following:', short: 'camera refused', camera: false };
@@ -92,8 +101,6 @@ export function followingWords(state: TrackingState): { readonly long: string; r
       return { long: 'Following:', short: 'camera busy', camera: false };
     case 'failed':
       return { long: 'Following:', short: 'stopped', camera: false };
-    case 'off':
-      return { long: 'Following', short: 'off', camera: false };
     default:
       return { long: 'Following', short: 'on', camera: true };
   }

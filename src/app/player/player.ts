@@ -79,7 +79,7 @@ export class Player {
     });
   });
   /** What the switch says: whether a face is followed if it can be, and why it is not where it cannot. */
-  protected readonly followingSays = computed(() => followingWords(this.following.on() ? this.tracking.state() : 'off'));
+  protected readonly followingSays = computed(() => followingWords(this.following.on(), this.tracking.state()));
   protected readonly lineSeen = computed(() => {
     const line = this.line();
     return line !== null && !(line.fades && this.faded().includes(line.about));

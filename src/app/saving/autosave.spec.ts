@@ -11,7 +11,7 @@ const failure = (status: number, code: string, detail?: Record<string, unknown>)
 /** A server of one scene that can be cut off, before or after it hears a request; it keeps what it was sent. */
 class SmallServer implements Keeping<SceneDocument> {
   readonly same = sameBy(SceneDocument);
-  scene: Scene = { id: layerIds[0], householdId: layerIds[1], document: someScene, revision: 7, savedAt: '2026-01-05T10:00:00Z', savedBy: 'Ilse' };
+  scene: Scene = { id: layerIds[0], householdId: layerIds[1], document: someScene, revision: 7, savedAt: '2026-01-05T10:00:00Z', savedBy: 'Ilse', savedById: null };
   network: 'up' | 'down' | 'answers-lost' = 'up';
   broken = false;
   draft: Draft<SceneDocument> | null = null;

@@ -6,6 +6,8 @@ import type { Draft } from './draft';
 export interface MovedOn {
   readonly revision: number;
   readonly savedBy: string;
+  /** The account that saved, where that is told. */
+  readonly savedById?: string | null;
   readonly savedAt: string;
 }
 
@@ -45,7 +47,7 @@ const LONGEST_RETRY_MS = 60_000;
  */
 export class Autosave<T> {
   private readonly current = signal<SaveState>({ kind: 'saved' });
-  private readonly base = signal({ revision: 0, savedAt: '', savedBy: '' });
+  private readonly base = signal<MovedOn>({ revision: 0, savedAt: '', savedBy: '' });
   private pending: T | null = null;
   private sent: T | null = null;
   private inFlight: Promise<void> | null = null;
@@ -168,13 +170,13 @@ export class Autosave<T> {
     this.failures += 1;
   }
 
-  private adopt({ revision, savedAt, savedBy }: MovedOn): void {
-    this.base.set({ revision, savedAt, savedBy });
+  private adopt({ revision, savedAt, savedBy, savedById }: MovedOn): void {
+    this.base.set({ revision, savedAt, savedBy, savedById });
   }
 }
 
 function movedOn({ failure }: ApiFailure): MovedOn | null {
-  const { revision, savedBy, savedAt } = failure.detail ?? {};
+  const { revision, savedBy, savedById, savedAt } = failure.detail ?? {};
   if (failure.code !== 'revision-moved' || typeof revision !== 'number') return null;
-  return { revision, savedBy: String(savedBy), savedAt: String(savedAt) };
+  return { revision, savedBy: String(savedBy), savedById: typeof savedById === 'string' ? savedById : null, savedAt: String(savedAt) };
 }

@@ -10,7 +10,7 @@ import { Session } from '../../core/session';
 import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
-import { mailedToken } from '../mailed-token';
+import { mailedToken, wholeToken } from '../mailed-token';
 import { Threshold } from '../threshold/threshold';
 
 /** What the mailed link of a sign-up opens: the household and its first owner are named here. */
@@ -36,7 +36,7 @@ export class Confirm {
 
   protected confirm(): Promise<void> {
     return this.submission.run(async () => {
-      const { account } = await this.api.call(confirmSignUp, { body: { token: this.token, ...this.form.getRawValue() } });
+      const { account } = await this.api.call(confirmSignUp, { body: { token: wholeToken(this.token), ...this.form.getRawValue() } });
       this.session.enter(account);
       await this.router.navigateByUrl('/photos');
     });

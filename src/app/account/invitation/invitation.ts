@@ -11,7 +11,7 @@ import { Session } from '../../core/session';
 import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
-import { mailedToken } from '../mailed-token';
+import { mailedToken, wholeToken } from '../mailed-token';
 import { Threshold } from '../threshold/threshold';
 
 /** What a mailed invitation opens: join as who you are, sign in first, or make an account. */
@@ -40,7 +40,7 @@ export class InvitationPage implements OnInit {
   }
 
   protected read(): Promise<void> {
-    return this.reading.run(async () => this.invitation.set(await this.api.call(readInvitation, { body: { token: this.token } })));
+    return this.reading.run(async () => this.invitation.set(await this.api.call(readInvitation, { body: { token: wholeToken(this.token) } })));
   }
 
   protected join(): Promise<void> {

@@ -9,7 +9,7 @@ import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
-import { mailedToken } from '../mailed-token';
+import { mailedToken, wholeToken } from '../mailed-token';
 import { Threshold } from '../threshold/threshold';
 
 @Component({
@@ -44,7 +44,7 @@ export class Reset {
 
   protected reset(): Promise<void> {
     return this.submission.run(async () => {
-      await this.api.call(resetPassword, { body: { token: this.token, ...this.form.getRawValue() } });
+      await this.api.call(resetPassword, { body: { token: wholeToken(this.token), ...this.form.getRawValue() } });
       this.done.set(true);
     });
   }

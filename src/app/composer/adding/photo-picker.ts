@@ -1,26 +1,34 @@
 import { ChangeDetectionStrategy, Component, effect, inject, input, model, signal, untracked } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { listPhotos, photoDerivative, type Photo } from '@oriel/shared/contracts/photos';
-import { Api, addressOf } from '../../core/api';
-import { type ApiFailure, toApiFailure } from '../../core/api-failure';
 import { FailureNotice } from '../../core/failure-notice';
+import { Submission } from '../../core/submission';
+import { PhotoLibrary } from '../../photos/photo-library';
+import { PhotoPicture } from '../../photos/photo-picture';
 
-const PAGE = 60;
+const searchAfterMs = 250;
 
-/** The household's photos, to choose some of, in the order they are chosen. */
+/** The household's photos, to choose some of, in the order they are chosen. One that is still being prepared shows so, and can be chosen once it is ready. */
 @Component({
   selector: 'oriel-photo-picker',
-  imports: [MatButton, FailureNotice],
+  imports: [MatButton, FailureNotice, PhotoPicture],
+  providers: [PhotoLibrary],
   template: `
     <input #words type="search" placeholder="Search photos by name" aria-label="Search photos by name" (input)="search.set(words.value)" />
-    <oriel-failure-notice [failure]="failure()" [retryable]="true" (retry)="begin(words.value)" />
-    @if (photos().length > 0) {
+    <oriel-failure-notice [failure]="fetching.failure()" [retryable]="true" (retry)="load()" />
+    @if (library.photos().length > 0) {
       <ul>
-        @for (photo of photos(); track photo.id) {
+        @for (photo of library.photos(); track photo.id) {
           @let at = chosen().indexOf(photo.id);
           <li>
-            <button type="button" [attr.aria-pressed]="at >= 0" [attr.aria-label]="photo.name" (click)="toggle(photo.id)">
-              <img [src]="thumbnail(photo)" alt="" loading="lazy" />
+            <button
+              type="button"
+              [disabled]="photo.state !== 'ready'"
+              [attr.aria-pressed]="at >= 0"
+              [attr.aria-label]="photo.name + (photo.state === 'waiting' ? ', being prepared' : '')"
+              [style.aspect-ratio]="photo.width / photo.height"
+              (click)="toggle(photo.id)"
+            >
+              <oriel-photo-picture [photo]="photo" [edge]="320" />
               @if (at >= 0) {
                 <span class="mark">{{ at + 1 }}</span>
               }
@@ -28,10 +36,10 @@ const PAGE = 60;
           </li>
         }
       </ul>
-      @if (next()) {
-        <button matButton type="button" (click)="more()">More photos</button>
+      @if (library.hasMore()) {
+        <button matButton type="button" [disabled]="fetching.busy()" (click)="more()">More photos</button>
       }
-    } @else if (loaded()) {
+    } @else if (library.loaded()) {
       <p class="none">{{ search() ? 'No photo has that in its name.' : 'No photos here yet: upload some on the page Photos, or choose files above.' }}</p>
     }
   `,
@@ -42,24 +50,15 @@ export class PhotoPicker {
   readonly householdId = input.required<string>();
   readonly most = input(64);
   readonly chosen = model<readonly string[]>([]);
-  private readonly api = inject(Api);
+  protected readonly library = inject(PhotoLibrary);
+  protected readonly fetching = new Submission();
   protected readonly search = signal('');
-  protected readonly photos = signal<readonly Photo[]>([]);
-  protected readonly next = signal<string | null>(null);
-  protected readonly loaded = signal(false);
-  protected readonly failure = signal<ApiFailure | null>(null);
-  private asked = 0;
 
   constructor() {
     effect((onCleanup) => {
-      const search = this.search();
-      const timer = setTimeout(() => untracked(() => void this.begin(search)), search ? 250 : 0);
+      const timer = setTimeout(() => untracked(() => void this.load()), this.search() ? searchAfterMs : 0);
       onCleanup(() => clearTimeout(timer));
     });
-  }
-
-  protected thumbnail(photo: Photo): string {
-    return addressOf(photoDerivative, { photoId: photo.id, edge: 320 });
   }
 
   protected toggle(id: string): void {
@@ -68,29 +67,18 @@ export class PhotoPicker {
     else if (chosen.length < this.most()) this.chosen.set([...chosen, id]);
   }
 
-  protected begin(search: string): Promise<void> {
-    this.next.set(null);
-    return this.fetch(search, []);
+  /** Until the list answers what is being searched for by then. */
+  protected load(): Promise<void> {
+    return this.fetching.run(async () => {
+      let search: string;
+      do {
+        search = this.search();
+        await this.library.open(search, false, this.householdId());
+      } while (search !== this.search());
+    });
   }
 
   protected more(): Promise<void> {
-    return this.fetch(this.search(), this.photos());
-  }
-
-  private async fetch(search: string, before: readonly Photo[]): Promise<void> {
-    const asked = (this.asked += 1);
-    this.failure.set(null);
-    try {
-      const reply = await this.api.call(listPhotos, {
-        params: { householdId: this.householdId() },
-        query: { limit: PAGE, search: search || undefined, after: this.next() ?? undefined },
-      });
-      if (asked !== this.asked) return;
-      this.photos.set([...before, ...reply.photos.filter(({ state }) => state === 'ready')]);
-      this.next.set(reply.next);
-      this.loaded.set(true);
-    } catch (error) {
-      if (asked === this.asked) this.failure.set(toApiFailure(error));
-    }
+    return this.fetching.run(() => this.library.more());
   }
 }

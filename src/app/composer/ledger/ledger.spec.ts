@@ -1,6 +1,7 @@
 import { provideZonelessChangeDetection } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { layerIds, someScene } from '../commands/testing';
+import { setDepth } from '../commands/layer-commands';
 import { SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
 import { Ledger } from './ledger';
@@ -53,6 +54,34 @@ describe('the ledger', () => {
     await fixture.whenStable();
     expect(field('Depth of Sky').value).toBe('+900');
     expect(store.document()).toBe(someScene);
+  });
+
+  it('goes back on Escape even where the refused field was left, and when the figure is changed elsewhere', async () => {
+    await type('Depth of Sky', '-5000');
+    field('Depth of Sky').dispatchEvent(new Event('blur'));
+    await fixture.whenStable();
+    expect(field('Depth of Sky').value).toBe('-5000');
+    document.dispatchEvent(new KeyboardEvent('keydown', { key: 'Escape' }));
+    await fixture.whenStable();
+    expect(field('Depth of Sky').value).toBe('+900');
+    expect(element().querySelector('[role=alert]')).toBeNull();
+
+    await type('Depth of Sky', '-5000');
+    store.edit(setDepth(layerIds[0], 450));
+    await fixture.whenStable();
+    expect(field('Depth of Sky').value).toBe('+450');
+    expect(element().querySelector('[role=alert]')).toBeNull();
+  });
+
+  it('says what its words mean when asked, and stops on Escape', async () => {
+    const word = [...element().querySelectorAll<HTMLButtonElement>('oriel-term button')].find((one) => one.textContent.includes('Bleed'))!;
+    word.click();
+    await fixture.whenStable();
+    expect(word.getAttribute('aria-expanded')).toBe('true');
+    expect(document.getElementById(word.getAttribute('aria-describedby') ?? '')?.textContent).toContain('to spare beyond the glass');
+    document.body.dispatchEvent(new KeyboardEvent('keydown', { key: 'Escape', keyCode: 27, bubbles: true }));
+    await fixture.whenStable();
+    expect(word.getAttribute('aria-expanded')).toBe('false');
   });
 
   it('says how far the selected layer moves: 1200 mm of zone at 900 mm behind from 1800 mm is 400 mm, 640 px of 1920 (computed)', async () => {

@@ -58,7 +58,7 @@ export class Ledger {
 function noteOf({ layer }: DrawnLayer): string {
   const { image, opacity, shown } = layer;
   const whole = image.width === image.trim.ofWidth && image.height === image.trim.ofHeight;
-  const notes = [`${whole ? '' : 'cut out, '}${image.width} × ${image.height} px`];
+  const notes = [`${whole ? '' : 'cut out, '}${image.width}\u00a0×\u00a0${image.height}\u00a0px`];
   if (opacity < 1) notes.push(`${Math.round(opacity * 100)} %`);
   if (!shown) notes.unshift('hidden');
   return notes.join(', ');

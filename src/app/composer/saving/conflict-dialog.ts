@@ -49,6 +49,6 @@ export type ConflictChoice = 'theirs' | 'copy' | 'over';
 export class ConflictDialog {
   protected readonly theirs = inject<MovedOn>(MAT_DIALOG_DATA);
   /** Whether it was this person too, on another page or another computer. */
-  protected readonly mine = inject(Session).account()?.name === this.theirs.savedBy;
+  protected readonly mine = inject(Session).account()?.id === this.theirs.savedById;
   protected readonly when = sayMoment(new Date(this.theirs.savedAt));
 }

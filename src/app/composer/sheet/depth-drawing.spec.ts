@@ -70,4 +70,20 @@ describe('plan and section', () => {
     expect(selected.valueText).toBe('900 mm behind the glass');
     expect(selected.label).not.toBeNull();
   });
+
+  it('print depths with their sign, and the distances of eyes without one', () => {
+    const texts = new Map(drawSetting(plan, someScene).ticks.map(({ depthMm, text }) => [depthMm, text]));
+    expect(texts.get(0)).toBe('0');
+    const far = [...texts.keys()].find((depthMm) => depthMm > 0)!;
+    expect(texts.get(far)).toBe(`+${far}`);
+    const eyes = [...texts.keys()].filter((depthMm) => -depthMm >= someScene.zone.nearestMm);
+    expect(eyes.length).toBeGreaterThan(0);
+    for (const depthMm of eyes) expect(texts.get(depthMm)).toBe(String(-depthMm));
+  });
+
+  it('name the zone inside of the drawing, however far it runs past it', () => {
+    const wide = drawSetting(plan, { ...someScene, zone: { ...someScene.zone, leftMm: -9000, rightMm: 9000, farthestMm: 20_000 } });
+    expect(wide.zoneLabel.low.x).toBeGreaterThanOrEqual(plan.left);
+    expect(wide.zoneLabel.low.y).toBeLessThanOrEqual(plan.top + plan.height);
+  });
 });

@@ -3,6 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, input, vi
 import { MatIconButton } from '@angular/material/button';
 import { MatTooltip } from '@angular/material/tooltip';
 import { Icon } from '../../core/icon/icon';
+import { SceneStore } from '../scene-store';
 import { WalkPast } from '../walk/walk-past';
 import { DepthView } from './depth-view';
 import { Elevation } from './elevation';
@@ -27,8 +28,14 @@ export class DrawingSheet {
   readonly withTitle = input(true);
   readonly inPanes = input(false);
   protected readonly view = inject(SheetView);
+  private readonly store = inject(SceneStore);
   private readonly paper = viewChild<ElementRef<HTMLElement>>('paper');
   private readonly size = observedSize(() => this.paper());
+  /** Whether the title block, grown by faults, or the section of an upright glass, leaves the other little room. */
+  protected readonly crowded = computed(() => {
+    const { glass } = this.store.document();
+    return glass.heightMm > glass.widthMm || this.store.faults().length > 0;
+  });
   protected readonly scales = computed(() => {
     const { elevation, plan } = this.view.layout();
     const { pxPerMm, broken } = plan.depth;

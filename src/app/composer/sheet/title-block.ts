@@ -9,7 +9,7 @@ import { Viewer } from '../walk/viewer';
 import { plainMm } from '../../figures/words';
 
 /** So many faults are shown unasked. */
-const FIRST_FAULTS = 2;
+const FIRST_FAULTS = { brief: 1, whole: 2 };
 
 /** The corner of the sheet: what it shows, for which glass and eye, who saved it, and whether it is clear. */
 @Component({
@@ -27,7 +27,7 @@ export class TitleBlock {
   protected readonly room = inject(RoomFigures);
   private readonly viewer = inject(Viewer);
   protected readonly meanings = meanings;
-  protected readonly firstFaults = FIRST_FAULTS;
+  protected readonly firstFaults = computed(() => (this.brief() ? FIRST_FAULTS.brief : FIRST_FAULTS.whole));
   /** Whether every fault is shown, or the first few. */
   protected readonly all = signal(false);
   protected readonly figures = computed(() => {

@@ -2,8 +2,8 @@ import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { MatFormField, MatLabel } from '@angular/material/form-field';
-import { MatOption, MatSelect } from '@angular/material/select';
+import { MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
+import { MatOption, MatSelect, MatSelectTrigger } from '@angular/material/select';
 import { invite } from '@oriel/shared/contracts/households';
 import { everyRole, type Role } from '@oriel/shared/contracts/role';
 import { FailureNotice } from '../../core/failure-notice';
@@ -17,7 +17,7 @@ import { roleWords } from '../role-words';
 /** Invites by e-mail with a role, and shows who has not come yet. */
 @Component({
   selector: 'oriel-invitations',
-  imports: [DatePipe, ReactiveFormsModule, MatButton, MatFormField, MatLabel, MatSelect, MatOption, TextField, FailureNotice],
+  imports: [DatePipe, ReactiveFormsModule, MatButton, MatFormField, MatHint, MatLabel, MatSelect, MatSelectTrigger, MatOption, TextField, FailureNotice],
   templateUrl: './invitations.html',
   styleUrl: './invitations.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

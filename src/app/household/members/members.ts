@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatFormField } from '@angular/material/form-field';
-import { MatOption, MatSelect, type MatSelectChange } from '@angular/material/select';
+import { MatOption, MatSelect, type MatSelectChange, MatSelectTrigger } from '@angular/material/select';
 import { Router } from '@angular/router';
 import type { Member } from '@oriel/shared/contracts/households';
 import { everyRole, type Role } from '@oriel/shared/contracts/role';
@@ -14,7 +14,7 @@ import { roleWords } from '../role-words';
 /** Who belongs to the household; an owner changes roles and removes, everyone may leave. Removing asks once more in place. */
 @Component({
   selector: 'oriel-members',
-  imports: [MatButton, MatFormField, MatSelect, MatOption, FailureNotice],
+  imports: [MatButton, MatFormField, MatSelect, MatSelectTrigger, MatOption, FailureNotice],
   templateUrl: './members.html',
   styleUrl: './members.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -20,7 +20,7 @@ export interface ContactSheetLayout {
 
 export const headingPx = 44;
 const gapPx = 4;
-const monthOf = new Intl.DateTimeFormat('en-GB', { month: 'long', year: 'numeric' });
+const monthOf = new Intl.DateTimeFormat('en-GB', { month: 'long', year: 'numeric', timeZone: 'UTC' });
 
 /** Panoramas and strips are shown cropped, so that a row stays a row. */
 const shapeOf = (photo: Photo) => Math.min(3, Math.max(0.5, photo.width / photo.height));

@@ -4,6 +4,7 @@ import { type Observable, Subject, type Subscription } from 'rxjs';
 import { type Photo, photoMaxBytes, uploadPhoto } from '@oriel/shared/contracts/photos';
 import { addressOf } from '../../core/api';
 import { ApiFailure, toApiFailure } from '../../core/api-failure';
+import { clockReading } from '../../core/moments';
 import { Session } from '../../core/session';
 import { type Upload, isOver } from './upload';
 
@@ -77,6 +78,11 @@ export class UploadQueue {
     this.pump();
   }
 
+  /** Takes one that is over off the list. */
+  drop(upload: Upload): void {
+    this.list.update((uploads) => uploads.filter((known) => known !== upload || !isOver(known.state())));
+  }
+
   cancelAll(): void {
     for (const upload of this.list()) if (!isOver(upload.state())) this.end(upload);
   }
@@ -106,7 +112,7 @@ export class UploadQueue {
   private send(upload: Upload): void {
     upload.state.set('sending');
     const form = new FormData();
-    form.set('lastModified', new Date(upload.file.lastModified).toISOString());
+    form.set('lastModified', clockReading(new Date(upload.file.lastModified)));
     form.set('file', upload.file);
     const address = addressOf(uploadPhoto, { householdId: upload.householdId });
     const sending = this.http.post<unknown>(address, form, { reportProgress: true, observe: 'events' }).subscribe({
