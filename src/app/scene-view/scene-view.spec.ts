@@ -38,7 +38,7 @@ describe('a scene in a small window', () => {
     await fixture.whenStable();
     expect(pictures()).toHaveLength(someScene.layers.length);
     const [first, second, third] = pictures();
-    let decoded = () => undefined as void;
+    let decoded: () => void = () => undefined;
     Object.assign(first, { decode: () => Promise.resolve() });
     Object.assign(second, { decode: () => new Promise<void>((resolve) => (decoded = resolve)) });
     first.dispatchEvent(new Event('load'));
