@@ -10,11 +10,12 @@ const REFINEMENTS = 4;
  * Deterministic search: the cost at every point of the coarse grid, in order, then from each wish's best point, one coordinate after the
  * other, a value between it and its neighbour on either side, halving the way each round. No randomness: the same question has the same
  * answer. `measure` is asked once for each point; every point asked about is returned, in order.
+ * @param costs each is told what those before it found best.
  */
 export function leastOverGrid<T>(
   dimensions: readonly Dimension[],
   measure: (point: readonly number[]) => T,
-  costs: readonly ((value: T) => number)[],
+  costs: readonly ((value: T, bestBefore: readonly T[]) => number)[],
 ): { tried: { point: readonly number[]; value: T }[]; best: { point: readonly number[]; value: T }[] } {
   const tried = new Map<string, { point: readonly number[]; value: T }>();
   const at = (point: readonly number[]) => {
@@ -24,7 +25,10 @@ export function leastOverGrid<T>(
     return known;
   };
   for (const point of gridOf(dimensions)) at(point);
-  const best = costs.map((cost) => {
+  const best: { point: readonly number[]; value: T }[] = [];
+  for (const costAfter of costs) {
+    const before = best.map(({ value }) => value);
+    const cost = (value: T) => costAfter(value, before);
     let least = [...tried.values()].reduce((a, b) =>
       cost(b.value) < cost(a.value) || Number.isNaN(cost(a.value)) ? b : a,
     );
@@ -35,8 +39,8 @@ export function leastOverGrid<T>(
           if (cost(other.value) < cost(least.value)) least = other;
         }
       });
-    return least;
-  });
+    best.push(least);
+  }
   return { tried: [...tried.values()], best };
 }
 

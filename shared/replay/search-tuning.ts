@@ -1,13 +1,13 @@
 import type { TrackerTuning } from '../contracts/walls';
 import { followerSettingsOf } from './follower-settings-of';
+import { excerptOf, replayExcerpt, type Excerpt } from './excerpt';
 import { jitterMm } from './jitter';
 import { laterKnown, type LaterKnown } from './later-known';
 import { lagInMotionMs, strayInMotion } from './lag';
 import { leastOverGrid, type Dimension } from './least-over-grid';
-import { replay } from './replay';
 import type { Direction, ReplaySample } from './sample';
 import { movingStretches, stillStretches, totalMs, type Stretch } from './stretches';
-import { costOf, unbeaten, wishes, type Figures, type Wish } from './wishes';
+import { costOf, unbeaten, type Figures, type Wish } from './wishes';
 
 /** One setting and what it would have done with this run. */
 export interface TriedTuning extends Figures {
@@ -19,7 +19,7 @@ export interface TriedTuning extends Figures {
 /** What replay found in one direction. */
 export interface SearchResult {
   readonly direction: Direction;
-  /** How long the viewer stood still and moved in this run, ms: on little, little can be built. */
+  /** How long the viewer stood still and moved in what was judged, ms: on little, little can be built. */
   readonly stillMs: number;
   readonly movingMs: number;
   readonly today: TriedTuning;
@@ -43,9 +43,12 @@ const BETAS: Readonly<Record<Direction, Dimension>> = {
 };
 const HORIZONS_MS: Dimension = { coarse: [0, 60, 120, 200] };
 
+/** The order in which wishes are searched for: each is told from the one before. */
+const SEARCHED = ['quicker', 'balanced', 'calmer'] as const satisfies readonly Wish[];
+
 /**
  * Replays a run through many settings: of the 1 euro filter in one direction, and across also how far the predictor looks ahead (along
- * keeps the one it has, since both share it). @throws TooLittleMotion
+ * keeps the one it has, since both share it). Of a long run an excerpt is replayed. @throws TooLittleMotion
  */
 export function searchTuning(
   samples: readonly ReplaySample[],
@@ -57,31 +60,27 @@ export function searchTuning(
   const still = stillStretches(known);
   const moving = movingStretches(known, direction);
   requireEnough(still, moving, direction);
-  const judged = { samples, known, still, moving, direction };
+  const judged: Judged = { ...excerptOf(samples, still, moving), known, direction };
   let asked = 0;
-  const measure = (tuning: TrackerTuning): TriedTuning => {
-    progress(++asked);
-    return judge(judged, tuning, false);
-  };
   const { tried, best } = leastOverGrid(
     [CUTOFFS_HZ, BETAS[direction], ...(direction === 'across' ? [HORIZONS_MS] : [])],
-    (point) => measure(tuned(today, direction, point)),
-    wishes.map((wish) => (figures: TriedTuning) => costOf(figures, wish, direction)),
+    (point) => {
+      progress(++asked);
+      return judge(judged, tuned(today, direction, point), false);
+    },
+    SEARCHED.map(
+      (wish) => (figures: TriedTuning, bestBefore: readonly TriedTuning[]) =>
+        costOf(figures, wish, direction, bestBefore[bestBefore.length - 1] ?? figures),
+    ),
   );
-  const now = judge(judged, today, true);
+  const bestOf = (wish: Wish) => judge(judged, best[SEARCHED.indexOf(wish)].value.tuning, true);
   return {
     direction,
-    stillMs: totalMs(still),
-    movingMs: totalMs(moving),
-    today: now,
+    stillMs: totalMs(judged.still),
+    movingMs: totalMs(judged.moving),
+    today: judge(judged, today, true),
     curve: unbeaten(tried.map(({ value }) => value)),
-    best: Object.fromEntries(
-      wishes.map((wish, i) => {
-        const { value } = best[i];
-        const better = costOf(value, wish, direction) < costOf(now, wish, direction) ? value : now;
-        return [wish, judge(judged, better.tuning, true)];
-      }),
-    ) as Record<Wish, TriedTuning>,
+    best: { calmer: bestOf('calmer'), balanced: bestOf('balanced'), quicker: bestOf('quicker') },
   };
 }
 
@@ -89,20 +88,14 @@ export function searchTuning(
 export const triedAtLeast = (direction: Direction): number =>
   CUTOFFS_HZ.coarse.length * BETAS[direction].coarse.length * (direction === 'across' ? HORIZONS_MS.coarse.length : 1);
 
-interface Judged {
-  readonly samples: readonly ReplaySample[];
+interface Judged extends Excerpt {
   readonly known: LaterKnown;
-  readonly still: readonly Stretch[];
-  readonly moving: readonly Stretch[];
   readonly direction: Direction;
 }
 
-function judge(
-  { samples, known, still, moving, direction }: Judged,
-  tuning: TrackerTuning,
-  withLag: boolean,
-): TriedTuning {
-  const track = replay(samples, followerSettingsOf(tuning), tuning.displayDelayMs);
+function judge(judged: Judged, tuning: TrackerTuning, withLag: boolean): TriedTuning {
+  const { known, still, moving, direction } = judged;
+  const track = replayExcerpt(judged, followerSettingsOf(tuning), tuning.displayDelayMs);
   return {
     tuning,
     jitterMm: jitterMm(track, still, direction),
