@@ -25,7 +25,7 @@ describe('detailAlong', () => {
   });
 
   it('falls where a picture is smeared along the direction, and is finite where there is nothing to see', () => {
-    const grain = (x: number, y: number): number => ((x * 7919 + y * 104729) % 97) / 97;
+    const grain = (x: number, y: number): number => Math.abs(43758.5453 * Math.sin(12.9898 * x + 78.233 * y)) % 1;
     const smeared = (x: number, y: number): number => {
       let sum = 0;
       for (let k = 0; k < 12; k++) sum += grain((x + k) % N, y);

@@ -22,6 +22,8 @@ const FACE_BELIEF = 0.5;
 /** A guarding look is this much wider than the landmarks' region: the zoom of a closer look over the margin of the region. */
 const GUARD_WIDENING = 2.2 / 1.5;
 const DETECTION_PROBABILITY = 0.5;
+/** No face grows or shrinks by more from one frame to the next: at 4 m a second toward a camera half a metre away it would be 1.3. */
+const MOST_GROWN = 1.15;
 
 /**
  * Frames from one look at everybody else to the next: while nobody else is known (the look is for newcomers and has two halves), and
@@ -163,7 +165,7 @@ export class Tracker {
   private follow(viewer: Following, picture: Picture, timestampMs: number): boolean {
     const region = viewer.prediction.at(timestampMs);
     if (this.looking.by === 'detector') return this.detect(viewer, picture, region, timestampMs);
-    if (!this.place(picture, region))
+    if (!this.place(picture, region) || (this.jumped(region) && !this.place(picture, regionOfLandmarks(this.points))))
       return this.replace(viewer, picture, this.guardLook(picture, region), timestampMs);
     const eyes = this.eyes();
     if (viewer.guard.due(eyes, this.looking.guardEvery)) {
@@ -175,6 +177,12 @@ export class Tracker {
     }
     viewer.prediction.measure(regionOfLandmarks(this.points), timestampMs);
     return true;
+  }
+
+  /** Whether the face was of another size than the region it was looked for in: its own size is then not measured rightly. */
+  private jumped(region: Region): boolean {
+    const ratio = regionOfLandmarks(this.points).size / region.size;
+    return ratio > MOST_GROWN || ratio < 1 / MOST_GROWN;
   }
 
   private detect(viewer: Following, picture: Picture, region: Region, timestampMs: number): boolean {

@@ -25,7 +25,7 @@ export interface ChartLine {
   readonly label: string;
   readonly ink: Ink;
   readonly points: readonly ChartPoint[];
-  readonly as?: 'line' | 'dashed' | 'dots' | 'mark';
+  readonly as?: 'line' | 'dashed' | 'steps' | 'dots' | 'mark';
 }
 
 /** A chart in the hand of the house: few lines, no animation. What it shows is said in words beside it; `label` names it. */
@@ -44,6 +44,8 @@ export class LineChart {
   readonly xRange = input<readonly [number, number] | null>(null);
   /** The least that the upper end of the scale shows, so that quiet lines look quiet. */
   readonly yLeast = input(0);
+  /** The ends of the scale where they are fixed, the lower one first; whole figures are written. Downward where the first is the greater. */
+  readonly yRange = input<readonly [number, number] | null>(null);
 
   private readonly canvas = viewChild.required<ElementRef<HTMLCanvasElement>>('canvas');
   private readonly light = inject(Light);
@@ -107,15 +109,22 @@ export class LineChart {
     });
     chart.options.scales = {
       x: { type: 'linear', ...scale(this.xLabel()), ...(range ? { min: range[0], max: range[1] } : {}) },
-      y: { type: 'linear', ...scale(this.yLabel()), min: 0, suggestedMax: this.yLeast() },
+      y: { type: 'linear', ...scale(this.yLabel()), ...this.upright(ticks) },
     };
     chart.data.datasets = lines.map((line) => datasetOf(line, inks[line.ink], inks.sheet));
     chart.update('none');
   }
+
+  private upright(ticks: object) {
+    const range = this.yRange();
+    if (!range) return { min: 0, suggestedMax: this.yLeast() };
+    const [min, max] = [Math.min(...range), Math.max(...range)];
+    return { min, max, reverse: range[0] > range[1], ticks: { ...ticks, stepSize: 1, maxTicksLimit: max - min + 1, precision: 0 } };
+  }
 }
 
 function datasetOf({ label, points, as = 'line' }: ChartLine, colour: string, paper: string): ChartDataset<'scatter'> {
-  const drawn = as === 'line' || as === 'dashed';
+  const drawn = as === 'line' || as === 'dashed' || as === 'steps';
   return {
     label,
     data: points as { x: number; y: number }[],
@@ -124,6 +133,7 @@ function datasetOf({ label, points, as = 'line' }: ChartLine, colour: string, pa
     borderWidth: drawn ? 1.5 : 2,
     borderDash: as === 'dashed' ? [5, 4] : [],
     backgroundColor: as === 'mark' ? colour : paper,
+    stepped: as === 'steps',
     pointRadius: drawn ? 0 : as === 'mark' ? 6 : 2,
     spanGaps: false,
   };

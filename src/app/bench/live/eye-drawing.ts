@@ -1,11 +1,14 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { upFromAcross } from '@oriel/shared/viewer/field-of-view';
+import { NOBODY, type People } from './people';
 import type { Subject } from '../subject/bench-subject';
 
 /** Cameras are taken to deliver 16:9; only the cone in the section depends on it. */
 const SHAPE = { width: 16, height: 9 };
-const LEAST_REACH_MM = 1200;
+/** How far the drawing reaches where no viewing zone says it, and beyond one that does. */
+const USUAL_REACH_MM = 2500;
+const ROOM = 1.2;
 
 /** Plan and section of the glass, the camera, the viewing zone and the eye, to one scale. Lengths in mm. */
 @Component({
@@ -26,12 +29,19 @@ const LEAST_REACH_MM = 1200;
           <path class="cone" [attr.d]="view.cone" />
           <path class="glass" [attr.d]="view.glass" />
           <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
+          @for (other of view.others; track other.id) {
+            <circle class="other" [attr.cx]="other.at.x" [attr.cy]="other.at.y" [attr.r]="1.8 * view.unit" />
+            <text [attr.x]="other.at.x + 3 * view.unit" [attr.y]="other.at.y" [attr.font-size]="5 * view.unit">{{ other.id }}</text>
+          }
           @if (view.eye; as eye) {
             <path class="sight" [attr.d]="view.sight" />
             <circle class="eye" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
+            @if (people().others.length) {
+              <text [attr.x]="eye.x + 3 * view.unit" [attr.y]="eye.y" [attr.font-size]="5 * view.unit">{{ people().followed }}</text>
+            }
           }
         </svg>
-        <figcaption class="marginal">{{ view.name }}</figcaption>
+        <figcaption class="marginal">{{ view.name }}{{ view.beyond ? '. The eye is beyond the drawing.' : '' }}</figcaption>
       </figure>
     }
   `,
@@ -41,18 +51,19 @@ const LEAST_REACH_MM = 1200;
 export class EyeDrawing {
   readonly subject = input.required<Subject>();
   readonly eye = input<Point3 | null>(null);
+  readonly people = input<People>(NOBODY);
 
-  /** How far into the room the drawing reaches; grows with the zone, and only when the eye is beyond. */
+  /** How far into the room the drawing reaches: it depends on the wall alone, so that the scale stays while somebody moves. */
   private readonly reach = computed(() => {
     const { zone, glass } = this.subject();
-    const far = Math.max(LEAST_REACH_MM, 1.6 * glass.widthMm, 1.08 * (zone?.farthestMm ?? 0));
-    return Math.max(far, 500 * Math.ceil((1.05 * (this.eye()?.z ?? 0)) / 500));
+    return Math.max(zone ? ROOM * zone.farthestMm : USUAL_REACH_MM, 1.6 * glass.widthMm);
   });
 
   protected readonly views = computed(() => {
     const { glass, zone, tracking } = this.subject();
     const { position, hfovRad, yawRad, pitchRad } = tracking.camera;
     const eye = this.eye();
+    const { others } = this.people();
     const up = upFromAcross(hfovRad, SHAPE.width, SHAPE.height);
     return [
       this.view('Plan, from above', (across, z) => ({ x: across, y: z }), {
@@ -60,12 +71,14 @@ export class EyeDrawing {
         lens: { across: position.x, z: position.z, turn: yawRad, field: hfovRad },
         zone: zone && [zone.leftMm, zone.rightMm, zone.nearestMm, zone.farthestMm],
         eye: eye && { across: eye.x, z: eye.z },
+        others: others.map(({ id, eye: { x, z } }) => ({ id, across: x, z })),
       }),
       this.view('Section, from the side', (across, z) => ({ x: z, y: -across }), {
         half: glass.heightMm / 2,
         lens: { across: position.y, z: position.z, turn: pitchRad, field: up },
         zone: zone && [zone.lowestMm, zone.highestMm, zone.nearestMm, zone.farthestMm],
         eye: eye && { across: eye.y, z: eye.z },
+        others: others.map(({ id, eye: { y, z } }) => ({ id, across: y, z })),
       }),
     ];
   });
@@ -91,6 +104,8 @@ export class EyeDrawing {
       cone: `M${end(-lens.field / 2)} L${corner(lens.across, lens.z)} L${end(lens.field / 2)}`,
       zone: room.zone && rectangleOf(boxOf(place(room.zone[0], room.zone[2]), place(room.zone[1], room.zone[3]))),
       eye: room.eye && place(room.eye.across, room.eye.z),
+      beyond: room.eye !== null && (Math.abs(room.eye.across) > side || room.eye.z > 1.02 * reach),
+      others: room.others.map(({ id, across, z }) => ({ id, at: place(across, z) })),
       sight: room.eye && `M${corner(-room.half, 0)} L${corner(room.eye.across, room.eye.z)} L${corner(room.half, 0)}`,
     };
   }
@@ -101,6 +116,7 @@ interface Room {
   readonly lens: { readonly across: number; readonly z: number; readonly turn: number; readonly field: number };
   readonly zone: readonly [number, number, number, number] | null;
   readonly eye: { readonly across: number; readonly z: number } | null;
+  readonly others: readonly { readonly id: number; readonly across: number; readonly z: number }[];
 }
 
 type Box = readonly [number, number, number, number];

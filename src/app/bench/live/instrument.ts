@@ -23,6 +23,8 @@ import { type Reading, SHOWN_MS } from './instruments';
         [xRange]="range"
         [yLabel]="shown.yLabel"
         [yLeast]="shown.yLeast"
+        [yRange]="shown.yRange ?? null"
+        xLabel="seconds; 0 is now"
       />
       @if (shown.lines.length > 1) {
         <ul class="key marginal">

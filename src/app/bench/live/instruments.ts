@@ -1,4 +1,5 @@
 import type { Spread } from '@oriel/shared/replay/spread';
+import { LADDER_STEPS } from '@oriel/shared/ladder/steps';
 import type { ChartLine } from '../charts/line-chart';
 import type { Measures } from './measures';
 
@@ -17,6 +18,7 @@ export interface Reading {
   readonly lines: readonly ChartLine[];
   readonly yLabel: string;
   readonly yLeast: number;
+  readonly yRange?: readonly [number, number];
 }
 
 /** Every instrument, from the last half minute. */
@@ -41,7 +43,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: spreadWords(tracking, 'ms between looks'),
       good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
       lines: [line('Tracking interval', 'ink', measures.trackingInterval)],
-      yLabel: 'ms',
+      yLabel: 'between looks, ms',
       yLeast: 80,
     },
     {
@@ -55,7 +57,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
         line('Detect', 'far', measures.detect),
         line('Crop', 'middle', measures.crop),
       ],
-      yLabel: 'ms',
+      yLabel: 'time, ms',
       yLeast: 20,
     },
     {
@@ -64,7 +66,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: spreadWords(latency, 'ms') || 'The camera’s own clock is known after a few seconds of following.',
       good: 'Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk. Prediction makes good what is steady.',
       lines: [line('Capture to drawing', 'ink', measures.latency)],
-      yLabel: 'ms',
+      yLabel: 'delay, ms',
       yLeast: 80,
     },
     {
@@ -78,7 +80,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
         line('As drawn', 'ink', measures.drawnJitter),
         { ...line('As the camera saw it', 'pencil', measures.seenJitter), as: 'dashed' },
       ],
-      yLabel: 'mm',
+      yLabel: 'jitter, mm',
       yLeast: 1,
     },
     {
@@ -90,7 +92,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
         : 'Nobody has been looked for yet.',
       good: 'Practice: someone who stays in view should never be lost. Better light helps first.',
       lines: [line('Somebody found', 'ink', measures.found)],
-      yLabel: 'found',
+      yLabel: '1 found, 0 not',
       yLeast: 1,
     },
     {
@@ -99,10 +101,32 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: spreadWords(frame, 'ms'),
       good: '17 ms is 60 a second. Practice: from 33 ms on motion is seen to stutter. The charts themselves cost a little.',
       lines: [line('Frame interval', 'ink', measures.frameInterval)],
-      yLabel: 'ms',
+      yLabel: 'between frames, ms',
       yLeast: 50,
     },
+    ladderReading(measures, since, line('Step of the ladder', 'ink', measures.ladderStep)),
   ];
+}
+
+/** Counted from 1, the finest, which is drawn at the top. */
+function ladderReading(measures: Measures, sinceMs: number, line: ChartLine): Reading {
+  const { ladder } = measures;
+  const steps = measures.ladderStep.spread(sinceMs);
+  const changes = ladder?.changes.filter(({ tMs }) => tMs >= sinceMs) ?? [];
+  const [last] = changes.slice(-1);
+  return {
+    name: 'Ladder',
+    figure: ladder ? String(ladder.step + 1) : '–',
+    unit: `of ${LADDER_STEPS.length}: ${ladder?.words ?? 'nothing is looked for'}`,
+    spread: Number.isFinite(steps.median)
+      ? `median step ${steps.median}, 95 % at ${steps.p95} or finer; changes in half a minute: ${changes.length}${last ? `, the last one ${last.reason}` : ''}`
+      : '',
+    good: 'Step 2 is where it begins; 1 to 3 place all landmarks, from 4 on the distance of a turned head is less sure. A step kept for long is good, one that changes every few seconds is not.',
+    lines: [{ ...line, as: 'steps' }],
+    yLabel: 'step',
+    yLeast: 0,
+    yRange: [LADDER_STEPS.length, 1],
+  };
 }
 
 const ms = (figure: number) => figure.toFixed(1);

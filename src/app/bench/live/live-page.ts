@@ -21,6 +21,7 @@ import { EyeDrawing } from './eye-drawing';
 import { Instrument } from './instrument';
 import { readingsOf } from './instruments';
 import { Measures } from './measures';
+import { NOBODY, othersWords, peopleIn, type People } from './people';
 import { isOn, trackingWords } from './tracking-words';
 
 /** The charts and the drawing are renewed this often: more is not read, and costs what is measured. */
@@ -43,6 +44,7 @@ export class LivePage {
   protected readonly bench = inject(BenchSubject);
   private readonly measures = new Measures(this.bench.subject().tuning);
   private readonly seen = signal<Point3 | null>(null);
+  private readonly people = signal<People>(NOBODY);
   private readonly renewed = signal(0);
   private eyeMs = 0;
 
@@ -54,6 +56,8 @@ export class LivePage {
   protected readonly pictureShown = signal(false);
   protected readonly mm = (figure: number) => plainMm(figure, 0);
   protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));
+  protected readonly there = computed(() => (this.on() ? this.people() : NOBODY));
+  protected readonly othersWords = computed(() => othersWords(this.there()));
   protected readonly readings = computed(() => readingsOf(this.measures, this.renewed() || performance.now()));
 
   constructor() {
@@ -63,6 +67,7 @@ export class LivePage {
       if (sample.receivedMs < this.eyeMs + EYE_MS) return;
       this.eyeMs = sample.receivedMs;
       this.seen.set(sample.found ? { ...sample.eye } : null);
+      this.people.set(peopleIn(sample));
     });
     let frame = 0;
     const draw = (tMs: number) => {
@@ -95,7 +100,10 @@ export class LivePage {
 
   private renew(): void {
     const now = performance.now();
-    if (this.on()) this.measures.judge(now);
+    if (this.on()) {
+      this.measures.judge(now);
+      this.measures.stand(now, this.tracking.ladder());
+    }
     this.renewed.set(now);
   }
 }

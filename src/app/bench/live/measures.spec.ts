@@ -84,4 +84,21 @@ describe('the instruments', () => {
     expect(reading('Tracking', nothing).figure).toBe('–');
     expect(reading('Jitter at rest', nothing).spread).toContain('Stand still');
   });
+
+  it('show the step of the ladder, counted from the finest, and what changed', () => {
+    const { measures, nowMs } = played(() => 100);
+    const change = { tMs: nowMs - 1000, from: 1, to: 2, reason: 'looks took 60 ms' };
+    for (let k = 0; k < 8; k++)
+      measures.stand(nowMs - 2000 + 250 * k, {
+        step: k < 4 ? 1 : 2,
+        words: 'landmarks, every tenth frame guarded',
+        lookedBy: 'landmarks',
+        changes: k < 4 ? [] : [change],
+      });
+    const shown = reading('Ladder', { measures, nowMs });
+    expect(shown.figure).toBe('3');
+    expect(shown.unit).toContain('every tenth frame guarded');
+    expect(shown.spread).toContain('changes in half a minute: 1, the last one looks took 60 ms');
+    expect(shown.lines[0].points.map(({ y }) => y)).toEqual([2, 2, 2, 2, 3, 3, 3, 3]);
+  });
 });

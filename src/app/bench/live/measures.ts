@@ -2,6 +2,7 @@ import type { TrackerTuning } from '@oriel/shared/contracts/walls';
 import { followerSettingsOf } from '@oriel/shared/replay/follower-settings-of';
 import { type Follower, createFollower } from '@oriel/shared/smoothing/follower';
 import type { EyeSample } from '../../tracking/eye-sample';
+import type { LadderState } from '../../tracking/ladder-keeper';
 import { Series } from './series';
 import { StillJitter } from './still-jitter';
 
@@ -20,6 +21,10 @@ export class Measures {
   readonly losses = new Series(400);
   /** 1 for a look that found somebody, else 0. */
   readonly found = new Series();
+  /** The step of the ladder, 1 the finest. */
+  readonly ladderStep = new Series(400);
+  /** Where the ladder stands; null before it was asked. */
+  ladder: LadderState | null = null;
   /** The eye as it would be drawn for. */
   readonly drawnEye = { x: 0, y: 0, z: 1 };
   private readonly seenStill = new StillJitter();
@@ -72,6 +77,12 @@ export class Measures {
       if (this.present) this.losses.add(receivedMs, 1);
     }
     this.present = found;
+  }
+
+  /** Where the ladder stands now; to be called a few times a second. */
+  stand(nowMs: number, ladder: LadderState): void {
+    this.ladder = ladder;
+    this.ladderStep.add(nowMs, ladder.step + 1);
   }
 
   /** Judges rest, NaN where there is none; to be called a few times a second. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { SearchResult } from '@oriel/shared/replay/search-tuning';
-import type { Wish } from '@oriel/shared/replay/wishes';
+import { type Wish, wishes } from '@oriel/shared/replay/wishes';
 import { type ChartLine, LineChart } from '../charts/line-chart';
 
 /** Jitter at rest against straying in motion, for one direction: the best there is, today's setting, and the one for a wish. */
@@ -20,6 +20,7 @@ import { type ChartLine, LineChart } from '../charts/line-chart';
         <li><span class="dot open"></span>Nothing beats these</li>
         <li><span class="dot today"></span>Today</li>
         <li><span class="dot wished"></span>{{ title() }}</li>
+        <li><span class="dot other"></span>The other two wishes</li>
       </ul>
     </div>
     <table>
@@ -83,11 +84,15 @@ export class TradeOff {
     const { curve, today } = this.found();
     const point = ({ strayMs, jitterMm }: { strayMs: number; jitterMm: number }) => ({ x: strayMs, y: jitterMm });
     // What lies far beyond the others would squeeze them into a corner.
-    const [x, y] = [Math.max(120, 1.5 * today.strayMs), Math.max(1, 2 * today.jitterMm)];
+    const wished = Object.values(this.found().best);
+    const x = 1.5 * Math.max(60, today.strayMs, ...wished.map(({ strayMs }) => strayMs));
+    const y = 1.2 * Math.max(0.5, today.jitterMm, ...wished.map(({ jitterMm }) => jitterMm));
+    const others = wishes.filter((wish) => wish !== this.wish()).map((wish) => point(this.found().best[wish]));
     const near = curve.map(point).filter((at) => at.x <= x && at.y <= y);
     return [
       { label: this.title(), ink: 'near', points: [point(this.best())], as: 'mark' },
       { label: 'Today', ink: 'ink', points: [point(today)], as: 'mark' },
+      { label: 'The other two wishes', ink: 'brass-line', points: others, as: 'mark' },
       { label: 'Nothing beats these', ink: 'brass-line', points: near, as: 'dots' },
       { label: 'Between them', ink: 'line', points: near },
     ];
