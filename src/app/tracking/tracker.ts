@@ -27,12 +27,12 @@ const MOST_GROWN = 1.15;
 
 /**
  * Frames from one look at everybody else to the next: while nobody else is known (the look is for newcomers and has two halves), and
- * while somebody is. Three times as many where there is less time, which is where fewer than every fifth frame is guarded. Never in a
+ * while somebody is. Twice as many where there is less time, which is where fewer than every fifth frame is guarded. Never in a
  * frame that is guarded; together with those fewer than half, so that the usual frame has one look.
  */
 const NEWCOMERS_EVERY = 18;
 const BYSTANDERS_EVERY = 6;
-const SELDOM = 3;
+const SELDOM = 2;
 const SELDOM_GUARDED = 5;
 
 /** Everything known of the viewer followed. */

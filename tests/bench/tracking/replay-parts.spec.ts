@@ -77,6 +77,14 @@ describe('truthSchema', () => {
     expect(truth.frames[0].faces[0]).toMatchObject({ eyeMm: [0, -20, 1000], facing: false });
   });
 
+  it('reads frames with nobody that say no more than that', () => {
+    const flatOnly = truthSchema.parse({ W: 640, H: 480, FPS: 30, frames: [flat, { i: 1, on: false, re: null }] });
+    expect(flatOnly.frames.map(({ faces }) => faces.length)).toEqual([1, 0]);
+    const frames = [{ i: 0, seg: 'gone', on: 0 }, { i: 1, seg: 'rest', on: 1, heads: [head] }];
+    const heads = truthSchema.parse({ W: 1280, H: 720, FPS: 30, hfov: 60, ipdMm: 63, frames });
+    expect(heads.frames.map(({ segment, faces }) => [segment, faces.length])).toEqual([['gone', 0], ['rest', 1]]);
+  });
+
   it('refuses what is neither', () => {
     expect(() => truthSchema.parse({ W: 640, H: 480, FPS: 30, frames: [{ i: 0 }] })).toThrow();
   });

@@ -31,27 +31,31 @@ export interface Truth {
 const FACING_DEGREES = 5;
 const radians = (degrees: number): number => (degrees * Math.PI) / 180;
 const point = z.tuple([z.number(), z.number()]);
+const present = z.union([z.number(), z.boolean()]).transform(Number);
 const video = { W: z.number().positive(), H: z.number().positive(), FPS: z.number().positive() };
-const frame = { i: z.int(), seg: z.string().default(''), on: z.union([z.number(), z.boolean()]).transform(Number) };
+const frame = { i: z.int(), seg: z.string().default('') };
 
-/** A flat face that moves in the picture: pixels, roll in degrees. */
-const flatTruth = z
-  .object({
-    ...video,
-    frames: z.array(z.object({ ...frame, ipd: z.number(), re: point, le: point, roll: z.number().default(0) })).min(1),
-  })
-  .transform((truth): Truth => ({
-    fps: truth.FPS,
-    hfovRad: null,
-    ipdMm: 63,
-    frames: truth.frames.map(({ i, seg, on, ipd, re, le, roll }) => ({
-      number: i,
-      segment: seg,
-      faces: on
-        ? [{ rightEye: re, leftEye: le, ipdPx: ipd, eyeMm: null, facing: Math.abs(roll) < FACING_DEGREES }]
-        : [],
-    })),
-  }));
+/** A flat face that moves in the picture: pixels, roll in degrees. Where nobody is, nothing else need be said. */
+const flatFace = z.object({ on: present, ipd: z.number(), re: point, le: point, roll: z.number().default(0) });
+const flatFrame = z.union([
+  z.object({ ...frame, ...flatFace.shape, on: present.refine((on) => on > 0) }),
+  z.object({ ...frame, on: present.refine((on) => on === 0) }),
+]);
+
+const flatTruth = z.object({ ...video, frames: z.array(flatFrame).min(1) }).transform((truth): Truth => ({
+  fps: truth.FPS,
+  hfovRad: null,
+  ipdMm: 63,
+  frames: truth.frames.map((seen) => ({ number: seen.i, segment: seen.seg, faces: 're' in seen ? [flatFaceOf(seen)] : [] })),
+}));
+
+const flatFaceOf = ({ re, le, ipd, roll }: z.infer<typeof flatFace>): TrueFace => ({
+  rightEye: re,
+  leftEye: le,
+  ipdPx: ipd,
+  eyeMm: null,
+  facing: Math.abs(roll) < FACING_DEGREES,
+});
 
 const head = z.object({
   re: point,
@@ -68,7 +72,7 @@ const headTruth = z
     ...video,
     hfov: z.number().positive().lt(180),
     ipdMm: z.number().positive(),
-    frames: z.array(z.object({ ...frame, heads: z.array(head) })).min(1),
+    frames: z.array(z.object({ ...frame, heads: z.array(head).default([]) })).min(1),
   })
   .transform((truth): Truth => {
     const hfovRad = radians(truth.hfov);

@@ -39,7 +39,8 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
   return [
     {
       name: 'Tracking',
-      ...inFigures(tracking.median ? 1000 / tracking.median : NaN, 'a second', 0),
+      // By the mean: looks that come in one after another after a pause do not make it quick.
+      ...inFigures(1000 / measures.trackingInterval.mean(since), 'a second', 0),
       spread: spreadWords(tracking, 'ms between looks'),
       good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
       lines: [line('Tracking interval', 'ink', measures.trackingInterval)],
