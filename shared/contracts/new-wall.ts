@@ -1,24 +1,11 @@
 import { livingRoom } from '../projection/living-room';
 import { CALM_FOLLOWING } from '../smoothing/follower-settings';
 import { USUAL_VIEWER } from '../viewer/eye-from-landmarks';
-import type { TrackerTuning, WallCamera, WallGlass, WallSetUp } from './walls';
+import { usualCamera } from '../viewer/usual-camera';
+import type { TrackerTuning, WallGlass, WallSetUp } from './walls';
 
 /** A screen of 16:9, lying, sold as 43 inches. Until it is measured (practice). */
 export const usualGlass: WallGlass = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080, uncertainty: null };
-
-/** From the upper edge of the glass to the lens of a camera in or on the frame, mm (practice). */
-const aboveEdgeMm = 15;
-
-/** A camera above the middle of the upper edge, looking straight ahead, 60 degrees across. */
-export const usualCamera = (glass: Pick<WallGlass, 'heightMm'>): WallCamera => ({
-  position: { x: 0, y: glass.heightMm / 2 + aboveEdgeMm, z: 0 },
-  pitchRad: 0,
-  yawRad: 0,
-  rollRad: 0,
-  hfovRad: Math.PI / 3,
-  mirrored: false,
-  uncertainty: { hfovRad: null, pitchRad: null, positionMm: null },
-});
 
 /** Standard deviation of the distance between the eyes among adults, mm (N. Dodgson, Proc. SPIE 5291, 2004; memory). */
 const ipdSpreadMm = 3.8;
@@ -41,7 +28,13 @@ export const usualTuning: TrackerTuning = {
 export const newWall = (name: string): WallSetUp => ({
   name,
   glass: usualGlass,
-  camera: usualCamera(usualGlass),
+  camera: {
+    ...usualCamera(usualGlass, livingRoom('landscape').zone),
+    yawRad: 0,
+    rollRad: 0,
+    mirrored: false,
+    uncertainty: { hfovRad: null, pitchRad: null, positionMm: null },
+  },
   zone: livingRoom('landscape').zone,
   tuning: usualTuning,
   sceneId: null,

@@ -3,6 +3,8 @@ import { type FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatError, MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 
+let lists = 0;
+
 /** One labelled line of text, with the contract's words when it is not right. */
 @Component({
   selector: 'oriel-text-field',
@@ -10,7 +12,14 @@ import { MatInput } from '@angular/material/input';
   template: `
     <mat-form-field>
       <mat-label>{{ label() }}</mat-label>
-      <input matInput [formControl]="control()" [type]="type()" [autocomplete]="autocomplete()" />
+      <input matInput [formControl]="control()" [type]="type()" [autocomplete]="autocomplete()" [attr.list]="suggestions().length > 0 ? listId : null" />
+      @if (suggestions().length > 0) {
+        <datalist [id]="listId">
+          @for (text of suggestions(); track text) {
+            <option [value]="text"></option>
+          }
+        </datalist>
+      }
       @if (hint()) {
         <mat-hint>{{ hint() }}</mat-hint>
       }
@@ -26,4 +35,7 @@ export class TextField {
   readonly type = input<'text' | 'email' | 'password'>('text');
   readonly autocomplete = input('off');
   readonly hint = input('');
+  /** What may well be meant; anything else may be typed too. */
+  readonly suggestions = input<readonly string[]>([]);
+  protected readonly listId = `suggestions-${(lists += 1)}`;
 }

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
 import { pairingMinutes } from '@oriel/shared/contracts/walls';
 import type { ApiFailure } from '../core/api-failure';
+import { isOwnAddress } from '../walls/own-address';
 import { Pairing } from './pairing';
 import { QrCode } from './qr-code';
 
@@ -29,6 +30,7 @@ export class PairingScreen {
 
   protected readonly trouble = computed(() => this.pairing.trouble() ?? this.unanswered());
   protected readonly place = `${this.origin}/walls`;
+  protected readonly ownAddress = isOwnAddress(this.origin);
   protected readonly code = computed(() => this.pairing.code()?.code ?? null);
   /** In two halves, as people read it to one another. */
   protected readonly halves = computed(() => this.code()?.match(/.{3}/g) ?? []);

@@ -1,13 +1,10 @@
 import type { Glass, ViewingZone } from '@oriel/shared/projection/types';
+import { usualCamera } from '@oriel/shared/viewer/usual-camera';
 import type { DepthFrame } from '../../drawing/frames';
 
 /*
- * A scene is drawn before its wall has a camera, so the sheet shows the camera one may expect: in the middle of the upper
- * frame, 60 degrees across (a common webcam; practice) with a picture of 16 by 9, turned toward the middle of the zone.
+ * A scene is drawn before its wall has a camera, so the sheet shows the camera one may expect, with a picture of 16 by 9.
  */
-const ABOVE_GLASS_MM = 20;
-const HALF_ACROSS_RAD = Math.PI / 6;
-const HALF_UP_RAD = Math.atan((Math.tan(HALF_ACROSS_RAD) * 9) / 16);
 
 export interface AssumedCamera {
   /** In the view's shared coordinate, mm. */
@@ -18,12 +15,9 @@ export interface AssumedCamera {
 }
 
 export function assumedCamera(view: DepthFrame['view'], glass: Glass, zone: ViewingZone): AssumedCamera {
-  const across = view === 'plan' ? 0 : glass.heightMm / 2 + ABOVE_GLASS_MM;
-  const height = glass.heightMm / 2 + ABOVE_GLASS_MM;
-  const down = Math.atan2(height - (zone.lowestMm + zone.highestMm) / 2, (zone.nearestMm + zone.farthestMm) / 2);
+  const { position, pitchRad, hfovRad } = usualCamera(glass, zone);
+  const halfUp = Math.atan((Math.tan(hfovRad / 2) * 9) / 16);
   const slopes: [number, number] =
-    view === 'plan'
-      ? [-Math.tan(HALF_ACROSS_RAD), Math.tan(HALF_ACROSS_RAD)]
-      : [-Math.tan(down + HALF_UP_RAD), Math.tan(HALF_UP_RAD - down)];
-  return { across, slopes, pitchDownDeg: (down * 180) / Math.PI };
+    view === 'plan' ? [-Math.tan(hfovRad / 2), Math.tan(hfovRad / 2)] : [Math.tan(pitchRad - halfUp), Math.tan(pitchRad + halfUp)];
+  return { across: view === 'plan' ? position.x : position.y, slopes, pitchDownDeg: (-pitchRad * 180) / Math.PI };
 }

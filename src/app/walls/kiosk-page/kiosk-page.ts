@@ -6,12 +6,14 @@ import { type Wall, readWall } from '@oriel/shared/contracts/walls';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
+import { AddressWarning } from '../address-warning';
+import { Cautions } from '../cautions/cautions';
 import { kioskSteps } from './kiosk-steps';
 
 /** How to make a small computer start straight into this wall; made to be printed. */
 @Component({
   selector: 'oriel-kiosk-page',
-  imports: [MatButton, RouterLink, FailureNotice],
+  imports: [MatButton, RouterLink, FailureNotice, AddressWarning, Cautions],
   templateUrl: './kiosk-page.html',
   styleUrl: './kiosk-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -3,15 +3,33 @@ import type { Point3 } from '@oriel/shared/projection/types';
 import { acrossOf, glassAcross, sidesOf } from '../../drawing/across';
 import { roundStep } from '../../drawing/depth-scale';
 import { type DepthFrame, type ElevationFrame, type Frame, boxOf } from '../../drawing/frames';
-import { depthRangeOf, drawnAt, drawnOnGlass } from '../../drawing/placing';
+import { type Across, depthRangeOf, drawnAt, drawnOnGlass } from '../../drawing/placing';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { coneOf } from './wall-room';
+import { seenPart } from './zone-seen';
 
 const leastTickPx = 54;
 
+/** The part of the zone that the camera does not see: the whole of it, with what is seen left out (fill rule evenodd). */
+function unseenPath(frame: DepthFrame, setUp: WallSetUp): string {
+  const { low, high } = sidesOf(frame.view);
+  const { zone } = setUp;
+  const whole: Across[] = [zone.nearestMm, zone.farthestMm].flatMap((z, back) => {
+    const ends = [{ across: zone[low], z }, { across: zone[high], z }];
+    return back ? ends.reverse() : ends;
+  });
+  const outline = (corners: readonly Across[]) =>
+    corners.map((corner, index) => {
+      const { x, y } = drawnAt(frame, corner);
+      return `${index ? 'L' : 'M'}${x.toFixed(1)},${y.toFixed(1)}`;
+    }).join('') + (corners.length > 0 ? 'Z' : '');
+  return outline(whole) + outline(seenPart(frame.view, setUp));
+}
+
 /** A view of the wall in which distance is seen, as lines and places on the paper. */
-export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, spot: Point3 | null, clip: Frame) {
+export function drawView(frame: DepthFrame, setUp: WallSetUp, spot: Point3 | null, clip: Frame) {
+  const { glass, camera, zone } = setUp;
   const { beforeMm } = depthRangeOf(frame);
   const { low, high } = sidesOf(frame.view);
   const [from, to] = glassAcross(frame.view, glass).map((across) => drawnAt(frame, { across, z: 0 }));
@@ -25,6 +43,7 @@ export function drawView(frame: DepthFrame, { glass, camera, zone }: WallSetUp, 
     glass: { from, to },
     glassText: plan ? `glass, ${plainMm(glass.widthMm)} mm` : `${plainMm(glass.heightMm)} mm`,
     zone: boxOf(drawnAt(frame, { across: zone[low], z: zone.nearestMm }), drawnAt(frame, { across: zone[high], z: zone.farthestMm })),
+    unseen: unseenPath(frame, setUp),
     cone: coneOf(frame.view, camera, beforeMm).map(([lens, end]) => ({ from: drawnAt(frame, lens), to: drawnAt(frame, end) })),
     lens: drawnAt(frame, { across: acrossOf(frame.view, camera.position), z: camera.position.z }),
     cameraText: plan ? `camera, ${plainMm(degrees(camera.hfovRad))}° across` : `camera ${turnWords(camera.pitchRad, 'up', 'down')}`,

@@ -10,6 +10,7 @@ import { zoneSideAt } from '../../drawing/zone-side';
 import { drawElevation, drawView } from './room-drawing';
 import { type RoomLayout, layOutRoom, stackRoom } from './room-layout';
 import { roomExtents } from './wall-room';
+import { unseenWords } from './zone-seen';
 
 const stackBelowPx = 560;
 const tallestPx = 760;
@@ -44,6 +45,8 @@ export class RoomSheet {
     const extents = this.held()?.extents ?? this.extents();
     return width < stackBelowPx ? stackRoom(Math.max(width, 200), extents) : layOutRoom({ width, height: Math.min(tallestPx, width * 0.86) }, extents);
   });
+  /** What of the zone the camera does not see: hatched, and said. */
+  protected readonly unseen = computed(() => unseenWords(this.setUp()));
   protected readonly ready = computed(() => this.size().width > 0);
   protected readonly views = computed(() => [this.layout().plan, this.layout().section].map((frame) => drawView(frame, this.setUp(), this.spot(), clipOf(this.layout(), frame))));
   protected readonly elevation = computed(() => {

@@ -6,7 +6,7 @@ import type { DepthFrame } from '../../drawing/frames';
 import type { Across } from '../../drawing/placing';
 
 /** Cameras are taken to deliver 16:9: only their height of view depends on it. */
-const picture = { widthPx: 1280, heightPx: 720 } as const;
+export const picture = { widthPx: 1280, heightPx: 720 } as const;
 
 /** A wall's camera as the mathematics have it. */
 export const cameraOf = (camera: WallCamera): Camera => ({ ...camera, ...picture });

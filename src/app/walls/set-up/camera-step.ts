@@ -5,6 +5,7 @@ import { MatCheckbox } from '@angular/material/checkbox';
 import { WallCamera } from '@oriel/shared/contracts/walls';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { acrossFromDiagonal } from '@oriel/shared/viewer/field-of-view';
+import { ABOVE_EDGE_MM } from '@oriel/shared/viewer/usual-camera';
 import { FigureField } from '../../figures/figure-field';
 import { degrees, radians } from '../../screen/screen-measure';
 import { Means } from '../means/means';
@@ -16,9 +17,6 @@ import { degreeLimitsOf, limitsOf } from './limits';
 import { WallKeeper } from './wall-keeper';
 
 type Side = 'above' | 'below' | 'left' | 'right' | 'anywhere';
-
-/** From the edge of the glass to a lens in or on its frame, mm, until one measures (practice). */
-const fromEdgeMm = 15;
 const shape = WallCamera.shape;
 
 /** The second step: where the camera is, how it is turned, how much it sees. */
@@ -67,7 +65,7 @@ export class CameraStep {
     return degrees(2 * Math.atan((half * Math.hypot(16, 9)) / 16));
   });
 
-  protected toSide(side: Side, offset = fromEdgeMm): void {
+  protected toSide(side: Side, offset = ABOVE_EDGE_MM): void {
     const { widthMm, heightMm } = this.glass();
     const z = this.camera().position.z;
     const at: Readonly<Record<Side, Point3>> = {

@@ -8,6 +8,7 @@ import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-me
 import { ID1_WIDTH } from '@oriel/shared/viewer/measuring/two-distances';
 import { Means } from '../means/means';
 import { unmeasured } from '../means/sources';
+import { agreeing, squarePx } from './glass-shape';
 import { limitsOf } from './limits';
 import { WallKeeper } from './wall-keeper';
 
@@ -41,15 +42,13 @@ export class GlassStep {
   protected readonly diagonal = computed(() => diagonalOf(this.glass()) / unitMm[this.unit()]);
   protected readonly sureMm = computed(() => (this.glass().uncertainty ?? unmeasured.glassScale) * this.glass().widthMm);
   protected readonly pxMm = computed(() => this.glass().widthMm / this.window.screen.width);
-  /** px of the picture are not square where sides and px disagree by more than a screen's rounding. */
-  protected readonly oddPx = computed(() => {
-    const { widthMm: w, heightMm: h, widthPx: pw, heightPx: ph } = this.glass();
-    return Math.abs((w / pw) / (h / ph) - 1) > 0.02;
-  });
+  /** What would make sides and px agree; null where they do. */
+  protected readonly odd = computed(() => (squarePx(this.glass()) ? null : agreeing(this.glass())));
 
+  /** One side alone is no measure of the glass: it counts as measured once both agree with the px. */
   protected byRule(part: Partial<WallGlass>): void {
-    const uncertainty = this.glass().uncertainty ?? usual.ruleMm / this.glass().widthMm;
-    this.keeper.glass({ ...part, uncertainty });
+    const glass = { ...this.glass(), ...part };
+    this.keeper.glass({ ...part, uncertainty: glass.uncertainty ?? (squarePx(glass) ? usual.ruleMm / glass.widthMm : null) });
   }
 
   protected byDiagonal(length: number): void {

@@ -8,6 +8,8 @@ import { sayMoment } from '../../core/moments';
 import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
+import { AddressWarning } from '../address-warning';
+import { Cautions } from '../cautions/cautions';
 import { WallKeeper } from './wall-keeper';
 
 /** While a code is on its way the server is asked this often whether the screen has come. */
@@ -16,7 +18,7 @@ const askMs = 2000;
 /** The last step: the screen gets a credential of its own, or loses it. */
 @Component({
   selector: 'oriel-wall-pair-step',
-  imports: [ReactiveFormsModule, RouterLink, MatButton, FailureNotice, TextField],
+  imports: [ReactiveFormsModule, RouterLink, MatButton, FailureNotice, TextField, AddressWarning, Cautions],
   templateUrl: './pair-step.html',
   styleUrl: './step.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -24,7 +26,8 @@ const askMs = 2000;
 export class PairStep {
   private readonly router = inject(Router);
   protected readonly keeper = inject(WallKeeper);
-  protected readonly address = `${inject(DOCUMENT).location.origin}/wall`;
+  protected readonly origin = inject(DOCUMENT).location.origin;
+  protected readonly address = `${this.origin}/wall`;
   protected readonly minutes = pairingMinutes;
   protected readonly form = inject(NonNullableFormBuilder).group({ code: ['', accordingTo(pairWall.body.shape.code)] });
   protected readonly pairing = new Submission(this.form);

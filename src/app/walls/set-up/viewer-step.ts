@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, type OnInit, computed, inject, signal } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
+import { readHousehold } from '@oriel/shared/contracts/households';
 import { TrackerTuning, type ViewerScale, keepViewerScale, listViewerScales, removeViewerScale } from '@oriel/shared/contracts/walls';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
@@ -31,6 +32,8 @@ export class ViewerStep implements OnInit {
   protected readonly form = inject(NonNullableFormBuilder).group({ name: ['', accordingTo(keepViewerScale.body.shape.name)] });
   protected readonly keeping = new Submission(this.form);
   protected readonly scales = signal<readonly ViewerScale[]>([]);
+  /** The household's members, to be chosen from; a visitor's name may be typed as well. */
+  protected readonly members = signal<readonly string[]>([]);
   protected readonly measuring = signal(false);
   protected readonly ipd = limitsOf(shape.ipdMm.shape.value);
   protected readonly factor = limitsOf(shape.scaleFactor);
@@ -45,7 +48,11 @@ export class ViewerStep implements OnInit {
   }
 
   protected load(): Promise<void> {
-    return this.loading.run(async () => this.scales.set((await this.api.call(listViewerScales, { params: this.here() })).scales));
+    return this.loading.run(async () => {
+      const [{ scales }, { household }] = await Promise.all([this.api.call(listViewerScales, { params: this.here() }), this.api.call(readHousehold, { params: this.here() })]);
+      this.scales.set(scales);
+      this.members.set(household.members.map(({ name }) => name));
+    });
   }
 
   protected use({ ipdMm, scaleFactor }: ViewerScale): void {

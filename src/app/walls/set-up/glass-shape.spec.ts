@@ -1,0 +1,22 @@
+import { agreeing, squarePx } from './glass-shape';
+
+const fullHd = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080 };
+
+describe('the shape of a glass', () => {
+  it('agrees with its px to within a rule’s reading: 941 * 9/16 = 529.3 (by hand)', () => {
+    expect(squarePx(fullHd)).toBe(true);
+    expect(squarePx({ ...fullHd, heightMm: 526 })).toBe(true);
+  });
+
+  it('is doubted where only one side was typed, and the other offered: 600 * 9/16 = 337.5, 529 * 16/9 = 940.4 (by hand)', () => {
+    const typed = { ...fullHd, widthMm: 600 };
+    expect(squarePx(typed)).toBe(false);
+    expect(agreeing(typed).map(({ part }) => part)).toEqual([{ heightMm: 337.5 }, { widthMm: 940.4 }]);
+    for (const { part } of agreeing(typed)) expect(squarePx({ ...typed, ...part })).toBe(true);
+  });
+
+  it('is doubted where the px stand the other way round, and exchanging them is offered first', () => {
+    const upright = { ...fullHd, widthMm: 529, heightMm: 941 };
+    expect(agreeing(upright)[0].part).toEqual({ widthPx: 1080, heightPx: 1920 });
+  });
+});
