@@ -4,12 +4,15 @@ import type { Role } from '@oriel/shared/contracts/role';
 import { demoAccount } from './demo-accounts';
 import { chromiumArguments, chromiumPath, ignoredDefaults, type Graphics } from './set-up/chromium';
 import { filmFace, type FilmedFace, type FilmedTruth } from './set-up/filmed-face';
+import { filmThings, type FilmedThings } from './set-up/filmed-things';
 
 /** What a file may choose with `test.use`; each choice is a browser of its own. */
 export interface BrowserChoice {
   readonly graphics: Graphics;
   /** The face the fake camera shows; null for Chromium's own test pattern. */
   readonly filmedFace: FilmedFace | null;
+  /** Boards and cards held before the fake camera, in place of a face. */
+  readonly filmedThings: FilmedThings | null;
 }
 
 interface Fixtures {
@@ -38,15 +41,16 @@ interface WorkerFixtures extends BrowserChoice {
 export const test = base.extend<Fixtures, WorkerFixtures>({
   graphics: ['software', { option: true, scope: 'worker' }],
   filmedFace: [null, { option: true, scope: 'worker' }],
+  filmedThings: [null, { option: true, scope: 'worker' }],
   filmed: [
     async ({ filmedFace }, use) => use(filmedFace && (await filmFace(filmedFace))),
     { scope: 'worker', timeout: 120_000 },
   ],
   launchOptions: [
-    async ({ graphics, filmed }, use) => {
+    async ({ graphics, filmed, filmedThings }, use) => {
       await use({
         executablePath: chromiumPath,
-        args: chromiumArguments(graphics, filmed?.video ?? null),
+        args: chromiumArguments(graphics, filmedThings ? await filmThings(filmedThings) : (filmed?.video ?? null)),
         ignoreDefaultArgs: ignoredDefaults,
       });
     },

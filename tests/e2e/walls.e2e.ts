@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test';
 import type { Wall } from '@oriel/shared/contracts/walls';
 import { expect, test } from './fixtures';
+import { field, hang, step, type } from './walls/set-up';
 
 /** Asks the server as the page itself would, forgery token and all. */
 async function ask<T>(page: Page, method: string, path: string, body?: unknown): Promise<T> {
@@ -17,26 +18,7 @@ async function ask<T>(page: Page, method: string, path: string, body?: unknown):
 }
 
 const read = async (page: Page, id: string) => (await ask<{ wall: Wall }>(page, 'GET', `/api/walls/${id}`)).wall;
-const idOf = (page: Page) => new URL(page.url()).pathname.split('/')[2];
 const saved = (page: Page) => page.getByTestId('save-state');
-const step = (page: Page, name: string) => page.getByRole('list', { name: 'Steps' }).getByRole('button', { name });
-const field = (page: Page, name: string) => page.getByRole('spinbutton', { name, exact: true });
-
-async function type(page: Page, name: string, text: string): Promise<void> {
-  await field(page, name).fill(text);
-  await field(page, name).press('Enter');
-}
-
-/** Hangs a wall of this test's own and opens its set-up. */
-async function hang(page: Page, name = `Landing ${Date.now()}`): Promise<string> {
-  await page.goto('/walls');
-  await page.getByRole('button', { name: 'New wall' }).click();
-  await page.getByLabel('Name of the wall').fill(name);
-  await page.getByRole('button', { name: 'Set it up' }).click();
-  await expect(page).toHaveURL(/\/walls\/[0-9a-f-]{36}/);
-  await expect(page.getByLabel('Name of the wall')).toHaveValue(name);
-  return idOf(page);
-}
 
 async function removeWall(page: Page, id: string): Promise<void> {
   await page.evaluate(async (path) => {
@@ -72,6 +54,44 @@ test('a tuner hangs a wall, and every figure typed is on the drawing and saved b
 
   await page.reload();
   await expect(field(page, 'Nearest')).toHaveValue('900');
+  await removeWall(page, id);
+});
+
+test('the set-up speaks up: sides against px, eyes the camera misses, a scene that is not clear, an address that works here only', async ({ signedInPage, expectAccessible }) => {
+  const page = await signedInPage('tuner');
+  const id = await hang(page);
+  await type(page, 'Width', '600');
+  await expect(page.getByText(/600 × 529 mm and 1920 × 1080 px do not go together/)).toBeVisible();
+  // One side typed is not the glass measured.
+  await expect(page.getByText(/^Not measured. Taken as ±1 % of its width/)).toBeVisible();
+  await page.getByRole('button', { name: 'The height is 337.5 mm' }).click();
+  await expect(field(page, 'Height')).toHaveValue('337.5');
+  await expect(page.getByText(/do not go together/)).toHaveCount(0);
+  await expect(page.getByText(/^±0.17 % of its width/)).toBeVisible();
+
+  await step(page, 'Room').click();
+  await type(page, 'Lowest eye', '-900');
+  await expect(page.getByText(/nobody is followed whose eyes are low down/)).toBeVisible();
+  await type(page, 'Lowest eye', '-250');
+
+  await step(page, 'Scene').click();
+  await page.getByRole('radio', { name: /October on the ridge/ }).check();
+  const judged = page.getByRole('status', { name: 'The scene on this wall' });
+  await expect(judged).toContainText('Clear from everywhere in this wall’s viewing zone');
+  await step(page, 'Room').click();
+  await type(page, 'Nearest', '300');
+  await step(page, 'Scene').click();
+  await expect(judged).toContainText(/Not clear from all of this wall’s viewing zone. An edge would show of .*Sky/);
+  await expect(judged).toContainText(/Sky: .* edge: \d+ mm short, seen from .* 300 mm away/);
+  await expect(judged).toContainText('Nothing tears');
+  await expectAccessible(page);
+
+  await step(page, 'Pair').click();
+  await expect(page.getByText(/works on this computer only/)).toBeVisible();
+  await expect(page.getByText(/PUBLIC_URL=https/)).toBeVisible();
+  await expect(page.getByText(/makes some people unwell/)).toBeVisible();
+  await page.goto(`/walls/${id}/kiosk`);
+  await expect(page.getByText(/works on this computer only/)).toBeVisible();
   await removeWall(page, id);
 });
 
