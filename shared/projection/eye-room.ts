@@ -1,4 +1,4 @@
-import { clearance } from './clearance';
+import { clearance, EYE_MARGIN_MM } from './clearance';
 import { GeometryError } from './geometry-error';
 import { requireEye, requireGlass, requireZone } from './requirements';
 import type { SceneGeometry } from './scene-geometry';
@@ -17,7 +17,8 @@ import type { Glass, Point3, ViewingZone } from './types';
  *
  *     e <= s - t_least(s) ez    for s the edge of that side and for the opposite one,
  *
- * so it is convex, holds the zone, and mostly widens with distance where the zone's box does not.
+ * so it is convex, holds the zone, and mostly widens with distance where the zone's box does not; nearer than the zone it narrows to a
+ * point, for there the far edge of the glass is seen too steeply.
  */
 
 /** One side of the room, all in the outward direction of that side, mm: an eye stands within it where u <= +-edge - slope * ez. */
@@ -48,8 +49,9 @@ export interface EyeRoom {
 /** An eye is eased to a stop over this share of the zone: a step past its end takes some tenth of a second. Practice. */
 const EASE_SHARE = 0.1;
 const BLUNT_SHARE = 0.01;
-/** Sight lines that draw together with distance leave at least this share of the zone's width. */
-const NARROWEST_SHARE = 0.5;
+/** Sight lines that draw together leave at least this share of the zone's width: farther than the zone, and nearer. */
+const NARROWEST_FAR_SHARE = 0.5;
+const NARROWEST_NEAR_SHARE = 0.25;
 /** No camera sees an eye from farther, mm. */
 const FARTHEST_MM = 100_000;
 
@@ -61,7 +63,8 @@ export function clearRoom(scene: SceneGeometry, otherZone?: ViewingZone): EyeRoo
   const { x, y, z } = scene.homeEye;
   const home = { leftMm: x, rightMm: x, lowestMm: y, highestMm: y, nearestMm: z, farthestMm: z };
   const others = [home, ...(otherZone ? [otherZone] : [])].filter((zone) => isClearFrom(scene, zone));
-  return eyeRoom(scene.glass, scene.homeEye, scene.zone, others);
+  const foremostMm = Math.max(0, ...scene.layers.map(({ depthMm }) => -depthMm));
+  return eyeRoom(scene.glass, scene.homeEye, scene.zone, others, foremostMm > 0 ? foremostMm + EYE_MARGIN_MM : 0);
 }
 
 /** Whether no edge of a scene shows from anywhere in a zone, its own or another; sides that no layer covers are not asked for. */
@@ -74,16 +77,20 @@ export function isClearFrom(scene: SceneGeometry, zone: ViewingZone): boolean {
   }
 }
 
-/** The room of a zone and of others beside it. The home eye stays as it is wherever it stands in the room. Throws a GeometryError where a figure is impossible. */
-export function eyeRoom(glass: Glass, homeEye: Point3, zone: ViewingZone, others: readonly ViewingZone[] = []): EyeRoom {
+/**
+ * The room of a zone and of others beside it; nearer than the zone it goes on to `leastMm` at the most. The home eye stays as it is
+ * wherever it stands in the room. Throws a GeometryError where a figure is impossible.
+ */
+export function eyeRoom(glass: Glass, homeEye: Point3, zone: ViewingZone, others: readonly ViewingZone[] = [], leastMm = 0): EyeRoom {
   requireGlass(glass);
   requireEye(homeEye, 'homeEye');
   const zones = [zone, ...others];
   zones.forEach(requireZone);
   const across = axis(glass.widthMm / 2, homeEye.x, homeEye.z, zones.map(({ leftMm, rightMm, ...z }) => ({ low: leftMm, high: rightMm, ...z })));
   const up = axis(glass.heightMm / 2, homeEye.y, homeEye.z, zones.map(({ lowestMm, highestMm, ...z }) => ({ low: lowestMm, high: highestMm, ...z })));
-  const nearestMm = Math.min(...zones.map((one) => one.nearestMm));
-  const farthestMm = Math.max(nearestMm, Math.min(FARTHEST_MM, across.farthestMm, up.farthestMm));
+  const zoneNearestMm = Math.min(...zones.map((one) => one.nearestMm));
+  const nearestMm = Math.min(zoneNearestMm, Math.max(leastMm, across.nearestMm, up.nearestMm));
+  const farthestMm = Math.max(zoneNearestMm, Math.min(FARTHEST_MM, across.farthestMm, up.farthestMm));
   const easeMm = EASE_SHARE * Math.min(farthestMm - nearestMm, Math.max(...zones.map((one) => one.farthestMm)) - nearestMm);
   return {
     left: across.low,
@@ -116,7 +123,7 @@ function axis(edgeMm: number, home: number, homeMm: number, ranges: readonly Ran
   const widthMm = ranges[0].high - ranges[0].low;
   const high = side(edgeMm, home, homeMm, widthMm, ranges);
   const low = side(edgeMm, -home, homeMm, widthMm, ranges.map((range) => ({ ...range, low: -range.high, high: -range.low })));
-  return { low, high, farthestMm: untilNarrow(low, high, NARROWEST_SHARE * widthMm) };
+  return { low, high, nearestMm: fromNarrow(low, high, NARROWEST_NEAR_SHARE * widthMm), farthestMm: untilNarrow(low, high, NARROWEST_FAR_SHARE * widthMm) };
 }
 
 function side(edgeMm: number, home: number, homeMm: number, widthMm: number, ranges: readonly Range[]): RoomSide {
@@ -126,14 +133,20 @@ function side(edgeMm: number, home: number, homeMm: number, widthMm: number, ran
 }
 
 /** The distance up to which the lines of two opposite sides leave a width between them. */
-function untilNarrow(low: RoomSide, high: RoomSide, widthMm: number): number {
+const untilNarrow = (low: RoomSide, high: RoomSide, widthMm: number) =>
+  Math.min(...opposites(low, high).map(({ atMm, slope }) => (slope > 0 ? (atMm - widthMm) / slope : Infinity)));
+
+/** The distance from which they leave it. */
+const fromNarrow = (low: RoomSide, high: RoomSide, widthMm: number) =>
+  Math.max(...opposites(low, high).map(({ atMm, slope }) => (slope < 0 ? (atMm - widthMm) / slope : 0)));
+
+/** Each line of one side with each of the opposite one: between them lie atMm - slope * ez. */
+function opposites(low: RoomSide, high: RoomSide): { atMm: number; slope: number }[] {
   const lines = ({ edgeMm, ownSlope, otherSlope }: RoomSide) => [
     { at: edgeMm, slope: ownSlope },
     { at: -edgeMm, slope: otherSlope },
   ];
-  return Math.min(
-    ...lines(low).flatMap((a) => lines(high).map((b) => (a.slope + b.slope > 0 ? (a.at + b.at - widthMm) / (a.slope + b.slope) : Infinity))),
-  );
+  return lines(low).flatMap((a) => lines(high).map((b) => ({ atMm: a.at + b.at, slope: a.slope + b.slope })));
 }
 
 const within = (least: number, value: number, most: number) => Math.max(least, Math.min(value, most));

@@ -94,12 +94,13 @@ describe('holdEye', () => {
     );
   });
 
-  it('never jerks: along any straight walk speed changes by little from step to step and never exceeds the walker’s', () => {
+  it('never jerks: along any straight walk speed changes by little from step to step and never exceeds the walker’s by more than the steepest sight line leans', () => {
     const { glass, homeEye, zone } = livingRoom('landscape');
     for (const factor of [0.25, 1]) {
       const scene = retarget({ glass, homeEye, zone, layers: [] }, { widthMm: glass.widthMm * factor, heightMm: glass.heightMm * factor });
       const room = eyeRoom(scene.glass, scene.homeEye, scene.zone);
       const stepMm = 1 * factor;
+      const steepest = Math.max(...[room.left, room.right, room.bottom, room.top].map(({ otherSlope }) => -otherSlope));
       for (const [from, way] of [
         [{ x: -2000, y: 100, z: 700 }, { x: 1, y: 0, z: 0 }],
         [{ x: 300, y: -900, z: 900 }, { x: 0, y: 1, z: 0 }],
@@ -116,7 +117,7 @@ describe('holdEye', () => {
             sharpest = Math.max(sharpest, Math.abs(c[key] - 2 * b[key] + a[key]));
           }
         }
-        expect(fastest).toBeLessThan(1.001 * stepMm);
+        expect(fastest).toBeLessThan(1.001 * Math.max(1, steepest) * stepMm);
         expect(sharpest).toBeLessThan(0.02 * stepMm);
       }
     }
@@ -131,6 +132,10 @@ describe('holdEye', () => {
     const far = held(room, { x: 0, y: 0, z: 8000 });
     expect(far.z).toBeGreaterThan(3999);
     expect(far.z).toBeLessThanOrEqual(4000);
+    // Nearer than the zone they leave a quarter of its width from where -600 + 2 z = 100; straight on an eye stays as it is until it is eased there.
+    expect(room).toMatchObject({ nearestMm: 350, nearEaseMm: 165 });
+    expect(held(room, { x: 0, y: 0, z: 520 })).toEqual({ x: 0, y: 0, z: 520 });
+    expect(held(room, { x: 0, y: 0, z: 10 }).z).toBeGreaterThanOrEqual(350);
     const aside = held(room, { x: 5000, y: 0, z: 1000 });
     expect(aside.x).toBeCloseTo((250 + 700 - Math.hypot(450, 8)) / 2, 6);
     expect(aside.z).toBe(1000);
