@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import type { Computer } from './computers';
 
-const controller = '/sys/fs/cgroup/cpu';
+const mounted = '/sys/fs/cgroup/cpu';
 /** Short, so that a share of a core is felt as slowness and not as stops. */
 const periodUs = 10_000;
 const rescanMs = 150;
@@ -11,14 +11,21 @@ const rescanMs = 150;
 /** Why no smaller computer can be emulated here; null where one can: cgroup v1, its cpu controller mounted, and the right to write there. */
 export function whyNoQuota(): string | null {
   if (process.platform !== 'linux') return 'quotas need Linux';
-  if (!existsSync(join(controller, 'cpu.cfs_quota_us')))
+  if (!existsSync(join(mounted, 'cpu.cfs_quota_us')))
     return existsSync('/sys/fs/cgroup/cgroup.controllers') ? 'this machine has cgroup v2, which gives no quota to single threads of a running browser' : 'no cgroup v1 cpu controller is mounted';
   try {
-    accessSync(controller, constants.W_OK);
+    accessSync(ownGroup(), constants.W_OK);
     return null;
   } catch {
     return 'only root may set quotas here';
   }
+}
+
+/** The group this process is in itself: what it makes stands within, and shares its lot. */
+function ownGroup(): string {
+  const line = readFileSync('/proc/self/cgroup', 'utf8').split('\n').find((entry) => entry.split(':')[1]?.split(',').includes('cpu'));
+  const path = join(mounted, line?.split(':')[2] ?? '');
+  return existsSync(path) ? path : mounted;
 }
 
 /** A group of processes that share what a smaller computer would have. */
@@ -34,7 +41,7 @@ let groups = 0;
 /** Emulates a computer by a cgroup v1 quota; for slow cores each thread has a group of its own within, found anew several times a second. */
 export function quotaFor({ eachThread, inAll }: Computer): Quota | null {
   if (inAll === null) return null;
-  const group = join(controller, `oriel-bench-${String(process.pid)}-${String(++groups)}`);
+  const group = join(ownGroup(), `oriel-bench-${String(process.pid)}-${String(++groups)}`);
   mkdirSync(group);
   limit(group, inAll);
   const timer = eachThread === null ? null : setInterval(() => spread(group, eachThread), rescanMs);
