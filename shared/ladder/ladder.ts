@@ -5,6 +5,8 @@ export interface LadderSettings {
   readonly firstStep: number;
   /** Intervals between drawn frames above this are poor, ms: two refreshes of a 60 Hz screen, and a little. */
   readonly drawingBudgetMs: number;
+  /** For the sake of drawing no step with fewer looks a second than this is taken: a picture that follows late is worse than one drawn seldom. */
+  readonly leastForDrawingPerS: number;
   /** Seconds of excess, less the seconds without, that bring the ladder down a step. */
   readonly excessS: number;
   /** Share of the upper step's budget in which the foretold time must lie for a climb. */
@@ -20,6 +22,7 @@ export const USUAL_LADDER: LadderSettings = {
   steps: LADDER_STEPS,
   firstStep: FIRST_STEP,
   drawingBudgetMs: 36,
+  leastForDrawingPerS: 20,
   excessS: 3,
   calmShare: 0.85,
   proofS: 20,
@@ -33,7 +36,7 @@ export interface LadderSecond {
   readonly tMs: number;
   /** Time of a look at a face that is followed, ms. */
   readonly lookMs: number | null;
-  /** Interval between drawn frames, ms. */
+  /** Interval between drawn frames, ms; counted only beside a look, for where nobody is followed tracking is not what hampers, and nobody sees. */
   readonly frameMs: number | null;
 }
 
@@ -60,7 +63,8 @@ const CAMERA_PER_S = 30;
  * Chooses how finely to look by what looking takes. Down after a sustained excess over the step's budget, or while frames are drawn poorly;
  * up when the time foretold for the step above (this step's time by the ratio of the costs) has fitted into its budget for long. Whatever
  * comes, it cannot oscillate: each fall after a climb doubles the proof asked of the next climb. Where less tracking did not help the
- * drawing, tracking is not to blame and gives up nothing more for it; and for the drawing's sake it is never given up altogether. Pure, but for what it remembers.
+ * drawing, tracking is not to blame and gives up nothing more for it; and for the drawing's sake it never looks less than 20 times a second.
+ * Pure, but for what it remembers.
  */
 export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
   const { steps } = settings;
@@ -102,7 +106,7 @@ export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
     }
     const least = RELIEF_SHARE * loadOf(steps[step], CAMERA_PER_S);
     const to = steps.findIndex(
-      (candidate, index) => index > step && candidate.looking.by !== 'nothing' && loadOf(candidate, CAMERA_PER_S) <= least,
+      (candidate, index) => index > step && candidate.looking.mostPerS >= settings.leastForDrawingPerS && loadOf(candidate, CAMERA_PER_S) <= least,
     );
     excess = 0;
     if (to < 0) return null;
@@ -139,6 +143,7 @@ export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
         return null;
       }
       const { tMs, lookMs, frameMs } = second;
+      const witnessed = lookMs !== null;
       if (++calmS >= settings.forgiveS) {
         proofS = settings.proofS;
         climbs = calmS = 0;
@@ -148,7 +153,7 @@ export function createLadder(settings: LadderSettings = USUAL_LADDER): Ladder {
         frameMsAtFall = null;
       }
       const slowLook = lookMs !== null && lookMs > steps[step].budgetMs;
-      const slowFrames = slowDrawing(frameMs) && !blameless;
+      const slowFrames = witnessed && slowDrawing(frameMs) && !blameless;
       excess = slowLook || slowFrames ? excess + 1 : Math.max(0, excess - 1);
       if (excess >= settings.excessS && step < last) {
         if (slowLook) return fall(tMs, step + 1, `a look took ${lookMs.toFixed(0)} ms, and ${steps[step].budgetMs} are allowed`);

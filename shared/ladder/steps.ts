@@ -27,8 +27,9 @@ export const LADDER_STEPS: readonly LadderStep[] = [
   { words: 'landmarks, each frame guarded', looking: { by: 'landmarks', guardEvery: 1, mostPerS: Infinity }, budgetMs: 55, cost: 1 },
   { words: 'landmarks, every fifth frame guarded', looking: { by: 'landmarks', guardEvery: 5, mostPerS: Infinity }, budgetMs: 55, cost: 0.61 },
   { words: 'landmarks, every tenth frame guarded', looking: { by: 'landmarks', guardEvery: 10, mostPerS: Infinity }, budgetMs: 55, cost: 0.56 },
+  { words: 'landmarks, 20 a second, predicted between', looking: { by: 'landmarks', guardEvery: 10, mostPerS: 20 }, budgetMs: 55, cost: 0.56 },
   { words: 'zoomed detector', looking: { by: 'detector', guardEvery: 1, mostPerS: Infinity }, budgetMs: 70, cost: 0.49 },
-  { words: 'zoomed detector, 15 a second, predicted between', looking: { by: 'detector', guardEvery: 1, mostPerS: 15 }, budgetMs: 90, cost: 0.49 },
+  { words: 'zoomed detector, 20 a second, predicted between', looking: { by: 'detector', guardEvery: 1, mostPerS: 20 }, budgetMs: 90, cost: 0.49 },
   { words: 'zoomed detector, 10 a second, predicted between', looking: { by: 'detector', guardEvery: 1, mostPerS: 10 }, budgetMs: 200, cost: 0.49 },
   { words: 'no tracking', looking: { by: 'nothing', guardEvery: 1, mostPerS: 0 }, budgetMs: Infinity, cost: 0 },
 ];

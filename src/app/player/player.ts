@@ -95,7 +95,7 @@ export class Player {
       if (found) this.playing?.face(eye, capturedMs);
       else this.playing?.nobody(capturedMs);
     });
-    this.tracking.minds(() => this.playing?.meter.framesPerSecond(performance.now()) ?? 0);
+    this.tracking.minds(() => this.playing?.mindedFramesPerSecond() ?? 0);
     inject(DestroyRef).onDestroy(() => {
       leaving.abort();
       awake();

@@ -1,5 +1,7 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { ViewingZone } from '@oriel/shared/projection/types';
+import { createDrawingRate } from '@oriel/shared/ladder/drawing-rate';
+import { Pace } from '../tracking/pace';
 import { graphicsName, makeRenderer, rendererFor } from './choose-renderer';
 import { IntervalJudge } from './interval-judge';
 import { Meter } from './meter';
@@ -27,6 +29,8 @@ export interface PlayingSurroundings {
   readonly handChanged: (byHand: boolean) => void;
 }
 
+const secondMs = 1000;
+
 /** A scene being played: it owns the renderer and the frame loop, and ends both. */
 export class Playing {
   readonly meter = new Meter();
@@ -39,6 +43,9 @@ export class Playing {
   private viewpoint: Viewpoint;
   private renderer: Renderer | null = null;
   private judge: IntervalJudge | null = null;
+  private readonly rate = createDrawingRate();
+  private readonly pace = new Pace();
+  private secondBegunMs = NaN;
   private frame = 0;
   private capturedMs = NaN;
   private byHand = false;
@@ -57,6 +64,11 @@ export class Playing {
 
   get facts(): RendererFacts | null {
     return this.renderer?.facts ?? null;
+  }
+
+  /** Frames drawn a second, as tracking is to mind them: where fewer are drawn on purpose, as a share of these, of 30. */
+  mindedFramesPerSecond(): number {
+    return (this.meter.framesPerSecond(performance.now()) * 30) / Math.min(30, this.rate.mostPerS);
   }
 
   /** Loads the pictures and starts drawing. */
@@ -128,14 +140,25 @@ export class Playing {
 
   private readonly drawFrame = (tMs: number): void => {
     this.frame = this.window.requestAnimationFrame(this.drawFrame);
+    if (!this.pace.due(tMs, this.rate.mostPerS)) return;
     this.viewpoint.at(tMs, this.faceExpected, this.eye);
     if (this.byHand !== this.viewpoint.byHand) this.surroundings.handChanged((this.byHand = this.viewpoint.byHand));
     this.renderer?.draw(this.eye);
     this.meter.frame(tMs);
     if (!Number.isNaN(this.capturedMs)) this.meter.drawn(this.capturedMs, performance.now());
+    this.judgeRate(tMs);
     if (this.judge?.frame(tMs)) {
       this.judge = null;
       void this.drawWith('css');
     }
   };
+
+  /** Second by second; one in which the page was hidden, and so not drawn, tells nothing. */
+  private judgeRate(tMs: number): void {
+    const sinceMs = tMs - this.secondBegunMs;
+    if (sinceMs < secondMs) return;
+    this.secondBegunMs = tMs;
+    const change = sinceMs < 2 * secondMs ? this.rate.second(tMs, this.meter.framesPerSecond(tMs)) : null;
+    if (change) performance.mark('oriel drawing', { detail: change });
+  }
 }

@@ -11,6 +11,7 @@ function passed(perS: number, mostPerS: number): number {
 describe('Pace', () => {
   it.each([
     [30, Infinity, 300],
+    [30, 20, 200],
     [30, 15, 150],
     [30, 10, 100],
     [30, 0, 0],

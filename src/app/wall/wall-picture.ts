@@ -86,7 +86,7 @@ export class WallPicture {
       if (found) this.stage?.playing?.face(eye, capturedMs);
       else this.stage?.playing?.nobody(capturedMs);
     });
-    this.tracking.minds(() => this.framesPerSecond());
+    this.tracking.minds(() => this.stage?.playing?.mindedFramesPerSecond() ?? 0);
     const unreport = this.reporter.start(() => this.facts());
     const tick = setInterval(() => this.tick(), tickMs);
     effect(() => {

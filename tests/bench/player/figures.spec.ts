@@ -10,7 +10,7 @@ function made(seconds: number): Seen {
   const frames = Array.from({ length: seconds * 50 }, (_, i): [number, number] => [i * 20, i * 20 + 4]);
   const looks = Array.from({ length: seconds * 25 }, (_, i): [number, number, boolean, number] => [i * 40 - 1030 + waver(i), i * 40 + 1 + waver(i), i % 5 !== 0, 9]);
   const captures = looks.slice(0, 60).map(([timestampMs]) => timestampMs + 1000);
-  return { frames, looks, captures, presented: [[504, 520], [1504, 1524]], changes: [{ tMs: 1500, from: 1, to: 2, reason: 'made up' }] };
+  return { frames, looks, captures, presented: [[504, 520], [1504, 1524]], changes: [{ tMs: 1500, from: 1, to: 2, reason: 'made up' }], rateChanges: [] };
 }
 
 // Expected values follow from how the page was made up (computed).
@@ -28,7 +28,7 @@ describe('figures of what was seen of a page', () => {
   });
 
   it('says nothing where nothing was seen', () => {
-    const nothing = figuresOf({ frames: [], looks: [], captures: [], presented: [], changes: [] }, 0, 1000);
+    const nothing = figuresOf({ frames: [], looks: [], captures: [], presented: [], changes: [], rateChanges: [] }, 0, 1000);
     expect(nothing).toEqual({ framesPerS: 0, frameMs: null, trackedPerS: 0, lookMs: null, captureToDrawnMs: null, drawnToPresentedMs: null });
   });
 

@@ -21,6 +21,7 @@ export interface Measured extends Figures {
   readonly readyS: number;
   readonly ladderStep: number;
   readonly ladder: readonly { readonly atS: number; readonly from: number; readonly to: number; readonly reason: string }[];
+  readonly drawingRates: readonly { readonly atS: number; readonly toPerS: number | null; readonly reason: string }[];
   readonly seconds: ReturnType<typeof secondsOf>;
 }
 
@@ -69,6 +70,7 @@ export async function measure(stand: Stand, condition: Condition, settleSeconds:
       readyS: rounded(readyS),
       ladderStep: seen.changes.at(-1)?.to ?? FIRST_STEP,
       ladder: seen.changes.map(({ tMs, from, to, reason }) => ({ atS: rounded(tMs / 1000), from, to, reason })),
+      drawingRates: seen.rateChanges.map(({ tMs, toPerS, reason }) => ({ atS: rounded(tMs / 1000), toPerS, reason })),
       seconds: secondsOf(seen, 0, untilMs, FIRST_STEP),
     };
   });

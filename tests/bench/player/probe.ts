@@ -1,3 +1,4 @@
+import type { DrawingChange } from '@oriel/shared/ladder/drawing-rate';
 import type { FromTracker, ToTracker } from '../../../src/app/tracking/tracking-messages';
 
 /** What is seen of a page while it runs; times on the page's clock, ms. */
@@ -11,6 +12,8 @@ export interface Seen {
   /** A frame drawn and when it was presented. */
   readonly presented: [drawnMs: number, presentedMs: number][];
   readonly changes: { tMs: number; from: number; to: number; reason: string }[];
+  /** Changes of how many frames a second are drawn at most; null for every refresh. */
+  readonly rateChanges: { tMs: number; toPerS: number | null; reason: string }[];
 }
 
 /** What a page holds that must be freed. */
@@ -36,7 +39,7 @@ const probeEveryMs = 400;
  * Runs in the page before the product does, and only listens: it draws nothing but, now and then, a single mark of a few px, by which the
  * browser says when a frame was presented (W3C Element Timing).
  */
-const seen: Seen = { frames: [], looks: [], captures: [], presented: [], changes: [] };
+const seen: Seen = { frames: [], looks: [], captures: [], presented: [], changes: [], rateChanges: [] };
 const marks = new Map<string, number>();
 let lastFrameMs = NaN;
 let lastMarkMs = -Infinity;
@@ -74,7 +77,13 @@ new PerformanceObserver((list) => {
 }).observe({ type: 'element', buffered: true });
 
 new PerformanceObserver((list) => {
-  for (const entry of list.getEntries()) if (entry.name === 'oriel ladder') seen.changes.push((entry as PerformanceMark).detail as Seen['changes'][number]);
+  for (const { name, detail } of list.getEntries() as PerformanceMark[]) {
+    if (name === 'oriel ladder') seen.changes.push(detail as Seen['changes'][number]);
+    if (name === 'oriel drawing') {
+      const { tMs, toPerS, reason } = detail as DrawingChange;
+      seen.rateChanges.push({ tMs, toPerS: Number.isFinite(toPerS) ? toPerS : null, reason });
+    }
+  }
 }).observe({ type: 'mark', buffered: true });
 
 const OwnWorker = window.Worker;

@@ -37,6 +37,7 @@ async function one(stand: Stand, condition: Condition, settleSeconds: number, se
     const measured = await measure(stand, condition, settleSeconds, seconds);
     say(tableLine(condition, measured));
     for (const { atS, from, to, reason } of measured.ladder) say(`    at ${atS.toFixed(0)} s from step ${String(from)} to ${String(to)}: ${reason}`);
+    for (const { atS, toPerS, reason } of measured.drawingRates) say(`    at ${atS.toFixed(0)} s drawn ${toPerS === null ? 'at every refresh' : `at most ${String(toPerS)} times a second`}: ${reason}`);
     if (trace) {
       say(`    processors by kind: ${JSON.stringify(measured.processorBy)}; ready after ${String(measured.readyS)} s`);
       say(`    frames, faces, look ms, step, second by second: ${measured.seconds.map((second) => second.join(' ')).join(' | ')}`);

@@ -1,0 +1,90 @@
+/** How many frames a second are drawn at most. */
+export interface DrawingStep {
+  readonly mostPerS: number;
+  /** Fewer frames a second than this, for so many seconds net of better ones, and the step below is taken. */
+  readonly poorPerS: number;
+  readonly patienceS: number;
+}
+
+/**
+ * Every refresh of the screen; otherwise half of 60, or a third. A machine asked for more frames than it can compose gives them late and
+ * unevenly: measured with 5 layers at 720p where it could compose 30 of 60, each was lit 83 ms after it was drawn, against 23. Before a third
+ * is taken, tracking has had time to give way (see `createLadder`).
+ */
+export const DRAWING_STEPS: readonly DrawingStep[] = [
+  { mostPerS: Infinity, poorPerS: 45, patienceS: 4 },
+  { mostPerS: 30, poorPerS: 25, patienceS: 10 },
+  { mostPerS: 20, poorPerS: 0, patienceS: Infinity },
+];
+
+/** Seconds without a poor one after which more is tried; doubled by every trial that had to be taken back, up to the longest. */
+const PROOF_S = 30;
+const LONGEST_PROOF_S = 1800;
+/** Seconds without a change after which trials taken back are forgotten; longer than the longest proof. */
+const FORGIVE_S = 7200;
+
+export interface DrawingChange {
+  readonly tMs: number;
+  readonly fromPerS: number;
+  readonly toPerS: number;
+  readonly reason: string;
+}
+
+export interface DrawingRate {
+  readonly mostPerS: number;
+  /** Takes in how many frames were drawn in a second; gives the change it led to, or null. */
+  second(tMs: number, framesPerS: number): DrawingChange | null;
+}
+
+/**
+ * Chooses how often to draw by how often drawing succeeds. Whether more would succeed cannot be foretold, so it is tried; as with the ladder
+ * each trial taken back doubles the wait for the next, so that it cannot oscillate. Pure, but for what it remembers.
+ */
+export function createDrawingRate(): DrawingRate {
+  let step = 0;
+  let excess = 0;
+  let goodS = 0;
+  let proofS = PROOF_S;
+  let trials = 0;
+  let calmS = 0;
+  let fresh = true;
+
+  const change = (tMs: number, to: number, reason: string): DrawingChange => {
+    const fromPerS = DRAWING_STEPS[step].mostPerS;
+    step = to;
+    excess = goodS = calmS = 0;
+    fresh = true;
+    return { tMs, fromPerS, toPerS: DRAWING_STEPS[to].mostPerS, reason };
+  };
+
+  return {
+    get mostPerS() {
+      return DRAWING_STEPS[step].mostPerS;
+    },
+    second(tMs, framesPerS) {
+      // The second in which the rate changed, or drawing began, belongs to neither.
+      if (fresh) {
+        fresh = false;
+        return null;
+      }
+      if (++calmS >= FORGIVE_S) {
+        proofS = PROOF_S;
+        trials = calmS = 0;
+      }
+      const { poorPerS, patienceS } = DRAWING_STEPS[step];
+      const poor = framesPerS < poorPerS;
+      excess = poor ? excess + 1 : Math.max(0, excess - 1);
+      goodS = poor ? 0 : goodS + 1;
+      if (excess >= patienceS) {
+        if (trials > 0) {
+          trials--;
+          proofS = Math.min(2 * proofS, LONGEST_PROOF_S);
+        }
+        return change(tMs, step + 1, `${framesPerS.toFixed(0)} frames were drawn in a second`);
+      }
+      if (step === 0 || goodS < proofS) return null;
+      trials++;
+      return change(tMs, step - 1, `drawing kept its rate for ${proofS} s`);
+    },
+  };
+}
