@@ -23,13 +23,12 @@ describe('the rate of drawing', () => {
     expect(run(createDrawingRate(), (s) => (s < 3 || s % 3 === 0 ? 10 : 60), 0, hour)).toEqual([]);
   });
 
-  it('takes half where half succeeds, and a third where it does not', () => {
+  it('takes the rate that succeeds, at once', () => {
     const half = createDrawingRate();
     run(half, () => 33, 0, 20);
     expect(half.mostPerS).toBe(30);
-    const third = createDrawingRate();
-    const changes = run(third, () => 18, 0, 20);
-    expect(changes.map(({ toPerS }) => toPerS)).toEqual([30, 20]);
+    expect(run(createDrawingRate(), () => 18, 0, 20)).toMatchObject([{ toPerS: 20, reason: '18 frames a second were drawn' }]);
+    expect(run(createDrawingRate(), () => 9, 0, 20)).toMatchObject([{ toPerS: 15 }]);
   });
 
   it('comes back when the load has gone', () => {

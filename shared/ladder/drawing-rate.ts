@@ -1,22 +1,24 @@
 /** How many frames a second are drawn at most. */
 export interface DrawingStep {
   readonly mostPerS: number;
-  /** Fewer frames a second than this, for so many seconds net of better ones, and the step below is taken. */
+  /** Seconds with fewer frames than this are poor; so many, less the better ones, and fewer are drawn. */
   readonly poorPerS: number;
   readonly patienceS: number;
 }
 
 /**
- * Every refresh of the screen; otherwise half of 60, or a third. A machine asked for more frames than it can compose gives them late and
- * unevenly: measured with 5 layers at 720p where it could compose 30 of 60, each was lit 83 ms after it was drawn, against 23. Before a third
- * is taken, tracking has had time to give way (see `createLadder`).
+ * Every refresh of the screen; otherwise a half, a third or a quarter of 60. A machine asked for more frames than it can compose gives them
+ * late and unevenly, and takes the time from tracking.
  */
 export const DRAWING_STEPS: readonly DrawingStep[] = [
   { mostPerS: Infinity, poorPerS: 45, patienceS: 4 },
-  { mostPerS: 30, poorPerS: 25, patienceS: 10 },
-  { mostPerS: 20, poorPerS: 0, patienceS: Infinity },
+  { mostPerS: 30, poorPerS: 25, patienceS: 8 },
+  { mostPerS: 20, poorPerS: 18, patienceS: 8 },
+  { mostPerS: 15, poorPerS: 0, patienceS: Infinity },
 ];
 
+/** The rate taken is the greatest that is no more than what was achieved, and this much. */
+const GENEROSITY = 1.15;
 /** Seconds without a poor one after which more is tried; doubled by every trial that had to be taken back, up to the longest. */
 const PROOF_S = 30;
 const LONGEST_PROOF_S = 1800;
@@ -43,6 +45,8 @@ export interface DrawingRate {
 export function createDrawingRate(): DrawingRate {
   let step = 0;
   let excess = 0;
+  let poorFrames = 0;
+  let poorS = 0;
   let goodS = 0;
   let proofS = PROOF_S;
   let trials = 0;
@@ -52,9 +56,19 @@ export function createDrawingRate(): DrawingRate {
   const change = (tMs: number, to: number, reason: string): DrawingChange => {
     const fromPerS = DRAWING_STEPS[step].mostPerS;
     step = to;
-    excess = goodS = calmS = 0;
+    excess = poorFrames = poorS = goodS = calmS = 0;
     fresh = true;
     return { tMs, fromPerS, toPerS: DRAWING_STEPS[to].mostPerS, reason };
+  };
+
+  const fall = (tMs: number): DrawingChange => {
+    if (trials > 0) {
+      trials--;
+      proofS = Math.min(2 * proofS, LONGEST_PROOF_S);
+    }
+    const achieved = poorFrames / poorS;
+    const fitting = DRAWING_STEPS.findIndex(({ mostPerS }, index) => index > step && mostPerS <= GENEROSITY * achieved);
+    return change(tMs, fitting < 0 ? DRAWING_STEPS.length - 1 : fitting, `${achieved.toFixed(0)} frames a second were drawn`);
   };
 
   return {
@@ -72,17 +86,16 @@ export function createDrawingRate(): DrawingRate {
         trials = calmS = 0;
       }
       const { poorPerS, patienceS } = DRAWING_STEPS[step];
-      const poor = framesPerS < poorPerS;
-      excess = poor ? excess + 1 : Math.max(0, excess - 1);
-      goodS = poor ? 0 : goodS + 1;
-      if (excess >= patienceS) {
-        if (trials > 0) {
-          trials--;
-          proofS = Math.min(2 * proofS, LONGEST_PROOF_S);
-        }
-        return change(tMs, step + 1, `${framesPerS.toFixed(0)} frames were drawn in a second`);
+      if (framesPerS < poorPerS) {
+        excess++;
+        poorS++;
+        poorFrames += framesPerS;
+        goodS = 0;
+        return excess >= patienceS ? fall(tMs) : null;
       }
-      if (step === 0 || goodS < proofS) return null;
+      excess = Math.max(0, excess - 1);
+      if (excess === 0) poorFrames = poorS = 0;
+      if (step === 0 || ++goodS < proofS) return null;
       trials++;
       return change(tMs, step - 1, `drawing kept its rate for ${proofS} s`);
     },

@@ -3,7 +3,7 @@ import { FIRST_STEP, LADDER_STEPS, loadOf, type LadderStep } from './steps';
 export interface LadderSettings {
   readonly steps: readonly LadderStep[];
   readonly firstStep: number;
-  /** Intervals between drawn frames above this are poor, ms: two refreshes of a 60 Hz screen, and a little. */
+  /** Intervals between drawn frames above this are poor, ms; where fewer are drawn on purpose, as if 30 a second were wanted. */
   readonly drawingBudgetMs: number;
   /** For the sake of drawing no step with fewer looks a second than this is taken: a picture that follows late is worse than one drawn seldom. */
   readonly leastForDrawingPerS: number;
@@ -21,7 +21,7 @@ export interface LadderSettings {
 export const USUAL_LADDER: LadderSettings = {
   steps: LADDER_STEPS,
   firstStep: FIRST_STEP,
-  drawingBudgetMs: 36,
+  drawingBudgetMs: 45,
   leastForDrawingPerS: 20,
   excessS: 3,
   calmShare: 0.85,

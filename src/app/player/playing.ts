@@ -30,6 +30,7 @@ export interface PlayingSurroundings {
 }
 
 const secondMs = 1000;
+const refreshMs = 1000 / 60;
 
 /** A scene being played: it owns the renderer and the frame loop, and ends both. */
 export class Playing {
@@ -46,6 +47,7 @@ export class Playing {
   private readonly rate = createDrawingRate();
   private readonly pace = new Pace();
   private secondBegunMs = NaN;
+  private waking: ReturnType<typeof setTimeout> | undefined;
   private frame = 0;
   private capturedMs = NaN;
   private byHand = false;
@@ -117,6 +119,7 @@ export class Playing {
 
   dispose(): void {
     this.over = true;
+    clearTimeout(this.waking);
     this.window.cancelAnimationFrame(this.frame);
     this.renderer?.dispose();
     this.renderer = null;
@@ -141,6 +144,7 @@ export class Playing {
   private readonly drawFrame = (tMs: number): void => {
     this.frame = this.window.requestAnimationFrame(this.drawFrame);
     if (!this.pace.due(tMs, this.rate.mostPerS)) return;
+    this.rest();
     this.viewpoint.at(tMs, this.faceExpected, this.eye);
     if (this.byHand !== this.viewpoint.byHand) this.surroundings.handChanged((this.byHand = this.viewpoint.byHand));
     this.renderer?.draw(this.eye);
@@ -152,6 +156,14 @@ export class Playing {
       void this.drawWith('css');
     }
   };
+
+  /** Where fewer frames are drawn than the screen shows, the refreshes in between do not even wake the page. */
+  private rest(): void {
+    const restMs = 1000 / this.rate.mostPerS - refreshMs;
+    if (restMs <= 0) return;
+    this.window.cancelAnimationFrame(this.frame);
+    this.waking = setTimeout(() => (this.frame = this.window.requestAnimationFrame(this.drawFrame)), restMs);
+  }
 
   /** Second by second; one in which the page was hidden, and so not drawn, tells nothing. */
   private judgeRate(tMs: number): void {

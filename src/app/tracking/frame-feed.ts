@@ -5,6 +5,8 @@ import { eachFrame, playTrack } from './video-frames';
 
 /** How long the track is played in a video element to learn the camera's clock. */
 const CLOCK_MS = 3000;
+/** A machine too slow to show enough frames in that time is given so many times as long. */
+const MOST_TRIES = 5;
 
 /** A camera's frames on their way to the worker. */
 export interface FrameFeed {
@@ -44,8 +46,9 @@ const tell = (worker: Worker, message: ToTracker, transfer: Transferable[]): voi
 class StreamFeed implements FrameFeed {
   private readonly clock = new CaptureClock();
   private readonly endWatch: () => void;
-  private readonly timer: ReturnType<typeof setTimeout>;
+  private timer: ReturnType<typeof setTimeout>;
   private learning = true;
+  private tries = 0;
   private offsetMs: number | null = null;
 
   constructor(track: MediaStreamTrack) {
@@ -70,8 +73,9 @@ class StreamFeed implements FrameFeed {
   }
 
   private learnt(): void {
-    this.stop();
     this.offsetMs = this.clock.offsetMs();
+    if (this.offsetMs !== null || ++this.tries >= MOST_TRIES) this.stop();
+    else this.timer = setTimeout(() => this.learnt(), CLOCK_MS);
   }
 }
 

@@ -31,6 +31,7 @@ export interface Probe {
 
 interface ThreeInfo {
   readonly memory: { readonly textures: number; readonly geometries: number };
+  readonly render: { readonly frame: number };
 }
 
 const probeEveryMs = 400;
@@ -41,7 +42,7 @@ const probeEveryMs = 400;
  */
 const seen: Seen = { frames: [], looks: [], captures: [], presented: [], changes: [], rateChanges: [] };
 const marks = new Map<string, number>();
-let lastFrameMs = NaN;
+let lastDrawing = '';
 let lastMarkMs = -Infinity;
 let mark: HTMLElement | null = null;
 
@@ -56,12 +57,19 @@ function putMark(): string {
   return name;
 }
 
+/** Changes with each frame that is drawn, and only then: the pages pass refreshes over where the machine is slow. */
+function drawing(): string {
+  const layer = document.querySelector<HTMLElement>('.picture img');
+  return layer ? layer.style.transform : String(infos.reduce((sum, { render }) => sum + render.frame, 0));
+}
+
 const requestFrame = window.requestAnimationFrame.bind(window);
 window.requestAnimationFrame = (draw) =>
   requestFrame((tMs) => {
     draw(tMs);
-    if (tMs === lastFrameMs) return;
-    lastFrameMs = tMs;
+    const drawn = drawing();
+    if (drawn === lastDrawing) return;
+    lastDrawing = drawn;
     const name = tMs - lastMarkMs > probeEveryMs ? putMark() : null;
     const drawnMs = performance.now();
     if (name) marks.set(name, drawnMs);
@@ -122,19 +130,19 @@ URL.revokeObjectURL = (url) => {
 };
 
 // Each three renderer makes itself known to its own developer tools, where there are any.
-const infos: ThreeInfo['memory'][] = [];
+const infos: ThreeInfo[] = [];
 const threeTools = new EventTarget();
 threeTools.addEventListener('observe', (event) => {
   const observed = (event as CustomEvent<{ readonly info?: ThreeInfo }>).detail;
-  if (observed.info) infos.push(observed.info.memory);
+  if (observed.info) infos.push(observed.info);
 });
 
 const probe: Probe = {
   seen,
   held: () => ({
     objectUrls: objectUrls.size,
-    textures: infos.reduce((sum, { textures }) => sum + textures, 0),
-    geometries: infos.reduce((sum, { geometries }) => sum + geometries, 0),
+    textures: infos.reduce((sum, { memory }) => sum + memory.textures, 0),
+    geometries: infos.reduce((sum, { memory }) => sum + memory.geometries, 0),
   }),
 };
 Object.assign(window, { __THREE_DEVTOOLS__: threeTools, orielProbe: probe });
