@@ -5,7 +5,7 @@ import type { BoardView, FromBoardWorker, MeasuredLens, ToBoardWorker } from './
 /** The worker that knows OpenCV.js: fetched and started when first asked, ended with whoever provides this. One question at a time. */
 @Injectable()
 export class BoardFinder {
-  private readonly url = new URL('calibration/board-worker.js', inject(DOCUMENT).baseURI);
+  private readonly url = new URL('/calibration/board-worker.js', inject(DOCUMENT).baseURI);
   private worker: Worker | null = null;
 
   constructor() {

@@ -37,5 +37,6 @@ export class LiveCamera {
   stop(): void {
     for (const track of this.stream()?.getTracks() ?? []) track.stop();
     this.stream.set(null);
+    if (this.state() === 'asking') this.state.set('off');
   }
 }
