@@ -58,7 +58,11 @@ export class Autosave<T> {
   readonly saved = this.base.asReadonly();
   readonly unsaved = computed(() => this.current().kind !== 'saved');
 
-  constructor(private readonly keeping: Keeping<T>) {}
+  /** @param pauseMs how long nothing must have changed before it is saved. */
+  constructor(
+    private readonly keeping: Keeping<T>,
+    private readonly pauseMs = PAUSE_MS,
+  ) {}
 
   /** Starts from the document as the server has it. */
   begin(stored: Stored<T>): void {
@@ -75,7 +79,7 @@ export class Autosave<T> {
     const state = this.current();
     if (state.kind === 'saved') this.current.set({ kind: 'waiting' });
     const retriesItself = state.kind === 'offline' || (state.kind === 'failed' && state.retrying);
-    if (state.kind !== 'conflict' && !retriesItself) this.after(PAUSE_MS);
+    if (state.kind !== 'conflict' && !retriesItself) this.after(this.pauseMs);
   }
 
   /** Saves now what is pending; also how a person tries again, and what happens when the network is back. */
@@ -158,7 +162,7 @@ export class Autosave<T> {
     }
     if (this.pending) this.keeping.keepDraft({ revision: answer.revision, document: this.pending });
     this.current.set({ kind: 'waiting' });
-    this.after(PAUSE_MS);
+    this.after(this.pauseMs);
   }
 
   private fail(failure: ApiFailure): void {

@@ -12,6 +12,8 @@ import { DraftShelf } from '../../saving/draft-shelf';
 import { cameraOnFrame } from './camera-on-frame';
 
 const lookMs = 10_000;
+/** What is typed here is to be on the wall within a second; a side that is dragged is saved when it rests. */
+const pauseMs = 250;
 const asStored = (wall: Wall): Stored<WallSetUp> => ({ revision: wall.revision, savedAt: wall.savedAt, savedBy: wall.savedBy, document: wall.setUp });
 
 /** One wall while its set-up is open: every change is saved by itself, and what its screen reports is asked for again and again. */
@@ -41,13 +43,16 @@ export class WallKeeper {
     const membership = this.session.account()?.memberships.find((one) => one.householdId === householdId);
     return membership !== undefined && tuners.includes(membership.role);
   });
-  readonly autosave = new Autosave<WallSetUp>({
-    save: async (revision, setUp) => asStored(this.hear((await this.api.call(saveWall, { params: this.params(), body: { revision, setUp } })).wall)),
-    read: async () => asStored(this.hear((await this.api.call(readWall, { params: this.params() })).wall)),
-    same: sameBy(WallSetUp),
-    keepDraft: (draft) => void this.shelf?.keep(draft),
-    dropDraft: () => this.shelf?.drop(),
-  });
+  readonly autosave = new Autosave<WallSetUp>(
+    {
+      save: async (revision, setUp) => asStored(this.hear((await this.api.call(saveWall, { params: this.params(), body: { revision, setUp } })).wall)),
+      read: async () => asStored(this.hear((await this.api.call(readWall, { params: this.params() })).wall)),
+      same: sameBy(WallSetUp),
+      keepDraft: (draft) => void this.shelf?.keep(draft),
+      dropDraft: () => this.shelf?.drop(),
+    },
+    pauseMs,
+  );
 
   constructor() {
     const listeners = new AbortController();
