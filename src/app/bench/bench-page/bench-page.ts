@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, type OnInit, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type OnInit, inject, input } from '@angular/core';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatOption, MatSelect } from '@angular/material/select';
 import { RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
@@ -15,6 +15,9 @@ import { BenchSubject } from '../subject/bench-subject';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class BenchPage implements OnInit {
+  /** A wall to put on the bench, from the address. */
+  readonly wall = input<string>();
+
   protected readonly bench = inject(BenchSubject);
   protected readonly loading = new Submission();
   protected readonly places = [
@@ -31,6 +34,8 @@ export class BenchPage implements OnInit {
   }
 
   ngOnInit(): void {
+    const wall = this.wall();
+    if (wall) this.bench.choose(wall);
     void this.load();
   }
 
