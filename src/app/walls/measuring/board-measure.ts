@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, computed, effect, inject, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, computed, effect, inject, signal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { CORNER_COUNT } from '@oriel/shared/viewer/measuring/board';
@@ -59,7 +59,8 @@ export class BoardMeasure {
   constructor() {
     inject(DestroyRef).onDestroy(() => (this.destroyed = true));
     effect(() => {
-      if (this.live.stream()) void this.gather();
+      // What is gathered must not start another gathering.
+      if (this.live.stream()) untracked(() => void this.gather());
     });
   }
 
