@@ -7,7 +7,7 @@ import { lagInMotionMs, strayInMotion } from './lag';
 import { leastOverGrid, type Dimension } from './least-over-grid';
 import type { Direction, ReplaySample } from './sample';
 import { movingStretches, stillStretches, totalMs, type Stretch } from './stretches';
-import { costOf, unbeaten, type Figures, type Wish } from './wishes';
+import { costsIn, unbeaten, type Figures, type Wish } from './wishes';
 
 /** One setting and what it would have done with this run. */
 export interface TriedTuning extends Figures {
@@ -43,9 +43,6 @@ const BETAS: Readonly<Record<Direction, Dimension>> = {
 };
 const HORIZONS_MS: Dimension = { coarse: [0, 60, 120, 200] };
 
-/** The order in which wishes are searched for: each is told from the one before. */
-const SEARCHED = ['quicker', 'balanced', 'calmer'] as const satisfies readonly Wish[];
-
 /**
  * Replays a run through many settings: of the 1 euro filter in one direction, and across also how far the predictor looks ahead (along
  * keeps the one it has, since both share it). Of a long run an excerpt is replayed. @throws TooLittleMotion
@@ -61,6 +58,7 @@ export function searchTuning(
   const moving = movingStretches(known, direction);
   requireEnough(still, moving, direction);
   const judged: Judged = { ...excerptOf(samples, still, moving), known, direction };
+  const costs = costsIn(direction);
   let asked = 0;
   const { tried, best } = leastOverGrid(
     [CUTOFFS_HZ, BETAS[direction], ...(direction === 'across' ? [HORIZONS_MS] : [])],
@@ -68,19 +66,16 @@ export function searchTuning(
       progress(++asked);
       return judge(judged, tuned(today, direction, point), false);
     },
-    SEARCHED.map(
-      (wish) => (figures: TriedTuning, bestBefore: readonly TriedTuning[]) =>
-        costOf(figures, wish, direction, bestBefore[bestBefore.length - 1] ?? figures),
-    ),
+    [costs.calmest, costs.quicker, costs.balanced, costs.calmer],
   );
-  const bestOf = (wish: Wish) => judge(judged, best[SEARCHED.indexOf(wish)].value.tuning, true);
+  const [, quicker, balanced, calmer] = best.map(({ value }) => judge(judged, value.tuning, true));
   return {
     direction,
     stillMs: totalMs(judged.still),
     movingMs: totalMs(judged.moving),
     today: judge(judged, today, true),
     curve: unbeaten(tried.map(({ value }) => value)),
-    best: { calmer: bestOf('calmer'), balanced: bestOf('balanced'), quicker: bestOf('quicker') },
+    best: { calmer, balanced, quicker },
   };
 }
 

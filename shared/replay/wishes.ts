@@ -16,25 +16,38 @@ export interface Figures {
  * (100 * 100 / 700^2 = 0.0204 mm a mm: 0.12 mm).
  *
  * So that the three are seen to differ, they follow from one another. Quicker strays least, and hardly minds jitter. Balanced weighs the
- * two by what is noticed, with four fifths of quicker's jitter at most; calmer strays least with three fifths of balanced's. Where
- * nothing reaches that, whatever comes nearest. (The shares are practice: a difference that is seen.)
+ * two by what is noticed, with four fifths of quicker's jitter at most; calmer strays least with three fifths of balanced's. Where not
+ * even the calmest there is reaches that, half and nine tenths of the way to it will do. (The shares are practice: a difference that is seen.)
  */
 const NOTICED_STRAY_MS = 20;
 const NOTICED_JITTER_MM: Readonly<Record<Direction, number>> = { across: 1, along: 6 };
-export const BALANCED_JITTER = 0.8;
-export const CALMER_JITTER = 0.6;
+const BALANCED = { share: 0.8, wayToCalmest: 0.5 };
+const CALMER = { share: 0.6, wayToCalmest: 0.9 };
 const HARDLY = 0.1;
-/** What is missing of the share to be reached outweighs whatever the other figure can bring. */
+/** What is missing of the jitter to be reached outweighs whatever straying can bring. */
 const MUST = 1e6;
 
-/** What a setting costs by a wish, given what the one before it comes to (quicker for balanced, balanced for calmer): less is better. */
-export function costOf({ jitterMm, strayMs }: Figures, wish: Wish, direction: Direction, before: Figures): number {
-  const jitter = jitterMm / NOTICED_JITTER_MM[direction];
-  const stray = strayMs / NOTICED_STRAY_MS;
-  const missing = (share: number) => MUST * Math.max(0, jitterMm / before.jitterMm - share);
-  if (wish === 'quicker') return stray + HARDLY * jitter;
-  return wish === 'balanced' ? missing(BALANCED_JITTER) + jitter * jitter + stray * stray : missing(CALMER_JITTER) + stray;
-}
+/** The most jitter of a balanced setting after the quicker one, and of a calmer one after the balanced; `calmestMm` is the least there is. */
+export const mostJitterMm = (wish: 'balanced' | 'calmer', before: Figures, calmestMm: number): number => {
+  const { share, wayToCalmest } = wish === 'balanced' ? BALANCED : CALMER;
+  return Math.max(share * before.jitterMm, before.jitterMm - wayToCalmest * (before.jitterMm - calmestMm));
+};
+
+/** Costs, less is better, in the order in which the settings are to be found: each is told what those before it found. */
+export const costsIn = (direction: Direction) => {
+  const jitter = ({ jitterMm }: Figures) => jitterMm / NOTICED_JITTER_MM[direction];
+  const stray = ({ strayMs }: Figures) => strayMs / NOTICED_STRAY_MS;
+  const missing = (wish: 'balanced' | 'calmer', figures: Figures, before: Figures, calmest: Figures) =>
+    MUST * Math.max(0, figures.jitterMm / mostJitterMm(wish, before, calmest.jitterMm) - 1);
+  return {
+    calmest: (figures: Figures) => figures.jitterMm,
+    quicker: (figures: Figures) => stray(figures) + HARDLY * jitter(figures),
+    balanced: (figures: Figures, [calmest, quicker]: readonly Figures[]) =>
+      missing('balanced', figures, quicker, calmest) + jitter(figures) ** 2 + stray(figures) ** 2,
+    calmer: (figures: Figures, [calmest, , balanced]: readonly Figures[]) =>
+      missing('calmer', figures, balanced, calmest) + stray(figures),
+  };
+};
 
 /** Those that no other beats in both figures (V. Pareto), from the calmest to the quickest. */
 export function unbeaten<T extends Figures>(all: readonly T[]): T[] {

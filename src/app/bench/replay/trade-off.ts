@@ -13,6 +13,7 @@ import { type ChartLine, LineChart } from '../charts/line-chart';
       <oriel-line-chart
         [label]="words()"
         [lines]="lines()"
+        [xRange]="xRange()"
         xLabel="off in motion, as ms of the way"
         yLabel="jitter at rest, mm"
       />
@@ -68,6 +69,9 @@ import { type ChartLine, LineChart } from '../charts/line-chart';
     </table>
     <p class="marginal">
       Judged on {{ seconds(result.stillMs) }} s of standing still and {{ seconds(result.movingMs) }} s of motion.
+      @if (alike()) {
+        No setting makes much of a difference in this run: what it strays and jitters comes from before the filter, as with few looks a second or a viewer who sways.
+      }
     </p>
   `,
   styleUrl: './trade-off.scss',
@@ -96,6 +100,16 @@ export class TradeOff {
       { label: 'Nothing beats these', ink: 'brass-line', points: near, as: 'dots' },
       { label: 'Between them', ink: 'line', points: near },
     ];
+  });
+
+  /** At least 20 ms to either side of what is shown: differences that nobody notices are to look small. */
+  protected readonly xRange = computed<readonly [number, number]>(() => {
+    const at = this.lines().flatMap(({ points }) => points.map(({ x }) => x));
+    return [Math.max(0, 10 * Math.floor(Math.min(...at) / 10) - 20), 10 * Math.ceil(Math.max(...at) / 10) + 20];
+  });
+  protected readonly alike = computed(() => {
+    const { calmer, quicker } = this.found().best;
+    return quicker.jitterMm < 1.1 * calmer.jitterMm && calmer.strayMs < 1.1 * quicker.strayMs;
   });
 
   protected filterOf({ tuning }: { readonly tuning: SearchResult['today']['tuning'] }) {
