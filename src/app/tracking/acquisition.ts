@@ -35,6 +35,15 @@ export const closerLook = (face: Detection, zoom = ZOOM): Region => ({
 /** The region in which landmarks are sought for a detection: its box, enlarged as the landmark model was trained, along the eye line. */
 export const landmarkRegion = (face: Detection): Region => closerLook(face, 1.5);
 
+/** Of faces seen in one look, the one whose middle is nearest to where it was looked for: not somebody's beside it. */
+export const nearestTo = (
+  { cx, cy }: { readonly cx: number; readonly cy: number },
+  faces: readonly Detection[],
+): Detection | undefined => {
+  const off = (face: Detection): number => Math.hypot(face.cx - cx, face.cy - cy);
+  return faces.reduce<Detection | undefined>((best, face) => (best && off(best) <= off(face) ? best : face), undefined);
+};
+
 /**
  * Looks closer and closer at a find until two looks agree on its size; null where they never do. The detectors misjudge what is small
  * in their picture (the distance between the eyes up to 1.8 times too large), and landmarks placed on a wrong size cling to it.
@@ -42,7 +51,7 @@ export const landmarkRegion = (face: Detection): Region => closerLook(face, 1.5)
 export function confirm(looks: Looks, picture: Picture, find: Detection): Detection | null {
   let face = find;
   for (let look = 0; look < MOST_LOOKS; look++) {
-    const closer = looks.short(picture, closerLook(face), CONFIRM_PROBABILITY)[0];
+    const closer = nearestTo(face, looks.short(picture, closerLook(face), CONFIRM_PROBABILITY));
     if (!closer) return null;
     const ratio = boxSize(closer) / boxSize(face);
     face = closer;

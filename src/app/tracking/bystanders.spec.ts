@@ -63,6 +63,14 @@ describe('Bystanders', () => {
     expect(bystanders.all[0].face.cx).toBeLessThan(215);
   });
 
+  it('tells one far away from one near, seen right beside them', () => {
+    looks.people = [faceAt(300, 110)];
+    look(3);
+    looks.people = [faceAt(300, 110), faceAt(370, 40)];
+    look(8);
+    expect(bystanders.all.map(({ face }) => face.width).sort((a, b) => a - b)).toEqual([40, 110]);
+  });
+
   it('lets go of one who has left', () => {
     looks.people = [faceAt(300)];
     look(3);

@@ -1,4 +1,4 @@
-import { closerLook, confirm, landmarkRegion } from './acquisition';
+import { closerLook, confirm, landmarkRegion, nearestTo } from './acquisition';
 import type { Detection } from './detection';
 import type { Looks } from './looks';
 import type { Picture } from './picture';
@@ -105,7 +105,7 @@ export class Bystanders {
   private lookAgain(looks: Looks, picture: Picture, followed: Region): void {
     const at = this.nextKnown++ % this.all.length;
     const one = this.all[at];
-    const seen = looks.short(picture, closerLook(one.face), SEEN_PROBABILITY)[0];
+    const seen = nearestTo(one.face, looks.short(picture, closerLook(one.face), SEEN_PROBABILITY));
     const other = seen && this.known(seen);
     if (seen && !sameFace(landmarkRegion(seen), followed) && (!other || other === one)) {
       one.face = seen;
@@ -116,8 +116,12 @@ export class Bystanders {
   }
 }
 
-/** Whether two landmark regions are of one face: their middles lie nearer than half of the larger. */
-const sameFace = (a: Region, b: Region): boolean => Math.hypot(a.cx - b.cx, a.cy - b.cy) < Math.max(a.size, b.size) / 2;
+/** Nearer than this share of the smaller region, two are of one face; someone near is large, and others are seen right beside them. */
+const SAME_FACE = 0.55;
+
+/** Whether two landmark regions are of one face, by where their middles lie: detectors misjudge sizes. */
+const sameFace = (a: Region, b: Region): boolean =>
+  Math.hypot(a.cx - b.cx, a.cy - b.cy) < SAME_FACE * Math.min(a.size, b.size);
 
 /** The face at another place; the full-range detector's sizes are not to be trusted. */
 const movedTo = (face: Detection, cx: number, cy: number): Detection => {

@@ -6,7 +6,7 @@ import {
   type ChoiceRule,
 } from '@oriel/shared/viewer/choose-viewer';
 import { FIRST_STEP, LADDER_STEPS, type Looking } from '@oriel/shared/ladder/steps';
-import { Acquisition, confirm, landmarkRegion } from './acquisition';
+import { Acquisition, confirm, landmarkRegion, nearestTo } from './acquisition';
 import { Bystanders, type Bystander } from './bystanders';
 import type { Detection } from './detection';
 import { leftEyeOf, regionOfLandmarks, rightEyeOf } from './face-landmarks';
@@ -22,6 +22,8 @@ const FACE_BELIEF = 0.5;
 /** A guarding look is this much wider than the landmarks' region: the zoom of a closer look over the margin of the region. */
 const GUARD_WIDENING = 2.2 / 1.5;
 const DETECTION_PROBABILITY = 0.5;
+/** A face farther from the middle of the region, as a share of its side, is somebody else's. */
+const SAME_FACE = 0.5;
 /** No face grows or shrinks by more from one frame to the next: at 4 m a second toward a camera half a metre away it would be 1.3. */
 const MOST_GROWN = 1.15;
 
@@ -240,8 +242,10 @@ export class Tracker {
     return this.belief >= FACE_BELIEF;
   }
 
+  /** The face in the middle of the region, not the one believed in most: that may be somebody's who is seen right beside it. */
   private guardLook(picture: Picture, region: Region): Detection | undefined {
-    return this.looks.short(picture, scaled(region, GUARD_WIDENING), DETECTION_PROBABILITY)[0];
+    const face = nearestTo(region, this.looks.short(picture, scaled(region, GUARD_WIDENING), DETECTION_PROBABILITY));
+    return face && Math.hypot(face.cx - region.cx, face.cy - region.cy) < SAME_FACE * region.size ? face : undefined;
   }
 
   private eyes(): Eyes {
