@@ -1,12 +1,24 @@
 const worthALineMs = 500;
 
 /**
- * Says in plain words what is being done, and once it is done how long it took. On a terminal the line of a step under way is
- * rewritten; elsewhere only finished steps are written.
+ * Says in plain words what is being done, and once it is done how long it took. On a terminal one line names the steps under way
+ * and is rewritten; elsewhere only finished steps are written. Steps may run side by side.
  * @param {NodeJS.WriteStream} out
  */
 export function stepsOn(out) {
   const began = Date.now();
+  /** @type {Set<{ now: string, start: number }>} */
+  const underWay = new Set();
+  const draw = () => {
+    if (!out.isTTY) return;
+    const doing = [...underWay].map(({ now, start }) => `${now} … ${seconds(start)}`).join(' · ');
+    out.write(`\r\x1b[K  ${doing}`.slice(0, (out.columns ?? 80) + 3));
+  };
+  const write = (text) => {
+    out.write(out.isTTY ? `\r\x1b[K${text}\n` : `${text}\n`);
+    if (underWay.size > 0) draw();
+  };
+
   /**
    * @template T
    * @param {string} doing e.g. 'Building'
@@ -15,30 +27,33 @@ export function stepsOn(out) {
    * @returns {Promise<T>}
    */
   async function step(doing, work, done) {
-    let start = Date.now();
-    let now = doing;
-    const draw = () => out.isTTY && out.write(`\r\x1b[K  ${now} … ${seconds(start)}`);
+    const own = { now: doing, start: Date.now() };
+    const took = () => seconds(own.start);
     const next = (text) => {
-      if (Date.now() - start > worthALineMs) finish(`  ${now} (${seconds(start)})`);
-      now = text;
-      start = Date.now();
+      if (Date.now() - own.start > worthALineMs) write(`  ${own.now} (${took()})`);
+      own.now = text;
+      own.start = Date.now();
       draw();
     };
+    underWay.add(own);
     const timer = setInterval(draw, 1000);
     draw();
+    const finish = (line) => {
+      underWay.delete(own);
+      write(line);
+    };
     try {
       const result = await work(next);
-      finish(`  ${done?.(result) ?? now} (${seconds(start)})`);
+      finish(`  ${done?.(result) ?? own.now} (${took()})`);
       return result;
     } catch (error) {
-      finish(`  ${now}: not done (${seconds(start)})`);
+      finish(`  ${own.now}: not done (${took()})`);
       throw error;
     } finally {
       clearInterval(timer);
     }
   }
-  const finish = (line) => out.write(out.isTTY ? `\r\x1b[K${line}\n` : `${line}\n`);
-  return { step, elapsed: () => seconds(began) };
+  return { step, write, elapsed: () => seconds(began) };
 }
 
 const seconds = (since) => `${((Date.now() - since) / 1000).toFixed(1)} s`;

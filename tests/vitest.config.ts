@@ -11,6 +11,10 @@ export default defineConfig({
     environment: 'node',
     testTimeout: 30_000,
     hookTimeout: 60_000,
+    // Many tests of the server wait for a clock: one process more than two cores keeps both at work.
+    maxWorkers: 3,
+    // No test changes a module, so the files of a process share what has been loaded.
+    isolate: false,
     projects: [
       {
         extends: true,

@@ -26,6 +26,14 @@ const tests =
   (file, count, [program, args]) =>
   async (context) => ({ ...(await run(program, args, { cwd: root, ...context })), counts: count(file) });
 
+/** One project of playwright.config.ts, with a report of its own. */
+const endToEnd = (project) => {
+  const file = report(`end-to-end-${project}`);
+  const command = tool('@playwright/test/cli.js', 'test', '--config=tests/e2e/playwright.config.ts', `--project=${project}`);
+  const part = tests(file, countPlaywright, command);
+  return ({ env, signal }) => part({ env: { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file }, signal });
+};
+
 async function build({ signal }) {
   try {
     await buildProduct(signal);
@@ -35,57 +43,62 @@ async function build({ signal }) {
   }
 }
 
+/** @typedef {{ name: string, run: (context: Context) => Promise<Result> }} Part */
+
+/** @type {Part} */
+const lint = { name: 'Lint', run: gate(tool('eslint/bin/eslint.js', '.', '--max-warnings', '0')) };
+
+/** @type {Part} */
+const types = {
+  name: 'Types',
+  run: gate(
+    ...['tsconfig.json', 'tsconfig.app.json', 'tsconfig.worker.json', 'tsconfig.spec.json'].map((project) =>
+      tool('typescript/bin/tsc', '-p', project, '--noEmit'),
+    ),
+  ),
+};
+
+/** @type {Part} */
+const mathematicsAndServer = {
+  name: 'Mathematics and server',
+  run: tests(
+    report('vitest'),
+    countVitest,
+    tool(
+      'vitest/vitest.mjs',
+      'run',
+      '--config=tests/vitest.config.ts',
+      ...['default', 'json'].map((name) => `--reporter=${name}`),
+      `--outputFile.json=${report('vitest')}`,
+    ),
+  ),
+};
+
+/** @type {Part} */
+const components = {
+  name: 'Components',
+  run: tests(
+    report('components'),
+    countVitest,
+    tool(
+      '@angular/cli/bin/ng.js',
+      'test',
+      '--watch=false',
+      '--progress=false',
+      '--reporters=json',
+      `--output-file=${report('components')}`,
+      '--reporters=default',
+    ),
+  ),
+};
+
 /**
- * What `npm test` does, in order.
- * @type {readonly { name: string, run: (context: Context) => Promise<Result> }[]}
+ * What `npm test` does: one stage after another, in each the lanes side by side, in a lane one part after another. The tests of the
+ * server wait for clocks half the time, which leaves a core to compilers; what a camera sees is timed, and has the machine to itself.
+ * @type {readonly (readonly (readonly Part[])[])[]}
  */
-export const parts = [
-  { name: 'Lint', run: gate(tool('eslint/bin/eslint.js', '.', '--max-warnings', '0')) },
-  {
-    name: 'Types',
-    run: gate(
-      ...['tsconfig.json', 'tsconfig.app.json', 'tsconfig.worker.json', 'tsconfig.spec.json'].map((project) =>
-        tool('typescript/bin/tsc', '-p', project, '--noEmit'),
-      ),
-    ),
-  },
-  {
-    name: 'Mathematics and server',
-    run: tests(
-      report('vitest'),
-      countVitest,
-      tool(
-        'vitest/vitest.mjs',
-        'run',
-        '--config=tests/vitest.config.ts',
-        ...['default', 'json'].map((name) => `--reporter=${name}`),
-        `--outputFile.json=${report('vitest')}`,
-      ),
-    ),
-  },
-  {
-    name: 'Components',
-    run: tests(
-      report('components'),
-      countVitest,
-      tool(
-        '@angular/cli/bin/ng.js',
-        'test',
-        '--watch=false',
-        '--progress=false',
-        '--reporters=json',
-        `--output-file=${report('components')}`,
-        '--reporters=default',
-      ),
-    ),
-  },
-  { name: 'Production build', run: build },
-  {
-    name: 'End to end',
-    run: tests(
-      report('end-to-end'),
-      countPlaywright,
-      tool('@playwright/test/cli.js', 'test', '--config=tests/e2e/playwright.config.ts'),
-    ),
-  },
+export const stages = [
+  [[mathematicsAndServer], [{ name: 'Production build', run: build }, lint, types, components]],
+  [[{ name: 'End to end, pages', run: endToEnd('page') }]],
+  [[{ name: 'End to end, camera', run: endToEnd('camera') }]],
 ];

@@ -6,7 +6,7 @@ import { inProject } from '../project.mjs';
 import { stepsOn } from '../steps.mjs';
 import { stopSignal } from '../stop-signal.mjs';
 import { installPrograms, programsPresent } from './programs.mjs';
-import { parts } from './parts.mjs';
+import { stages } from './parts.mjs';
 
 const partMs = 30 * 60_000;
 
@@ -16,15 +16,29 @@ const partMs = 30 * 60_000;
  */
 export async function test() {
   const { signal } = stopSignal();
-  const { step } = stepsOn(process.stdout);
+  const { step, write } = stepsOn(process.stdout);
   const total = { passed: 0, failed: 0 };
   let postgres = null;
-  try {
+
+  const startDatabase = async () => {
     if (!programsPresent()) await step('Installing programs', (say) => installPrograms({ say, signal }));
     postgres = await step('Starting the database', (say) =>
       startPostgres({ dataDir: inProject('.oriel', 'test-postgres'), durable: false, say, signal }),
     );
+  };
+  const installPackages = async () => {
     if (!dependenciesInstalled()) await step('Installing the packages', () => installDependencies(signal));
+  };
+  const runLane = async (lane, env) => {
+    for (const part of lane) {
+      const { passed, failed } = await step(part.name, () => runPart(part, { env, signal, write }), outcome(part));
+      total.passed += passed;
+      total.failed += failed;
+    }
+  };
+
+  try {
+    await together([startDatabase(), installPackages()]);
     const { FORCE_COLOR: _forced, ...uncoloured } = process.env;
     const env = {
       ...uncoloured,
@@ -35,11 +49,7 @@ export async function test() {
     };
     rmSync(inProject('.oriel', 'reports'), { recursive: true, force: true });
     mkdirSync(inProject('.oriel', 'reports'), { recursive: true });
-    for (const part of parts) {
-      const { passed, failed } = await step(part.name, () => runPart(part, { env, signal }), outcome(part));
-      total.passed += passed;
-      total.failed += failed;
-    }
+    for (const lanes of stages) await together(lanes.map((lane) => runLane(lane, env)));
   } catch (error) {
     total.failed += 1;
     process.stdout.write(`\n${error.message}\n`);
@@ -50,8 +60,14 @@ export async function test() {
   return total.failed === 0 && total.passed > 0 ? 0 : 1;
 }
 
+/** Waits for all of them, so that nothing goes on unwatched, and throws what the first that failed threw. */
+async function together(works) {
+  const failed = (await Promise.allSettled(works)).find(({ status }) => status === 'rejected');
+  if (failed) throw failed.reason;
+}
+
 /** Runs one part and tells what it found. A part that fails although no test of it did counts as one failed. */
-async function runPart({ run }, { env, signal }) {
+async function runPart({ name, run }, { env, signal, write }) {
   const limit = AbortSignal.timeout(partMs);
   const result = await run({ env, signal: AbortSignal.any([signal, limit]) }).catch((error) => {
     if (signal.aborted) throw error;
@@ -63,7 +79,7 @@ async function runPart({ run }, { env, signal }) {
   });
   const { passed } = result.counts;
   const failed = result.code === 0 ? result.counts.failed : Math.max(1, result.counts.failed);
-  if (failed > 0) process.stdout.write(`\n${lastLines(result.output, 200)}\n\n`);
+  if (failed > 0) write(`\n${name}:\n\n${lastLines(result.output, 200)}\n`);
   return { passed, failed };
 }
 

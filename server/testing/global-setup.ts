@@ -1,11 +1,13 @@
 import pg from 'pg';
+import { pino } from 'pino';
 import type { TestProject } from 'vitest/node';
 import { connect, migrate } from '../database/database';
+import { startJobs } from '../jobs/jobs';
 import { withDatabase } from './with-database';
 
 declare module 'vitest' {
   interface ProvidedContext {
-    /** A database of the test server, migrated; each test file copies it. */
+    /** A database of the test server, migrated and with a job queue; each test file copies it. */
     templateUrl: string;
   }
 }
@@ -32,6 +34,7 @@ export default async function setup(project: TestProject): Promise<() => Promise
   const connection = connect(templateUrl, () => undefined);
   await migrate(connection.db);
   await connection.db.destroy();
+  await (await startJobs(templateUrl, pino({ level: 'silent' }))).stop();
   project.provide('templateUrl', templateUrl);
   return async () => {
     await asAdmin(url, `drop database ${template} with (force)`);

@@ -1,10 +1,10 @@
 import AxeBuilder from '@axe-core/playwright';
 import { test as base, expect, type BrowserContext, type Page } from '@playwright/test';
 import type { Role } from '@oriel/shared/contracts/role';
-import { demoAccount } from './demo-accounts';
 import { chromiumArguments, chromiumPath, ignoredDefaults, type Graphics } from './set-up/chromium';
 import { filmFace, type FilmedFace, type FilmedTruth } from './set-up/filmed-face';
 import { filmThings, type FilmedThings } from './set-up/filmed-things';
+import { sessionFile } from './set-up/sessions';
 
 /** What a file may choose with `test.use`; each choice is a browser of its own. */
 export interface BrowserChoice {
@@ -20,6 +20,8 @@ interface Fixtures {
   readonly signedInPage: (role: Role) => Promise<Page>;
   /** Fails the test unless axe finds nothing serious or critical on the page as it is now. */
   readonly expectAccessible: (page: Page) => Promise<void>;
+  /** The same on a desk and on a phone, by day and by evening; and that the page is never wider than its screen, nor a tablet's. */
+  readonly expectToReadWell: (page: Page) => Promise<void>;
   /** Errors on any page fail a test at its end; those that match are what this test means to provoke. */
   readonly expectErrors: (...patterns: readonly RegExp[]) => void;
   readonly watchErrors: ErrorWatch;
@@ -30,10 +32,7 @@ interface ErrorWatch {
   readonly expected: RegExp[];
 }
 
-type SignedIn = Awaited<ReturnType<BrowserContext['storageState']>>;
-
 interface WorkerFixtures extends BrowserChoice {
-  readonly signedIn: Map<Role, SignedIn>;
   /** The video of `filmedFace` and the truth of its frames. */
   readonly filmed: { readonly video: string; readonly truth: FilmedTruth } | null;
 }
@@ -56,9 +55,6 @@ export const test = base.extend<Fixtures, WorkerFixtures>({
     },
     { scope: 'worker' },
   ],
-
-  // Signing in costs a second: once a role and worker is enough.
-  signedIn: [async ({}, use) => use(new Map()), { scope: 'worker' }],
 
   watchErrors: [
     async ({}, use) => {
@@ -87,39 +83,75 @@ export const test = base.extend<Fixtures, WorkerFixtures>({
 
   expectErrors: async ({ watchErrors }, use) => use((...patterns) => void watchErrors.expected.push(...patterns)),
 
-  signedInPage: async ({ browser, baseURL, signedIn, watchErrors, viewport }, use) => {
+  signedInPage: async ({ browser, baseURL, watchErrors, viewport }, use) => {
     const opened: BrowserContext[] = [];
     await use(async (role) => {
       const context = await browser.newContext({
         baseURL,
         viewport,
         locale: 'en-GB',
-        storageState: signedIn.get(role),
+        storageState: sessionFile(role),
       });
       opened.push(context);
       watchErrors.watch(context);
-      const page = await context.newPage();
-      if (!signedIn.has(role)) {
-        const { email, password } = demoAccount(role);
-        await signIn(page, email, password);
-        signedIn.set(role, await context.storageState());
-      }
-      return page;
+      return context.newPage();
     });
     for (const context of opened) await context.close();
   },
 
   expectAccessible: async ({}, use) => {
     await use(async (page) => {
-      const { violations } = await new AxeBuilder({ page }).analyze();
+      await stillness(page);
+      // Legacy means: looked at as one document. There are no frames here, and a second page for each look costs more than the look.
+      const { violations } = await new AxeBuilder({ page }).setLegacyMode().options({ resultTypes: ['violations'] }).analyze();
       const serious = violations.filter(({ impact }) => impact === 'serious' || impact === 'critical');
       const told = serious.map(
         ({ id, help, nodes }) => `${id}: ${help}\n  ${nodes.map(({ target }) => target.join(' ')).join('\n  ')}`,
       );
-      expect(told, 'what axe calls serious').toEqual([]);
+      expect.soft(told, `what axe calls serious on ${whereabouts(page, await lightOf(page))}`).toEqual([]);
+    });
+  },
+
+  expectToReadWell: async ({ expectAccessible }, use) => {
+    await use(async (page) => {
+      const before = page.viewportSize()!;
+      for (const { read, ...size } of sizes) {
+        await page.setViewportSize(size);
+        for (const colorScheme of read ? (['light', 'dark'] as const) : []) {
+          await page.emulateMedia({ colorScheme });
+          await expectAccessible(page);
+        }
+        const beyond = await page.evaluate(() => document.documentElement.scrollWidth - innerWidth);
+        expect.soft(beyond, `px by which ${whereabouts(page)} runs off sideways`).toBeLessThanOrEqual(0);
+      }
+      await page.setViewportSize(before);
+      await page.emulateMedia({ colorScheme: null });
     });
   },
 });
+
+const sizes = [
+  { width: 1440, height: 900, read: true },
+  { width: 1024, height: 768, read: false },
+  { width: 390, height: 844, read: true },
+];
+
+const lightOf = (page: Page) => page.evaluate(() => (matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light'));
+
+function whereabouts(page: Page, light = ''): string {
+  const { width, height } = page.viewportSize()!;
+  return `${new URL(page.url()).pathname} at ${width} x ${height} ${light}`;
+}
+
+/** Waits until what was just asked for is drawn and whatever moves for a while has come to rest: words halfway between two lights read badly. */
+const stillness = (page: Page) =>
+  page.evaluate(async () => {
+    const drawn = () => new Promise((resolve) => requestAnimationFrame(() => setTimeout(resolve)));
+    await drawn();
+    await drawn();
+    const ending = document.getAnimations().filter(({ effect, playState }) => playState === 'running' && effect?.getComputedTiming().endTime !== Infinity);
+    await Promise.all(ending.map(({ finished }) => finished.catch(() => undefined)));
+  });
 
 export { expect };
 

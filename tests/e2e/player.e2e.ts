@@ -1,5 +1,5 @@
 import { chromium, type Locator, type Page } from '@playwright/test';
-import { demoScene } from './player/asking';
+import { demoScene } from './asking';
 import { keepScreen } from './player/this-screen';
 import { expect, signIn, test } from './fixtures';
 import { demoAccount } from './demo-accounts';

@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test';
 import sharp from 'sharp';
 import type { Layer, LayerImage, Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
-import { ask, householdId } from './asking';
+import { ask, householdId } from '../asking';
 
 /** The glass of the test's screen, mm. */
 export const glass = { widthMm: 640, heightMm: 360 };

@@ -1,9 +1,16 @@
 import { startProduct } from './product';
+import { keepSessions } from './sessions';
 
 /** Playwright's global set-up: ORIEL_URL tells the tests where the product is served. With ORIEL_URL set already, they use what runs there. */
-export default async function serveProduct(): Promise<(() => Promise<void>) | undefined> {
-  if (process.env['ORIEL_URL']) return undefined;
-  const product = await startProduct();
-  process.env['ORIEL_URL'] = product.url;
-  return () => product.stop();
+export default async function serveProduct(): Promise<() => Promise<void>> {
+  const product = process.env['ORIEL_URL'] ? null : await startProduct();
+  const url = (process.env['ORIEL_URL'] ??= product!.url);
+  const sessions = await keepSessions(url).catch(async (error: unknown) => {
+    await product?.stop();
+    throw error;
+  });
+  return async () => {
+    await sessions.forget();
+    await product?.stop();
+  };
 }

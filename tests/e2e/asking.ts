@@ -19,7 +19,7 @@ export async function ask<T>(page: Page, method: string, path: string, body?: un
       }
       const reply = await fetch(address, { method: way, headers, body: text });
       if (!reply.ok) throw new Error(`${way} ${address}: ${reply.status} ${await reply.text()}`);
-      return (await reply.json()) as never;
+      return (reply.status === 204 ? null : await reply.json()) as never;
     },
     [method, path, body] as const,
   );
