@@ -1,4 +1,5 @@
 import type { Page } from '@playwright/test';
+import { demoAccount } from './demo-accounts';
 import { expect, signIn, test } from './fixtures';
 import { mailedLink } from './mail';
 
@@ -18,11 +19,11 @@ async function signUp(page: Page, email: string): Promise<void> {
   await expect(page).toHaveURL(/\/photos$/);
 }
 
-test('someone signs up by mail, signs out, and signs in again to where they were going', async ({ page, expectAccessible }) => {
+test('someone signs up by mail, signs out, and signs in again to where they were going', async ({ page, expectToReadWell }) => {
   const email = unique();
   await signUp(page, email);
   await expect(page.getByRole('heading', { name: 'Your photographs go here' })).toBeVisible();
-  await expectAccessible(page);
+  await expectToReadWell(page);
   await page.getByRole('button', { name: /Your account/ }).click();
   await page.getByRole('menuitem', { name: 'Sign out' }).click();
   await expect(page).toHaveURL(/\/sign-in/);
@@ -45,9 +46,7 @@ test('a wrong password says what to do and keeps the address that was typed', as
 });
 
 test('security: a sign-in never leads to another site', async ({ page }) => {
-  const email = unique();
-  await signUp(page, email);
-  await page.context().clearCookies();
+  const { email, password } = demoAccount('viewer');
   await page.goto('/sign-in?next=//elsewhere.example/');
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password').fill(password);
@@ -85,20 +84,21 @@ test('a forgotten password is set anew by mail, once', async ({ page, expectErro
   await expect(again.getByRole('alert')).toBeVisible();
 });
 
-test('an owner invites a viewer, who joins and sees but may not upload', async ({ page, browser, baseURL, watchErrors, expectAccessible }) => {
+test('an owner invites a viewer, who joins and sees but may not upload', async ({ page, browser, baseURL, watchErrors, expectToReadWell }) => {
   await signUp(page, unique());
   const guest = unique();
   await page.goto('/household');
   await page.getByLabel('E-mail').fill(guest);
   await page.getByRole('button', { name: 'Invite' }).click();
   await expect(page.getByText(`Invitation sent to ${guest}`)).toBeVisible();
-  await expectAccessible(page);
+  await expectToReadWell(page);
 
   const context = await browser.newContext({ baseURL });
   watchErrors.watch(context);
   const theirs = await context.newPage();
   await theirs.goto(await mailedLink(page, guest, 'invitation'));
   await expect(theirs.getByText('invites')).toBeVisible();
+  await expectToReadWell(theirs);
   await theirs.getByLabel('Your name').fill('Anselm Marten');
   await theirs.getByLabel('Choose a password').fill(password);
   await theirs.getByRole('button', { name: 'Join The lock house' }).click();

@@ -1,28 +1,12 @@
 import type { Locator, Page } from '@playwright/test';
 import type { Scene } from '@oriel/shared/contracts/scenes';
+import { ask, demoScene } from './asking';
 import { expect, test } from './fixtures';
-
-/** Asks the server as the page itself would, forgery token and all. */
-async function ask<T>(page: Page, method: string, path: string, body?: unknown): Promise<T> {
-  return page.evaluate(
-    async ([way, address, text]) => {
-      const token = /XSRF-TOKEN=([^;]+)/.exec(document.cookie)?.[1] ?? '';
-      const headers = { 'content-type': 'application/json', 'x-xsrf-token': decodeURIComponent(token) };
-      const reply = await fetch(address, { method: way, headers, body: text });
-      if (!reply.ok) throw new Error(`${way} ${address}: ${reply.status} ${await reply.text()}`);
-      return (await reply.json()) as never;
-    },
-    [method, path, body === undefined ? undefined : JSON.stringify(body)] as const,
-  );
-}
 
 /** A scene of this test's own: a copy of the demo's ridge. */
 async function ownScene(page: Page): Promise<Scene> {
   await page.goto('/scenes');
-  const { account } = await ask<{ account: { memberships: { householdId: string }[] } }>(page, 'GET', '/api/me');
-  const { scenes } = await ask<{ scenes: Scene[] }>(page, 'GET', `/api/households/${account.memberships[0].householdId}/scenes`);
-  const ridge = scenes.find(({ document }) => document.name === 'October on the ridge');
-  if (!ridge) throw new Error('The demo has no scene of the ridge.');
+  const ridge = await demoScene(page);
   const document = { ...ridge.document, name: `Ridge ${Date.now()}` };
   return (await ask<{ scene: Scene }>(page, 'POST', `/api/scenes/${ridge.id}/duplicates`, { document })).scene;
 }

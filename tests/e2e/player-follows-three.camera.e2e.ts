@@ -4,11 +4,8 @@ import { test } from './fixtures';
 
 test.use({ filmedFace: restingFace, graphics: 'swiftshader', viewport: { width: 480, height: 270 } });
 
-// Software graphics beside tracking leave a busy machine behind: it may try once more.
-test.describe.configure({ retries: 1 });
-
 test('drawn with three, layers stand where the pinhole model puts them for the true eye, wherever it rests', async ({ signedInPage, filmed }) => {
-  test.setTimeout(480_000);
+  test.setTimeout(240_000);
   const page = await signedInPage('designer');
   await expectFollowed(await watchRests(page, 'three'), filmed!.truth);
 });

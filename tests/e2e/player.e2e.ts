@@ -1,9 +1,9 @@
-import { chromium, type Locator, type Page } from '@playwright/test';
+import { chromium, type Page } from '@playwright/test';
 import { demoScene } from './asking';
 import { keepScreen } from './player/this-screen';
-import { expect, signIn, test } from './fixtures';
-import { demoAccount } from './demo-accounts';
+import { expect, test } from './fixtures';
 import { chromiumPath, ignoredDefaults } from './set-up/chromium';
+import { sessionFile } from './set-up/sessions';
 
 const line = (page: Page) => page.getByTestId('player-line');
 const layers = (page: Page) => page.locator('oriel-player .picture img');
@@ -21,16 +21,30 @@ async function play(page: Page, query = ''): Promise<string> {
   return scene.id;
 }
 
-const shiftOf = (layer: Locator) => layer.evaluate((element) => new DOMMatrix(getComputedStyle(element).transform).e);
+/** How far aside the farthest layer is drawn, px. */
+const shiftOf = (page: Page) => layers(page).first().evaluate((element) => new DOMMatrix(getComputedStyle(element).transform).e);
+
+/** The same once `act` has moved it and it has come to rest. */
+async function shiftAfter(page: Page, act: () => Promise<unknown>): Promise<number> {
+  const begun = await shiftOf(page);
+  await act();
+  await expect.poll(async () => Math.abs((await shiftOf(page)) - begun)).toBeGreaterThan(1);
+  let [before, now] = [Infinity, await shiftOf(page)];
+  while (Math.abs(now - before) > 0.3) {
+    await page.waitForTimeout(150);
+    [before, now] = [now, await shiftOf(page)];
+  }
+  return now;
+}
 
 test('before the first play the set-up is offered; played as it is, the camera is asked for and nobody is seen', async ({ signedInPage, expectAccessible }) => {
   const page = await signedInPage('viewer');
   await play(page);
   await expect(line(page)).toContainText('This screen has not been measured');
-  await expectAccessible(page);
   await page.getByRole('button', { name: 'Play as it is' }).click();
   await expect(line(page)).toContainText('Nobody is in view', { timeout: 30_000 });
   await expect(line(page)).toContainText('The camera’s pictures stay in this page and are not kept.');
+  await expectAccessible(page);
   await expect(line(page)).toBeHidden({ timeout: 15_000 });
   await page.reload();
   await expect(layers(page).first()).toBeVisible();
@@ -48,37 +62,27 @@ test('following is switched off by an ordinary control, which is remembered; poi
   await expect(following(page)).toHaveAttribute('aria-checked', 'false');
   await expect(layers(page).first()).toBeVisible();
 
-  const back = layers(page).first();
-  await page.mouse.move(1300, 450);
-  await page.waitForTimeout(1500);
-  const fromRight = await shiftOf(back);
-  await page.mouse.move(140, 450);
-  await page.waitForTimeout(1500);
-  const fromLeft = await shiftOf(back);
+  const fromRight = await shiftAfter(page, () => page.mouse.move(1300, 450));
+  const fromLeft = await shiftAfter(page, () => page.mouse.move(140, 450));
   // Behind the glass a layer goes with the eye.
   expect(fromRight - fromLeft).toBeGreaterThan(50);
-  await page.keyboard.press('ArrowRight');
-  await page.keyboard.press('ArrowRight');
-  await page.waitForTimeout(1500);
-  expect(await shiftOf(back)).toBeGreaterThan(fromLeft + 5);
-  await page.keyboard.press('Home');
-  await page.waitForTimeout(1500);
-  expect(await shiftOf(back)).toBeGreaterThan(fromLeft + 50);
+  const steppedRight = await shiftAfter(page, async () => {
+    await page.keyboard.press('ArrowRight');
+    await page.keyboard.press('ArrowRight');
+  });
+  expect(steppedRight).toBeGreaterThan(fromLeft + 5);
+  expect(await shiftAfter(page, () => page.keyboard.press('Home'))).toBeGreaterThan(fromLeft + 50);
 });
 
 test('dragging stands in for the face while following is on', async ({ signedInPage }) => {
   const page = await signedInPage('viewer');
   await keepScreen(page);
   await play(page);
-  const back = layers(page).first();
   await page.mouse.move(720, 450);
   await page.mouse.down();
-  await page.mouse.move(1350, 450, { steps: 5 });
-  await page.waitForTimeout(1200);
-  const right = await shiftOf(back);
-  await page.mouse.move(90, 450, { steps: 5 });
-  await page.waitForTimeout(1200);
-  expect(right - (await shiftOf(back))).toBeGreaterThan(50);
+  const right = await shiftAfter(page, () => page.mouse.move(1350, 450, { steps: 5 }));
+  const left = await shiftAfter(page, () => page.mouse.move(90, 450, { steps: 5 }));
+  expect(right - left).toBeGreaterThan(50);
   await page.mouse.up();
 });
 
@@ -103,31 +107,30 @@ test('less motion is honoured: nothing follows or drifts until it is asked for',
   await play(page);
   await expect(line(page)).toContainText('less motion');
   await expect(following(page)).toHaveAttribute('aria-checked', 'false');
-  const before = await shiftOf(layers(page).first());
+  const before = await shiftOf(page);
   await page.mouse.move(1300, 300);
-  await page.waitForTimeout(2000);
-  expect(await shiftOf(layers(page).first())).toBe(before);
+  await page.waitForTimeout(1500);
+  expect(await shiftOf(page)).toBe(before);
   await page.getByRole('button', { name: 'Follow my face' }).click();
   await expect(line(page)).toContainText(/camera|follow|Nobody/);
 });
 
-test('a camera refused is said, with how to allow it, and the picture plays on without', async ({ baseURL }) => {
+test('a camera refused is said, with how to allow it, and the picture plays on without', async ({ baseURL, expectToReadWell }) => {
   await inBrowserWith(baseURL!, ['--use-fake-device-for-media-stream'], async (page) => {
     await expect(line(page)).toContainText('The camera was refused. To allow it, click the sign left of the address', { timeout: 20_000 });
+    await expectToReadWell(page);
     await page.getByRole('button', { name: 'Go on without' }).click();
     await expect(line(page)).toContainText('Look around with the pointer');
   });
 });
 
-test('a screen without a camera is told so', async ({ baseURL }) => {
+test('a screen without a camera is told so', async ({ baseURL, expectToReadWell }) => {
   await inBrowserWith(baseURL!, ['--use-fake-ui-for-media-stream'], async (page) => {
     await expect(line(page)).toContainText('No camera was found', { timeout: 20_000 });
-    await page.mouse.move(1300, 450);
-    await page.waitForTimeout(1200);
-    const right = await shiftOf(layers(page).first());
-    await page.mouse.move(140, 450);
-    await page.waitForTimeout(1200);
-    expect(right - (await shiftOf(layers(page).first()))).toBeGreaterThan(50);
+    await expectToReadWell(page);
+    const right = await shiftAfter(page, () => page.mouse.move(1300, 450));
+    const left = await shiftAfter(page, () => page.mouse.move(140, 450));
+    expect(right - left).toBeGreaterThan(50);
   });
 });
 
@@ -150,11 +153,12 @@ test('a camera in use elsewhere is told so, and taken up when it is free', async
   await expect(line(page)).toContainText('Nobody is in view', { timeout: 30_000 });
 });
 
-test('a scene that is not there, and a server that is not, are told with a way on', async ({ signedInPage, expectErrors }) => {
+test('a scene that is not there, and a server that is not, are told with a way on', async ({ signedInPage, expectAccessible, expectErrors }) => {
   expectErrors(/404/, /ERR_FAILED|Failed to load/);
   const page = await signedInPage('viewer');
   await page.goto('/play/00000000-0000-4000-8000-000000000000');
   await expect(page.getByRole('heading', { name: 'This scene is not here' })).toBeVisible();
+  await expectAccessible(page);
   await page.getByRole('link', { name: 'Back' }).click();
   await expect(page).toHaveURL(/\/scenes/);
 
@@ -201,6 +205,10 @@ test('full screen on demand', async ({ signedInPage }) => {
   await expect.poll(() => page.evaluate(() => document.fullscreenElement)).toBeNull();
 });
 
+interface Counting {
+  readonly counts: { readonly tracks: readonly MediaStreamTrack[]; readonly frames: number };
+}
+
 test('30 times opened and left, nothing stays behind', async ({ signedInPage }) => {
   test.setTimeout(240_000);
   const page = await signedInPage('viewer');
@@ -231,13 +239,14 @@ test('30 times opened and left, nothing stays behind', async ({ signedInPage }) 
     const of = (name: string) => metrics.find((metric) => metric.name === name)!.value;
     return { nodes: of('Nodes'), listeners: of('JSEventListeners'), heap: of('JSHeapUsedSize') };
   };
+  let asked = 0;
   const visit = async () => {
     await page.evaluate((path) => {
       history.pushState(null, '', path);
       dispatchEvent(new PopStateEvent('popstate'));
     }, `/play/${scene.id}`);
     await expect(layers(page)).toHaveCount(scene.document.layers.length);
-    await page.waitForTimeout(700);
+    await page.waitForFunction((before) => (window as unknown as Counting).counts.tracks.length > before, asked++);
     await page.evaluate(() => {
       history.pushState(null, '', '/account');
       dispatchEvent(new PopStateEvent('popstate'));
@@ -255,7 +264,7 @@ test('30 times opened and left, nothing stays behind', async ({ signedInPage }) 
   expect(late.heap).toBeLessThan(early.heap + 6e6);
   expect(page.workers()).toEqual([]);
   const left = await page.evaluate(async () => {
-    const { counts } = window as unknown as { counts: { tracks: MediaStreamTrack[]; frames: number } };
+    const { counts } = window as unknown as Counting;
     const before = counts.frames;
     await new Promise((resolve) => setTimeout(resolve, 500));
     return { tracks: counts.tracks.length, live: counts.tracks.filter(({ readyState }) => readyState === 'live').length, frames: counts.frames - before };
@@ -273,10 +282,8 @@ async function inBrowserWith(baseURL: string, args: string[], check: (page: Page
     ignoreDefaultArgs: ignoredDefaults,
   });
   try {
-    const page = await (await browser.newContext({ baseURL, viewport: { width: 1440, height: 900 } })).newPage();
+    const page = await (await browser.newContext({ baseURL, viewport: { width: 1440, height: 900 }, storageState: sessionFile('viewer') })).newPage();
     await keepScreen(page);
-    const { email, password } = demoAccount('viewer');
-    await signIn(page, email, password);
     await play(page);
     await check(page);
   } finally {

@@ -1,7 +1,7 @@
 import type { Page } from '@playwright/test';
 import sharp from 'sharp';
 import type { Layer, LayerImage, Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
-import { ask, householdId } from '../../e2e/player/asking';
+import { ask, householdId } from '../../e2e/asking';
 import { SIZES, type SizeName } from './options';
 
 /** The glass of the bench's wall, mm; the same whatever its pixels. */

@@ -5,7 +5,7 @@ import { expect } from '../fixtures';
 import type { FilmedTruth } from '../set-up/filmed-face';
 import { type Pixels, centroid, pixelsOf } from './centroid';
 import { discs, glass, ground, homeEye, makeFollowScene } from './follow-scene';
-import { type Rest, restNames, restOf } from './rest-poses';
+import { type Rest, restNames, restOf, settledMs } from './rest-poses';
 import { keepScreen } from './this-screen';
 
 interface Point {
@@ -22,11 +22,16 @@ const usualEyeDistanceMm = 63;
 /** The tracker's eye is the middle of the corners of both, 1.6 to 2.7 mm from that of the pupils, which moves a layer 300 mm behind by 1 to 1.6 px. */
 const placeTolerancePx = 1.6;
 
+/** Of so many pictures at a place the middle one counts. */
+const looks = 3;
+
 export interface Watched {
-  /** What the window showed when the face rested at each place. */
-  readonly pictures: Readonly<Record<Rest, Buffer>>;
+  /** What the window showed, several times, when the face rested at each place. */
+  readonly pictures: Readonly<Record<Rest, readonly Buffer[]>>;
   /** The distance the player read out at the first rest, mm. */
   readonly centreZMm: number;
+  /** How finely the player looked meanwhile, in its own words. */
+  readonly looking: string;
 }
 
 /** Plays a scene of discs to a filmed face and keeps what is drawn when the face rests at each place. */
@@ -41,29 +46,33 @@ export async function watchRests(page: Page, renderer: RendererName): Promise<Wa
   await page.keyboard.press('i');
   const readOut = page.locator('oriel-read-out');
   await expect(readOut).toContainText(renderer);
-  const eyeText = await atRest(page, 'centre', async () => {
-    // The figures are half a second old at most.
-    await page.waitForTimeout(600);
+  // Figures, controls and words are there to be read, and out of the pictures.
+  await page.addStyleTag({ content: 'oriel-player > :not(.picture) { visibility: hidden !important; }' });
+  const figure = (name: string) => readOut.locator('dt', { hasText: name }).locator('xpath=following-sibling::dd[1]');
+  await expect.poll(async () => Number(await figure('Faces tracked').textContent()), { timeout: 60_000 }).toBeGreaterThan(0);
+  const following = Date.now();
+
+  const pictures: Partial<Record<Rest, Buffer[]>> = {};
+  let eyeText = '';
+  while (Object.keys(pictures).length < restNames.length) {
+    const rest = restOf(await frameNow(page));
+    if (!rest || pictures[rest] || Date.now() - following < settledMs) {
+      await page.waitForTimeout(100);
+      continue;
+    }
     // A machine too busy to track proves nothing about where layers are put.
     await expect(readOut, 'this machine is too busy to follow a face').not.toContainText('no tracking', { timeout: 1 });
-    return readOut.locator('dd').nth(3).textContent();
-  });
-  await page.keyboard.press('i');
-  // Controls and words have gone by then.
-  await page.waitForTimeout(4000);
-
-  const pictures: Partial<Record<Rest, Buffer>> = {};
-  for (const rest of restNames) pictures[rest] = await atRest(page, rest, () => page.screenshot());
-  return { pictures: pictures as Record<Rest, Buffer>, centreZMm: Number(eyeText!.split(',')[2]) };
-}
-
-/** Does something while the face rests at a place; does it again if the face has moved on meanwhile. */
-async function atRest<T>(page: Page, rest: Rest, act: () => Promise<T>): Promise<T> {
-  for (;;) {
-    if (restOf(await frameNow(page)) !== rest) continue;
-    const result = await act();
-    if (restOf(await frameNow(page)) === rest) return result;
+    const taken: Buffer[] = [];
+    for (let look = 0; look < looks; look++) {
+      const picture = await page.screenshot();
+      if (restOf(await frameNow(page)) !== rest) break;
+      taken.push(picture);
+      // The figures are half a second old at most, and the eye has been at rest for longer.
+      if (rest === 'centre') eyeText = (await figure('Eye').textContent())!;
+    }
+    if (taken.length > 0) pictures[rest] = taken;
   }
+  return { pictures: pictures as Record<Rest, Buffer[]>, centreZMm: Number(eyeText.split(',')[2]), looking: (await figure('Looking by').textContent())! };
 }
 
 /** Opens the fake camera a second time in the page, to know which frame it shows. */
@@ -117,22 +126,27 @@ function predicted({ xMm, yMm, depthMm: d }: (typeof discs)[number], eye: Eye): 
   return { x: place(xMm, homeEye.x, eye.x), y: place(yMm, homeEye.y, eye.y) };
 }
 
-/** Where a disc is drawn, px from the middle of the window, y upward; looked for about where it should be. */
-function drawn(pixels: Pixels, disc: (typeof discs)[number], about: Point): Point {
-  const { width, height } = pixels;
-  const { x, y } = centroid(pixels, ground, { x: width / 2 + about.x, y: height / 2 - about.y }, (disc.widthMm * width) / glass.widthMm, 40);
-  return { x: x - width / 2, y: height / 2 - y };
+/** Where a disc is drawn, px from the middle of the window, y upward: the median of several pictures; looked for about where it should be. */
+function drawn(pictures: readonly Pixels[], disc: (typeof discs)[number], about: Point): Point {
+  const places = pictures.map((pixels) => {
+    const { width, height } = pixels;
+    const { x, y } = centroid(pixels, ground, { x: width / 2 + about.x, y: height / 2 - about.y }, (disc.widthMm * width) / glass.widthMm, 40);
+    return { x: x - width / 2, y: height / 2 - y };
+  });
+  return { x: median(places.map(({ x }) => x)), y: median(places.map(({ y }) => y)) };
 }
 
+const median = (values: readonly number[]) => [...values].sort((a, b) => a - b)[Math.floor(values.length / 2)];
+
 /** Holds what was drawn against the pinhole model: from rest to rest, every disc has moved as it must, and the right way. */
-export async function expectFollowed({ pictures, centreZMm }: Watched, truth: FilmedTruth): Promise<void> {
+export async function expectFollowed({ pictures, centreZMm, looking }: Watched, truth: FilmedTruth): Promise<void> {
   const eyes = trueEyes(truth, centreZMm);
   const faults: string[] = [];
   for (const disc of discs) {
     const places = await Promise.all(
       restNames.map(async (rest) => {
-        const pixels = await pixelsOf(pictures[rest]);
-        const perMm = pixels.width / glass.widthMm;
+        const pixels = await Promise.all(pictures[rest].map(pixelsOf));
+        const perMm = pixels[0].width / glass.widthMm;
         const onGlass = predicted(disc, eyes[rest]);
         const place = { x: onGlass.x * perMm, y: onGlass.y * perMm };
         return { rest, place, seen: drawn(pixels, disc, place) };
@@ -151,5 +165,5 @@ export async function expectFollowed({ pictures, centreZMm }: Watched, truth: Fi
         if (Math.abs(shift[axis]) > 3 && Math.sign(shift[axis]) !== Math.sign(moved[axis])) faults.push(`${report}: the wrong way`);
     }
   }
-  expect(faults).toEqual([]);
+  expect(faults, `looking by ${looking}`).toEqual([]);
 }
