@@ -12,7 +12,7 @@ export function stepsOn(out) {
   const draw = () => {
     if (!out.isTTY) return;
     const doing = [...underWay].map(({ now, start }) => `${now} … ${seconds(start)}`).join(' · ');
-    out.write(`\r\x1b[K  ${doing}`.slice(0, (out.columns ?? 80) + 3));
+    out.write(`\r\x1b[K  ${doing}`.slice(0, (out.columns || 80) + 3));
   };
   const write = (text) => {
     out.write(out.isTTY ? `\r\x1b[K${text}\n` : `${text}\n`);

@@ -3,7 +3,7 @@ import { isClearFrom } from '../../shared/projection/eye-room';
 import { retarget } from '../../shared/projection/retarget';
 import type { FacePose } from '../video/face-path';
 import { expect, test } from './fixtures';
-import { demoScene } from './player/asking';
+import { demoScene } from './asking';
 import { keepScreen } from './player/this-screen';
 
 /** A face high up and far aside: 63 mm between the eyes, seen 90 degrees across (f = 320 px), stand 350 mm away. */
@@ -17,7 +17,7 @@ test.use({ filmedFace: { name: 'aside', poses: Array.from({ length: 30 }, () => 
 /** A colour that no photograph holds, put behind the layers. */
 const isVoid = (red: number, green: number, blue: number) => red > 235 && green < 25 && blue > 235;
 
-test('on a small glass a clear scene never tears, however far outside its zone the viewer stands', async ({ signedInPage }) => {
+test('on a small glass a clear scene never tears, however far outside its zone the viewer stands', async ({ signedInPage, expectAccessible }) => {
   test.setTimeout(120_000);
   const page = await signedInPage('viewer');
   await keepScreen(page, { widthMm, fieldDegrees });
@@ -54,4 +54,5 @@ test('on a small glass a clear scene never tears, however far outside its zone t
   const [x, y] = ((await readOut.nth(3).textContent()) ?? '').split(',').map(Number);
   expect(Math.abs(x)).toBeGreaterThan(40);
   expect(y).toBeGreaterThan(20);
+  await expectAccessible(page);
 });

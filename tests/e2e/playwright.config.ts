@@ -3,13 +3,13 @@ import type { BrowserChoice } from './fixtures';
 import { inProject } from '../../scripts/project.mjs';
 
 /**
- * Two projects: `page` runs `*.e2e.ts` in a browser without a graphics processor; `camera` runs `*.camera.e2e.ts`, where a file says
- * with `test.use({ graphics, filmedFace })` what the fake camera shows and how pictures are drawn.
+ * Two projects: `camera` runs `*.camera.e2e.ts`, where a filmed face stands before the fake camera and is followed in time, one after
+ * another and alone; `page` runs all other `*.e2e.ts`, two at a time. A file says with `test.use({ graphics, filmedFace })` how pictures
+ * are drawn and what the camera shows.
  */
 export default defineConfig<object, BrowserChoice>({
   testDir: '.',
   globalSetup: './set-up/serve-product.ts',
-  // A person's work on pages waits for the server and for the eye half the time; what a camera sees is timed (below).
   workers: 2,
   retries: 0,
   // Ends before `npm test` gives up on the whole part, so that what has been found is still counted.
