@@ -27,7 +27,7 @@ const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b)
   imports: [ReadOut],
   providers: [FaceTracking],
   template: `
-    <div #picture class="picture" role="img" [attr.aria-label]="scene() ? scene()!.document.name + ', seen through the glass' : null"></div>
+    <div #picture class="picture" [attr.role]="scene() ? 'img' : null" [attr.aria-label]="scene() ? scene()!.document.name + ', seen through the glass' : null"></div>
     @if (figures(); as shown) {
       <oriel-read-out [figures]="shown" />
     }
