@@ -1,3 +1,4 @@
+import { usualTuning } from '@oriel/shared/contracts/new-wall';
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
 import { CERTAIN, type SetUpUncertainty, glassErrorMm, middleOf } from '@oriel/shared/viewer/measuring/glass-error';
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
@@ -34,9 +35,13 @@ export function sourcesOf({ glass, camera, tuning }: WallSetUp): Source[] {
     { key: 'position', name: 'Place of the lens', words: `±${plainMm(place)} mm of the lens`, assumed: uncertainty.positionMm === null, unsure: { ...CERTAIN, positionMm: place } },
     { key: 'tilt', name: 'Turn', words: `±${plainMm(degrees(tilt), 2)}° of turn`, assumed: uncertainty.pitchRad === null, unsure: { ...CERTAIN, tiltRad: tilt } },
     { key: 'field', name: 'Field of view', words: `±${plainMm(degrees(field), 2)}° of view`, assumed: uncertainty.hfovRad === null, unsure: { ...CERTAIN, hfovRad: field } },
-    { key: 'viewer', name: 'Viewer', words: `±${plainMm(viewer * 100)} % of distance`, assumed: false, unsure: { ...CERTAIN, viewerScale: viewer } },
+    { key: 'viewer', name: 'Viewer', words: `±${plainMm(viewer * 100)} % of distance`, assumed: isUsual(tuning), unsure: { ...CERTAIN, viewerScale: viewer } },
   ];
 }
+
+/** Nobody's own scale: what is taken for everyone. */
+const isUsual = ({ ipdMm, scaleFactor }: WallSetUp['tuning']) =>
+  ipdMm.value === usualTuning.ipdMm.value && ipdMm.uncertainty === usualTuning.ipdMm.uncertainty && scaleFactor === usualTuning.scaleFactor;
 
 /** All of them at once. */
 export const together = (sources: readonly Source[]): SetUpUncertainty =>
