@@ -1,4 +1,6 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
+import { retarget } from '@oriel/shared/projection/retarget';
+import type { ViewingZone } from '@oriel/shared/projection/types';
 import type { Database } from '../database/database';
 import { scenesOf } from '../scenes/scene-queries';
 import { wallService } from '../walls/wall-service';
@@ -7,7 +9,17 @@ import type { DemoAccount } from './demo-files';
 const wallName = 'Landing wall';
 const sceneName = 'October on the ridge';
 
-/** Hangs a wall that shows a scene in the demo household; none where its tuner is gone. */
+/** A zone in whole mm, nowhere larger. */
+const wholeMm = (zone: ViewingZone): ViewingZone => ({
+  leftMm: Math.ceil(zone.leftMm),
+  rightMm: Math.floor(zone.rightMm),
+  lowestMm: Math.ceil(zone.lowestMm),
+  highestMm: Math.floor(zone.highestMm),
+  nearestMm: Math.ceil(zone.nearestMm),
+  farthestMm: Math.floor(zone.farthestMm),
+});
+
+/** Hangs a wall that shows a scene, for eyes wherever it is clear, in the demo household; none where its tuner is gone. */
 export async function hangDemoWall(
   db: Database,
   householdName: string,
@@ -27,5 +39,6 @@ export async function hangDemoWall(
   const there = (await walls.list(tuner.householdId)).some(({ setUp }) => setUp.name === wallName);
   if (there) return;
   const scene = (await scenesOf(db, tuner.householdId, false)).find(({ document }) => document.name === sceneName);
-  await walls.create({ ...newWall(wallName), sceneId: scene?.id ?? null }, tuner);
+  const wall = newWall(wallName);
+  await walls.create(scene ? { ...wall, sceneId: scene.id, zone: wholeMm(retarget(scene.document, wall.glass).zone) } : wall, tuner);
 }

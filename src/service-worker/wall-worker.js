@@ -5,8 +5,11 @@ const pictures = '/api/wall/images/';
 
 self.addEventListener('fetch', (event) => {
   const { method, url } = event.request;
-  if (method !== 'GET' || !new URL(url).pathname.startsWith(pictures)) return;
+  const { pathname } = new URL(url);
+  if (!pathname.startsWith('/api/')) return;
   event.stopImmediatePropagation();
+  // What only the server can answer goes there straight: Angular's worker would hold it until all it keeps is fetched.
+  if (method !== 'GET' || !pathname.startsWith(pictures)) return;
   event.respondWith(caches.match(event.request, { cacheName: pictureCache, ignoreVary: true }).then((kept) => kept ?? fetch(event.request)));
 });
 

@@ -54,7 +54,9 @@ test('the set-up speaks up: sides against px, eyes the camera misses, a scene th
   await step(page, 'Room').click();
   await type(page, 'Lowest eye', '-900');
   await expect(page.getByText(/nobody is followed whose eyes are low down/)).toBeVisible();
-  await type(page, 'Lowest eye', '-250');
+  await type(page, 'Lowest eye', '-200');
+  await type(page, 'Left end', '-400');
+  await type(page, 'Right end', '400');
 
   await step(page, 'Scene').click();
   await page.getByRole('radio', { name: /October on the ridge/ }).check();

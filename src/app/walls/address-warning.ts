@@ -13,7 +13,7 @@ import { addressWarnings } from './own-address';
       </div>
     }
   `,
-  styles: 'div { padding: 8px 12px; border-left: 3px solid var(--brass-line); background: var(--zone); } p { margin: 0; max-width: 64ch; font-size: 13px; overflow-wrap: anywhere; } p + p { margin-top: 6px; }',
+  styles: ':host { display: block; } div { margin: 8px 0 12px; max-width: 72ch; padding: 8px 12px; border-left: 3px solid var(--brass-line); background: var(--zone); } p { margin: 0; max-width: 64ch; font-size: 13px; overflow-wrap: anywhere; } p + p { margin-top: 6px; }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class AddressWarning {
