@@ -49,7 +49,7 @@ test('the set-up speaks up: sides against px, eyes the camera misses, a scene th
   await page.getByRole('button', { name: 'The height is 337.5 mm' }).click();
   await expect(field(page, 'Height')).toHaveValue('337.5');
   await expect(page.getByText(/do not go together/)).toHaveCount(0);
-  await expect(page.getByText(/^±0.17 % of its width/)).toBeVisible();
+  await expect(page.getByText(/^±0.17 % of its width: /)).toBeVisible();
 
   await step(page, 'Room').click();
   await type(page, 'Lowest eye', '-900');
