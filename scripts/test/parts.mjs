@@ -29,7 +29,12 @@ const tests =
 /** One project of playwright.config.ts, with a report of its own. */
 const endToEnd = (project) => {
   const file = report(`end-to-end-${project}`);
-  const command = tool('@playwright/test/cli.js', 'test', '--config=tests/e2e/playwright.config.ts', `--project=${project}`);
+  const command = tool(
+    '@playwright/test/cli.js',
+    'test',
+    '--config=tests/e2e/playwright.config.ts',
+    `--project=${project}`,
+  );
   const part = tests(file, countPlaywright, command);
   return ({ env, signal }) => part({ env: { ...env, PLAYWRIGHT_JSON_OUTPUT_FILE: file }, signal });
 };
