@@ -31,6 +31,12 @@ describe('the rate of drawing', () => {
     expect(run(createDrawingRate(), () => 9, 0, 20)).toMatchObject([{ toPerS: 15 }]);
   });
 
+  it('tries no more where the least is more than succeeds', () => {
+    const rate = createDrawingRate();
+    run(rate, () => 13, 0, 20);
+    expect(run(rate, () => 13, 20, hour)).toEqual([]);
+  });
+
   it('comes back when the load has gone', () => {
     const rate = createDrawingRate();
     run(rate, (s) => (s < 60 ? 18 : 60), 0, 240);

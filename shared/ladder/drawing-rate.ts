@@ -19,7 +19,9 @@ export const DRAWING_STEPS: readonly DrawingStep[] = [
 
 /** The rate taken is the greatest that is no more than what was achieved, and this much. */
 const GENEROSITY = 1.15;
-/** Seconds without a poor one after which more is tried; doubled by every trial that had to be taken back, up to the longest. */
+/** A rate is kept where this share of it is drawn. */
+const KEPT = 0.95;
+/** Seconds in a row in which the rate is kept, after which more is tried; doubled by every trial that had to be taken back, up to the longest. */
 const PROOF_S = 30;
 const LONGEST_PROOF_S = 1800;
 /** Seconds without a change after which trials taken back are forgotten; longer than the longest proof. */
@@ -95,7 +97,8 @@ export function createDrawingRate(): DrawingRate {
       }
       excess = Math.max(0, excess - 1);
       if (excess === 0) poorFrames = poorS = 0;
-      if (step === 0 || ++goodS < proofS) return null;
+      goodS = framesPerS >= KEPT * DRAWING_STEPS[step].mostPerS ? goodS + 1 : 0;
+      if (step === 0 || goodS < proofS) return null;
       trials++;
       return change(tMs, step - 1, `drawing kept its rate for ${proofS} s`);
     },
