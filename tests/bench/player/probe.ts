@@ -134,7 +134,8 @@ const infos: ThreeInfo[] = [];
 const threeTools = new EventTarget();
 threeTools.addEventListener('observe', (event) => {
   const observed = (event as CustomEvent<{ readonly info?: ThreeInfo }>).detail;
-  if (observed.info) infos.push(observed.info);
+  // The counts alone: whoever keeps the whole of it keeps the context and its canvas.
+  if (observed.info) infos.push({ memory: observed.info.memory, render: observed.info.render });
 });
 
 const probe: Probe = {
