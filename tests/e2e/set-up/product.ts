@@ -12,6 +12,9 @@ import { startServer } from '../../../scripts/start/server.mjs';
 /** The built product, demo and all, on a free port with a database and a storage folder of its own. */
 export interface Product {
   readonly url: string;
+  /** Its own database and folder of files, for tests that put more into it than can be sent. */
+  readonly databaseUrl: string;
+  readonly storageDir: string;
   /** Ends the server as a power cut would. */
   kill(): Promise<void>;
   /** Starts it again, on the same port and with the same data. */
@@ -62,6 +65,8 @@ export async function startProduct(): Promise<Product> {
   });
   return {
     url: `http://localhost:${port}`,
+    databaseUrl: databaseUrl.href,
+    storageDir: storage,
     kill: async () => void (await server.kill()),
     restart: async () => {
       server = await start();
