@@ -23,3 +23,12 @@ export async function hang(page: Page, name = `Landing ${Date.now()}`): Promise<
   await expect(page.getByLabel('Name of the wall')).toHaveValue(name);
   return new URL(page.url()).pathname.split('/')[2];
 }
+
+/** The measured field of view lies within twice its stated standard uncertainty of the truth, and what that means is said in mm on the glass. */
+export async function expectFieldMeasured(page: Page, fieldDegrees: number): Promise<number> {
+  const found = await figureOf(page, 'Field of view across');
+  const sure = await figureOf(page, 'The field is sure to within ±');
+  expect(Math.abs(found - fieldDegrees), `${found}° ± ${sure}°`).toBeLessThan(2 * sure);
+  await expect(page.getByText(/^±[\d.]+° of view: ±[\d.]+ mm on the glass for a layer 100 mm behind/)).toBeVisible();
+  return sure;
+}
