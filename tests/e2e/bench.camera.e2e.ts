@@ -85,5 +85,6 @@ test('the mirror test says so when the camera sees no blink, and stops at once o
   await expect(page.locator('.blinking')).toHaveCount(0);
   await start.click();
   await expect(page.getByRole('heading', { name: 'The camera saw no blink' })).toBeVisible({ timeout: 60_000 });
+  await expect(page.getByText('no mirror in it that shows this screen')).toBeVisible();
   await expect(page.getByText('nothing is changed')).toBeVisible();
 });

@@ -1,6 +1,7 @@
 import { correctionForBlur, createBlurCorrection } from '@oriel/shared/viewer/blur-correction';
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
+import { trendOfDistance } from '@oriel/shared/viewer/distance-trend';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
 import { faceWidening } from '@oriel/shared/viewer/face-widening';
 import { leftEyeOf, rightEyeOf } from './face-landmarks';
@@ -36,6 +37,7 @@ export class FaceMeasure {
     const rightEyePx = rightEyeOf(landmarks);
     const leftEyePx = leftEyeOf(landmarks);
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
+    inCamera.z *= trendOfDistance(inCamera.z, settings.viewer.eyeDistanceMm);
     inCamera.z *= correctionForBlur(this.blur, {
       tMs: timestampMs,
       xPx: eyePx.x,
