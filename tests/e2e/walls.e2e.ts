@@ -183,7 +183,7 @@ test('a screen is paired by its code, reports, falls silent in words, and is unp
   await ask(screen, 'POST', '/api/wall/reports', { reports: [report] });
   await page.goto('/walls');
   const shown = page.getByRole('listitem').filter({ has: page.getByRole('heading', { name }) });
-  await expect(shown).toContainText('Showing October on the ridge, 29 faces a second, 40 frames');
+  await expect(shown).toContainText('Showing October on the ridge, 29 faces and 40 frames a second');
   await expect(shown).toContainText('48 °C inside');
   await expect(shown).toContainText('Last error: camera unplugged for 3 s');
   await page.clock.install({ time: Date.now() + 3 * 3_600_000 });

@@ -9,12 +9,13 @@ export class Submission {
 
   constructor(private readonly form?: FormGroup) {}
 
-  /** Runs `send` if the form is valid. What was typed stays whatever happens. */
+  /** Runs `send` if the form is valid; otherwise its fields say why, and an older failure goes. What was typed stays whatever happens. */
   async run(send: () => Promise<void>): Promise<void> {
     this.form?.markAllAsTouched();
-    if (this.busy() || this.form?.invalid) return;
-    this.busy.set(true);
+    if (this.busy()) return;
     this.failure.set(null);
+    if (this.form?.invalid) return;
+    this.busy.set(true);
     try {
       await send();
     } catch (error) {

@@ -23,8 +23,9 @@ describe('a wall in words', () => {
     ['Never paired', 'idle', wall({ pairedAt: null, heardAt: null, report: null })],
     ['No screen is paired; one was last heard at 17:04', 'idle', wall({ pairedAt: null })],
     ['Paired; its screen has not reported yet', 'idle', wall({ heardAt: null, report: null })],
-    ['Showing October on the ridge, 29 faces a second, 40 frames', 'well', wall({})],
+    ['Showing October on the ridge, 29 faces and 40 frames a second', 'well', wall({})],
     ['Showing October on the ridge', 'well', wall({ report: null })],
+    ['Showing October on the ridge, but following nobody: its computer is too slow at present', 'amiss', wall({ report: { ...report, ladderStep: 7, ladderWords: 'no tracking' } })],
     ['Silent for 3 hours (last heard 14:02)', 'amiss', wall({ heardAt: new Date(2026, 2, 14, 14, 2).toISOString() })],
     ['Silent for 2 days (last heard on 12 March at 14:02)', 'amiss', wall({ heardAt: new Date(2026, 2, 12, 14, 2).toISOString() })],
   ])('is “%s”', (words, tone, one) => {
@@ -41,8 +42,12 @@ describe('a wall in words', () => {
   });
 
   it('tells how it follows, how late it is and how warm', () => {
-    expect(reportLines(wall({}))).toEqual(['following: landmarks, a guard on every frame, 61 ms behind', '48 °C inside']);
-    expect(reportLines(wall({ report: { ...report, temperatureC: null, latencyMs: null, ladderWords: '', ladderStep: 2 } }))).toEqual(['following: step 2 of the ladder']);
+    expect(reportLines(wall({}), now)).toEqual(['following: landmarks, a guard on every frame, 61 ms behind', '48 °C inside']);
+    expect(reportLines(wall({ report: { ...report, temperatureC: null, latencyMs: null, ladderWords: '', ladderStep: 2 } }), now)).toEqual(['following: step 2 of the ladder']);
+  });
+
+  it('tells nothing of how a silent wall follows', () => {
+    expect(reportLines(wall({ heardAt: ago(90_001) }), now)).toEqual([]);
   });
 
   it('says spans in their largest whole unit', () => {

@@ -1,4 +1,5 @@
 import { type Wall, silentAfterMs } from '@oriel/shared/contracts/walls';
+import { LADDER_STEPS } from '@oriel/shared/ladder/steps';
 import type { ViewingZone } from '@oriel/shared/projection/types';
 import { clockTime, sayMoment } from '../core/moments';
 
@@ -27,23 +28,29 @@ export function stateOf(wall: Wall, sceneName: string | null, now: Date): WallSt
     return { tone: 'idle', words: heard ? `No screen is paired; one was last heard ${sayMoment(heard, now)}` : 'Never paired' };
   }
   if (!heard) return { tone: 'idle', words: 'Paired; its screen has not reported yet' };
-  const silentMs = now.getTime() - heard.getTime();
-  if (silentMs > silentAfterMs) {
+  if (isSilent(wall, now)) {
+    const silentMs = now.getTime() - heard.getTime();
     const last = heard.toDateString() === now.toDateString() ? clockTime(heard) : sayMoment(heard, now);
     return { tone: 'amiss', words: `Silent for ${sayLong(silentMs)} (last heard ${last})` };
   }
   if (!sceneName) return { tone: 'idle', words: 'Running, with nothing to show: choose a scene' };
   const { report } = wall;
   if (!report) return { tone: 'well', words: `Showing ${sceneName}` };
+  if (LADDER_STEPS[report.ladderStep]?.looking.by === 'nothing') {
+    return { tone: 'amiss', words: `Showing ${sceneName}, but following nobody: its computer is too slow at present` };
+  }
   return {
     tone: 'well',
-    words: `Showing ${sceneName}, ${plural(Math.round(report.trackedPerS), 'face')} a second, ${plural(Math.round(report.framesPerS), 'frame')}`,
+    words: `Showing ${sceneName}, ${plural(Math.round(report.trackedPerS), 'face')} and ${plural(Math.round(report.framesPerS), 'frame')} a second`,
   };
 }
 
-/** What else its newest report tells, a line each: how it follows, how late, how warm, what went wrong. */
-export function reportLines({ report }: Wall): string[] {
-  if (!report) return [];
+const isSilent = ({ heardAt }: Wall, now: Date): boolean => heardAt !== null && now.getTime() - new Date(heardAt).getTime() > silentAfterMs;
+
+/** What else its newest report tells, a line each: how it follows, how late, how warm. Nothing of a silent wall: that was so once. */
+export function reportLines(wall: Wall, now: Date): string[] {
+  const { report } = wall;
+  if (!report || isSilent(wall, now)) return [];
   const late = report.latencyMs === null ? '' : `, ${Math.round(report.latencyMs)} ms behind`;
   return [
     `${report.tracking}: ${report.ladderWords || `step ${report.ladderStep} of the ladder`}${late}`,

@@ -1,10 +1,14 @@
 import { ChangeDetectionStrategy, Component, type OnInit, inject, input } from '@angular/core';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatOption, MatSelect } from '@angular/material/select';
-import { RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { type IsActiveMatchOptions, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { BenchSubject } from '../subject/bench-subject';
+
+/** A wall named in the address (`?wall=`) does not make it another place. */
+const hereAndBelow: IsActiveMatchOptions = { paths: 'subset', queryParams: 'ignored', fragment: 'ignored', matrixParams: 'ignored' };
+const hereAlone: IsActiveMatchOptions = { ...hereAndBelow, paths: 'exact' };
 
 /** The frame of the bench: what stands on it, and its four places. */
 @Component({
@@ -21,9 +25,9 @@ export class BenchPage implements OnInit {
   protected readonly bench = inject(BenchSubject);
   protected readonly loading = new Submission();
   protected readonly places = [
-    { path: '/bench', word: 'Live', exact: true },
-    { path: '/bench/runs', word: 'Runs and replay', exact: false },
-    { path: '/bench/mirror', word: 'Mirror test', exact: false },
+    { path: '/bench', word: 'Live', here: hereAlone },
+    { path: '/bench/runs', word: 'Runs and replay', here: hereAndBelow },
+    { path: '/bench/mirror', word: 'Mirror test', here: hereAndBelow },
   ] as const;
 
   /** A value of its own: Material shows nothing for null. */

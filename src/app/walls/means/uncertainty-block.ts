@@ -10,7 +10,7 @@ import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './source
       <table class="figures">
         <caption>
           <span class="title">{{ setUp().name }}</span>
-          <span>On the glass, seen from the middle of the zone</span>
+          <span>How far off a layer may be drawn, mm on the glass, seen from the middle of the zone</span>
         </caption>
         <thead>
           <tr>
@@ -42,7 +42,7 @@ import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './source
       @if (blind()) {
         <p class="blind">The camera does not see the middle of the viewing zone: turn it there, or move the zone.</p>
       }
-      <p class="marginal">Standard uncertainties, mm; about one time in three it is more. First angle, to scale.</p>
+      <p class="marginal">Standard uncertainties: about one time in three it is more. Views in first angle, to scale.</p>
     </section>
   `,
   styleUrl: './uncertainty-block.scss',

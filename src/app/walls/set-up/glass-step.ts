@@ -16,6 +16,8 @@ type Way = 'rule' | 'diagonal' | 'card';
 type Unit = 'in' | 'cm';
 
 const unitMm: Readonly<Record<Unit, number>> = { in: mmPerInch, cm: 10 };
+/** No screen is smaller: what is typed below it is a slip, 0 or centimetres (practice). */
+const leastSideMm = 10;
 /** How well each way measures a width until one says otherwise (practice): a rule's reading, a maker's rounding to half an inch, the edge of a card in px. */
 const usual = { ruleMm: 1, diagonalShare: 0.006, cardPx: 0.7 } as const;
 const { widthMm, heightMm, widthPx, heightPx } = WallGlass.shape;
@@ -33,8 +35,8 @@ export class GlassStep {
   private readonly window = inject(DOCUMENT).defaultView!;
   protected readonly way = signal<Way>('rule');
   protected readonly unit = signal<Unit>('in');
-  protected readonly mm = limitsOf(widthMm);
-  protected readonly highMm = limitsOf(heightMm);
+  protected readonly mm = { least: leastSideMm, most: limitsOf(widthMm).most };
+  protected readonly highMm = { least: leastSideMm, most: limitsOf(heightMm).most };
   protected readonly px = { least: 1, most: limitsOf(widthPx).most };
   protected readonly highPx = { least: 1, most: limitsOf(heightPx).most };
 

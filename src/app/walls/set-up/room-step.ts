@@ -42,9 +42,11 @@ const mostMm = 100_000;
         <p class="problem" role="alert">{{ problem }}. Nothing is saved until then.</p>
       }
     </fieldset>
-    <p class="what">
-      {{ across() }} m across and {{ deep() }} m deep. A scene says whether it is clear from the whole of the zone; a larger zone asks more of its layers.
-    </p>
+    @if (problems().length === 0) {
+      <p class="what">
+        {{ across() }} m across and {{ deep() }} m deep. A scene says whether it is clear from the whole of the zone; a larger zone asks more of its layers.
+      </p>
+    }
   `,
   styleUrl: './step.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

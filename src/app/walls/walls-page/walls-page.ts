@@ -43,7 +43,7 @@ export class WallsPage implements OnInit {
       return {
         wall,
         state: stateOf(wall, sceneName, this.now()),
-        lines: reportLines(wall),
+        lines: reportLines(wall, this.now()),
         figures: `${plainMm(glass.widthMm, 0)} × ${plainMm(glass.heightMm, 0)} mm, ${plainMm(diagonalOf(glass) / mmPerInch)} in; camera ${plainMm(degrees(camera.hfovRad))}° across`,
       };
     }),
