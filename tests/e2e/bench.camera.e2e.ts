@@ -33,7 +33,7 @@ test('live figures, landmarks on request, a run recorded while the network is go
   await expect(page.getByText('Following somebody.')).toBeVisible({ timeout: 60_000 });
   await expect(page.getByText(/^person \d+$/)).toBeVisible();
   const ladder = page.locator('oriel-instrument').filter({ has: page.getByRole('heading', { name: 'Ladder' }) });
-  await expect(ladder).toContainText(/of 7: .*median step \d/);
+  await expect(ladder).toContainText(/of 8: .*median step \d/);
   await expect(page.locator('video')).toHaveCount(0);
   await page.getByRole('button', { name: 'Show the camera picture' }).click();
   await expect(page.locator('oriel-camera-picture video')).toBeVisible();

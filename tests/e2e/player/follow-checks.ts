@@ -45,10 +45,10 @@ export async function watchRests(page: Page, renderer: RendererName): Promise<Wa
   await page.waitForFunction(() => document.fullscreenElement);
   await page.keyboard.press('i');
   const readOut = page.locator('oriel-read-out');
-  await expect(readOut).toContainText(renderer);
+  const figure = (name: string) => readOut.locator('dt', { hasText: name }).locator('xpath=following-sibling::dd[1]');
+  await expect(figure('Drawn by')).toHaveText(renderer === 'css' ? 'the processor' : 'the graphics processor');
   // Figures, controls and words are there to be read, and out of the pictures.
   await page.addStyleTag({ content: 'oriel-player > :not(.picture) { visibility: hidden !important; }' });
-  const figure = (name: string) => readOut.locator('dt', { hasText: name }).locator('xpath=following-sibling::dd[1]');
   await expect.poll(async () => Number(await figure('Faces tracked').textContent()), { timeout: 60_000 }).toBeGreaterThan(0);
   const following = Date.now();
 

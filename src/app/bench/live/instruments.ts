@@ -1,10 +1,13 @@
 import type { Spread } from '@oriel/shared/replay/spread';
-import { LADDER_STEPS } from '@oriel/shared/ladder/steps';
+import { FIRST_STEP, LADDER_STEPS } from '@oriel/shared/ladder/steps';
 import type { ChartLine } from '../charts/line-chart';
 import type { Measures } from './measures';
 
 /** How much of the past the charts show, ms. */
 export const SHOWN_MS = 30_000;
+
+/** How many of the ladder's steps, from the finest on, place all landmarks. */
+const WITH_LANDMARKS = LADDER_STEPS.filter(({ looking }) => looking.by === 'landmarks').length;
 
 /** One instrument as it reads now. */
 export interface Reading {
@@ -122,7 +125,7 @@ function ladderReading(measures: Measures, sinceMs: number, line: ChartLine): Re
     spread: Number.isFinite(steps.median)
       ? `median step ${steps.median}, 95 % at ${steps.p95} or finer; changes in half a minute: ${changes.length}${last ? `, the last one ${last.reason}` : ''}`
       : '',
-    good: 'Step 2 is where it begins; 1 to 3 place all landmarks, from 4 on the distance of a turned head is less sure. A step kept for long is good, one that changes every few seconds is not.',
+    good: `Step ${FIRST_STEP + 1} is where it begins; 1 to ${WITH_LANDMARKS} place all landmarks, from ${WITH_LANDMARKS + 1} on the distance of a turned head is less sure. A step kept for long is good, one that changes every few seconds is not.`,
     lines: [{ ...line, as: 'steps' }],
     yLabel: 'step',
     yLeast: 0,
