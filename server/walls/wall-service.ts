@@ -27,8 +27,6 @@ async function holdSceneOf(transaction: Database, householdId: string, sceneId: 
   if (!scene) throw sceneNotHere();
 }
 
-export type WallService = ReturnType<typeof wallService>;
-
 export function wallService(db: Database) {
   async function read(id: string): Promise<Wall> {
     const row = await findWall(db, id);

@@ -31,14 +31,7 @@ export function retarget<L extends PlacedLayer>(
     factor,
     glass: { widthMm: glass.widthMm * factor, heightMm: glass.heightMm * factor },
     homeEye: { x: homeEye.x * factor, y: homeEye.y * factor, z: homeEye.z * factor },
-    zone: {
-      leftMm: zone.leftMm * factor,
-      rightMm: zone.rightMm * factor,
-      lowestMm: zone.lowestMm * factor,
-      highestMm: zone.highestMm * factor,
-      nearestMm: zone.nearestMm * factor,
-      farthestMm: zone.farthestMm * factor,
-    },
+    zone: scaleZone(zone, factor),
     layers: scene.layers.map((layer) => ({
       ...layer,
       placed: scaleRectangle(layer.placed, factor),
@@ -46,3 +39,13 @@ export function retarget<L extends PlacedLayer>(
     })),
   };
 }
+
+/** A viewing zone scaled about the centre of the glass. */
+export const scaleZone = (zone: ViewingZone, factor: number): ViewingZone => ({
+  leftMm: zone.leftMm * factor,
+  rightMm: zone.rightMm * factor,
+  lowestMm: zone.lowestMm * factor,
+  highestMm: zone.highestMm * factor,
+  nearestMm: zone.nearestMm * factor,
+  farthestMm: zone.farthestMm * factor,
+});

@@ -102,4 +102,3 @@ async function shownGraphicsMB(page: Page): Promise<number> {
   const figure = page.locator('oriel-read-out dt', { hasText: 'Graphics memory' }).locator('xpath=following-sibling::dd[1]');
   return Number(await figure.innerText({ timeout: 20_000 }));
 }
-

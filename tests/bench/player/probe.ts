@@ -1,5 +1,5 @@
 import type { DrawingChange } from '@oriel/shared/ladder/drawing-rate';
-import type { FromTracker, ToTracker } from '../../../src/app/tracking/tracking-messages';
+import type { FromTracker } from '../../../src/app/tracking/tracking-messages';
 
 /** What is seen of a page while it runs; times on the page's clock, ms. */
 export interface Seen {
@@ -101,10 +101,6 @@ window.Worker = class extends OwnWorker {
     this.addEventListener('message', ({ data }: MessageEvent<FromTracker>) => {
       if (data.type === 'sample') seen.looks.push([data.timestampMs, performance.now(), data.face !== null, data.timings.totalMs]);
     });
-  }
-
-  override postMessage(message: ToTracker, transfer?: StructuredSerializeOptions | Transferable[]): void {
-    super.postMessage(message, transfer as Transferable[]);
   }
 };
 

@@ -1,7 +1,6 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
-import { retarget } from '@oriel/shared/projection/retarget';
-import type { ViewingZone } from '@oriel/shared/projection/types';
+import { retarget, scaleZone } from '@oriel/shared/projection/retarget';
 import { type StatedFault, statedFaults } from '../../composer/layers/faults';
 import { describeZone } from '../wall-words';
 
@@ -63,14 +62,5 @@ function layersOf({ layers }: SceneDocument, faults: readonly StatedFault[]): Sh
     return [{ name, worst: `${rest}${worst.from ? `, seen ${worst.from}` : ''}` }];
   });
 }
-
-const scaleZone = (zone: ViewingZone, factor: number): ViewingZone => ({
-  leftMm: zone.leftMm * factor,
-  rightMm: zone.rightMm * factor,
-  lowestMm: zone.lowestMm * factor,
-  highestMm: zone.highestMm * factor,
-  nearestMm: zone.nearestMm * factor,
-  farthestMm: zone.farthestMm * factor,
-});
 
 const listed = (names: readonly string[]) => (names.length < 2 ? names.join('') : `${names.slice(0, -1).join(', ')} and ${names.at(-1)}`);
