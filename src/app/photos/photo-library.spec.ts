@@ -40,4 +40,22 @@ describe('the photo library', () => {
     await library.more();
     expect(names()).toEqual(['May', 'March', 'of 1990']);
   });
+
+  it('fetches all there is, page after page, and what is asked meanwhile instead', async () => {
+    Object.assign(page, { photos: [somePhoto('May', '2024-05-01')], next: 'more', total: 2 });
+    await library.open('', false);
+    expect(library.hasMore()).toBe(true);
+    Object.assign(page, { photos: [somePhoto('March', '2024-03-01')], next: null });
+    await library.rest();
+    expect(names()).toEqual(['May', 'March']);
+    expect(library.hasMore()).toBe(false);
+
+    Object.assign(page, { photos: [somePhoto('May', '2024-05-01')], next: 'more' });
+    await library.open('', false);
+    const all = library.rest();
+    Object.assign(page, { photos: [somePhoto('Lake', '2020-07-01')], next: null, total: 1 });
+    await library.open('lake', false);
+    await all;
+    expect(names()).toEqual(['Lake']);
+  });
 });

@@ -4,6 +4,7 @@ import { Api } from '../core/api';
 import { Session } from '../core/session';
 
 const askAgainMs = 1500;
+const pageOf = 500;
 
 /** A household's photos as far as they are fetched, newest taken first; either those at hand or those in the bin. */
 @Injectable()
@@ -30,6 +31,8 @@ export class PhotoLibrary {
   async open(search: string, bin: boolean, householdId = this.session.householdId()): Promise<void> {
     this.question = { search, bin, householdId };
     const asked = this.question;
+    // Where the list before went on says nothing of this one.
+    this.next.set(null);
     const page = await this.api.call(listPhotos, { params: this.here(), query: this.query() });
     if (asked !== this.question) return;
     this.fetched.set(page.photos);
@@ -44,6 +47,11 @@ export class PhotoLibrary {
     if (!this.next()) return Promise.resolve();
     this.fetching ??= this.fetchMore().finally(() => (this.fetching = null));
     return this.fetching;
+  }
+
+  /** Fetches page after page until all are here, so that the sheet is as long as it will be and any part of it can be gone to. */
+  async rest(): Promise<void> {
+    while (this.hasMore()) await this.more();
   }
 
   /** Takes in a photo just uploaded, in its place by date; beyond what is fetched it comes with its own page. */
@@ -104,7 +112,7 @@ export class PhotoLibrary {
   }
 
   private query() {
-    return { search: this.question.search || undefined, bin: this.question.bin ? 'true' : 'false', limit: 300 };
+    return { search: this.question.search || undefined, bin: this.question.bin ? 'true' : 'false', limit: pageOf };
   }
 
   private here() {

@@ -56,11 +56,14 @@ export function layContactSheet(photos: readonly Photo[], widthPx: number, rowPx
   };
 
   let shapesInRow = 0;
+  let yearAndMonth = '';
   for (const photo of photos) {
-    const own = monthOf.format(new Date(photo.takenAt));
-    if (own !== month) {
+    // Dates stand as the camera's clock had them: year and month are their first characters.
+    const own = photo.takenAt.slice(0, 7);
+    if (own !== yearAndMonth) {
       setRow(false);
-      month = own;
+      yearAndMonth = own;
+      month = monthOf.format(new Date(photo.takenAt));
       heading = true;
       shapesInRow = 0;
     }

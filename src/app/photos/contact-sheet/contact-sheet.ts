@@ -6,7 +6,6 @@ import {
   type ElementRef,
   afterNextRender,
   computed,
-  effect,
   inject,
   input,
   output,
@@ -19,6 +18,9 @@ import { PhotoPicture } from '../photo-picture';
 import { headingPx, layContactSheet, rowsBetween } from './contact-sheet-layout';
 
 const overscanPx = 700;
+/** Scrolled faster than this, nobody sees pictures pass: their places are held by colours alone; px a millisecond. */
+const swiftPxPerMs = 4;
+const calmAfterMs = 120;
 
 /** Photos in rows of equal height with the month staying above; only the rows in sight are in the page, so ten thousand scroll like ten. */
 @Component({
@@ -30,14 +32,14 @@ const overscanPx = 700;
 })
 export class ContactSheet {
   readonly photos = input.required<readonly Photo[]>();
+  /** How many there will be when all are fetched: the sheet is as long from the start, as well as can be told. */
+  readonly total = input(0);
   readonly selected = input<ReadonlySet<string>>(new Set());
   /** Whether a press selects; otherwise it opens, and the mark at the corner selects. */
   readonly picking = input(false);
   readonly opened = output<Photo>();
   /** A press on a photo's mark; `through` is true when everything since the last one is meant (Shift). */
   readonly marked = output<{ photo: Photo; through: boolean }>();
-  /** The end is near: more may be fetched. */
-  readonly nearEnd = output();
 
   private readonly scroller = viewChild.required<ElementRef<HTMLElement>>('scroller');
   private readonly widthPx = signal(0);
@@ -47,6 +49,9 @@ export class ContactSheet {
 
   protected readonly headingPx = headingPx;
   protected readonly layout = computed(() => layContactSheet(this.photos(), this.widthPx(), this.rowPx()));
+  protected readonly heightPx = computed(() => this.layout().heightPx * Math.max(1, this.total() / Math.max(1, this.photos().length)));
+  /** Whether the sheet runs past too fast for pictures to be worth fetching. */
+  protected readonly swift = signal(false);
   private readonly seen = computed(() => rowsBetween(this.layout().rows, this.scrollPx() - overscanPx, this.scrollPx() + this.viewPx() + overscanPx), {
     equal: (a, b) => a[0] === b[0] && a[1] === b[1],
   });
@@ -55,6 +60,9 @@ export class ContactSheet {
     const { rows } = this.layout();
     return rows[rowsBetween(rows, this.scrollPx(), this.scrollPx())[0]]?.month ?? '';
   });
+
+  private scrolledMs = 0;
+  private calm: ReturnType<typeof setTimeout> | undefined;
 
   constructor() {
     const destroyed = inject(DestroyRef);
@@ -67,13 +75,16 @@ export class ContactSheet {
       observer.observe(element);
       destroyed.onDestroy(() => observer.disconnect());
     });
-    effect(() => {
-      if (this.viewPx() > 0 && this.layout().heightPx < this.scrollPx() + 3 * this.viewPx()) this.nearEnd.emit();
-    });
+    destroyed.onDestroy(() => clearTimeout(this.calm));
   }
 
-  protected scrolled(): void {
-    this.scrollPx.set(this.scroller().nativeElement.scrollTop);
+  protected scrolled({ timeStamp }: Event): void {
+    const { scrollTop } = this.scroller().nativeElement;
+    if (Math.abs(scrollTop - this.scrollPx()) > swiftPxPerMs * (timeStamp - this.scrolledMs)) this.swift.set(true);
+    this.scrolledMs = timeStamp;
+    this.scrollPx.set(scrollTop);
+    clearTimeout(this.calm);
+    this.calm = setTimeout(() => this.swift.set(false), calmAfterMs);
   }
 
   protected press(photo: Photo, event: MouseEvent): void {

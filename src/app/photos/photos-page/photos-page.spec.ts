@@ -14,6 +14,7 @@ describe('the photos page', () => {
       photos: signal([]),
       total: signal(0),
       loaded: signal(false),
+      rest: () => Promise.resolve(),
       open: (search: string) => new Promise<void>((resolve) => (asked.push(search), answers.push(resolve))),
     };
     TestBed.configureTestingModule({

@@ -75,6 +75,7 @@ export class PhotosPage implements OnInit {
         search = this.search();
         await this.library.open(search, this.isBin);
       } while (search !== this.search());
+      this.fetchRest();
     });
   }
 
@@ -84,8 +85,8 @@ export class PhotosPage implements OnInit {
     this.timer = setTimeout(() => void this.load(), searchAfterMs);
   }
 
-  protected more(): void {
-    void this.fetching.run(() => this.library.more());
+  protected fetchRest(): void {
+    void this.fetching.run(() => this.library.rest());
   }
 
   protected mark({ photo, through }: { photo: Photo; through: boolean }): void {
