@@ -39,10 +39,10 @@ describe('the contact sheet on the page', () => {
   });
 
   it('is from the start about as long as it will be, and holds only what is near to be seen', () => {
-    // 600 photos of 3:2 at 190 px fill 200 rows of some 203 px in 900 px; there will be ten times as many.
+    // Four photos of 3:2 fill a row of 900 px some 149 px high, so 600 make 150 rows; there will be ten times as many.
     const heightPx = parseFloat(element().querySelector<HTMLElement>('.rows')!.style.height);
-    expect(heightPx).toBeGreaterThan(10 * 200 * 190);
-    expect(heightPx).toBeLessThan(10 * 200 * 215);
+    expect(heightPx).toBeGreaterThan(10 * 150 * 145);
+    expect(heightPx).toBeLessThan(10 * 150 * 157);
     expect(element().querySelectorAll('.tile').length).toBeLessThan(40);
   });
 
