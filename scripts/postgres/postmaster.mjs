@@ -57,9 +57,14 @@ export async function startServer({ bin, cluster, port, owner, logFile, settings
   closeSync(log);
   let failure = null;
   child.once('error', (error) => (failure = error.message));
-  child.once('exit', () => (failure ??= lastLines(readFileSync(logFile, 'utf8'), 10)));
+  const ended = () => (failure ??= lastLines(readFileSync(logFile, 'utf8'), 10));
+  child.once('exit', ended);
   child.unref();
-  await untilReady(cluster, () => failure);
+  try {
+    await untilReady(cluster, () => failure);
+  } finally {
+    child.off('exit', ended);
+  }
 }
 
 /** Waits until the server takes connections. */
