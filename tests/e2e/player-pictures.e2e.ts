@@ -52,7 +52,7 @@ for (const name of renderers) {
     for (let again = 0; again < 10; again++) await load(page, name);
     await sharp(page);
     expect(await page.evaluate(() => window.bench.facts())).toEqual(first);
-    expect(await page.evaluate(() => window.bench.dispose())).toEqual({ name, layers: 0, pictureBytes: 0, held: 0, sharp: false });
+    expect(await page.evaluate(() => window.bench.dispose())).toEqual({ name, layers: 0, pictureBytes: 0, graphicsBytes: 0, held: 0, sharp: false });
     expect(await page.evaluate(() => document.querySelectorAll('#host *').length)).toBe(0);
   });
 

@@ -18,6 +18,8 @@ async function play(page: Page, query = ''): Promise<string> {
   await expect(layers(page)).toHaveCount(scene.document.layers.length);
   // Sharp pictures take the place of the first ones: no element found before that may be used after it.
   await page.waitForLoadState('networkidle');
+  // The controls rest while the pointer does.
+  await page.mouse.move(700, 440);
   return scene.id;
 }
 

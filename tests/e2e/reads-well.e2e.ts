@@ -192,6 +192,8 @@ const places: Readonly<Record<string, Place>> = {
       await page.goto(`/play/${scene.id}`);
       const line = page.getByTestId('player-line');
       await expect(line).toContainText('This screen has not been measured');
+      // What is focused does not rest.
+      await page.getByRole('button', { name: /Figures/ }).focus();
       await reads();
       await keepScreen(page);
       await page.emulateMedia({ reducedMotion: 'reduce' });
@@ -199,6 +201,7 @@ const places: Readonly<Record<string, Place>> = {
       await expect(line).toContainText('less motion');
       await page.keyboard.press('i');
       await expect(page.locator('oriel-read-out')).toBeVisible();
+      await page.getByRole('button', { name: /Figures/ }).focus();
       await reads();
     },
   },

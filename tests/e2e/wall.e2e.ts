@@ -66,6 +66,7 @@ test('reports reach the desk, those of the time without a network too', async ({
   await tuner.goto('/scenes');
   const desk = new Desk(tuner);
   const { wall } = await pairedWall(desk, screen, 'Landing', 'October on the ridge');
+  await readyForOffline(screen);
   await context.setOffline(true);
   const from = Date.now();
   await screen.waitForTimeout(3500);

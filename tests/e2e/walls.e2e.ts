@@ -139,7 +139,7 @@ test('two people at one wall: the second is told and decides', async ({ signedIn
   expect((await read(page, id)).setUp.name).toBe('Theirs');
   await notice.getByRole('button', { name: 'Save mine over theirs' }).click();
   await expect(notice).toBeHidden();
-  expect((await read(page, id)).setUp.glass.widthMm).toBe(600);
+  await expect.poll(async () => (await read(page, id)).setUp.glass.widthMm).toBe(600);
   await removeWall(page, id);
 });
 
