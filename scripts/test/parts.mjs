@@ -103,7 +103,10 @@ const components = {
  * @type {readonly (readonly (readonly Part[])[])[]}
  */
 export const stages = [
-  [[mathematicsAndServer], [{ name: 'Production build', run: build }, lint, types, components]],
+  [
+    [mathematicsAndServer, lint],
+    [{ name: 'Production build', run: build }, types, components],
+  ],
   [[{ name: 'End to end, pages', run: endToEnd('page') }]],
   [[{ name: 'End to end, camera', run: endToEnd('camera') }]],
 ];

@@ -10,7 +10,7 @@ import { appRoutes } from './set-up/app-routes';
 import { codeOn } from './walls/screen';
 
 /*
- * Every page of the app, in the states that look different, read by axe on a desk and on a phone, by day and by evening. States that only come about
+ * Every page of the app, in the states that look different, read by axe on a desk, by day and by evening, and on a phone. States that only come about
  * while something is done are read where it is done: the composer with a layer open, the viewer of photos, a paired wall, a face followed.
  */
 interface Place {

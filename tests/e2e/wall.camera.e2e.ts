@@ -18,7 +18,7 @@ test.use({ filmedFace: { name: 'sways', poses } });
 
 const figures = (page: Page) => page.locator('oriel-read-out dd');
 
-/** How far the nearest layer moves in six seconds, px: drift alone moves it little. */
+/** How far the nearest layer moves in six seconds, px: about 14 with this film; drift, which is slower, moves it by 5 at most. */
 async function sweep(page: Page): Promise<number> {
   const places: number[] = [];
   for (let look = 0; look < 40; look++) {
@@ -45,7 +45,7 @@ test('a wall follows whoever passes, goes on without a network, and comes back w
   await screen.keyboard.press('i');
   await follows(screen);
   const followed = await sweep(screen);
-  expect(followed).toBeGreaterThan(20);
+  expect(followed).toBeGreaterThan(9);
 
   await unplug(screen);
   await expect.poll(async () => Number(await figures(screen).nth(1).innerText())).toBe(0);

@@ -69,11 +69,12 @@ test('reports reach the desk, those of the time without a network too', async ({
   await readyForOffline(screen);
   await context.setOffline(true);
   const from = Date.now();
-  await screen.waitForTimeout(3500);
-  const during = async () => (await desk.reports(wall.id)).filter(({ at }) => Date.parse(at) > from && Date.parse(at) < from + 3500);
+  const awayMs = 6000;
+  await screen.waitForTimeout(awayMs);
+  const during = async () => (await desk.reports(wall.id)).filter(({ at }) => Date.parse(at) > from && Date.parse(at) < from + awayMs);
   expect(await during()).toEqual([]);
   await context.setOffline(false);
-  await expect.poll(async () => (await during()).length, { timeout: 20_000 }).toBeGreaterThanOrEqual(2);
+  await expect.poll(async () => (await during()).length, { timeout: 20_000 }).toBeGreaterThanOrEqual(1);
   const report = async () => (await desk.wall(wall.id)).report;
   await expect.poll(report, { timeout: 20_000 }).toMatchObject({ renderer: 'css', temperatureC: null, tracking: 'nobody' });
   expect((await report())!.framesPerS).toBeGreaterThan(0);
