@@ -24,7 +24,9 @@ export async function readyForOffline(page: Page): Promise<void> {
   const lacking = () =>
     page.evaluate(async () => {
       const shown = [...document.querySelectorAll<HTMLImageElement>('oriel-wall-picture .picture img')].map(({ src }) => src);
-      const needed = ['/index.html', '/assets/tracker/facemesh.json', ...shown];
+      const { assetGroups } = (await (await fetch('/ngsw.json?ngsw-cache-bust=0')).json()) as { assetGroups: { urls: string[] }[] };
+      // Angular's worker writes down last, under /latest, which version it holds: without it, started anew, it holds none.
+      const needed = [...assetGroups.flatMap(({ urls }) => urls), '/latest', ...shown];
       const kept = await Promise.all(needed.map((address) => caches.match(address, { ignoreVary: true })));
       return navigator.serviceWorker.controller === null || shown.length === 0 ? needed : needed.filter((_address, index) => !kept[index]);
     });
