@@ -24,7 +24,10 @@ test('vitest: passed and failed tests, and a file that could not be loaded', () 
 
 test('playwright: what was expected, what was not, what came right only at the second try, and errors in the set-up', () => {
   const stats = { expected: 7, unexpected: 1, flaky: 1, skipped: 3 };
-  expect(countPlaywright(report({ stats, errors: [{ message: 'no server' }] }))).toEqual({ passed: 7, failed: 3 });
+  const spec = (title: string, status: string) => ({ title, tests: [{ status }] });
+  const suites = [{ specs: [spec('steady', 'expected')], suites: [{ specs: [spec('shaky', 'flaky'), spec('broken', 'unexpected')] }] }];
+  const counts = { passed: 8, failed: 2, secondTry: ['shaky'] };
+  expect(countPlaywright(report({ stats, suites, errors: [{ message: 'no server' }] }))).toEqual(counts);
 });
 
 test('a report that was never written counts nothing', () => {

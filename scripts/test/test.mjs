@@ -80,11 +80,14 @@ async function runPart({ name, run }, { env, signal, write }) {
   const { passed } = result.counts;
   const failed = result.code === 0 ? result.counts.failed : Math.max(1, result.counts.failed);
   if (failed > 0) write(`\n${name}:\n\n${lastLines(result.output, 200)}\n`);
-  return { passed, failed };
+  return { passed, failed, secondTry: result.counts.secondTry };
 }
 
 /** @param {{ name: string }} part */
 const outcome =
   ({ name }) =>
-  ({ passed, failed }) =>
-    `${failed > 0 ? '✗' : '✓'} ${name}${passed + failed > 0 ? `: ${passed} passed, ${failed} failed` : ''}`;
+  ({ passed, failed, secondTry = [] }) =>
+    [
+      `${failed > 0 ? '✗' : '✓'} ${name}${passed + failed > 0 ? `: ${passed} passed, ${failed} failed` : ''}`,
+      ...secondTry.map((title) => `at the second try only: ${title}`),
+    ].join('; ');
