@@ -182,7 +182,7 @@ describe('FaceTracking', () => {
     cameras.failing = 'NotFoundError';
     cameras.tracks[0].dispatchEvent(new Event('ended'));
     expect(tracking.state()).toBe('no-camera');
-    await vi.advanceTimersByTimeAsync(300);
+    workers[0].says({ type: 'stopped' });
     expect(workers[0].terminated).toBe(true);
     cameras.failing = null;
     cameras.dispatchEvent(new Event('devicechange'));
@@ -220,7 +220,10 @@ describe('FaceTracking', () => {
     const { tracking, worker } = await following();
     tracking.stop();
     expect(worker.told.at(-1)).toEqual({ type: 'stop' });
-    await vi.advanceTimersByTimeAsync(300);
+    worker.sees(0);
+    await vi.advanceTimersByTimeAsync(3000);
+    expect(worker.terminated).toBe(false);
+    worker.says({ type: 'stopped' });
     expect([tracking.state(), worker.terminated, cameras.tracks[0].stopped, answered.includes(-1)]).toEqual([
       'off',
       true,
@@ -229,7 +232,7 @@ describe('FaceTracking', () => {
     ]);
     await tracking.start(SET_UP);
     TestBed.resetTestingModule();
-    await vi.advanceTimersByTimeAsync(300);
+    await vi.advanceTimersByTimeAsync(10_000);
     expect([workers[1].terminated, cameras.tracks[1].stopped]).toEqual([true, true]);
   });
 

@@ -26,8 +26,8 @@ const RETRY_MS = 5000;
 /** What failed of itself is tried again after longer and longer, up to this. */
 const LONGEST_RETRY_MS = 300_000;
 const RATE_MS = 1000;
-/** How long a worker that is dismissed has to close its last frame. */
-const FAREWELL_MS = 300;
+/** How long a worker that is dismissed has at most to close its last frame: on a laden machine one look can take a second. */
+const FAREWELL_MS = 10_000;
 
 type Mutable<T> = { -readonly [K in keyof T]: T[K] };
 
@@ -252,12 +252,17 @@ export class FaceTracking {
   }
 }
 
-/** Lets the worker close the frames it still holds before it ends; what it says meanwhile is not heard. */
+/** Lets the worker close the frames it still holds, and ends it when it says so; what else it says meanwhile is not heard. */
 function dismiss(worker: Worker): void {
-  worker.onmessage = worker.onerror = null;
+  const end = () => {
+    clearTimeout(waiting);
+    worker.terminate();
+  };
+  const waiting = setTimeout(end, FAREWELL_MS);
+  worker.onmessage = ({ data }: MessageEvent<FromTracker>) => data.type === 'stopped' && end();
+  worker.onerror = end;
   const stop: ToTracker = { type: 'stop' };
   worker.postMessage(stop);
-  setTimeout(() => worker.terminate(), FAREWELL_MS);
 }
 
 function endTracks(stream: MediaStream): void {

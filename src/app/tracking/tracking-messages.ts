@@ -108,4 +108,6 @@ export type FromTracker =
   /** A frame passed over, as the ladder has it. */
   | { readonly type: 'skipped'; readonly timestampMs: number }
   | { readonly type: 'ended' }
+  /** Every frame is closed: the worker may be ended. */
+  | { readonly type: 'stopped' }
   | { readonly type: 'failed'; readonly reason: string };

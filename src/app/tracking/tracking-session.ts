@@ -22,8 +22,14 @@ export class TrackingSession {
   private settings: TrackerSettings | null = null;
   private landmarksWanted = false;
   private reader: ReadableStreamDefaultReader<VideoFrame> | null = null;
+  /** The last frame taken from the stream: done with, and closed, once this is settled. */
+  private inHand: Promise<void> = Promise.resolve();
+  private stopped = false;
 
-  constructor(private readonly say: (message: FromTracker) => void) {}
+  constructor(
+    private readonly say: (message: FromTracker) => void,
+    private readonly load = loadFaceModels,
+  ) {}
 
   /** Acts on a message; what fails is said, not thrown. */
   async hear(message: ToTracker): Promise<void> {
@@ -58,7 +64,7 @@ export class TrackingSession {
   }
 
   private async start(settings: TrackerSettings): Promise<void> {
-    this.models ??= await loadFaceModels({
+    this.models ??= await this.load({
       folder: settings.assetsUrl,
       read: (name) => fetchFile(settings.assetsUrl + name),
     });
@@ -78,11 +84,12 @@ export class TrackingSession {
   /** Reads the camera's frames until it ends; the stream keeps only the newest, so that a slow look loses frames and not time. */
   private async follow(frames: ReadableStream<VideoFrame>): Promise<void> {
     await this.reader?.cancel();
+    if (this.stopped) return frames.cancel();
     const reader = (this.reader = frames.getReader());
     for (;;) {
       const { done, value } = await reader.read();
       if (done) break;
-      await this.look(value, value.timestamp / 1000);
+      await (this.inHand = this.look(value, value.timestamp / 1000));
     }
     if (this.reader === reader) this.say({ type: 'ended' });
   }
@@ -135,11 +142,16 @@ export class TrackingSession {
     });
   }
 
+  /** Says `stopped` once the last frame is closed: a worker ended before that would leave it to be collected unclosed. */
   private async stop(): Promise<void> {
-    const { reader, models } = this;
-    this.reader = this.models = this.tracker = this.settings = null;
+    const { reader } = this;
+    this.stopped = true;
+    this.reader = null;
     await reader?.cancel();
-    models?.dispose();
+    await this.inHand.catch(() => undefined);
+    this.models?.dispose();
+    this.models = this.tracker = this.settings = null;
+    this.say({ type: 'stopped' });
   }
 }
 
