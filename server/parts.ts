@@ -67,6 +67,6 @@ export function assemble({ passwords = createPasswords(), limits = usualLimits, 
     eventStreams: createEventStreams(given.draining),
     sessions: createSessions(given.connection.db, xsrf, cookie, wallCookie),
     layerFiles: layerFiles(given.connection.db, given.storage),
-    limits: createLimits(limits),
+    limits: createLimits(limits, given.connection.db, given.log),
   };
 }

@@ -96,5 +96,6 @@ export interface Tables {
     recorded_by: string | null;
     recorded_at: MomentByDefault;
   };
+  tries: { key: Buffer; count: number; ends_at: Moment };
   milestone: { name: string; reached_at: MomentByDefault };
 }

@@ -4,6 +4,7 @@ import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import { placeTrimmedIn } from '@oriel/shared/projection/cover-glass';
 import { accountByEmail, createAccount } from '../accounts/account-store';
 import type { Database } from '../database/database';
+import { once } from '../database/once';
 import { addMember, createHousehold } from '../households/household-store';
 import type { Parts } from '../parts';
 import { photoService } from '../photos/photo-service';
@@ -12,7 +13,6 @@ import type { Storage } from '../storage/storage';
 import { bringIn } from './bring-in';
 import { readDemoFiles, type DemoAccount, type DemoFiles, type DemoScene } from './demo-files';
 import { hangDemoWall } from './demo-wall';
-import { once } from './once';
 
 const householdName = 'The Aldermoor house';
 

@@ -82,6 +82,18 @@ describe('limits', () => {
     expect((await from('/api/password-resets', { email: 'x9@example.org' }, '198.51.100.30')).status).toBe(429);
   });
 
+  it('security: two servers on one database count together', async () => {
+    const beside = await createTestApp({ beside: app, limits: { ...usualLimits, passwordsByAccount: { tries: 3, windowMs } } });
+    const { email } = await app.account();
+    for (let i = 0; i < 2; i++) expect((await signIn(email, 'wrong')).status).toBe(422);
+    const browser = beside.browser();
+    await browser.ask('get', '/api/me');
+    const attempt = (password: string) => browser.ask('post', '/api/session', { email, password });
+    expect((await attempt('wrong')).status).toBe(422);
+    expect((await attempt(testPassword)).status).toBe(429);
+    await beside.close();
+  });
+
   it('security: a forged forwarding header does not help where the settings name no proxy', async () => {
     const direct = await createTestApp({ limits: { ...usualLimits, passwordsByAddress: { tries: 2, windowMs } } });
     const attempt = async (i: number) => {

@@ -1,6 +1,9 @@
 import type { NextFunction, Request, RequestHandler, Response } from 'express';
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
+import type { Logger } from 'pino';
+import type { Database } from '../database/database';
 import { DomainFailure } from './failure';
+import { triesFor } from './tries';
 
 /** How many requests in how long. */
 export interface Allowance {
@@ -33,8 +36,7 @@ export const usualLimits: LimitSettings = {
 
 /**
  * Limits against guessing and against flooding somebody's mailbox, each by account and by network address. Whether the account exists
- * makes no difference. Counted in this process's memory: several servers behind one balancer would each count for themselves, and a
- * restart forgets; rateLimit takes a shared `store` when that day comes.
+ * makes no difference. Counted in the database, by all its servers together.
  */
 export interface Limits {
   /** For signing in to the account of an address that someone typed; only failures count. */
@@ -63,19 +65,22 @@ const tooManyTries = (_request: Request, response: Response, next: NextFunction)
   next(new DomainFailure(429, 'too-many-tries', 'There were too many tries.', `Wait ${minutes === 1 ? 'a minute' : `${minutes} minutes`} and try again.`));
 };
 
-export function createLimits(settings: LimitSettings): Limits {
-  const limit = ({ tries, windowMs }: Allowance, keyGenerator: (request: Request) => string, skipSuccessfulRequests: boolean) =>
-    rateLimit({ windowMs, limit: tries, keyGenerator, skipSuccessfulRequests, handler: tooManyTries, standardHeaders: false, legacyHeaders: true });
+export function createLimits(settings: LimitSettings, db: Database, log: Logger): Limits {
+  const limit = (name: keyof LimitSettings, keyGenerator: (request: Request) => string, skipSuccessfulRequests: boolean) => {
+    const { tries, windowMs } = settings[name];
+    const store = triesFor(name, windowMs, db, log);
+    return rateLimit({ windowMs, limit: tries, store, keyGenerator, skipSuccessfulRequests, handler: tooManyTries, standardHeaders: false, legacyHeaders: true });
+  };
   const both = (first: RequestHandler, second: RequestHandler): RequestHandler => (request, response, next) =>
     void first(request, response, (error?: unknown) => (error ? next(error) : void second(request, response, next)));
 
-  const passwordsByAddress = limit(settings.passwordsByAddress, address, true);
+  const passwordsByAddress = limit('passwordsByAddress', address, true);
   return {
-    passwords: both(passwordsByAddress, limit(settings.passwordsByAccount, typedEmail, true)),
-    ownPassword: both(passwordsByAddress, limit(settings.passwordsByAccount, signedIn, true)),
-    mails: both(limit(settings.mailsByAddress, address, false), limit(settings.mailsByAccount, typedEmail, false)),
-    codesAsked: limit(settings.codesAskedByAddress, address, false),
-    claims: limit(settings.claimsByAddress, address, false),
-    codesTried: both(limit(settings.codesTriedByAddress, address, true), limit(settings.codesTriedByAccount, signedIn, true)),
+    passwords: both(passwordsByAddress, limit('passwordsByAccount', typedEmail, true)),
+    ownPassword: both(passwordsByAddress, limit('passwordsByAccount', signedIn, true)),
+    mails: both(limit('mailsByAddress', address, false), limit('mailsByAccount', typedEmail, false)),
+    codesAsked: limit('codesAskedByAddress', address, false),
+    claims: limit('claimsByAddress', address, false),
+    codesTried: both(limit('codesTriedByAddress', address, true), limit('codesTriedByAccount', signedIn, true)),
   };
 }

@@ -1,4 +1,5 @@
 import readExif from 'exif-reader';
+import sharp from 'sharp';
 
 /** The first photograph known (J. N. Niépce, 1826 or 1827): anything earlier is a clock that was never set. */
 const earliest = Date.UTC(1826, 0, 1);
@@ -26,3 +27,6 @@ export function takenDate(exif: Buffer | undefined): Date | null {
     return null;
   }
 }
+
+/** The same of a file, of which only the header is read. */
+export const takenDateOfFile = async (path: string): Promise<Date | null> => takenDate((await sharp(path, { limitInputPixels: false }).metadata()).exif);
