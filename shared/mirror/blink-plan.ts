@@ -16,4 +16,4 @@ const PERIODS = 2;
 export const blinkPlan = (): number[] => Array.from({ length: PERIODS }, () => maximalSequence(STAGES)).flat();
 
 /** How long it takes, ms. */
-export const blinkMs = (): number => blinkPlan().length * SYMBOL_MS;
+export const BLINK_MS = PERIODS * (2 ** STAGES - 1) * SYMBOL_MS;

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { normalNoise } from '../replay/testing';
-import { blinkMs, blinkPlan, SYMBOL_MS } from './blink-plan';
+import { BLINK_MS, blinkPlan, SYMBOL_MS } from './blink-plan';
 import { maximalSequence } from './maximal-sequence';
 import { bestPlace, correlationAt, GREATEST_SPREAD_MS, mirrorDelay, type Drawn, type Seen } from './mirror-delay';
 
@@ -28,7 +28,10 @@ describe('the blink', () => {
     for (const at of changes)
       expect(changes.filter((other) => other >= at && other < at + 1000).length).toBeLessThanOrEqual(2);
   });
-  it('takes about half a minute', () => expect(blinkMs()).toBeLessThan(35_000));
+  it('takes about half a minute', () => {
+    expect(BLINK_MS).toBe(blinkPlan().length * SYMBOL_MS);
+    expect(BLINK_MS).toBeLessThan(35_000);
+  });
 });
 
 /** The plan as a screen of 60 a second draws it. */
@@ -50,7 +53,7 @@ interface Camera {
 /** What a camera of 30 a second would see: exposure, noise (of a change of 1), and times of capture known only roughly. */
 function filmed({ delayMs, noise = 0.3, jitterMs = 4, exposureMs = 10, phaseMs = 0, seed = 3 }: Camera): Seen[] {
   const normal = normalNoise(seed);
-  return Array.from({ length: Math.floor((blinkMs() + 1500) / (1000 / 30)) }, (_, i) => {
+  return Array.from({ length: Math.floor((BLINK_MS + 1500) / (1000 / 30)) }, (_, i) => {
     const atMs = (i * 1000) / 30 + phaseMs;
     let light = 0;
     for (let part = 0; part < 10; part++) light += levelAt(atMs - delayMs + ((part - 4.5) / 10) * exposureMs) / 10;

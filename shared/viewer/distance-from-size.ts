@@ -3,9 +3,6 @@ import { requirePositive } from '../projection/requirements';
 /** Interpupillary distance until measured for that person, mm: adult mean (N. Dodgson, Proc. SPIE 5291, 2004). */
 export const USUAL_EYE_DISTANCE_MM = 63;
 
-/** Visible diameter of the iris, mm, +- 0.5: nearly the same in everyone, but a fifth of the eye distance in pixels. */
-export const IRIS_MM = 11.7;
-
 /**
  * The distance along the camera's axis of a thing of known size, mm: f * size * cos(yaw) / pixels. A head turned by `yawRad`
  * shows its breadth shortened; left out of account, that overstates the distance by 1/cos.
@@ -15,10 +12,4 @@ export function distanceFromSize(focalLengthPx: number, sizeMm: number, sizePx: 
   requirePositive('sizeMm', sizeMm);
   requirePositive('sizePx', sizePx);
   return (focalLengthPx * sizeMm * Math.cos(yawRad)) / sizePx;
-}
-
-/** What one pixel of error in the size does to the distance, mm: distance / pixels. */
-export function distancePerPixel(focalLengthPx: number, sizeMm: number, distanceMm: number): number {
-  requirePositive('distanceMm', distanceMm);
-  return (distanceMm * distanceMm) / (focalLengthPx * sizeMm);
 }

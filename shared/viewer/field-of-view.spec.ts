@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { acrossFromDiagonal, acrossFromThing, upFromAcross } from './field-of-view';
+import { acrossFromDiagonal, acrossFromFocal, diagonalFromAcross, upFromAcross } from './field-of-view';
 
 const degrees = (rad: number) => (rad * 180) / Math.PI;
 const radians = (deg: number) => (deg * Math.PI) / 180;
@@ -12,13 +12,14 @@ describe('fields of view', () => {
     const hfov = acrossFromDiagonal(radians(diagonal), 16, 9);
     expect(degrees(hfov)).toBeCloseTo(across, 2);
     expect(degrees(upFromAcross(hfov, 16, 9))).toBeCloseTo(up, 1);
+    expect(degrees(diagonalFromAcross(radians(across), 16, 9))).toBeCloseTo(diagonal, 1);
   });
 
-  it('measures with a card of ISO/IEC 7810 ID-1: 85.60 mm at 300 mm over a quarter of the width (computed, 2 atan(342.4/600))', () => {
-    expect(degrees(acrossFromThing(85.6, 300, 0.25))).toBeCloseTo(59.4239, 3);
+  it('follows from the focal length: 300 px for a picture 342.4 px wide (computed, 2 atan(342.4/600))', () => {
+    expect(degrees(acrossFromFocal(300, 342.4))).toBeCloseTo(59.4239, 3);
   });
 
   it('names what has no size', () => {
-    expect(() => acrossFromThing(85.6, 0, 0.5)).toThrowError(expect.objectContaining({ value: 'distanceMm' }));
+    expect(() => acrossFromFocal(0, 640)).toThrowError(expect.objectContaining({ value: 'focalPx' }));
   });
 });

@@ -12,6 +12,13 @@ export function acrossFromDiagonal(diagonalRad: number, width: number, height: n
   return 2 * Math.atan((Math.tan(diagonalRad / 2) * width) / Math.hypot(width, height));
 }
 
+/** The diagonal angle, from the one across. */
+export function diagonalFromAcross(hfovRad: number, width: number, height: number): number {
+  requirePositive('width', width);
+  requirePositive('height', height);
+  return 2 * Math.atan((Math.tan(hfovRad / 2) * Math.hypot(width, height)) / width);
+}
+
 /** The angle up, from the one across. */
 export function upFromAcross(hfovRad: number, width: number, height: number): number {
   requirePositive('width', width);
@@ -19,10 +26,9 @@ export function upFromAcross(hfovRad: number, width: number, height: number): nu
   return 2 * Math.atan((Math.tan(hfovRad / 2) * height) / width);
 }
 
-/** The angle across, measured: a thing of `sizeMm` held square to the camera at `distanceMm` fills `share` of the width. */
-export function acrossFromThing(sizeMm: number, distanceMm: number, share: number): number {
-  requirePositive('sizeMm', sizeMm);
-  requirePositive('distanceMm', distanceMm);
-  requirePositive('share', share);
-  return 2 * Math.atan(sizeMm / share / 2 / distanceMm);
+/** The angle across, from the focal length: 2 atan(w/2 / f), the inverse of `focalPx`. */
+export function acrossFromFocal(focalPx: number, widthPx: number): number {
+  requirePositive('focalPx', focalPx);
+  requirePositive('widthPx', widthPx);
+  return 2 * Math.atan(widthPx / 2 / focalPx);
 }

@@ -1,5 +1,6 @@
 import { GeometryError } from '../../projection/geometry-error';
 import { requirePositive } from '../../projection/requirements';
+import { acrossFromFocal } from '../field-of-view';
 import { type Measured, propagate } from './uncertainty';
 
 /*
@@ -48,7 +49,7 @@ export function lensFromTwoDistances(sizeMm: Measured, first: Sighting, second: 
   const focal = ([d1, d2, w1, w2, size]: number[]) => focalOf(size, d1, w1, d2, w2);
   return {
     focalPx: propagate(focal, inputs),
-    hfovRad: propagate((x) => 2 * Math.atan(pictureWidthPx / 2 / focal(x)), inputs),
+    hfovRad: propagate((x) => acrossFromFocal(focal(x), pictureWidthPx), inputs),
     behindFrontMm: propagate(([d1, d2, w1, w2]) => (w2 * d2 - w1 * d1) / (w1 - w2), inputs),
   };
 }

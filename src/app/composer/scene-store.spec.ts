@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { setDepth } from './commands/layer-commands';
-import { layerIds, someScene } from './commands/testing';
+import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { keyCommand } from './key-commands';
 import { SceneStore } from './scene-store';
 

@@ -1,9 +1,9 @@
 import { Injectable, computed, signal } from '@angular/core';
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
+import { statedFaults } from '../drawing/stated-faults';
 import type { Change } from './commands/change';
 import { type History, beginHistory, record, redo, undo } from './history';
 import { drawLayers } from './layers/drawn-layer';
-import { statedFaults } from './layers/faults';
 
 const TYPING_TOGETHER_MS = 900;
 

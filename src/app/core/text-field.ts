@@ -2,8 +2,7 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { type FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatError, MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-
-let lists = 0;
+import { ownId } from './own-id';
 
 /** One labelled line of text, with the contract's words when it is not right. */
 @Component({
@@ -37,5 +36,5 @@ export class TextField {
   readonly hint = input('');
   /** What may well be meant; anything else may be typed too. */
   readonly suggestions = input<readonly string[]>([]);
-  protected readonly listId = `suggestions-${(lists += 1)}`;
+  protected readonly listId = ownId('suggestions');
 }

@@ -1,7 +1,6 @@
 import { ChangeDetectionStrategy, Component, type ElementRef, Injector, afterNextRender, computed, inject, input, linkedSignal, output, viewChild } from '@angular/core';
+import { ownId } from '../core/own-id';
 import { plainMm, readFigure, signedMm } from './words';
-
-let fields = 0;
 
 /**
  * One figure, typed or stepped: arrows by one step, with Shift by ten. What cannot be taken stays there and says why, until it is mended,
@@ -61,7 +60,7 @@ export class FigureField {
   readonly readOnly = input(false);
   readonly figure = output<number>();
 
-  protected readonly id = `figure-${(fields += 1)}`;
+  protected readonly id = ownId('figure');
   protected readonly typed = linkedSignal<number, string | null>({ source: this.value, computation: () => null });
   protected readonly problem = linkedSignal({ source: this.value, computation: () => '' });
   protected readonly shown = computed(() => (this.signed() ? signedMm : plainMm)(this.value(), this.decimals()));

@@ -1,7 +1,7 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { ViewingZone } from '@oriel/shared/projection/types';
 import { createDrawingRate } from '@oriel/shared/ladder/drawing-rate';
-import { Pace } from '../tracking/pace';
+import { Pace } from '@oriel/shared/ladder/pace';
 import { graphicsName, makeRenderer, rendererFor } from './choose-renderer';
 import { IntervalJudge } from './interval-judge';
 import { Meter } from './meter';

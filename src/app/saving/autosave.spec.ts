@@ -1,7 +1,6 @@
 import { type Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
+import { layerIds, someScene, withLayer } from '@oriel/shared/contracts/testing/some-scene';
 import { ApiFailure } from '../core/api-failure';
-import { setDepth } from '../composer/commands/layer-commands';
-import { layerIds, someScene } from '../composer/commands/testing';
 import { Autosave, type Keeping } from './autosave';
 import { type Draft, sameBy } from './draft';
 
@@ -48,7 +47,7 @@ class SmallServer implements Keeping<SceneDocument> {
   }
 }
 
-const at = (depthMm: number) => setDepth(layerIds[0], depthMm)(someScene);
+const at = (depthMm: number) => withLayer(someScene, layerIds[0], { depthMm });
 
 describe('autosave', () => {
   let server: SmallServer;

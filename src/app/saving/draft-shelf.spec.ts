@@ -1,5 +1,5 @@
 import { SceneDocument } from '@oriel/shared/contracts/scenes';
-import { someScene } from '../composer/commands/testing';
+import { someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { DraftShelf } from './draft-shelf';
 
 /** The browser's locks as far as a shelf uses them: requested ones are held until released. */

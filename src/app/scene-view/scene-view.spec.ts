@@ -1,5 +1,5 @@
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { someScene } from '../composer/commands/testing';
+import { someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { SceneView } from './scene-view';
 
 /** An observer of the page that says the window is near as soon as the test wants it. */

@@ -1,10 +1,10 @@
+import { Pace } from '@oriel/shared/ladder/pace';
 import { FIRST_STEP, LADDER_STEPS } from '@oriel/shared/ladder/steps';
 import { CALM_CHOICE } from '@oriel/shared/viewer/choose-viewer';
 import { FaceMeasure } from './face-measure';
 import type { FaceModels } from './face-models';
 import { FrameReader } from './frame-picture';
 import type { Picture } from './picture';
-import { Pace } from './pace';
 import { loadFaceModels } from './tfjs-face-models';
 import { framesOf, readsTracks } from './track-processor';
 import { Tracker } from './tracker';

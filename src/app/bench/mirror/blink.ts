@@ -1,4 +1,4 @@
-import { blinkPlan, SYMBOL_MS } from '@oriel/shared/mirror/blink-plan';
+import { BLINK_MS, blinkPlan, SYMBOL_MS } from '@oriel/shared/mirror/blink-plan';
 import { bestPlace, mirrorDelay, type Drawn, type MirrorDelay, type Seen } from '@oriel/shared/mirror/mirror-delay';
 import { ACROSS, DOWN } from './brightness';
 
@@ -38,7 +38,7 @@ export class Blink {
   /** 0 to 1. */
   share(tMs: number): number {
     const start = this.drawn[0]?.atMs ?? tMs;
-    return Math.min(1, (tMs - start) / (this.plan.length * SYMBOL_MS));
+    return Math.min(1, (tMs - start) / BLINK_MS);
   }
 
   see(capturedMs: number, parts: Float64Array): void {

@@ -1,5 +1,6 @@
 import * as fc from 'fast-check';
 import { SceneDocument } from '@oriel/shared/contracts/scenes';
+import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { clearance } from '@oriel/shared/projection/clearance';
 import { onGlassFrom, planeFromHome } from '@oriel/shared/projection/home-plane';
 import { beginHistory, MOST_STEPS, record, redo, undo } from '../history';
@@ -7,7 +8,6 @@ import type { Change } from './change';
 import { hideLayer, place, renameLayer, setDepth, setOpacity, setWidth, showLayer } from './layer-commands';
 import { creditScene, growLayersToCover, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from './setting-commands';
 import { addLayer, duplicateLayer, removeLayer, reorderLayer } from './stack-commands';
-import { layerIds, someScene } from './testing';
 
 const id = fc.constantFrom(...layerIds);
 const mm = fc.double({ min: -20_000, max: 20_000, noNaN: true });

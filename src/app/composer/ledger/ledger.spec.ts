@@ -1,6 +1,6 @@
 import { provideZonelessChangeDetection } from '@angular/core';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { layerIds, someScene } from '../commands/testing';
+import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { setDepth } from '../commands/layer-commands';
 import { SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';

@@ -1,4 +1,5 @@
 import type { Glass, ViewingZone } from '@oriel/shared/projection/types';
+import { upFromAcross } from '@oriel/shared/viewer/field-of-view';
 import { usualCamera } from '@oriel/shared/viewer/usual-camera';
 import type { DepthFrame } from '../../drawing/frames';
 
@@ -16,7 +17,7 @@ export interface AssumedCamera {
 
 export function assumedCamera(view: DepthFrame['view'], glass: Glass, zone: ViewingZone): AssumedCamera {
   const { position, pitchRad, hfovRad } = usualCamera(glass, zone);
-  const halfUp = Math.atan((Math.tan(hfovRad / 2) * 9) / 16);
+  const halfUp = upFromAcross(hfovRad, 16, 9) / 2;
   const slopes: [number, number] =
     view === 'plan' ? [-Math.tan(hfovRad / 2), Math.tan(hfovRad / 2)] : [Math.tan(pitchRad - halfUp), Math.tan(pitchRad + halfUp)];
   return { across: view === 'plan' ? position.x : position.y, slopes, pitchDownDeg: (-pitchRad * 180) / Math.PI };

@@ -1,5 +1,5 @@
 import { requiredExtent } from '@oriel/shared/projection/required-extent';
-import { layerIds, someScene } from '../commands/testing';
+import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { drawLayers } from '../layers/drawn-layer';
 import { drawLines, drawSetting, projectionLines, sightlines } from './depth-drawing';
 import { extentsOf } from './extents';

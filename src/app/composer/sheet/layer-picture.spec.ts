@@ -1,5 +1,5 @@
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { someLayer } from '../commands/testing';
+import { someLayer } from '@oriel/shared/contracts/testing/some-scene';
 import { LayerPicture } from './layer-picture';
 
 /** An image of the page whose decoding ends when the test says so. */

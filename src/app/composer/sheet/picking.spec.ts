@@ -1,4 +1,4 @@
-import { layerIds, someScene } from '../commands/testing';
+import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { drawLayers } from '../layers/drawn-layer';
 import { extentsOf } from './extents';
 import { pick, type Holdable } from './picking';

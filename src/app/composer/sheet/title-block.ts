@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { Icon } from '../../core/icon/icon';
 import { Term } from '../../core/term/term';
-import type { StatedFault } from '../layers/faults';
+import type { StatedFault } from '../../drawing/stated-faults';
 import { RoomFigures } from '../ledger/room-figures';
 import { meanings } from '../meanings';
 import { SceneStore } from '../scene-store';

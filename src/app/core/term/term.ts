@@ -1,10 +1,9 @@
 import { CdkConnectedOverlay, CdkOverlayOrigin, type ConnectedPosition } from '@angular/cdk/overlay';
 import { ChangeDetectionStrategy, Component, input, signal } from '@angular/core';
+import { ownId } from '../own-id';
 
 const below: ConnectedPosition = { originX: 'start', originY: 'bottom', overlayX: 'start', overlayY: 'top', offsetY: 6 };
 const above: ConnectedPosition = { originX: 'start', originY: 'top', overlayX: 'start', overlayY: 'bottom', offsetY: -6 };
-
-let terms = 0;
 
 /** A word of the trade that says what it means when it is pressed: by pointer, finger or key. Escape, or a press elsewhere, closes it. */
 @Component({
@@ -40,7 +39,7 @@ let terms = 0;
 })
 export class Term {
   readonly meaning = input.required<string>();
-  protected readonly id = `term-${(terms += 1)}`;
+  protected readonly id = ownId('term');
   protected readonly open = signal(false);
   protected readonly positions = [below, above];
 

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, computed, effect, inject, signal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
+import { acrossFromFocal } from '@oriel/shared/viewer/field-of-view';
 import { CORNER_COUNT } from '@oriel/shared/viewer/measuring/board';
 import { type Measured, measured, propagate } from '@oriel/shared/viewer/measuring/uncertainty';
 import { BoardFinder } from '../../calibration/board-finder';
@@ -47,7 +48,7 @@ export class BoardMeasure {
   /** The field across follows from the focal length alone; its spread is the calibration's own. */
   protected readonly field = computed<Measured | null>(() => {
     const lens = this.lens();
-    return lens && propagate(([focal]) => 2 * Math.atan(this.width / 2 / focal), [measured(lens.focalPx, lens.focalSpreadPx)]);
+    return lens && propagate(([focal]) => acrossFromFocal(focal, this.width), [measured(lens.focalPx, lens.focalSpreadPx)]);
   });
   protected readonly result = computed(() => {
     const [field, lens] = [this.field(), this.lens()];

@@ -1,4 +1,5 @@
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import { upFromAcross } from '@oriel/shared/viewer/field-of-view';
 import { acrossOf, sidesOf } from '../../drawing/across';
 import type { DepthFrame } from '../../drawing/frames';
 import type { Across } from '../../drawing/placing';
@@ -50,7 +51,7 @@ function whatIsLost(view: DepthFrame['view'], low: boolean, high: boolean): stri
 function remedy(view: DepthFrame['view'], { cone, zone }: Angles): string {
   const [needed, given] = [zone[1] - zone[0], cone[1] - cone[0]];
   if (needed > given) {
-    const across = view === 'plan' ? needed : 2 * Math.atan((Math.tan(needed / 2) * picture.widthPx) / picture.heightPx);
+    const across = view === 'plan' ? needed : upFromAcross(needed, picture.heightPx, picture.widthPx);
     return `It would have to see ${plainMm(degrees(across), 0)}° across for that: begin the zone farther away, or take a camera that sees wider.`;
   }
   const by = (zone[0] + zone[1] - cone[0] - cone[1]) / 2;

@@ -4,7 +4,7 @@ import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-
 import { MatCheckbox } from '@angular/material/checkbox';
 import { WallCamera } from '@oriel/shared/contracts/walls';
 import type { Point3 } from '@oriel/shared/projection/types';
-import { acrossFromDiagonal } from '@oriel/shared/viewer/field-of-view';
+import { acrossFromDiagonal, diagonalFromAcross } from '@oriel/shared/viewer/field-of-view';
 import { ABOVE_EDGE_MM } from '@oriel/shared/viewer/usual-camera';
 import { FigureField } from '../../figures/figure-field';
 import { degrees, radians } from '../../screen/screen-measure';
@@ -60,10 +60,7 @@ export class CameraStep {
     return Math.max(Math.abs(x) - widthMm / 2, Math.abs(y) - heightMm / 2);
   });
   /** As makers print it, across the diagonal of 16:9. */
-  protected readonly diagonal = computed(() => {
-    const half = Math.tan(this.camera().hfovRad / 2);
-    return degrees(2 * Math.atan((half * Math.hypot(16, 9)) / 16));
-  });
+  protected readonly diagonal = computed(() => degrees(diagonalFromAcross(this.camera().hfovRad, 16, 9)));
 
   protected toSide(side: Side, offset = ABOVE_EDGE_MM): void {
     const { widthMm, heightMm } = this.glass();

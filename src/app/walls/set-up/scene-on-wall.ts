@@ -1,7 +1,7 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { WallSetUp } from '@oriel/shared/contracts/walls';
 import { retarget, scaleZone } from '@oriel/shared/projection/retarget';
-import { type StatedFault, statedFaults } from '../../composer/layers/faults';
+import { type StatedFault, statedFaults } from '../../drawing/stated-faults';
 import { describeZone } from '../wall-words';
 
 /** A layer that is not clear from the wall's viewing zone, and the worst that is seen of it. */

@@ -2,7 +2,7 @@ import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import { clearance, type Fault } from '@oriel/shared/projection/clearance';
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
 import type { Point3 } from '@oriel/shared/projection/types';
-import { describeEye, plainMm } from '../../figures/words';
+import { describeEye, plainMm } from '../figures/words';
 
 /** Why a scene is not clear, in words, with the layer and the eye that show it. */
 export interface StatedFault {

@@ -1,3 +1,4 @@
+import { describe, expect, it } from 'vitest';
 import { Pace } from './pace';
 
 /** Frames looked at of ten seconds at `perS`, each early or late by up to 3 ms. */

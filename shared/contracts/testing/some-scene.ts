@@ -1,4 +1,4 @@
-import type { Layer, SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { Layer, SceneDocument } from '../scenes';
 
 /** A layer of a picture 1600 x 900 px that covers a glass of 1200 x 675 mm with a tenth to spare. */
 export function someLayer(more: Partial<Layer> & { id: string }): Layer {
@@ -27,3 +27,9 @@ export const someScene: SceneDocument = {
     someLayer({ id: layerIds[2], name: 'Meadow', depthMm: -60, placed: { xMm: 0, yMm: -200, widthMm: 1320, heightMm: 300 } }),
   ],
 };
+
+/** A scene with one of its layers changed. */
+export const withLayer = (scene: SceneDocument, id: string, change: Partial<Layer>): SceneDocument => ({
+  ...scene,
+  layers: scene.layers.map((layer) => (layer.id === id ? { ...layer, ...change } : layer)),
+});
