@@ -1,8 +1,9 @@
-import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { mustRun } from '../command.mjs';
 import { inProject, root } from '../project.mjs';
 import { bundleServer } from './bundle-server.mjs';
 import { sourcesHash } from './sources-hash.mjs';
+import { listWallFiles } from './wall-files.mjs';
 
 const stamp = inProject('dist', 'built-from');
 const results = ['dist/web/index.html', 'dist/server/main.js'];
@@ -27,9 +28,9 @@ export async function buildProduct(signal) {
   const angular = inProject('node_modules/@angular/cli/bin/ng.js');
   const env = { ...process.env, NG_CLI_ANALYTICS: 'false', NO_COLOR: '1' };
   await Promise.all([
-    mustRun(process.execPath, [angular, 'build', '--progress=false'], { cwd: root, env, signal }),
+    mustRun(process.execPath, [angular, 'build', '--progress=false', '--stats-json'], { cwd: root, env, signal }),
     bundleServer(),
   ]);
-  mkdirSync(inProject('dist'), { recursive: true });
+  listWallFiles(inProject('dist', 'web'));
   writeFileSync(stamp, hash);
 }

@@ -1,7 +1,9 @@
 import type { ColumnType, Generated, JSONColumnType } from 'kysely';
 import type { Role } from '@oriel/shared/contracts/role';
 import type { LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
-import type { ViewerScale, WallReport, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { ViewerScale } from '@oriel/shared/contracts/viewer-scales';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import type { WallReport } from '@oriel/shared/contracts/walls';
 import type { CompactSample, RunFacts } from '../runs/compact-run';
 
 type Moment = ColumnType<Date, Date | string, Date | string>;

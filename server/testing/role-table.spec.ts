@@ -4,7 +4,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { everyRole, type Role } from '@oriel/shared/contracts/role';
 import type { Route } from '@oriel/shared/contracts/route';
 import { allRoutes } from '@oriel/shared/contracts/routes';
-import { wallEvents } from '@oriel/shared/contracts/walls';
+import { wallEvents } from '@oriel/shared/contracts/wall-screen';
 import { newWall } from '@oriel/shared/contracts/new-wall';
 import { originalKey } from '../storage/keys';
 import { pairedScreen } from '../walls/testing/paired-screen';

@@ -1,4 +1,4 @@
-import * as contract from '@oriel/shared/contracts/walls';
+import * as contract from '@oriel/shared/contracts/wall-pairing';
 import type { Feature } from '../http/mount';
 import type { Parts } from '../parts';
 import { pairings } from './pairing';

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { PairingCode, type Wall } from '@oriel/shared/contracts/walls';
+import { PairingCode } from '@oriel/shared/contracts/wall-pairing';
+import type { Wall } from '@oriel/shared/contracts/walls';
 import { hashOfToken } from '../http/secret-token';
 import { usualLimits } from '../http/limits';
 import type { Browser } from '../testing/browser';

@@ -1,6 +1,6 @@
 import { randomInt } from 'node:crypto';
 import { sql } from 'kysely';
-import { pairingMinutes, pairingSigns } from '@oriel/shared/contracts/walls';
+import { pairingMinutes, pairingSigns } from '@oriel/shared/contracts/wall-pairing';
 import type { Database } from '../database/database';
 import { hashOfToken, makeToken } from '../http/secret-token';
 import { codeUnknown } from './refusals';

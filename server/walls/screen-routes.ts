@@ -1,4 +1,5 @@
-import * as contract from '@oriel/shared/contracts/walls';
+import { screenPairing } from '@oriel/shared/contracts/wall-pairing';
+import * as contract from '@oriel/shared/contracts/wall-screen';
 import { wallOfScreen } from '../http/access';
 import { notFound } from '../http/failure';
 import type { Feature } from '../http/mount';
@@ -16,7 +17,7 @@ export const screenRoutes =
     const screen = wallScreen(connection.db);
     const openEvents = wallEvents(parts);
 
-    mount(contract.screenPairing, async ({ request }) => {
+    mount(screenPairing, async ({ request }) => {
       const wall = await wallOfScreen(connection.db, wallCookie.read(request));
       return { paired: wall !== undefined };
     });

@@ -1,4 +1,4 @@
-import type { ViewerScale } from '@oriel/shared/contracts/walls';
+import type { ViewerScale } from '@oriel/shared/contracts/viewer-scales';
 import type { Database } from '../database/database';
 
 export function viewerScales(db: Database) {

@@ -1,5 +1,6 @@
 import type { Selectable } from 'kysely';
-import type { Wall, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import type { Wall } from '@oriel/shared/contracts/walls';
 import type { Database } from '../database/database';
 import { saverOf } from '../database/revisions';
 import type { Tables } from '../database/tables';

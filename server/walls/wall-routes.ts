@@ -1,4 +1,5 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
+import * as scaleContract from '@oriel/shared/contracts/viewer-scales';
 import * as contract from '@oriel/shared/contracts/walls';
 import type { Feature } from '../http/mount';
 import type { Parts } from '../parts';
@@ -29,12 +30,12 @@ export const wallRoutes =
       reports: await reportsOf(db, params.wallId, query.hours),
     }));
 
-    mount(contract.listViewerScales, async ({ householdId }) => ({ scales: await scales.list(householdId) }));
-    mount(contract.keepViewerScale, async ({ body, householdId }) => {
+    mount(scaleContract.listViewerScales, async ({ householdId }) => ({ scales: await scales.list(householdId) }));
+    mount(scaleContract.keepViewerScale, async ({ body, householdId }) => {
       await scales.keep(householdId, body);
       return { scales: await scales.list(householdId) };
     });
-    mount(contract.removeViewerScale, async ({ params, householdId }) => {
+    mount(scaleContract.removeViewerScale, async ({ params, householdId }) => {
       await scales.remove(householdId, params.scaleId);
       return { scales: await scales.list(householdId) };
     });

@@ -1,7 +1,8 @@
 import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Scene } from '@oriel/shared/contracts/scenes';
-import { wallEvents, type Wall } from '@oriel/shared/contracts/walls';
+import { wallEvents } from '@oriel/shared/contracts/wall-screen';
+import type { Wall } from '@oriel/shared/contracts/walls';
 import { stopGracefully } from '../http/graceful-stop';
 import { listenTo, type Listener } from '../events/testing/listener';
 import { quadrants } from '../pictures/testing/quadrants';

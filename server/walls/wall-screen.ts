@@ -1,5 +1,5 @@
 import type { Scene } from '@oriel/shared/contracts/scenes';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import type { Database } from '../database/database';
 import { notPaired } from '../http/failure';
 import { findImage, type ImageRow } from '../scenes/image-queries';

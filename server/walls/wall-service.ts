@@ -1,5 +1,6 @@
 import { isDeepStrictEqual } from 'node:util';
-import type { Wall, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import type { Wall } from '@oriel/shared/contracts/walls';
 import type { Database } from '../database/database';
 import { mustWrite } from '../database/revisions';
 import { notFound } from '../http/failure';

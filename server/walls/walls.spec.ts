@@ -1,7 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { newWall } from '@oriel/shared/contracts/new-wall';
-import { Wall, type WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import { Wall } from '@oriel/shared/contracts/walls';
 import { purgeScenes } from '../scenes/purge-scenes';
 import { createTestApp, type SignedIn, type TestApp } from '../testing/test-app';
 

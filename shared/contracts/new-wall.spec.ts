@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { createFollower } from '../smoothing/follower';
 import { CALM_FOLLOWING } from '../smoothing/follower-settings';
 import { newWall, usualGlass } from './new-wall';
-import { PairingCode, TrackerTuning, WallSetUp } from './walls';
+import { PairingCode } from './wall-pairing';
+import { TrackerTuning, WallSetUp } from './wall-set-up';
 
 describe('a new wall', () => {
   it('is as the contract has it, and every figure is kept', () => {

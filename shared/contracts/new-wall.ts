@@ -2,7 +2,7 @@ import { livingRoom } from '../projection/living-room';
 import { CALM_FOLLOWING } from '../smoothing/follower-settings';
 import { USUAL_VIEWER } from '../viewer/eye-from-landmarks';
 import { usualCamera } from '../viewer/usual-camera';
-import type { TrackerTuning, WallGlass, WallSetUp } from './walls';
+import type { TrackerTuning, WallGlass, WallSetUp } from './wall-set-up';
 
 /** A screen of 16:9, lying, sold as 43 inches. Until it is measured (practice). */
 export const usualGlass: WallGlass = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080, uncertainty: null };

@@ -2,7 +2,7 @@ import * as z from 'zod';
 import { Id, Moment, Name } from './fields';
 import { everyRole, tuners } from './role';
 import { defineRoute, members } from './route';
-import { TrackerTuning } from './walls';
+import { TrackerTuning } from './wall-set-up';
 
 /**
  * One frame of a run: when it was captured and received (ms, one clock), the eye as measured before smoothing (mm from the centre of the glass;

@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '../contracts/walls';
+import type { TrackerTuning } from '../contracts/wall-set-up';
 import type { Point3 } from '../projection/types';
 import { NO_DRIFT } from '../smoothing/drift';
 import { CALM_FOLLOWING, type FollowerSettings } from '../smoothing/follower-settings';

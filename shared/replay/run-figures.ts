@@ -1,5 +1,5 @@
 import type { RunSample } from '../contracts/runs';
-import type { TrackerTuning } from '../contracts/walls';
+import type { TrackerTuning } from '../contracts/wall-set-up';
 import { followerSettingsOf } from './follower-settings-of';
 import { jitterMm } from './jitter';
 import { lagInMotionMs } from './lag';

@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '../contracts/walls';
+import type { TrackerTuning } from '../contracts/wall-set-up';
 import { followerSettingsOf } from './follower-settings-of';
 import { excerptOf, replayExcerpt, type Excerpt } from './excerpt';
 import { jitterMm } from './jitter';

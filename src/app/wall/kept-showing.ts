@@ -1,5 +1,5 @@
 import { Injectable } from '@angular/core';
-import { wallShows } from '@oriel/shared/contracts/walls';
+import { wallShows } from '@oriel/shared/contracts/wall-screen';
 import type * as z from 'zod';
 
 /** What the server says this wall shows. */

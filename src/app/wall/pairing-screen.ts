@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
-import { pairingMinutes } from '@oriel/shared/contracts/walls';
+import { pairingMinutes } from '@oriel/shared/contracts/wall-pairing';
 import type { ApiFailure } from '../core/api-failure';
 import { isOwnAddress } from '../walls/own-address';
 import { Pairing } from './pairing';

@@ -1,5 +1,5 @@
 import { Injectable, inject, signal } from '@angular/core';
-import { askPairing, claimPairing, pairingMinutes } from '@oriel/shared/contracts/walls';
+import { askPairing, claimPairing, pairingMinutes } from '@oriel/shared/contracts/wall-pairing';
 import { Api } from '../core/api';
 import { type ApiFailure, toApiFailure } from '../core/api-failure';
 import { Backoff } from '../core/backoff';

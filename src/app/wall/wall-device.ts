@@ -1,5 +1,6 @@
 import { Injectable, inject, signal } from '@angular/core';
-import { screenPairing, wallShows } from '@oriel/shared/contracts/walls';
+import { screenPairing } from '@oriel/shared/contracts/wall-pairing';
+import { wallShows } from '@oriel/shared/contracts/wall-screen';
 import { Api } from '../core/api';
 import { type ApiFailure, toApiFailure } from '../core/api-failure';
 import { Backoff } from '../core/backoff';

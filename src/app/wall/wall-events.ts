@@ -1,5 +1,5 @@
 import { DOCUMENT, Injectable, inject } from '@angular/core';
-import { wallEvents } from '@oriel/shared/contracts/walls';
+import { wallEvents } from '@oriel/shared/contracts/wall-screen';
 import { addressOf } from '../core/api';
 import { Backoff } from '../core/backoff';
 

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type ElementRef, computed, effect, inject, input, linkedSignal, signal, untracked, viewChild } from '@angular/core';
 import type { Scene } from '@oriel/shared/contracts/scenes';
-import { type WallSetUp, wallImageFile } from '@oriel/shared/contracts/walls';
+import { wallImageFile } from '@oriel/shared/contracts/wall-screen';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { addressOf } from '../core/api';
 import { lookingWords } from '../player/player-words';
 import { type Figures, ReadOut } from '../player/read-out';

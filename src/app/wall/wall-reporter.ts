@@ -1,5 +1,6 @@
 import { DOCUMENT, Injectable, inject } from '@angular/core';
-import { WallReport, reportFromWall } from '@oriel/shared/contracts/walls';
+import { reportFromWall } from '@oriel/shared/contracts/wall-screen';
+import { WallReport } from '@oriel/shared/contracts/walls';
 import * as z from 'zod';
 import { Api } from '../core/api';
 import { toApiFailure } from '../core/api-failure';

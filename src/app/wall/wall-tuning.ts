@@ -1,4 +1,4 @@
-import type { WallGlass, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallGlass, WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import type { Following } from '../player/viewpoint';
 import type { TrackingSetUp } from '../tracking/face-tracking';
 

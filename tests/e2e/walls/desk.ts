@@ -1,6 +1,7 @@
 import type { Page } from '@playwright/test';
 import type { Scene } from '@oriel/shared/contracts/scenes';
-import type { Wall, WallReport, WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import type { Wall, WallReport } from '@oriel/shared/contracts/walls';
 import { ask, householdId } from '../asking';
 
 /** What a tuner does at the desk, asked of the server from a page that is signed in. */

@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { followerSettingsOf } from '@oriel/shared/replay/follower-settings-of';
 import { type Follower, createFollower } from '@oriel/shared/smoothing/follower';
 import type { EyeSample } from '../../tracking/eye-sample';

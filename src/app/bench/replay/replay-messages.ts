@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import type { Direction, ReplaySample } from '@oriel/shared/replay/sample';
 import type { SearchResult } from '@oriel/shared/replay/search-tuning';
 

@@ -16,7 +16,7 @@ import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { MatOption, MatSelect } from '@angular/material/select';
 import { RouterLink } from '@angular/router';
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { type Wish, wishes } from '@oriel/shared/replay/wishes';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';

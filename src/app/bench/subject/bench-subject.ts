@@ -1,6 +1,7 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
-import { type TrackerTuning, type Wall, listWalls, readWall, saveWall } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
+import { type Wall, listWalls, readWall, saveWall } from '@oriel/shared/contracts/walls';
 import type { Glass, ViewingZone } from '@oriel/shared/projection/types';
 import { Api } from '../../core/api';
 import { toApiFailure } from '../../core/api-failure';

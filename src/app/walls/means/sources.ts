@@ -1,5 +1,5 @@
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { CERTAIN, type SetUpUncertainty, glassErrorMm, middleOf } from '@oriel/shared/viewer/measuring/glass-error';
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
 import { plainMm } from '../../figures/words';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './sources';
 
 /** The title block of a wall's drawing: what is not certain about it, and what each uncertainty means on the glass. */

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { TrackerTuning } from '@oriel/shared/contracts/walls';
+import { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { factorFromSpot } from '@oriel/shared/viewer/measuring/scale-from-spot';
 import { type Measured, measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
 import { plainMm } from '../../figures/words';

@@ -1,4 +1,4 @@
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { acrossOf, glassAcross, sidesOf } from '../../drawing/across';
 import { roundStep } from '../../drawing/depth-scale';

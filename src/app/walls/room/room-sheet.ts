@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, ElementRef, computed, inject, input, output, signal, viewChild } from '@angular/core';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import type { Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { sidesOf } from '../../drawing/across';
 import { followPointer } from '../../drawing/follow-pointer';

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { coneOf, roomExtents } from './wall-room';
 
 /** A wall from above, to scale: the glass, what its camera sees, the viewing zone. */

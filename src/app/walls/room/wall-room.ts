@@ -1,4 +1,4 @@
-import type { WallCamera } from '@oriel/shared/contracts/walls';
+import type { WallCamera } from '@oriel/shared/contracts/wall-set-up';
 import type { Glass, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { type Camera, rayOfPixel } from '@oriel/shared/viewer/camera';
 import { acrossOf } from '../../drawing/across';

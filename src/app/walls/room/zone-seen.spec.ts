@@ -1,5 +1,5 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { seenPart, unseenWords } from './zone-seen';
 
 /** A camera in the middle of the glass, 90 degrees across (half of 1 in 1), 58.7 up (half of 9 in 16). */

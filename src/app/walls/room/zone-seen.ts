@@ -1,4 +1,4 @@
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { upFromAcross } from '@oriel/shared/viewer/field-of-view';
 import { acrossOf, sidesOf } from '../../drawing/across';
 import type { DepthFrame } from '../../drawing/frames';

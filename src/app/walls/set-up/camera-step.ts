@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@a
 import { MatButton } from '@angular/material/button';
 import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
 import { MatCheckbox } from '@angular/material/checkbox';
-import { WallCamera } from '@oriel/shared/contracts/walls';
+import { WallCamera } from '@oriel/shared/contracts/wall-set-up';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { acrossFromDiagonal, diagonalFromAcross } from '@oriel/shared/viewer/field-of-view';
 import { ABOVE_EDGE_MM } from '@oriel/shared/viewer/usual-camera';

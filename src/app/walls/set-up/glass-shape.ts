@@ -1,4 +1,4 @@
-import type { WallGlass } from '@oriel/shared/contracts/walls';
+import type { WallGlass } from '@oriel/shared/contracts/wall-set-up';
 
 type Sides = Pick<WallGlass, 'widthMm' | 'heightMm' | 'widthPx' | 'heightPx'>;
 

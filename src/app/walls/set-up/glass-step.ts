@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, DOCUMENT, computed, inject, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
-import { WallGlass } from '@oriel/shared/contracts/walls';
+import { WallGlass } from '@oriel/shared/contracts/wall-set-up';
 import { FigureField } from '../../figures/figure-field';
 import { CardOutline } from '../../screen/card-outline';
 import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-measure';

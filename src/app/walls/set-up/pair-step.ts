@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inj
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import { pairWall, pairingMinutes } from '@oriel/shared/contracts/walls';
+import { pairWall, pairingMinutes } from '@oriel/shared/contracts/wall-pairing';
 import { FailureNotice } from '../../core/failure-notice';
 import { sayMoment } from '../../core/moments';
 import { Submission } from '../../core/submission';

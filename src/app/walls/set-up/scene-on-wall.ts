@@ -1,5 +1,5 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { retarget, scaleZone } from '@oriel/shared/projection/retarget';
 import { type StatedFault, statedFaults } from '../../drawing/stated-faults';
 import { describeZone } from '../wall-words';

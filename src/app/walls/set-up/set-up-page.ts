@@ -3,7 +3,7 @@ import { ChangeDetectionStrategy, Component, DestroyRef, type TemplateRef, compu
 import { MatButton } from '@angular/material/button';
 import { Title } from '@angular/platform-browser';
 import { RouterLink } from '@angular/router';
-import type { WallSetUp } from '@oriel/shared/contracts/walls';
+import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { FailureNotice } from '../../core/failure-notice';
 import { Icon } from '../../core/icon/icon';
 import { Submission } from '../../core/submission';

@@ -2,7 +2,8 @@ import { ChangeDetectionStrategy, Component, type OnInit, computed, inject, sign
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { readHousehold } from '@oriel/shared/contracts/households';
-import { TrackerTuning, type ViewerScale, keepViewerScale, listViewerScales, removeViewerScale } from '@oriel/shared/contracts/walls';
+import { type ViewerScale, keepViewerScale, listViewerScales, removeViewerScale } from '@oriel/shared/contracts/viewer-scales';
+import { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';

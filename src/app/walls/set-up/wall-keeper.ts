@@ -1,7 +1,9 @@
 import { HttpClient } from '@angular/common/http';
 import { DOCUMENT, DestroyRef, Injectable, computed, inject, signal } from '@angular/core';
 import { tuners } from '@oriel/shared/contracts/role';
-import { type TrackerTuning, type Wall, type WallCamera, type WallGlass, WallSetUp, pairWall, readWall, removeWall, saveWall, unpairWall } from '@oriel/shared/contracts/walls';
+import { pairWall, unpairWall } from '@oriel/shared/contracts/wall-pairing';
+import { type TrackerTuning, type WallCamera, type WallGlass, WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import { type Wall, readWall, removeWall, saveWall } from '@oriel/shared/contracts/walls';
 import type { ViewingZone } from '@oriel/shared/projection/types';
 import { Api, addressOf } from '../../core/api';
 import { type ApiFailure, toApiFailure } from '../../core/api-failure';

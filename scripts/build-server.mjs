@@ -1,3 +1,0 @@
-import { bundleServer } from './build/bundle-server.mjs';
-
-await bundleServer();

@@ -1,0 +1,3 @@
+import { buildProduct } from './build/product.mjs';
+
+await buildProduct();
