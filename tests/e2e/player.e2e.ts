@@ -1,5 +1,6 @@
 import { chromium, type Page } from '@playwright/test';
 import { demoScene } from './asking';
+import { atRest, framesPass } from './at-rest';
 import { keepScreen } from './player/this-screen';
 import { expect, test } from './fixtures';
 import { chromiumPath, ignoredDefaults } from './set-up/chromium';
@@ -31,12 +32,7 @@ async function shiftAfter(page: Page, act: () => Promise<unknown>): Promise<numb
   const begun = await shiftOf(page);
   await act();
   await expect.poll(async () => Math.abs((await shiftOf(page)) - begun)).toBeGreaterThan(1);
-  let [before, now] = [Infinity, await shiftOf(page)];
-  while (Math.abs(now - before) > 0.3) {
-    await page.waitForTimeout(150);
-    [before, now] = [now, await shiftOf(page)];
-  }
-  return now;
+  return atRest(() => shiftOf(page), 0.3);
 }
 
 test('before the first play the set-up is offered; played as it is, the camera is asked for and nobody is seen', async ({ signedInPage, expectAccessible }) => {
@@ -111,7 +107,7 @@ test('less motion is honoured: nothing follows or drifts until it is asked for',
   await expect(following(page)).toHaveAttribute('aria-checked', 'false');
   const before = await shiftOf(page);
   await page.mouse.move(1300, 300);
-  await page.waitForTimeout(1500);
+  await framesPass(page, 90);
   expect(await shiftOf(page)).toBe(before);
   await page.getByRole('button', { name: 'Follow my face' }).click();
   await expect(line(page)).toContainText(/camera|follow|Nobody/);
@@ -255,16 +251,18 @@ test('18 times opened and left, nothing stays behind', async ({ signedInPage }) 
     });
     await expect(page.locator('oriel-player')).toHaveCount(0);
   };
+  const settled = async () => {
+    await expect.poll(() => page.workers()).toEqual([]);
+    await atRest(async () => (await measured()).nodes, 5);
+    return measured();
+  };
   for (let i = 0; i < 6; i++) await visit();
-  await page.waitForTimeout(1000);
-  const early = await measured();
+  const early = await settled();
   for (let i = 6; i < 18; i++) await visit();
-  await page.waitForTimeout(1000);
-  const late = await measured();
+  const late = await settled();
   expect(late.nodes).toBeLessThan(early.nodes + 100);
   expect(late.listeners).toBeLessThan(early.listeners + 20);
   expect(late.heap).toBeLessThan(early.heap + 4e6);
-  expect(page.workers()).toEqual([]);
   const left = await page.evaluate(async () => {
     const { counts } = window as unknown as Counting;
     const before = counts.frames;

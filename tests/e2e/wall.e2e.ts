@@ -1,4 +1,5 @@
 import type { Page } from '@playwright/test';
+import { reportFromWall } from '@oriel/shared/contracts/walls';
 import { expect, test } from './fixtures';
 import { Desk } from './walls/desk';
 import { hurried } from './walls/hurry';
@@ -69,9 +70,9 @@ test('reports reach the desk, those of the time without a network too', async ({
   await readyForOffline(screen);
   await context.setOffline(true);
   const from = Date.now();
-  const awayMs = 6000;
-  await screen.waitForTimeout(awayMs);
-  const during = async () => (await desk.reports(wall.id)).filter(({ at }) => Date.parse(at) > from && Date.parse(at) < from + awayMs);
+  await screen.waitForRequest((request) => request.url().endsWith(reportFromWall.path) && reportFromWall.body!.parse(request.postDataJSON()).reports.some(({ at }) => Date.parse(at) > from));
+  const until = Date.now();
+  const during = async () => (await desk.reports(wall.id)).filter(({ at }) => Date.parse(at) > from && Date.parse(at) < until);
   expect(await during()).toEqual([]);
   await context.setOffline(false);
   await expect.poll(async () => (await during()).length, { timeout: 20_000 }).toBeGreaterThanOrEqual(1);

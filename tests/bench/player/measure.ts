@@ -1,6 +1,7 @@
 import type { CDPSession, Page } from '@playwright/test';
 import { setTimeout as pause } from 'node:timers/promises';
 import { FIRST_STEP } from '@oriel/shared/ladder/steps';
+import { rounded } from '../tracking/statistics';
 import { figuresOf, secondsOf, type Figures } from './figures';
 import type { Condition } from './options';
 import type { Probe, Seen } from './probe';
@@ -76,7 +77,6 @@ export async function measure(stand: Stand, condition: Condition, settleSeconds:
   });
 }
 
-const rounded = (value: number): number => Math.round(value * 100) / 100;
 const sum = (used: Readonly<Record<string, number>>): number => Object.values(used).reduce((total, one) => total + one, 0);
 
 async function shown(page: Page, kind: Condition['page'], renderer: Condition['renderer'], layers: number): Promise<void> {

@@ -1,30 +1,12 @@
 import type { Page } from '@playwright/test';
-import { whoAmI } from '@oriel/shared/contracts/accounts';
 import { createWall, readWall, type Wall } from '@oriel/shared/contracts/walls';
 import { keepRun, type RunSample } from '@oriel/shared/contracts/runs';
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
 import { madeUpRun, standsThenWalks } from '@oriel/shared/replay/testing';
-
-/** Asks the server as the page's own person. */
-async function ask<T>(page: Page, method: 'GET' | 'POST', path: string, data?: unknown): Promise<T> {
-  const cookies = await page.context().cookies();
-  const token = cookies.find(({ name }) => name === 'XSRF-TOKEN')?.value ?? '';
-  const reply = await page.request.fetch(path, {
-    method,
-    data,
-    headers: { 'X-XSRF-TOKEN': decodeURIComponent(token) },
-  });
-  if (!reply.ok()) throw new Error(`${method} ${path}: ${reply.status()} ${await reply.text()}`);
-  return (await reply.json()) as T;
-}
-
-async function householdOf(page: Page): Promise<string> {
-  const { account } = whoAmI.reply.parse(await ask(page, 'GET', whoAmI.path));
-  return account!.memberships[0].householdId;
-}
+import { ask, householdId } from '../asking';
 
 export async function makeWall(page: Page, name: string): Promise<Wall> {
-  const path = createWall.path.replace(':householdId', await householdOf(page));
+  const path = createWall.path.replace(':householdId', await householdId(page));
   return createWall.reply.parse(await ask(page, 'POST', path, { name })).wall;
 }
 
@@ -46,6 +28,6 @@ export async function keepMadeUpRun(page: Page, name: string, wallId: string | n
     frameIntervalP95Ms: 17.2,
     samples,
   };
-  const path = keepRun.path.replace(':householdId', await householdOf(page));
+  const path = keepRun.path.replace(':householdId', await householdId(page));
   return keepRun.reply.parse(await ask(page, 'POST', path, body)).run.id;
 }
