@@ -1,3 +1,5 @@
+import { createProof, type ProofSettings } from './proof';
+
 /** How many frames a second are drawn at most. */
 export interface DrawingStep {
   readonly mostPerS: number;
@@ -21,11 +23,8 @@ export const DRAWING_STEPS: readonly DrawingStep[] = [
 const GENEROSITY = 1.15;
 /** A rate is kept where this share of it is drawn. */
 const KEPT = 0.95;
-/** Seconds in a row in which the rate is kept, after which more is tried; doubled by every trial that had to be taken back, up to the longest. */
-const PROOF_S = 30;
-const LONGEST_PROOF_S = 1800;
-/** Seconds without a change after which trials taken back are forgotten; longer than the longest proof. */
-const FORGIVE_S = 7200;
+/** Of seconds in which the rate is kept, after which more is tried. */
+const PROOF: ProofSettings = { proofS: 30, longestProofS: 1800, forgiveS: 7200 };
 
 export interface DrawingChange {
   readonly tMs: number;
@@ -50,24 +49,20 @@ export function createDrawingRate(): DrawingRate {
   let poorFrames = 0;
   let poorS = 0;
   let goodS = 0;
-  let proofS = PROOF_S;
-  let trials = 0;
-  let calmS = 0;
   let fresh = true;
+  const proof = createProof(PROOF);
 
   const change = (tMs: number, to: number, reason: string): DrawingChange => {
     const fromPerS = DRAWING_STEPS[step].mostPerS;
     step = to;
-    excess = poorFrames = poorS = goodS = calmS = 0;
+    excess = poorFrames = poorS = goodS = 0;
     fresh = true;
+    if (DRAWING_STEPS[to].mostPerS < fromPerS) proof.fell();
+    else proof.climbed();
     return { tMs, fromPerS, toPerS: DRAWING_STEPS[to].mostPerS, reason };
   };
 
   const fall = (tMs: number): DrawingChange => {
-    if (trials > 0) {
-      trials--;
-      proofS = Math.min(2 * proofS, LONGEST_PROOF_S);
-    }
     const achieved = poorFrames / poorS;
     const fitting = DRAWING_STEPS.findIndex(({ mostPerS }, index) => index > step && mostPerS <= GENEROSITY * achieved);
     return change(tMs, fitting < 0 ? DRAWING_STEPS.length - 1 : fitting, `${achieved.toFixed(0)} frames a second were drawn`);
@@ -83,10 +78,7 @@ export function createDrawingRate(): DrawingRate {
         fresh = false;
         return null;
       }
-      if (++calmS >= FORGIVE_S) {
-        proofS = PROOF_S;
-        trials = calmS = 0;
-      }
+      proof.calm();
       const { poorPerS, patienceS } = DRAWING_STEPS[step];
       if (framesPerS < poorPerS) {
         excess++;
@@ -98,9 +90,8 @@ export function createDrawingRate(): DrawingRate {
       excess = Math.max(0, excess - 1);
       if (excess === 0) poorFrames = poorS = 0;
       goodS = framesPerS >= KEPT * DRAWING_STEPS[step].mostPerS ? goodS + 1 : 0;
-      if (step === 0 || goodS < proofS) return null;
-      trials++;
-      return change(tMs, step - 1, `drawing kept its rate for ${proofS} s`);
+      if (step === 0 || goodS < proof.seconds) return null;
+      return change(tMs, step - 1, `drawing kept its rate for ${proof.seconds} s`);
     },
   };
 }
