@@ -2,6 +2,7 @@ import { sql, type Selectable } from 'kysely';
 import type { Photo } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
 import type { Tables } from '../database/tables';
+import { notFound } from '../http/failure';
 import type { Cursor } from './cursor';
 import { periodNamed } from './date-search';
 
@@ -77,6 +78,13 @@ export async function countPhotos(db: Database, filter: PhotoFilter): Promise<nu
 
 export const findPhotos = (db: Database, householdId: string, ids: readonly string[]): Promise<PhotoRow[]> =>
   photosOf(db, householdId).where('photo.id', 'in', ids).execute();
+
+/** @throws not-found (404). */
+export async function readPhoto(db: Database, householdId: string, photoId: string): Promise<PhotoRow> {
+  const [row] = await findPhotos(db, householdId, [photoId]);
+  if (!row) throw notFound();
+  return row;
+}
 
 export const findPhotoByContent = (db: Database, householdId: string, sha256: string): Promise<PhotoRow | undefined> =>
   photosOf(db, householdId).where('photo.sha256', '=', sha256).executeTakeFirst();
