@@ -15,29 +15,6 @@ import type { Mailer } from './mail/mailer';
 import { layerFiles, type LayerFiles } from './scenes/layer-files';
 import type { Storage } from './storage/storage';
 
-/** What the features are built from; main.ts and the tests make it in their own ways. */
-export interface Parts {
-  readonly config: Config;
-  readonly connection: Connection;
-  readonly log: Logger;
-  readonly storage: Storage;
-  readonly jobs: Jobs;
-  readonly changes: Changes;
-  readonly mailer: Mailer;
-  /** Where sent mail is shown, on a server without a mail server. */
-  readonly mailPage: MailPage | null;
-  readonly passwords: Passwords;
-  readonly cookie: SessionCookie;
-  readonly wallCookie: WallCookie;
-  readonly eventStreams: EventStreams;
-  readonly xsrf: Xsrf;
-  readonly sessions: Sessions;
-  readonly layerFiles: LayerFiles;
-  readonly limits: Limits;
-  /** True once the server has been asked to stop: it finishes what it has and takes nothing new. */
-  readonly draining: () => boolean;
-}
-
 /** What differs from server to server. */
 export interface Given {
   readonly config: Config;
@@ -47,13 +24,31 @@ export interface Given {
   readonly jobs: Jobs;
   readonly changes: Changes;
   readonly mailer: Mailer;
+  /** Where sent mail is shown, on a server without a mail server. */
   readonly mailPage: MailPage | null;
+  /** True once the server has been asked to stop: it finishes what it has and takes nothing new. */
   readonly draining: () => boolean;
+}
+
+/** What tests make cheaper or stricter. */
+export interface Chosen {
   readonly passwords?: Passwords;
   readonly limits?: LimitSettings;
 }
 
-export function assemble({ passwords = createPasswords(), limits = usualLimits, ...given }: Given): Parts {
+/** What the features are built from. */
+export interface Parts extends Given {
+  readonly passwords: Passwords;
+  readonly cookie: SessionCookie;
+  readonly wallCookie: WallCookie;
+  readonly eventStreams: EventStreams;
+  readonly xsrf: Xsrf;
+  readonly sessions: Sessions;
+  readonly layerFiles: LayerFiles;
+  readonly limits: Limits;
+}
+
+export function assemble({ passwords = createPasswords(), limits = usualLimits, ...given }: Given & Chosen): Parts {
   const secure = given.config.publicUrl.startsWith('https:');
   const cookie = sessionCookie(secure);
   const wallCookie = createWallCookie(secure);

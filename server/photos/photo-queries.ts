@@ -1,6 +1,7 @@
 import { sql, type Selectable } from 'kysely';
 import type { Photo } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
+import { saverOf } from '../database/revisions';
 import type { Tables } from '../database/tables';
 import { notFound } from '../http/failure';
 import type { Cursor } from './cursor';
@@ -26,7 +27,7 @@ export const toPhoto = (row: PhotoRow): Photo => ({
   hasAlpha: row.has_alpha,
   takenAt: row.taken_at.toISOString(),
   uploadedAt: row.uploaded_at.toISOString(),
-  uploadedBy: row.uploader ?? 'a former member',
+  uploadedBy: saverOf({ saver: row.uploader }),
   state: row.state,
   problem: row.problem,
   placeholder: row.placeholder,

@@ -1,11 +1,12 @@
 import type { Photo } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
+import type { ActingMember } from '../http/acting-member';
 import type { Jobs } from '../jobs/jobs';
 import type { ReceivedFile } from '../pictures/receive-file';
 import type { Storage } from '../storage/storage';
 import { readCursor, writeCursor } from './cursor';
 import { countPhotos, findPhotos, pageOfPhotos, readPhoto, toPhoto, type PhotoFilter } from './photo-queries';
-import { receivePhoto, type Owner, type Received } from './receive-photo';
+import { receivePhoto, type Received } from './receive-photo';
 
 export interface PhotoPage {
   readonly photos: Photo[];
@@ -15,7 +16,7 @@ export interface PhotoPage {
 
 export function photoService(db: Database, storage: Storage, jobs: Jobs) {
   return {
-    receive: (file: ReceivedFile, owner: Owner): Promise<Received> => receivePhoto({ db, storage, jobs }, file, owner),
+    receive: (file: ReceivedFile, member: ActingMember): Promise<Received> => receivePhoto({ db, storage, jobs }, file, member),
 
     async list(filter: PhotoFilter, after: string | undefined, limit: number): Promise<PhotoPage> {
       const rows = await pageOfPhotos(db, filter, after ? readCursor(after) : null, limit + 1);

@@ -14,7 +14,7 @@ const milestone = 'photo dates by the clock of the camera';
 export async function readDatesAnew(db: Database, storage: Storage): Promise<void> {
   const photos = await db.selectFrom('photo').select(['id', 'sha256', 'taken_at']).execute();
   for (const { id, sha256, taken_at } of photos) {
-    // An original that cannot be opened was purged meanwhile, or says no date.
+    // Purged meanwhile, or unreadable: the date stays.
     const takenAt = await storage.withFile(originalKey(sha256), takenDateOfFile).catch(() => null);
     if (takenAt && takenAt.getTime() !== taken_at.getTime())
       await db.updateTable('photo').set({ taken_at: takenAt }).where('id', '=', id).execute();

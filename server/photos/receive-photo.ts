@@ -1,5 +1,6 @@
 import type { Photo } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
+import type { ActingMember } from '../http/acting-member';
 import { notFound } from '../http/failure';
 import type { Jobs } from '../jobs/jobs';
 import { inspectPicture } from '../pictures/inspect-picture';
@@ -9,11 +10,6 @@ import { originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
 import { derivativeJob } from './derivative-job';
 import { findPhotoByContent, readPhoto, toPhoto, type PhotoRow } from './photo-queries';
-
-export interface Owner {
-  readonly householdId: string;
-  readonly accountId: string;
-}
 
 export interface Received {
   readonly photo: Photo;
@@ -31,19 +27,19 @@ interface Keeping {
  * Takes an uploaded file in. The same content, already in this household, is the same photo, whatever the file is called.
  * @throws the refusals of `inspectPicture`; nothing is left behind then.
  */
-export async function receivePhoto(keeping: Keeping, file: ReceivedFile, owner: Owner): Promise<Received> {
+export async function receivePhoto(keeping: Keeping, file: ReceivedFile, member: ActingMember): Promise<Received> {
   const { db, storage, jobs } = keeping;
-  const known = await findPhotoByContent(db, owner.householdId, file.sha256);
+  const known = await findPhotoByContent(db, member.householdId, file.sha256);
   if (known) return { photo: toPhoto(await welcomeBack(keeping, known)), duplicate: true };
   try {
-    const id = await keep(keeping, file, owner);
+    const id = await keep(keeping, file, member);
     jobs.nudge(derivativeJob);
-    if (id) return { photo: toPhoto(await readPhoto(db, owner.householdId, id)), duplicate: false };
+    if (id) return { photo: toPhoto(await readPhoto(db, member.householdId, id)), duplicate: false };
   } catch (error) {
     await removeUnreferenced(db, storage, file.sha256);
     throw error;
   }
-  const twin = await findPhotoByContent(db, owner.householdId, file.sha256);
+  const twin = await findPhotoByContent(db, member.householdId, file.sha256);
   if (!twin) throw notFound();
   return { photo: toPhoto(await welcomeBack(keeping, twin)), duplicate: true };
 }
@@ -63,7 +59,7 @@ async function welcomeBack({ db, jobs }: Keeping, existing: PhotoRow): Promise<P
 }
 
 /** Keeps the original and its row together, or neither. Null when the same content came in by another upload meanwhile. */
-async function keep({ db, storage, jobs }: Keeping, file: ReceivedFile, { householdId, accountId }: Owner): Promise<string | null> {
+async function keep({ db, storage, jobs }: Keeping, file: ReceivedFile, { householdId, accountId }: ActingMember): Promise<string | null> {
   const facts = await inspectPicture(file.path);
   return db.transaction().execute(async (transaction) => {
     await lockContent(transaction, file.sha256);

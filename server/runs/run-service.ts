@@ -2,14 +2,11 @@ import type { keepRun, RunHeader, RunSample } from '@oriel/shared/contracts/runs
 import type * as z from 'zod';
 import type { Database } from '../database/database';
 import { saverOf } from '../database/revisions';
+import type { ActingMember } from '../http/acting-member';
 import { DomainFailure, notFound } from '../http/failure';
 import { compact, durationOf, unfold, type RunFacts } from './compact-run';
 
 type NewRun = z.output<(typeof keepRun)['body']>;
-interface Asker {
-  readonly householdId: string;
-  readonly accountId: string;
-}
 interface HeaderRow {
   id: string;
   name: string;
@@ -75,7 +72,7 @@ export function runService(db: Database) {
     },
 
     /** @throws wall-not-here (422) */
-    async keep({ name, wallId, samples, ...recorded }: NewRun, { householdId, accountId }: Asker): Promise<RunHeader> {
+    async keep({ name, wallId, samples, ...recorded }: NewRun, { householdId, accountId }: ActingMember): Promise<RunHeader> {
       if (wallId) await requireWall(householdId, wallId);
       const facts: RunFacts = { ...recorded, durationMs: durationOf(samples), sampleCount: samples.length };
       const { id } = await db

@@ -1,8 +1,8 @@
-import sharp from 'sharp';
 import type { LayerImage } from '@oriel/shared/contracts/scenes';
-import { type DerivativeEdge, derivativeEdges } from '@oriel/shared/contracts/photos';
+import type { DerivativeEdge } from '@oriel/shared/contracts/photos';
 import type { Database } from '../database/database';
 import { openPicture } from '../pictures/open-picture';
+import { webpsOf, type Webp } from '../pictures/webps';
 import { lockContent } from '../storage/content';
 import { edgesFor, layerKey, originalKey } from '../storage/keys';
 import type { Storage } from '../storage/storage';
@@ -13,23 +13,11 @@ export interface LayerSource extends Pick<LayerImage, 'width' | 'height' | 'trim
 }
 
 const quality = 88;
-const largestEdge = Math.max(...derivativeEdges);
 const largestAtOnce = 2;
 
-async function makeFiles(path: string, { width, height, trim }: LayerSource): Promise<{ edge: DerivativeEdge; bytes: Buffer }[]> {
+async function makeFiles(path: string, { width, height, trim }: LayerSource): Promise<readonly Webp[]> {
   const picture = await openPicture(path);
-  const { data, info } = await picture
-    .extract({ left: trim.left, top: trim.top, width, height })
-    .resize(largestEdge, largestEdge, { fit: 'inside', withoutEnlargement: true })
-    .raw()
-    .toBuffer({ resolveWithObject: true });
-  const raw = { width: info.width, height: info.height, channels: info.channels };
-  const files = [];
-  for (const edge of edgesFor(width, height)) {
-    const fitted = sharp(data, { raw }).resize(edge, edge, { fit: 'inside', withoutEnlargement: true });
-    files.push({ edge, bytes: await fitted.webp({ quality, alphaQuality: 100 }).toBuffer() });
-  }
-  return files;
+  return (await webpsOf(picture.extract({ left: trim.left, top: trim.top, width, height }), quality)).files;
 }
 
 /** Makes the files of layers, all of a layer at once. Several who ask at the same moment wait for the same making. */

@@ -2,6 +2,7 @@ import { isDeepStrictEqual } from 'node:util';
 import type { Scene, SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { Database } from '../database/database';
 import { mustWrite } from '../database/revisions';
+import type { ActingMember } from '../http/acting-member';
 import { notFound } from '../http/failure';
 import { findPhotos, type PhotoRow } from '../photos/photo-queries';
 import { titleFrom, titleOfCopy } from '../pictures/file-name';
@@ -14,11 +15,6 @@ import { withOwnImages } from './own-images';
 import { inBin, photosNotHere } from './refusals';
 import { findScene, holdScene, scenesOf, toScene, type SceneRow } from './scene-queries';
 import { startingDocument } from './starting-document';
-
-interface Asker {
-  readonly householdId: string;
-  readonly accountId: string;
-}
 
 const asLayer = (photo: PhotoRow): PhotoOfLayer => ({
   sha256: photo.sha256,
@@ -35,7 +31,7 @@ async function open(db: Database, id: string): Promise<SceneRow> {
   return row;
 }
 
-async function insert(db: Database, document: SceneDocument, { householdId, accountId }: Asker): Promise<Scene> {
+async function insert(db: Database, document: SceneDocument, { householdId, accountId }: ActingMember): Promise<Scene> {
   const { id } = await db
     .insertInto('scene')
     .values({ household_id: householdId, document: JSON.stringify(document), saved_by: accountId })
@@ -93,7 +89,7 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
     read: async (id: string): Promise<Scene> => toScene(await open(db, id)),
 
     /** @throws photo-not-here (422), nothing-opaque (422). */
-    async create(name: string | undefined, photoIds: readonly string[], asker: Asker): Promise<Scene> {
+    async create(name: string | undefined, photoIds: readonly string[], asker: ActingMember): Promise<Scene> {
       const photos = await photosIn(db, asker.householdId, photoIds);
       const layers: NamedImage[] = [];
       for (const photo of photos) layers.push(await images.fromPhoto(asker.householdId, asLayer(photo)));
@@ -102,20 +98,20 @@ export function sceneService(db: Database, storage: Storage, files: LayerFiles) 
     },
 
     /** @throws image-not-here (422). */
-    add: async (document: SceneDocument, asker: Asker): Promise<Scene> =>
+    add: async (document: SceneDocument, asker: ActingMember): Promise<Scene> =>
       insert(db, await withOwnImages(db, asker.householdId, document), asker),
 
     /**
      * Saves over the newest revision and no other. A save whose answer was lost, sent again, is answered as it was the first time.
      * @throws revision-moved (409), image-not-here (422), in-bin (404).
      */
-    async save(id: string, revision: number, given: SceneDocument, { householdId, accountId }: Asker): Promise<Scene> {
+    async save(id: string, revision: number, given: SceneDocument, { householdId, accountId }: ActingMember): Promise<Scene> {
       await write(db, id, revision, await withOwnImages(db, householdId, given), accountId);
       return toScene(await open(db, id));
     },
 
     /** A copy of the scene, or of the document given in its stead: how an edit that came too late is kept. */
-    async duplicate(id: string, given: SceneDocument | undefined, asker: Asker): Promise<Scene> {
+    async duplicate(id: string, given: SceneDocument | undefined, asker: ActingMember): Promise<Scene> {
       const document = given ? await withOwnImages(db, asker.householdId, given) : (await open(db, id)).document;
       return insert(db, { ...document, name: titleOfCopy(document.name) }, asker);
     },

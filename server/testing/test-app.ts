@@ -16,7 +16,7 @@ import { addMember, createHousehold } from '../households/household-store';
 import { usualLimits, type LimitSettings } from '../http/limits';
 import { startJobs } from '../jobs/jobs';
 import { createMailer, type Mail, type Mailer } from '../mail/mailer';
-import { assemble, type Given, type Parts } from '../parts';
+import { assemble, type Chosen, type Given, type Parts } from '../parts';
 import { folderStorage } from '../storage/folder-storage';
 import { startWork } from '../work';
 import { Browser } from './browser';
@@ -57,7 +57,7 @@ const noLimits = Object.fromEntries(
   Object.keys(usualLimits).map((name) => [name, manyTries]),
 ) as unknown as LimitSettings;
 
-interface Different extends Partial<Given> {
+interface Different extends Partial<Given>, Chosen {
   readonly environment?: Record<string, string>;
   /** Another server on the database and the storage folder of that one, which is to be closed after it. */
   readonly beside?: TestApp;

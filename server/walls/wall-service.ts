@@ -3,15 +3,11 @@ import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import type { Wall } from '@oriel/shared/contracts/walls';
 import type { Database } from '../database/database';
 import { mustWrite } from '../database/revisions';
+import type { ActingMember } from '../http/acting-member';
 import { notFound } from '../http/failure';
 import { sceneNotHere } from './refusals';
 import { announceWall } from './wall-changes';
 import { findWall, holdWall, setUpOf, toWall, wallsOf } from './wall-queries';
-
-interface Asker {
-  readonly householdId: string;
-  readonly accountId: string;
-}
 
 const columnsOf = ({ sceneId, ...setUp }: WallSetUp) => ({ set_up: JSON.stringify(setUp), scene_id: sceneId });
 
@@ -41,7 +37,7 @@ export function wallService(db: Database) {
     read,
 
     /** @throws scene-not-here (422) */
-    async create(setUp: WallSetUp, { householdId, accountId }: Asker): Promise<Wall> {
+    async create(setUp: WallSetUp, { householdId, accountId }: ActingMember): Promise<Wall> {
       const id = await db.transaction().execute(async (transaction) => {
         if (setUp.sceneId) await holdSceneOf(transaction, householdId, setUp.sceneId);
         const made = await transaction
@@ -59,7 +55,7 @@ export function wallService(db: Database) {
      * that shows a scene from the bin may go on doing so.
      * @throws revision-moved (409), scene-not-here (422).
      */
-    async save(id: string, revision: number, setUp: WallSetUp, { householdId, accountId }: Asker): Promise<Wall> {
+    async save(id: string, revision: number, setUp: WallSetUp, { householdId, accountId }: ActingMember): Promise<Wall> {
       await db.transaction().execute(async (transaction) => {
         const held = await holdWall(transaction, id);
         if (!held) throw notFound();

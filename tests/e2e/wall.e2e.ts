@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import { reportFromWall } from '@oriel/shared/contracts/walls';
+import { reportFromWall } from '@oriel/shared/contracts/wall-screen';
 import { expect, test } from './fixtures';
 import { Desk } from './walls/desk';
 import { hurried } from './walls/hurry';
