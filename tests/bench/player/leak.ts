@@ -63,6 +63,7 @@ async function shows(page: Page, renderer: Condition['renderer'], count: number)
 
 async function holding(page: Page, session: CDPSession, changes: number): Promise<Holding> {
   await pause(500);
+  await page.evaluate(() => (window as unknown as Probed).orielProbe.forget());
   // What finalizers let go is collected the second time.
   for (let time = 0; time < 2; time++) await session.send('HeapProfiler.collectGarbage');
   const { usedSize } = await session.send('Runtime.getHeapUsage');
