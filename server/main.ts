@@ -1,14 +1,13 @@
 import { createServer, type RequestListener } from 'node:http';
 import { createServer as createSecureServer } from 'node:https';
 import { join } from 'node:path';
-import { pino } from 'pino';
 import { createApp } from './app';
 import { readConfig, type Config } from './config';
 import { connect, migrate } from './database/database';
 import { loadDemo } from './demo/load-demo';
 import { listenForChanges } from './events/changes';
 import { stopGracefully } from './http/graceful-stop';
-import { plainError } from './http/log-requests';
+import { openLog } from './http/open-log';
 import { ownCertificate } from './http/own-certificate';
 import { startJobs } from './jobs/jobs';
 import { openPostOffice } from './mail/post-office';
@@ -19,7 +18,7 @@ import { startWork } from './work';
 const uploadMs = 30 * 60_000;
 
 const config = readConfig(process.env);
-const log = pino({ level: config.logLevel, serializers: { err: plainError } });
+const log = openLog(config.logLevel);
 const serverFor = async ({ https, tlsDir, storageDir }: Config, listener: RequestListener) =>
   https === 'off'
     ? createServer(listener)
