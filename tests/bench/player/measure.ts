@@ -1,5 +1,4 @@
 import type { CDPSession, Page } from '@playwright/test';
-import { setTimeout as pause } from 'node:timers/promises';
 import { FIRST_STEP } from '@oriel/shared/ladder/steps';
 import { rounded } from '../tracking/statistics';
 import { figuresOf, secondsOf, type Figures } from './figures';
@@ -47,14 +46,14 @@ export async function measure(stand: Stand, condition: Condition, settleSeconds:
     await page.goto(`${address}?draw=${renderer}`, { timeout: readyWithinMs });
     await shown(page, kind, renderer, layers);
     if (tracking === 'on') await page.waitForFunction(() => (window as unknown as Probed).orielProbe.seen.looks.some(([, , found]) => found), null, { timeout: readyWithinMs, polling: 250 });
-    while (Date.now() - lastPictureMs < quietMs) await pause(100);
+    while (Date.now() - lastPictureMs < quietMs) await page.waitForTimeout(100);
     const readyS = (Date.now() - askedMs) / 1000;
-    await pause(settleSeconds * 1000);
+    await page.waitForTimeout(settleSeconds * 1000);
 
     const processes = await browser.newBrowserCDPSession();
     const begun = await processorSeconds(processes);
     const fromMs = await page.evaluate(() => performance.now());
-    await pause(seconds * 1000);
+    await page.waitForTimeout(seconds * 1000);
     const ended = await processorSeconds(processes);
     const [untilMs, seen] = await page.evaluate((): [number, Seen] => [performance.now(), (window as unknown as Probed).orielProbe.seen]);
 

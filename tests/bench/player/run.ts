@@ -21,10 +21,16 @@ async function main(): Promise<void> {
   const stand = await Stand.build(say);
   const results: Result[] = [];
   const leaks: LeakResult[] = [];
+  let goesOn = true;
+  for (const signal of ['SIGINT', 'SIGTERM'] as const)
+    process.once(signal, () => {
+      goesOn = false;
+      void stand.breakOff();
+    });
   try {
     if (possible.length > 0) say(tableHead());
-    for (const condition of possible) results.push(await one(stand, condition, settleSeconds, seconds, trace));
-    for (const renderer of changes > 0 ? (['css', 'three'] as const) : []) leaks.push(await changeScenes(stand, renderer, changes, say));
+    for (const condition of possible) if (goesOn) results.push(await one(stand, condition, settleSeconds, seconds, trace));
+    for (const renderer of goesOn && changes > 0 ? (['css', 'three'] as const) : []) leaks.push(await changeScenes(stand, renderer, changes, say));
   } finally {
     await stand.end();
   }

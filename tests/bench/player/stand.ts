@@ -27,6 +27,9 @@ const swayFrames = 90;
 const poses: FacePose[] = Array.from({ length: swayFrames }, (_, i) => ({ segment: 'sway', on: true, x: 640 + 240 * Math.sin((2 * Math.PI * i) / swayFrames), y: 340, ipd: 58, rollDeg: 0 }));
 const fieldDegrees = 60;
 
+/** Playwright's own answer to a signal is to leave at once, and everything else behind. */
+const launched = { executablePath: chromiumPath, ignoreDefaultArgs: ignoredDefaults, handleSIGINT: false, handleSIGTERM: false, handleSIGHUP: false };
+
 /** What a screen's browser is to have. */
 export interface Screen {
   readonly size: SizeName;
@@ -37,6 +40,8 @@ export interface Screen {
 
 /** The built product with a wall that is paired, scenes for it, and browsers to be its screen. Everything it starts it ends. */
 export class Stand {
+  private screen: Browser | null = null;
+
   private constructor(
     private readonly product: Awaited<ReturnType<typeof startProduct>>,
     private readonly folder: string,
@@ -55,7 +60,7 @@ export class Stand {
     say('starting the product');
     const product = await startProduct();
     const folder = await mkdtemp(join(tmpdir(), 'oriel-bench-player-'));
-    const browser = await chromium.launch({ executablePath: chromiumPath, args: chromiumArguments('software', null), ignoreDefaultArgs: ignoredDefaults });
+    const browser = await chromium.launch({ ...launched, args: chromiumArguments('software', null) });
     try {
       const context = await browser.newContext({ baseURL: product.url, locale: 'en-GB' });
       const page = await context.newPage();
@@ -91,11 +96,12 @@ export class Stand {
     const [width, height] = SIZES[size];
     try {
       const browser = await chromium.launch({
+        ...launched,
         executablePath: quota?.starter(chromiumPath, this.folder) ?? chromiumPath,
         args: [...args, `--window-size=${String(width)},${String(height)}`],
-        ignoreDefaultArgs: ignoredDefaults,
         timeout: 60_000,
       });
+      this.screen = browser;
       try {
         const options: BrowserContextOptions = {
           baseURL: this.product.url,
@@ -109,11 +115,17 @@ export class Stand {
         await context.addInitScript({ content: this.probe });
         return await use(browser, context);
       } finally {
+        this.screen = null;
         await browser.close();
       }
     } finally {
       await quota?.end();
     }
+  }
+
+  /** Breaks off what is being measured: whatever waits for its page fails. */
+  async breakOff(): Promise<void> {
+    await this.screen?.close();
   }
 
   async end(): Promise<void> {
