@@ -1,6 +1,5 @@
 import { LiveAnnouncer } from '@angular/cdk/a11y';
-import type { ElementRef} from '@angular/core';
-import { ChangeDetectionStrategy, Component, DestroyRef, type TemplateRef, computed, effect, inject, input, signal, untracked, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DestroyRef, type ElementRef, type TemplateRef, computed, effect, inject, input, signal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import { MatSnackBar } from '@angular/material/snack-bar';
@@ -9,9 +8,11 @@ import { Router, RouterLink } from '@angular/router';
 import { toApiFailure } from '../core/api-failure';
 import { FailureNotice } from '../core/failure-notice';
 import { Icon } from '../core/icon/icon';
+import { newId } from '../core/new-id';
 import { Crumb } from '../shell/crumb';
 import { PageBar } from '../shell/page-bar';
-import { AddLayersDialog, type AddLayersTo, type NewLayer } from './adding/add-layers-dialog';
+import { AddLayersDialog, type AddLayersTo } from './adding/add-layers-dialog';
+import type { NewLayer } from './adding/layer-source';
 import { MOST_LAYERS, addLayer } from './commands/stack-commands';
 import { keyCommand } from './key-commands';
 import { Ledger } from './ledger/ledger';
@@ -144,7 +145,7 @@ export class Composer {
 
   private takeUp(layers: readonly NewLayer[]): void {
     if (layers.length === 0) return;
-    const made = layers.map((layer) => ({ id: crypto.randomUUID(), ...layer }));
+    const made = layers.map((layer) => ({ id: newId(), ...layer }));
     this.store.edit((document) => made.reduce((scene, { id, name, image }) => addLayer(id, name, image)(scene), document));
     this.store.select(made[made.length - 1].id);
   }

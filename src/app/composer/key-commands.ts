@@ -1,3 +1,4 @@
+import { newId } from '../core/new-id';
 import { place, setDepth } from './commands/layer-commands';
 import { duplicateLayer, removeLayer } from './commands/stack-commands';
 import type { SceneStore } from './scene-store';
@@ -24,7 +25,7 @@ function withControl(event: KeyboardEvent, store: SceneStore): KeyCommand | null
   if (key === 'z') return { act: () => store.undo(), says: store.canUndo() ? 'Undone' : 'Nothing to undo' };
   const selected = store.selected()?.layer;
   if (key !== 'd' || !selected) return null;
-  const copyId = crypto.randomUUID();
+  const copyId = newId();
   const act = () => {
     store.edit(duplicateLayer(selected.id, copyId));
     store.select(copyId);

@@ -1,4 +1,4 @@
 let given = 0;
 
-/** An id that no other element of this page has. */
+/** An id that nothing else on this page has. */
 export const ownId = (kind: string): string => `${kind}-${(given += 1)}`;

@@ -1,4 +1,4 @@
-import type { Point3 } from '@oriel/shared/projection/types';
+import type { Point3, ViewingZone } from '@oriel/shared/projection/types';
 
 /** A true minus sign: as wide as a plus, so columns of figures stay in line. */
 const MINUS = '\u2212';
@@ -42,3 +42,13 @@ export function describeEye({ x, y, z }: Point3): string {
     Math.round(value) === 0 ? [] : [`${Math.abs(Math.round(value))} mm ${value > 0 ? positive : negative}`];
   return [...side(x, 'right', 'left'), ...side(y, 'up', 'down'), `${Math.round(z)} mm away`].join(', ');
 }
+
+/** What the sides of a viewing zone are called where they are typed. */
+export const zoneSideWords: Readonly<Record<keyof ViewingZone, string>> = {
+  leftMm: 'Left end',
+  rightMm: 'Right end',
+  lowestMm: 'Lowest eye',
+  highestMm: 'Highest eye',
+  nearestMm: 'Nearest',
+  farthestMm: 'Farthest',
+};

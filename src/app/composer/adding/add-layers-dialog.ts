@@ -1,18 +1,11 @@
-import type { ElementRef} from '@angular/core';
-import { ChangeDetectionStrategy, Component, computed, inject, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, computed, inject, signal, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogRef, MatDialogTitle } from '@angular/material/dialog';
 import { MatProgressBar } from '@angular/material/progress-bar';
-import type { LayerImage } from '@oriel/shared/contracts/scenes';
 import { FailureNotice } from '../../core/failure-notice';
 import { Icon } from '../../core/icon/icon';
-import { LayerSource, type Waiting } from './layer-source';
+import { LayerSource, type NewLayer, type Waiting } from './layer-source';
 import { PhotoPicker } from './photo-picker';
-
-export interface NewLayer {
-  readonly name: string;
-  readonly image: LayerImage;
-}
 
 export interface AddLayersTo {
   readonly sceneId: string;
@@ -66,8 +59,7 @@ export class AddLayersDialog {
   /** Closes with what came; where some did not, stays open and says which, keeping the rest. */
   private async bring(coming: Promise<void>): Promise<void> {
     await coming;
-    const layers = this.waiting().flatMap(({ layer }) => (layer ? [layer] : []));
-    if (this.failed().length === 0) this.dialog.close(layers);
+    if (this.failed().length === 0) this.finish();
   }
 
   protected finish(): void {

@@ -1,8 +1,13 @@
 import { Injectable, inject, signal } from '@angular/core';
-import { layerImageFromPhoto, uploadLayerImage } from '@oriel/shared/contracts/scenes';
+import { type LayerImage, layerImageFromPhoto, uploadLayerImage } from '@oriel/shared/contracts/scenes';
 import { Api } from '../../core/api';
 import { type ApiFailure, toApiFailure } from '../../core/api-failure';
-import type { NewLayer } from './add-layers-dialog';
+import { ownId } from '../../core/own-id';
+
+export interface NewLayer {
+  readonly name: string;
+  readonly image: LayerImage;
+}
 
 /** A photo or file on its way to becoming a layer. */
 export interface Waiting {
@@ -13,8 +18,6 @@ export interface Waiting {
   readonly layer: NewLayer | null;
   readonly failure: ApiFailure | null;
 }
-
-let keys = 0;
 
 /** Asks the server to make layer images, one after another so that their order is kept. */
 @Injectable()
@@ -62,7 +65,7 @@ export class LayerSource {
 }
 
 const going = (name: string, from: Waiting['from']): Waiting => ({
-  key: `layer ${(keys += 1)}`,
+  key: ownId('layer'),
   name,
   from,
   state: 'going',

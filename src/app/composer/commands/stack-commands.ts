@@ -1,5 +1,5 @@
 import { beginningOf } from '@oriel/shared/contracts/beginning-of';
-import type { Layer, LayerImage, SceneDocument } from '@oriel/shared/contracts/scenes';
+import type { Layer, LayerImage } from '@oriel/shared/contracts/scenes';
 import { placeTrimmed } from '@oriel/shared/projection/cover-glass';
 import type { Change } from './change';
 
@@ -36,12 +36,7 @@ export const duplicateLayer =
 export const removeLayer =
   (id: string): Change =>
   (document) =>
-    without(document, id);
-
-const without = (document: SceneDocument, id: string): SceneDocument =>
-  document.layers.some((layer) => layer.id === id)
-    ? { ...document, layers: document.layers.filter((layer) => layer.id !== id) }
-    : document;
+    document.layers.some((layer) => layer.id === id) ? { ...document, layers: document.layers.filter((layer) => layer.id !== id) } : document;
 
 /** Moves a layer by `by` places in the ledger; the later stands before the earlier where depths are equal. */
 export const reorderLayer =

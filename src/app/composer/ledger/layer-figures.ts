@@ -3,6 +3,7 @@ import { MatIconButton } from '@angular/material/button';
 import { MatTooltip } from '@angular/material/tooltip';
 import { shiftInPixels, shiftOverZone } from '@oriel/shared/projection/zone-shift';
 import { Icon } from '../../core/icon/icon';
+import { newId } from '../../core/new-id';
 import { Term } from '../../core/term/term';
 import { hideLayer, place, renameLayer, setOpacity, setWidth, showLayer } from '../commands/layer-commands';
 import { duplicateLayer, removeLayer, reorderLayer } from '../commands/stack-commands';
@@ -70,7 +71,7 @@ export class LayerFigures {
   }
 
   protected duplicate(): void {
-    const copyId = crypto.randomUUID();
+    const copyId = newId();
     this.store.edit(duplicateLayer(this.id(), copyId));
     this.store.select(copyId);
   }

@@ -9,18 +9,12 @@ import { creditScene, renameScene, scaleToGlass, setGlass, setHomeEye, setZone }
 import { meanings } from '../meanings';
 import { SceneStore } from '../scene-store';
 import { FigureField } from '../../figures/figure-field';
+import { zoneSideWords } from '../../figures/words';
 import { Viewer } from '../walk/viewer';
 import { GlassDialog } from './glass-dialog';
 import { RoomFigures } from './room-figures';
 
-const ZONE_LABELS: readonly { readonly side: keyof ViewingZone; readonly label: string }[] = [
-  { side: 'leftMm', label: 'Left end' },
-  { side: 'rightMm', label: 'Right end' },
-  { side: 'lowestMm', label: 'Lowest eye' },
-  { side: 'highestMm', label: 'Highest eye' },
-  { side: 'nearestMm', label: 'Nearest' },
-  { side: 'farthestMm', label: 'Farthest' },
-];
+const zoneSides = ['leftMm', 'rightMm', 'lowestMm', 'highestMm', 'nearestMm', 'farthestMm'] as const;
 
 /** The figures of the room a scene is drawn for: its name, glass, home eye and viewing zone. */
 @Component({
@@ -37,7 +31,8 @@ export class RoomForm {
   private readonly dialog = inject(MatDialog);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
   protected readonly meanings = meanings;
-  protected readonly zoneLabels = ZONE_LABELS;
+  protected readonly zoneSides = zoneSides;
+  protected readonly sideWords = zoneSideWords;
   protected readonly eyeLimits = computed(() => eyeLimits(this.store.document()));
 
   constructor() {

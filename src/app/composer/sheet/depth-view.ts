@@ -1,5 +1,4 @@
-import type { ElementRef} from '@angular/core';
-import { ChangeDetectionStrategy, Component, computed, inject, input, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, computed, inject, input, signal, viewChild } from '@angular/core';
 import type { Point2 } from '@oriel/shared/projection/types';
 import { clamp, depthLimits, eyeLimits } from '../commands/limits';
 import { setDepth } from '../commands/layer-commands';

@@ -1,5 +1,4 @@
-import type { ElementRef} from '@angular/core';
-import { ChangeDetectionStrategy, Component, effect, inject, input, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, effect, inject, input, signal, viewChild } from '@angular/core';
 import { MatIconButton } from '@angular/material/button';
 import { Icon } from '../../core/icon/icon';
 import { WalkPast } from '../walk/walk-past';

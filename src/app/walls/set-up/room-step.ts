@@ -1,16 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import type { ViewingZone } from '@oriel/shared/projection/types';
 import { FigureField } from '../../figures/figure-field';
+import { zoneSideWords } from '../../figures/words';
 import { WallKeeper } from './wall-keeper';
 
-const sides: readonly { readonly side: keyof ViewingZone; readonly label: string }[] = [
-  { side: 'nearestMm', label: 'Nearest' },
-  { side: 'farthestMm', label: 'Farthest' },
-  { side: 'leftMm', label: 'Left end' },
-  { side: 'rightMm', label: 'Right end' },
-  { side: 'lowestMm', label: 'Lowest eye' },
-  { side: 'highestMm', label: 'Highest eye' },
-];
+const sides = ['nearestMm', 'farthestMm', 'leftMm', 'rightMm', 'lowestMm', 'highestMm'] as const;
 /** An eye stands before the glass. */
 const nearestEyeMm = 100;
 const mostMm = 100_000;
@@ -27,15 +21,15 @@ const mostMm = 100_000;
         From the centre of the glass: left and lower are negative. Drag a side of the zone in the plan or the section, or type it. An eye is about 120 mm
         below the top of a head.
       </p>
-      @for (one of sides; track one.side) {
+      @for (side of sides; track side) {
         <oriel-figure-field
-          [label]="one.label"
+          [label]="words[side]"
           [step]="10"
-          [value]="zone[one.side]"
-          [least]="one.side === 'nearestMm' || one.side === 'farthestMm' ? nearest : -most"
+          [value]="zone[side]"
+          [least]="side === 'nearestMm' || side === 'farthestMm' ? nearest : -most"
           [most]="most"
           [readOnly]="!keeper.mayTune()"
-          (figure)="keeper.zone(part(one.side, $event))"
+          (figure)="keeper.zone(part(side, $event))"
         />
       }
       @for (problem of problems(); track problem) {
@@ -54,6 +48,7 @@ const mostMm = 100_000;
 export class RoomStep {
   protected readonly keeper = inject(WallKeeper);
   protected readonly sides = sides;
+  protected readonly words = zoneSideWords;
   protected readonly nearest = nearestEyeMm;
   protected readonly most = mostMm;
   protected readonly part = (side: keyof ViewingZone, mm: number): Partial<ViewingZone> => ({ [side]: mm });
