@@ -95,14 +95,7 @@ export function createInvitations(db: Database, mailer: Mailer, passwords: Passw
       if (!(await byToken(token))) throw spent();
       const passwordHash = holder && !signedInId ? await passwords.hash(holder.password) : null;
       const { email, ...joined } = await db.transaction().execute(async (change) => {
-        const invitation = await change
-          .deleteFrom('invitation')
-          .where('token_hash', '=', hashOfToken(token))
-          .where('expires_at', '>', new Date())
-          .returning(['household_id', 'email', 'role'])
-          .executeTakeFirst();
-        if (!invitation) throw spent();
-
+        const invitation = await spend(change, token);
         const accountId = signedInId
           ? await holdToAddress(change, signedInId, invitation.email)
           : await makeAccount(change, invitation.email, holder?.name, passwordHash);
@@ -113,6 +106,18 @@ export function createInvitations(db: Database, mailer: Mailer, passwords: Passw
       return joined;
     },
   };
+}
+
+/** Takes the invitation out of the world, so that it works once. @throws link-spent */
+async function spend(db: Database, token: string) {
+  const invitation = await db
+    .deleteFrom('invitation')
+    .where('token_hash', '=', hashOfToken(token))
+    .where('expires_at', '>', new Date())
+    .returning(['household_id', 'email', 'role'])
+    .executeTakeFirst();
+  if (!invitation) throw spent();
+  return invitation;
 }
 
 async function holdToAddress(db: Database, accountId: string, email: string): Promise<string> {

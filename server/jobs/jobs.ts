@@ -48,20 +48,6 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
   );
 
   const workers = new Map<string, string[]>();
-  const givenUp = (job: Job) => `${job.name}-given-up`;
-
-  async function makeQueue(name: string, job: Job, deadLetter?: string): Promise<void> {
-    const options = {
-      name,
-      retryLimit: job.retries,
-      retryDelay: retryDelayS,
-      expireInSeconds: job.expiresAfterS,
-      ...(deadLetter ? { deadLetter } : {}),
-    };
-    await boss.createQueue(name, options);
-    await boss.updateQueue(name, options);
-  }
-
   async function startWorkers<J extends Job>(
     name: string,
     job: J,
@@ -100,8 +86,8 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
     },
 
     async work(job, { run, giveUp }) {
-      await makeQueue(givenUp(job), job);
-      await makeQueue(job.name, job, givenUp(job));
+      await makeQueue(boss, givenUp(job), job);
+      await makeQueue(boss, job.name, job, givenUp(job));
       await startWorkers(job.name, job, run);
       if (giveUp) await startWorkers(givenUp(job), { ...job, atOnce: 1 }, giveUp);
     },
@@ -113,6 +99,21 @@ export async function startJobs(databaseUrl: string, log: Logger): Promise<Jobs>
       await presence.leave();
     },
   };
+}
+
+const givenUp = (job: Job) => `${job.name}-given-up`;
+
+/** Makes a queue, or brings the settings of an older one up to date. */
+async function makeQueue(boss: PgBoss, name: string, job: Job, deadLetter?: string): Promise<void> {
+  const options = {
+    name,
+    retryLimit: job.retries,
+    retryDelay: retryDelayS,
+    expireInSeconds: job.expiresAfterS,
+    ...(deadLetter ? { deadLetter } : {}),
+  };
+  await boss.createQueue(name, options);
+  await boss.updateQueue(name, options);
 }
 
 /** Hands jobs that a killed server left under way to another try; where other servers are at work, only their expiry tells. */

@@ -2,7 +2,7 @@ import * as z from 'zod';
 import { defineJob } from './job';
 
 /** How long the bin keeps what is thrown into it, days. */
-export const binDays = 30;
+const binDays = 30;
 
 export const binnedBefore = (now: Date): Date => new Date(now.getTime() - binDays * 24 * 3600 * 1000);
 

@@ -20,7 +20,7 @@ const problem =
   'The smaller versions could not be made: the file is damaged inside, or needs more memory than this server has. Upload it again, or save it anew as JPEG.';
 
 /** Makes the derivatives of one photo. May run twice for the same photo: the second finds nothing to do, or writes the same again. */
-export async function deriveFrom(db: Database, storage: Storage, photoId: string): Promise<void> {
+async function deriveFrom(db: Database, storage: Storage, photoId: string): Promise<void> {
   const photo = await db.selectFrom('photo').select(['sha256', 'state']).where('id', '=', photoId).executeTakeFirst();
   if (!photo || photo.state === 'ready') return;
   const made = await storage.withFile(originalKey(photo.sha256), makeDerivatives);

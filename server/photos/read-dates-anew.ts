@@ -11,7 +11,7 @@ const job = defineJob({ name: 'photo-dates', data: z.object({}), retries: 3, exp
 const milestone = 'photo dates by the clock of the camera';
 
 /** Reads from every original again when it was taken. Photos whose file does not say keep the date they have. */
-export async function readDatesAnew(db: Database, storage: Storage): Promise<void> {
+async function readDatesAnew(db: Database, storage: Storage): Promise<void> {
   const photos = await db.selectFrom('photo').select(['id', 'sha256', 'taken_at']).execute();
   for (const { id, sha256, taken_at } of photos) {
     // Purged meanwhile, or unreadable: the date stays.

@@ -110,23 +110,6 @@ export async function createTestApp({ environment, beside, ...given }: Different
   await startWork(parts);
   const app = createApp(parts);
 
-  let made = 0;
-  const account = async (name = 'Test person'): Promise<TestAccount> => {
-    const email = `person${++made}@example.org`;
-    const id = await createAccount(db, { email, name, passwordHash: await parts.passwords.hash(testPassword) });
-    return { id: id!, email };
-  };
-  const household = async (name = 'Test household') => {
-    const ownerId = (await account('Owner')).id;
-    return { id: await createHousehold(db, name, ownerId), ownerId };
-  };
-  const signIn = async (email: string) => {
-    const browser = new Browser(app.express);
-    const answer = await browser.ask('post', '/api/session', { email, password: testPassword });
-    if (answer.status !== 200) throw new Error(`could not sign in: ${answer.text}`);
-    return browser;
-  };
-
   return {
     ...app,
     db,
@@ -136,15 +119,7 @@ export async function createTestApp({ environment, beside, ...given }: Different
       await parts.mailer.settled();
       return mails.filter((mail) => mail.to === email);
     },
-    browser: () => new Browser(app.express),
-    account,
-    household,
-    signIn,
-    signedIn: async (role, householdId) => {
-      const person = await account();
-      if (role) await addMember(db, householdId ?? (await household()).id, person.id, role);
-      return { ...person, browser: await signIn(person.email) };
-    },
+    ...people(app.express, parts),
     close: async () => {
       await parts.mailer.settled();
       parts.eventStreams.endAll();
@@ -155,4 +130,31 @@ export async function createTestApp({ environment, beside, ...given }: Different
       await rm(folder, { recursive: true, force: true });
     },
   };
+}
+
+/** Makes accounts, households and their members, and signs them in. */
+function people(express: Express, { connection: { db }, passwords }: Parts): Pick<TestApp, 'browser' | 'account' | 'household' | 'signIn' | 'signedIn'> {
+  let made = 0;
+  const browser = () => new Browser(express);
+  const account = async (name = 'Test person'): Promise<TestAccount> => {
+    const email = `person${++made}@example.org`;
+    const id = await createAccount(db, { email, name, passwordHash: await passwords.hash(testPassword) });
+    return { id: id!, email };
+  };
+  const household = async (name = 'Test household') => {
+    const ownerId = (await account('Owner')).id;
+    return { id: await createHousehold(db, name, ownerId), ownerId };
+  };
+  const signIn = async (email: string) => {
+    const own = browser();
+    const answer = await own.ask('post', '/api/session', { email, password: testPassword });
+    if (answer.status !== 200) throw new Error(`could not sign in: ${answer.text}`);
+    return own;
+  };
+  const signedIn = async (role: Role | null, householdId?: string): Promise<SignedIn> => {
+    const person = await account();
+    if (role) await addMember(db, householdId ?? (await household()).id, person.id, role);
+    return { ...person, browser: await signIn(person.email) };
+  };
+  return { browser, account, household, signIn, signedIn };
 }

@@ -12,7 +12,7 @@ export interface DrawingStep {
  * Every refresh of the screen; otherwise a half, a third or a quarter of 60. A machine asked for more frames than it can compose gives them
  * late and unevenly, and takes the time from tracking.
  */
-export const DRAWING_STEPS: readonly DrawingStep[] = [
+const DRAWING_STEPS: readonly DrawingStep[] = [
   { mostPerS: Infinity, poorPerS: 45, patienceS: 4 },
   { mostPerS: 30, poorPerS: 25, patienceS: 8 },
   { mostPerS: 20, poorPerS: 18, patienceS: 8 },

@@ -6,7 +6,7 @@ import { perSide, SIDE_AXIS, sideOf, sideOfGlass, SIDES, type PerSide, type Side
 import type { Glass, Point3, Rectangle, ViewingZone } from './types';
 
 /** A side this close to the edge of the glass, or past it, is meant to run off the picture; mm on the glass. */
-export const REACH_MM = 0.5;
+const REACH_MM = 0.5;
 
 /** The bleed of one side of a layer. */
 export interface SideBleed {

@@ -30,7 +30,7 @@ export async function testFace(): Promise<FlatFace> {
 }
 
 /** What is true of every frame, in the form `npm run bench:tracking` reads. */
-export function truthOf(face: FlatFace, poses: readonly FacePose[], size: VideoSize): object {
+function truthOf(face: FlatFace, poses: readonly FacePose[], size: VideoSize): object {
   const frames = poses.map((pose, i) => ({
     i,
     seg: pose.segment,

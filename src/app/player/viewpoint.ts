@@ -18,7 +18,7 @@ export interface Following {
   readonly displayDelayMs: number;
 }
 
-export const usualFollowing: Following = { settings: {}, displayDelayMs: 0 };
+const usualFollowing: Following = { settings: {}, displayDelayMs: 0 };
 
 /**
  * Whose eye the picture is drawn for: a face, the hand in its place, or nobody. Both are sent through one follower, so that handing over,

@@ -1,7 +1,7 @@
 import * as z from 'zod';
 import { nominalPxMm } from './screen-measure';
 
-export const cameraSides = ['above', 'below', 'left', 'right'] as const;
+const cameraSides = ['above', 'below', 'left', 'right'] as const;
 export type CameraSide = (typeof cameraSides)[number];
 
 const mm = (least: number, most: number) => z.number().min(least, `At least ${least} mm`).max(most, `At most ${most} mm`);

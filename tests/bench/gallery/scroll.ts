@@ -14,7 +14,7 @@ interface Place {
 const place = (page: Page): Promise<Place> =>
   page.locator('oriel-contact-sheet .scroller').evaluate(({ scrollTop, clientHeight, scrollHeight }) => ({ topPx: scrollTop, viewPx: clientHeight, heightPx: scrollHeight }));
 
-export const atEnd = ({ topPx, viewPx, heightPx }: Place): boolean => topPx + viewPx >= heightPx - 2;
+const atEnd = ({ topPx, viewPx, heightPx }: Place): boolean => topPx + viewPx >= heightPx - 2;
 
 export const toTop = (page: Page): Promise<void> => page.locator('oriel-contact-sheet .scroller').evaluate((scroller) => scroller.scrollTo(0, 0));
 

@@ -1,7 +1,7 @@
 export const mean = (values: readonly number[]): number =>
   values.reduce((sum, value) => sum + value, 0) / values.length;
 
-export function squaredDeviations(values: readonly number[]): number[] {
+function squaredDeviations(values: readonly number[]): number[] {
   const centre = mean(values);
   return values.map((value) => (value - centre) ** 2);
 }

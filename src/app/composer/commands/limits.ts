@@ -4,7 +4,7 @@ import { EYE_MARGIN_MM } from '@oriel/shared/projection/clearance';
 /** The largest figure a scene stores, mm (as the contract has it). */
 const FARTHEST_MM = 100_000;
 /** The least size of a layer or a glass that can still be taken hold of, mm. */
-export const LEAST_SIZE_MM = 1;
+const LEAST_SIZE_MM = 1;
 
 export interface Range {
   readonly least: number;

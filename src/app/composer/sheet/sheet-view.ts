@@ -5,8 +5,8 @@ import { extentsOf } from './extents';
 import type { Room } from '../../drawing/frames';
 import { type Extents, enlarge, layOutPanes, layOutSheet } from './sheet-layout';
 
-export const LARGEST = 12;
-export const SMALLEST = 0.5;
+const LARGEST = 12;
+const SMALLEST = 0.5;
 const STEP = 1.25;
 const nowhere: Point2 = { x: 0, y: 0 };
 
