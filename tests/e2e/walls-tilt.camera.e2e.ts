@@ -1,7 +1,7 @@
 import { rayOfPixel } from '../../shared/viewer/camera';
 import type { FacePose } from '../video/face-path';
 import { expect, test } from './fixtures';
-import { figureOf, hang, step, type } from './walls/set-up';
+import { figureOf, hang, step, type, unfold } from './walls/set-up';
 
 /** Someone who stands still, a little left of the middle of the picture and above it. */
 const pose: FacePose = { segment: 'stands', on: true, x: 290, y: 215, ipd: 50, rollDeg: 0 };
@@ -16,6 +16,7 @@ test('the camera’s tilt is measured by standing at a marked spot', async ({ si
   await hang(page);
   await step(page, 'Camera').click();
   const lens = { x: 0, y: 279.5, z: 0 };
+  await unfold(page, 'To the millimetre');
   expect(await figureOf(page, 'Above the centre')).toBe(lens.y);
   const camera = { position: lens, pitchRad: radians(truth.pitchDegrees), yawRad: radians(truth.yawDegrees), rollRad: 0, hfovRad: Math.PI / 3, mirrored: false, widthPx: 640, heightPx: 480 };
   const ray = rayOfPixel(camera, pose.x, pose.y);
@@ -25,8 +26,12 @@ test('the camera’s tilt is measured by standing at a marked spot', async ({ si
   await type(page, 'Right of its centre', String((lens.x + (700 * ray.x) / ray.z).toFixed(1)));
   await type(page, 'Eyes above its centre', String((lens.y + (700 * ray.y) / ray.z).toFixed(1)));
   await page.getByRole('button', { name: 'Start, and walk to the spot' }).click();
+  await expect(page.getByText('You are seen. Stand still and look at the glass.')).toBeVisible({ timeout: 60_000 });
+  await expect(page.getByText(/^\d+ readings$/)).toBeVisible();
+  await expect(page.getByText(/^Done, \d+ readings. You may move.$/)).toBeVisible({ timeout: 20_000 });
   await expect(page.getByText(/^Turned [\d.]+° down \(±[\d.]+°\) and [\d.]+° to the right \(±[\d.]+°\)\.$/)).toBeVisible({ timeout: 60_000 });
   await page.getByRole('button', { name: 'Take it' }).click();
+  await unfold(page, 'Turned sideways, rolled, how sure');
   const sure = await figureOf(page, 'The turn is sure to within ±');
   expect(sure).toBeLessThan(3);
   expect(Math.abs((await figureOf(page, 'Up (down is negative)')) - truth.pitchDegrees)).toBeLessThan(sure);

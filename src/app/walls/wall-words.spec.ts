@@ -1,6 +1,6 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
 import type { Wall, WallReport } from '@oriel/shared/contracts/walls';
-import { reportLines, sayLong, stateOf } from './wall-words';
+import { describeChange, reportLines, sayLong, stateOf } from './wall-words';
 
 const now = new Date(2026, 2, 14, 17, 5);
 const ago = (ms: number) => new Date(now.getTime() - ms).toISOString();
@@ -52,5 +52,13 @@ describe('a wall in words', () => {
 
   it('says spans in their largest whole unit', () => {
     expect([59_999, 60_000, 3_599_999, 3_600_000, 86_400_000].map(sayLong)).toEqual(['59 seconds', '1 minute', '59 minutes', '1 hour', '1 day']);
+  });
+
+  it('tells only what changes of a zone', () => {
+    const zone = { leftMm: -700, rightMm: 700, lowestMm: -250, highestMm: 250, nearestMm: 1200, farthestMm: 3200 };
+    expect(describeChange(zone, { ...zone, nearestMm: 1430 })).toBe('begins 1.43 m away instead of 1.2 m');
+    expect(describeChange(zone, { ...zone, leftMm: -600, nearestMm: 1500, highestMm: 150 })).toBe(
+      'begins 1.5 m away instead of 1.2 m, is 1.3 m across instead of 1.4 m and is 0.4 m high instead of 0.5 m',
+    );
   });
 });

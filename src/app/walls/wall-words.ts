@@ -67,3 +67,17 @@ export function describeZone(zone: ViewingZone): string {
     `${end(zone.lowestMm, 'up', 'down')} to ${end(zone.highestMm, 'up', 'down')}`,
   ].join(', ');
 }
+
+/** What becomes of a zone, as far as it changes: "begins 1.4 m away instead of 1.2 m, and is 1.2 m across instead of 1.4 m". */
+export function describeChange(before: ViewingZone, after: ViewingZone): string {
+  const metres = (mm: number) => `${Number((mm / 1000).toFixed(2))} m`;
+  const across = (zone: ViewingZone) => zone.rightMm - zone.leftMm;
+  const high = (zone: ViewingZone) => zone.highestMm - zone.lowestMm;
+  const changes = [
+    { verb: 'begins', from: before.nearestMm, to: after.nearestMm, what: 'away' },
+    { verb: 'is', from: across(before), to: across(after), what: 'across' },
+    { verb: 'is', from: high(before), to: high(after), what: 'high' },
+  ].filter(({ from, to }) => from !== to);
+  const words = changes.map(({ verb, from, to, what }) => `${verb} ${metres(to)} ${what} instead of ${metres(from)}`);
+  return words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+}

@@ -42,7 +42,7 @@ import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './source
       @if (blind()) {
         <p class="blind">The camera does not see the middle of the viewing zone: turn it there, or move the zone.</p>
       }
-      <p class="marginal">Standard uncertainties: about one time in three it is more. Views in first angle, to scale.</p>
+      <p class="marginal">Standard uncertainties: about one time in three it is more.</p>
     </section>
   `,
   styleUrl: './uncertainty-block.scss',

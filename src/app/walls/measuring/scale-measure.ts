@@ -11,30 +11,19 @@ import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
+import { StandingView } from './standing-view';
 
 const factorLimits = limitsOf(TrackerTuning.shape.scaleFactor);
 
 /** A viewer's own scale from standing at the marked spot. Only with the wall's own camera on this computer. */
 @Component({
   selector: 'oriel-scale-measure',
-  imports: [MatButton, SpotFields],
+  imports: [MatButton, SpotFields, StandingView],
   providers: [FaceTracking, Standing],
   template: `
     <oriel-spot-fields />
     <p class="marginal">Measure the camera first: its field of view counts here as it is. Pictures are looked at on this page only, and not kept.</p>
-    <div class="row">
-      @if (standing.busy()) {
-        <button matButton="outlined" type="button" (click)="standing.stop()">Stop</button>
-      } @else {
-        <button matButton="outlined" type="button" (click)="measure()">Start, and walk to the spot</button>
-      }
-    </div>
-    <p class="live" role="status">
-      @if (standing.seconds(); as seconds) {
-        <span class="count figures" aria-hidden="true">{{ seconds }}</span>
-      }
-      {{ standing.words() }}
-    </p>
+    <oriel-standing-view (begin)="measure()" />
     @if (factor(); as k) {
       <p class="result figures" role="status">{{ words() }}</p>
       @if (possible()) {
@@ -50,7 +39,7 @@ const factorLimits = limitsOf(TrackerTuning.shape.scaleFactor);
 export class ScaleMeasure {
   private readonly keeper = inject(WallKeeper);
   private readonly spot = inject(MarkedSpot);
-  protected readonly standing = inject(Standing);
+  private readonly standing = inject(Standing);
   /** Ranges from the lens to the eye as they were seen, mm, and with which factor. */
   private readonly seen = signal<{ ranges: readonly number[]; factor: number } | null>(null);
 
@@ -67,8 +56,11 @@ export class ScaleMeasure {
     return value >= factorLimits.least && value <= factorLimits.most;
   });
   protected readonly words = computed(() => {
-    const k = this.factor();
-    return k ? `Factor ${plainMm(k.value, 3)} ± ${plainMm(k.uncertainty, 3)}: distances are then right to ±${plainMm((100 * k.uncertainty) / k.value)} %.` : '';
+    const [k, seen] = [this.factor(), this.seen()];
+    if (!k || !seen) return '';
+    const percent = 100 * (k.value / seen.factor - 1);
+    const off = Number(plainMm(percent)) === 0 ? 'at the right distance' : `${plainMm(Math.abs(percent))} % too ${percent > 0 ? 'far' : 'near'}`;
+    return `You were seen ${off}. Taken, distances are right to ±${plainMm((100 * k.uncertainty) / k.value)} %.`;
   });
 
   protected async measure(): Promise<void> {

@@ -5,36 +5,69 @@ import { trackingWords } from '../../tracking/tracking-words';
 
 const secondsToGetThere = 6;
 const readingMs = 3000;
-/** A third of what a slow camera gives in that time. */
+/** Whoever steps aside for a moment may come back. */
+const longestReadingMs = 15_000;
+/** A third of what a slow camera gives in three seconds. */
 const fewestReadings = 10;
 
-type Phase = { readonly kind: 'idle' } | { readonly kind: 'starting' } | { readonly kind: 'counting'; readonly seconds: number } | { readonly kind: 'reading' } | { readonly kind: 'unseen' };
+type Phase =
+  | { readonly kind: 'idle' | 'starting' }
+  | { readonly kind: 'counting'; readonly seconds: number }
+  | { readonly kind: 'reading' | 'done' | 'unseen'; readonly readings: number }
+  | { readonly kind: 'without'; readonly why: string };
 
-/** Someone stands at the marked spot: counts down while they walk there, then reads where the tracker sees their eye for three seconds. */
+/** Someone stands at the marked spot: counts down while they walk there, then reads for three seconds where the tracker sees their eye. */
 @Injectable()
 export class Standing {
   private readonly tracking = inject(FaceTracking);
   private readonly phase = signal<Phase>({ kind: 'idle' });
   private gathered: Point3[] = [];
+  /** When the first reading came. */
+  private sinceMs: number | null = null;
   private attempt = 0;
 
   readonly busy = computed(() => ['starting', 'counting', 'reading'].includes(this.phase().kind));
+  /** The camera's picture while somebody walks to the spot and stands there. */
+  readonly picture = computed(() => (this.busy() ? this.tracking.picture() : null));
+  readonly seen = computed(() => this.tracking.state() === 'following');
   readonly seconds = computed(() => {
     const phase = this.phase();
     return phase.kind === 'counting' ? phase.seconds : null;
   });
+  /** How many readings there are so far; null while none are taken. */
+  readonly readings = computed(() => {
+    const phase = this.phase();
+    return phase.kind === 'reading' ? phase.readings : null;
+  });
+  /** How much of the reading is done, 0 to 1. */
+  readonly share = signal(0);
   readonly words = computed(() => {
     const phase = this.phase();
-    const state = this.tracking.state();
-    if (phase.kind === 'unseen') return 'You were not seen for long enough. Make the light better, or stand nearer the middle of what the camera sees.';
-    if (phase.kind === 'reading') return 'Stand still and look at the glass…';
-    if (phase.kind === 'counting') return `Stand on the mark: ${phase.seconds}. ${state === 'following' ? 'You are seen.' : 'Nobody is seen yet.'}`;
-    return phase.kind === 'starting' ? trackingWords[state] : '';
+    switch (phase.kind) {
+      case 'idle':
+        return '';
+      case 'starting':
+        return trackingWords[this.tracking.state()];
+      case 'without':
+        return phase.why;
+      case 'counting':
+        return this.seen() ? 'You are seen. Stand on the mark and look at the glass.' : 'Nobody is seen yet. Stand on the mark and look at the glass.';
+      case 'reading':
+        return this.seen() ? 'You are seen. Stand still and look at the glass.' : 'Nobody is seen. Face the glass, and step nearer the middle of the picture.';
+      case 'done':
+        return `Done, ${phase.readings} readings. You may move.`;
+      case 'unseen':
+        return `${phase.readings === 0 ? 'No face was found' : `A face was found in ${phase.readings} frames only, ${fewestReadings} are needed`}. Let light fall on your face, none from behind; take off a cap; stand where the camera sees you, between the dashed lines of the drawing. Then start again.`;
+    }
   });
 
   constructor() {
     const unwatch = this.tracking.watch(({ found, eye }) => {
-      if (found && this.phase().kind === 'reading') this.gathered.push({ ...eye });
+      if (!found || this.phase().kind !== 'reading') return;
+      this.gathered.push({ ...eye });
+      this.sinceMs ??= performance.now();
+      this.share.set(Math.min(1, (performance.now() - this.sinceMs) / readingMs));
+      this.phase.set({ kind: 'reading', readings: this.gathered.length });
     });
     inject(DestroyRef).onDestroy(() => {
       unwatch();
@@ -48,21 +81,27 @@ export class Standing {
     const attempt = this.attempt;
     const gone = () => attempt !== this.attempt;
     this.gathered = [];
+    this.sinceMs = null;
+    this.share.set(0);
     this.phase.set({ kind: 'starting' });
     await this.tracking.start(setUp);
     while (!gone() && this.tracking.state() === 'starting') await pause(100);
     for (let seconds = secondsToGetThere; seconds > 0 && !gone(); seconds--) {
-      if (!this.watching()) return null;
+      if (!this.watching()) return this.goWithout();
       this.phase.set({ kind: 'counting', seconds });
       await pause(1000);
     }
-    if (gone() || !this.watching()) return null;
-    this.phase.set({ kind: 'reading' });
-    await pause(readingMs);
+    if (gone()) return null;
+    this.phase.set({ kind: 'reading', readings: 0 });
+    for (let waitedMs = 0; waitedMs < longestReadingMs && this.share() < 1 && !gone(); waitedMs += 100) {
+      if (!this.watching()) return this.goWithout();
+      await pause(100);
+    }
     if (gone()) return null;
     this.tracking.stop();
-    this.phase.set({ kind: this.gathered.length < fewestReadings ? 'unseen' : 'idle' });
-    return this.gathered.length < fewestReadings ? null : this.gathered;
+    const enough = this.gathered.length >= fewestReadings;
+    this.phase.set({ kind: enough ? 'done' : 'unseen', readings: this.gathered.length });
+    return enough ? this.gathered : null;
   }
 
   stop(): void {
@@ -71,7 +110,14 @@ export class Standing {
     this.phase.set({ kind: 'idle' });
   }
 
-  /** Whether the camera was given and is looked through; why not is in the words. */
+  private goWithout(): null {
+    const why = trackingWords[this.tracking.state()];
+    this.stop();
+    this.phase.set({ kind: 'without', why });
+    return null;
+  }
+
+  /** Whether the camera was given and is looked through. */
   private watching(): boolean {
     return ['nobody', 'following'].includes(this.tracking.state());
   }

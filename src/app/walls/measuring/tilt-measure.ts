@@ -12,11 +12,12 @@ import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
+import { StandingView } from './standing-view';
 
 /** The camera's pitch and yaw from someone standing at the marked spot. Only with the wall's own camera on this computer. */
 @Component({
   selector: 'oriel-tilt-measure',
-  imports: [MatButton, SpotFields],
+  imports: [MatButton, SpotFields, StandingView],
   providers: [FaceTracking, Standing],
   templateUrl: './tilt-measure.html',
   styleUrl: './measure.scss',
@@ -25,7 +26,7 @@ import { Standing } from './standing';
 export class TiltMeasure {
   private readonly keeper = inject(WallKeeper);
   private readonly spot = inject(MarkedSpot);
-  protected readonly standing = inject(Standing);
+  private readonly standing = inject(Standing);
   private readonly readings = signal<readonly Point3[] | null>(null);
 
   private readonly found = computed<{ tilt: Tilt | null; problem: string } | null>(() => {

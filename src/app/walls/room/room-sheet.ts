@@ -53,7 +53,6 @@ export class RoomSheet {
     const frame = this.layout().elevation;
     return frame && drawElevation(frame, this.setUp());
   });
-  protected readonly scale = computed(() => `1 : ${Math.round(1 / (this.layout().pxPerMm * (25.4 / 96)))} on a usual screen`);
   protected readonly cursor = computed(() => {
     const at = this.held() ?? this.over();
     if (!at) return null;

@@ -18,6 +18,8 @@ import { WallKeeper } from './wall-keeper';
 
 type Side = 'above' | 'below' | 'left' | 'right' | 'anywhere';
 const shape = WallCamera.shape;
+/** How well a rule finds the middle of a lens behind its cover, mm (practice). */
+const ruledMm = 3;
 
 /** The second step: where the camera is, how it is turned, how much it sees. */
 @Component({
@@ -75,8 +77,19 @@ export class CameraStep {
     this.keeper.camera({ position: at[side] });
   }
 
+  protected standOff(offset: number): void {
+    this.toSide(this.side(), offset);
+    this.ruled();
+  }
+
   protected move(part: Partial<Point3>): void {
     this.keeper.camera({ position: { ...this.camera().position, ...part } });
+    this.ruled();
+  }
+
+  /** A typed turn is no longer the measured one. */
+  protected turnTo(part: Partial<Pick<WallCamera, 'pitchRad' | 'yawRad' | 'rollRad'>>): void {
+    this.keeper.camera({ ...part, uncertainty: { ...this.camera().uncertainty, pitchRad: null } });
   }
 
   protected byDiagonal(diagonalDegrees: number): void {
@@ -90,5 +103,10 @@ export class CameraStep {
 
   protected show(which: 'card' | 'board' | 'tilt'): void {
     this.measuring.update((shown) => (shown === which ? null : which));
+  }
+
+  /** A place that was typed was read off a rule, unless somebody said how well it is known. */
+  private ruled(): void {
+    this.keeper.sureness({ positionMm: this.camera().uncertainty.positionMm ?? ruledMm });
   }
 }

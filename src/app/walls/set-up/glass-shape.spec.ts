@@ -1,4 +1,4 @@
-import { agreeing, squarePx } from './glass-shape';
+import { agreeing, sideByOthers, squarePx } from './glass-shape';
 
 const fullHd = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080 };
 
@@ -18,5 +18,12 @@ describe('the shape of a glass', () => {
   it('is doubted where the px stand the other way round, and exchanging them is offered first', () => {
     const upright = { ...fullHd, widthMm: 529, heightMm: 941 };
     expect(agreeing(upright)[0].part).toEqual({ widthPx: 1080, heightPx: 1920 });
+  });
+
+  it('gives any figure by the three others: 2560 * 529/941 = 1439.1, 1440 * 941/529 = 2561.5 (by hand)', () => {
+    expect(sideByOthers({ ...fullHd, widthPx: 2560 }, 'heightPx')).toBe(1439);
+    expect(sideByOthers({ ...fullHd, heightPx: 1440 }, 'widthPx')).toBe(2562);
+    expect(sideByOthers({ ...fullHd, widthMm: 600 }, 'heightMm')).toBe(337.5);
+    expect(sideByOthers(fullHd, 'widthMm')).toBe(940.4);
   });
 });

@@ -1,6 +1,10 @@
 import type { WallGlass } from '@oriel/shared/contracts/wall-set-up';
 
-type Sides = Pick<WallGlass, 'widthMm' | 'heightMm' | 'widthPx' | 'heightPx'>;
+export type Side = 'widthMm' | 'heightMm' | 'widthPx' | 'heightPx';
+type Sides = Pick<WallGlass, Side>;
+
+/** The figure that is read together with another. */
+export const partnerOf: Readonly<Record<Side, Side>> = { widthMm: 'heightMm', heightMm: 'widthMm', widthPx: 'heightPx', heightPx: 'widthPx' };
 
 /** A rule is read to a millimetre or two; more than this is a side that was mistaken. */
 const sameShape = 0.01;
@@ -16,12 +20,26 @@ export interface Agreeing {
   readonly part: Partial<WallGlass>;
 }
 
+/** What one figure is by the three others, px being square: mm to a tenth, px whole. */
+export function sideByOthers({ widthMm, heightMm, widthPx, heightPx }: Sides, side: Side): number {
+  const tenth = (mm: number) => Math.round(mm * 10) / 10;
+  switch (side) {
+    case 'widthMm':
+      return tenth((heightMm * widthPx) / heightPx);
+    case 'heightMm':
+      return tenth((widthMm * heightPx) / widthPx);
+    case 'widthPx':
+      return Math.round((heightPx * widthMm) / heightMm);
+    case 'heightPx':
+      return Math.round((widthPx * heightMm) / widthMm);
+  }
+}
+
 /** What may be meant where they do not: the other side as the px have it, or the sides the other way round. */
 export function agreeing(glass: Sides): Agreeing[] {
   const { widthMm, heightMm, widthPx, heightPx } = glass;
-  const tenth = (mm: number) => Math.round(mm * 10) / 10;
-  const height = tenth((widthMm * heightPx) / widthPx);
-  const width = tenth((heightMm * widthPx) / heightPx);
+  const height = sideByOthers(glass, 'heightMm');
+  const width = sideByOthers(glass, 'widthMm');
   const turned = squarePx({ ...glass, widthMm: heightMm, heightMm: widthMm });
   return [
     ...(turned ? [{ words: `Exchange the px: ${heightPx} across, ${widthPx} down`, part: { widthPx: heightPx, heightPx: widthPx } }] : []),

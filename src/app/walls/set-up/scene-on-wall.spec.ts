@@ -20,7 +20,7 @@ const glass = { widthMm: 300, heightMm: 200, widthPx: 1500, heightPx: 1000, unce
 describe('a scene on a wall', () => {
   it('is clear where the wall’s zone is its own, scaled with the glass', () => {
     const it = sceneOnWall(scene, { glass, zone: { leftMm: -100, rightMm: 100, lowestMm: -50, highestMm: 50, nearestMm: 250, farthestMm: 1000 } });
-    expect(it).toMatchObject({ clear: true, layers: [], remedies: [] });
+    expect(it).toMatchObject({ clear: true, layers: [], offer: null, remedies: [] });
     expect(it.scaled).toContain('scaled here by 0.50');
     expect(it.scaled).toContain('250 to 1000 mm away, 100 mm left to 100 mm right, 50 mm down to 50 mm up');
     expect(it.scaled).not.toContain('another shape');
@@ -36,7 +36,16 @@ describe('a scene on a wall', () => {
     expect(it.verdict).toContain('An edge would show of Far.');
     // The plane reaches 400 mm; from 300 mm left it must reach 150 + 450 * 250/250 = 600: 200 short (by hand).
     expect(it.layers).toEqual([{ name: 'Far', worst: 'right edge: 200 mm short, seen from 300 mm left, 250 mm away' }]);
-    expect(it.remedies[1]).toContain('500 to 2000 mm away, 600 mm left to 200 mm right');
+    expect(it.remedies[0]).toContain('500 to 2000 mm away, 600 mm left to 200 mm right');
+  });
+
+  it('offers the part of the zone from which it is clear, and nothing where nobody could look around', () => {
+    // The plane reaches 400 mm at 250 mm behind: 150 + (150 + e) 250/z <= 400, so e <= z - 150 on either side (by hand).
+    const zone = { leftMm: -300, rightMm: 300, lowestMm: -50, highestMm: 50, nearestMm: 400, farthestMm: 1000 };
+    const { offer } = sceneOnWall(scene, { glass, zone });
+    expect(offer?.zone).toEqual({ ...zone, leftMm: -300, rightMm: 300, nearestMm: 450 });
+    expect(offer?.words).toBe('begins 0.45 m away instead of 0.4 m');
+    expect(sceneOnWall({ ...scene, layers: [layer('Far', 500, 300, 668)] }, { glass, zone }).offer).toBeNull();
   });
 
   it('says where a glass of another shape stays dark', () => {

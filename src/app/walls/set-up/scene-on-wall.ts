@@ -1,8 +1,10 @@
 import type { SceneDocument } from '@oriel/shared/contracts/scenes';
 import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
+import { clearPart } from '@oriel/shared/projection/clear-part';
 import { retarget, scaleZone } from '@oriel/shared/projection/retarget';
+import type { ViewingZone } from '@oriel/shared/projection/types';
 import { type StatedFault, statedFaults } from '../../drawing/stated-faults';
-import { describeZone } from '../wall-words';
+import { describeChange, describeZone } from '../wall-words';
 
 /** A layer that is not clear from the wall's viewing zone, and the worst that is seen of it. */
 export interface ShowingLayer {
@@ -18,12 +20,21 @@ export interface SceneOnWall {
   readonly clear: boolean;
   readonly verdict: string;
   readonly layers: readonly ShowingLayer[];
-  /** What the wall does about it by itself, and what a person can do; none where it is clear. */
+  /** The part of the wall's zone from which it is clear, which settles it; null where it is clear from all of it, or from nowhere worth keeping. */
+  readonly offer: { readonly zone: ViewingZone; readonly words: string } | null;
+  /** What else a person can do; none where it is clear. */
   readonly remedies: readonly string[];
 }
 
 /** Shapes that differ by less than this are one: a screen's own rounding. */
 const sameShape = 0.02;
+
+/** Nobody looks around in a picture from less: two steps across, and one deep, mm. Practice. */
+const leastZone = { acrossMm: 300, deepMm: 300 } as const;
+
+/** Whether no edge of a scene would show on a wall from anywhere in its viewing zone. */
+export const isClearOnWall = (document: SceneDocument, { glass, zone }: Pick<WallSetUp, 'glass' | 'zone'>): boolean =>
+  statedFaults({ ...document, ...retarget(document, glass), zone }).length === 0;
 
 /** Judges a scene as it is carried to a wall's glass, over the wall's own viewing zone. */
 export function sceneOnWall(document: SceneDocument, { glass, zone }: Pick<WallSetUp, 'glass' | 'zone'>): SceneOnWall {
@@ -32,18 +43,24 @@ export function sceneOnWall(document: SceneDocument, { glass, zone }: Pick<WallS
   const layers = layersOf(document, faults);
   const elsewhere = faults.filter(({ layerId }) => layerId === null).map(({ words }) => words);
   const scaled = `Composed for a glass ${Math.round(document.glass.widthMm)} mm wide, it is scaled here by ${carried.factor.toFixed(2)}: layers, depths and its viewing zone, which is then ${describeZone(carried.zone)}.${shapeWords(document, glass)}`;
-  if (faults.length === 0) return { scaled, clear: true, verdict: 'Clear from everywhere in this wall’s viewing zone: no edge shows.', layers, remedies: [] };
+  if (faults.length === 0) return { scaled, clear: true, verdict: 'Clear from everywhere in this wall’s viewing zone: no edge shows.', layers, offer: null, remedies: [] };
   return {
     scaled,
     clear: false,
     verdict: ['Not clear from all of this wall’s viewing zone.', layers.length > 0 ? `An edge would show of ${listed(layers.map(({ name }) => name))}.` : '', ...elsewhere.map((words) => `${words.replace(/\.$/, '')}.`)].filter(Boolean).join(' '),
     layers,
+    offer: offerOf({ ...document, ...carried }, zone),
     remedies: [
-      'Nothing tears: beyond where the scene is clear the picture comes calmly to a stop, and follows again when the viewer is back.',
       `To follow everywhere, make the scene’s zone wider in the composer, ${describeZone(scaleZone(zone, 1 / carried.factor))} there, and enlarge the layers until its title block says clear.`,
-      'Or narrow this wall’s zone in the step Room to where people do stand, or choose another scene.',
     ],
   };
+}
+
+function offerOf(carried: SceneDocument, zone: ViewingZone): SceneOnWall['offer'] {
+  const part = clearPart({ ...carried, layers: carried.layers.filter(({ shown }) => shown) }, zone);
+  if (!part || part.rightMm - part.leftMm < leastZone.acrossMm || part.farthestMm - part.nearestMm < leastZone.deepMm) return null;
+  if (statedFaults({ ...carried, zone: part }).length > 0) return null;
+  return { zone: part, words: describeChange(zone, part) };
 }
 
 function shapeWords({ glass: composed }: SceneDocument, glass: WallSetUp['glass']): string {

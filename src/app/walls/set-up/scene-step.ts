@@ -1,66 +1,20 @@
-import { ChangeDetectionStrategy, Component, type OnInit, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type OnInit, computed, inject, linkedSignal, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { type Scene, listScenes } from '@oriel/shared/contracts/scenes';
+import type { ViewingZone } from '@oriel/shared/projection/types';
 import { Api } from '../../core/api';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { SceneView } from '../../scene-view/scene-view';
-import { sceneOnWall } from './scene-on-wall';
+import { isClearOnWall, sceneOnWall } from './scene-on-wall';
 import { WallKeeper } from './wall-keeper';
 
 /** The fifth step: which scene the wall shows. */
 @Component({
   selector: 'oriel-wall-scene-step',
   imports: [MatButton, RouterLink, FailureNotice, SceneView],
-  template: `
-    <fieldset>
-      <legend>What the wall shows</legend>
-      <oriel-failure-notice [failure]="loading.failure()" [retryable]="true" (retry)="load()" />
-      @if (scenes(); as scenes) {
-        @if (scenes.length === 0) {
-          <p class="what">There is no scene yet. <a routerLink="/scenes">Compose one</a> first; everything else can be set up meanwhile.</p>
-        }
-        <div class="choices">
-          @for (scene of scenes; track scene.id) {
-            <label [class.chosen]="scene.id === chosen()">
-              <input type="radio" name="scene" [checked]="scene.id === chosen()" [disabled]="!keeper.mayTune()" (change)="choose(scene.id)" />
-              <span class="window" [class.upright]="scene.document.glass.heightMm > scene.document.glass.widthMm">
-                <oriel-scene-view [document]="scene.document" [label]="scene.document.name" [edge]="320" />
-              </span>
-              <span>{{ scene.document.name }}</span>
-            </label>
-          }
-          <label [class.chosen]="chosen() === null">
-            <input type="radio" name="scene" [checked]="chosen() === null" [disabled]="!keeper.mayTune()" (change)="choose(null)" />
-            <span class="blank" aria-hidden="true"></span>
-            <span>Nothing for now</span>
-          </label>
-        </div>
-        @if (onWall(); as it) {
-          <section class="judged" role="status" aria-label="The scene on this wall">
-            <p><span class="mark" [class.clear]="it.clear" aria-hidden="true"></span><strong>{{ it.verdict }}</strong></p>
-            @if (it.layers.length > 0) {
-              <ul class="figures">
-                @for (layer of it.layers; track layer.name) {
-                  <li>{{ layer.name }}: {{ layer.worst }}</li>
-                }
-              </ul>
-            }
-            @for (remedy of it.remedies; track remedy) {
-              <p class="what">{{ remedy }}</p>
-            }
-            <p class="what figures">{{ it.scaled }}</p>
-            @if (!it.clear) {
-              <a matButton="outlined" [routerLink]="['/compose', chosen()]">Open it in the composer</a>
-            }
-          </section>
-        }
-      } @else if (!loading.failure()) {
-        <p class="what" role="status">Fetching the scenes…</p>
-      }
-    </fieldset>
-  `,
+  templateUrl: './scene-step.html',
   styleUrls: ['./step.scss', './scene-step.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -68,12 +22,24 @@ export class SceneStep implements OnInit {
   private readonly api = inject(Api);
   protected readonly keeper = inject(WallKeeper);
   protected readonly loading = new Submission();
-  protected readonly scenes = signal<readonly Scene[] | null>(null);
+  private readonly scenes = signal<readonly Scene[] | null>(null);
   protected readonly chosen = computed(() => this.keeper.setUp()!.sceneId);
+  protected readonly choices = computed(() => {
+    const setUp = this.keeper.setUp()!;
+    return this.scenes()?.map(({ id, document }) => ({ id, document, upright: document.glass.heightMm > document.glass.widthMm, clear: isClearOnWall(document, setUp) }));
+  });
+  /** A scene that would be clear as things are and lies as the glass does, to be shown in place of one that is not. */
+  protected readonly clearOne = computed(() => {
+    const { widthMm, heightMm } = this.keeper.setUp()!.glass;
+    return this.choices()?.find(({ id, clear, upright }) => clear && upright === heightMm > widthMm && id !== this.chosen()) ?? null;
+  });
   protected readonly onWall = computed(() => {
     const scene = this.scenes()?.find(({ id }) => id === this.chosen());
     return scene ? sceneOnWall(scene.document, this.keeper.setUp()!) : null;
   });
+
+  /** The zone as it was before one press narrowed it for the scene; until another scene is chosen. */
+  protected readonly before = linkedSignal<string | null, ViewingZone | null>({ source: this.chosen, computation: () => null });
 
   ngOnInit(): void {
     void this.load();
@@ -88,5 +54,15 @@ export class SceneStep implements OnInit {
 
   protected choose(sceneId: string | null): void {
     this.keeper.edit((before) => ({ ...before, sceneId }));
+  }
+
+  protected take(zone: ViewingZone): void {
+    this.before.set(this.keeper.setUp()!.zone);
+    this.keeper.zone(zone);
+  }
+
+  protected putBack(zone: ViewingZone): void {
+    this.keeper.zone(zone);
+    this.before.set(null);
   }
 }

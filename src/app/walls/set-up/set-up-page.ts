@@ -19,11 +19,10 @@ import { GlassStep } from './glass-step';
 import { PairStep } from './pair-step';
 import { RoomStep } from './room-step';
 import { SceneStep } from './scene-step';
+import { type Step, steps, stepsDone } from './steps';
 import { ViewerStep } from './viewer-step';
 import { WallKeeper } from './wall-keeper';
 
-const steps = ['glass', 'camera', 'room', 'viewer', 'scene', 'pair'] as const;
-type Step = (typeof steps)[number];
 const names: Readonly<Record<Step, string>> = { glass: 'Glass', camera: 'Camera', room: 'Room', viewer: 'Viewer', scene: 'Scene', pair: 'Pair' };
 
 /** The set-up of one wall: six short steps beside a drawing that follows what is typed. */
@@ -51,6 +50,7 @@ export class SetUpPage {
   protected readonly steps = steps;
   protected readonly names = names;
   protected readonly here = linkedSignal<Step>(() => steps.find((step) => step === this.step()) ?? 'glass');
+  protected readonly done = computed(() => stepsDone(this.keeper.setUp()!, this.keeper.wall()?.pairedAt ?? null));
   protected readonly at = computed(() => steps.indexOf(this.here()));
   protected readonly acting = new Submission();
   protected readonly saveState = this.keeper.autosave.state;

@@ -40,8 +40,7 @@ export class ViewerStep implements OnInit {
   protected readonly factor = limitsOf(shape.scaleFactor);
   protected readonly tuning = computed(() => this.keeper.setUp()!.tuning);
 
-  protected readonly words = ({ ipdMm, scaleFactor }: ViewerScale) =>
-    `${plainMm(ipdMm.value)} mm between the eyes, factor ${plainMm(scaleFactor, 3)}, sure to ±${plainMm((100 * ipdMm.uncertainty) / ipdMm.value)} %`;
+  protected readonly words = ({ ipdMm }: ViewerScale) => `${plainMm(ipdMm.value)} mm between the eyes, distances sure to ±${plainMm((100 * ipdMm.uncertainty) / ipdMm.value)} %`;
   protected readonly inUse = ({ ipdMm, scaleFactor }: ViewerScale) => ipdMm.value === this.tuning().ipdMm.value && scaleFactor === this.tuning().scaleFactor;
 
   ngOnInit(): void {
