@@ -1,7 +1,7 @@
 import { requiredExtent } from '@oriel/shared/projection/required-extent';
 import { layerIds, someScene } from '@oriel/shared/contracts/testing/some-scene';
 import { drawLayers } from '../layers/drawn-layer';
-import { drawLines, drawSetting, projectionLines, sightlines } from './depth-drawing';
+import { drawLines, drawSetting, glassNoteY, projectionLines, sightlines } from './depth-drawing';
 import { extentsOf } from './extents';
 import { drawnAt, pointedAt } from '../../drawing/placing';
 import { layOutSheet } from './sheet-layout';
@@ -16,6 +16,13 @@ describe('plan and section', () => {
     expect(far.to.x - far.from.x).toBeCloseTo(1980 * plan.pxPerMm, 6);
     expect(far.from.y).toBeCloseTo(drawnAt(plan, { across: 0, z: -900 }).y, 6);
     expect(far.breaks).toEqual([]);
+  });
+
+  it('write below the glass, clear of layers that lie just before it', () => {
+    const at = (y: number) => ({ from: { x: 0, y }, to: { x: 100, y } });
+    expect(glassNoteY(100, [at(60), at(100), at(160)])).toBe(115);
+    expect(glassNoteY(100, [at(108)])).toBe(123);
+    expect(glassNoteY(100, [at(120), at(108)])).toBe(135);
   });
 
   it('break off what runs past the drawing', () => {

@@ -105,6 +105,16 @@ const CHARACTER_PX = 6;
 const LABEL_PX = 13;
 const BESIDE_LINE_PX = 10;
 
+/** How far below a line words stand clear of it, and how much room they take, px. */
+const NOTE_BELOW_PX = 15;
+const NOTE_PX = 12;
+
+/** Where words about the glass stand in the plan: below it, and below whatever layers lie so little before it that they would run through. */
+export function glassNoteY(glassY: number, lines: readonly Line[]): number {
+  const below = lines.map(({ from }) => from.y).filter((y) => y > glassY).sort((a, b) => a - b);
+  return below.reduce((noteY, y) => (y < noteY + 3 && y > noteY - NOTE_PX - 3 ? y + NOTE_BELOW_PX : noteY), glassY + NOTE_BELOW_PX);
+}
+
 /** The layers as lines at their depth, broken off where they run past the frame. */
 export function drawLines(frame: DepthFrame, layers: readonly DrawnLayer[], selectedId: string | null): DrawnLine[] {
   const lines = layers.flatMap((drawn) => (drawn.plane ? [drawLine(frame, drawn, drawn.plane, selectedId)] : []));

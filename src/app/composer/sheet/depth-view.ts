@@ -7,7 +7,7 @@ import { type Gesture, SceneStore } from '../scene-store';
 import { Viewer } from '../walk/viewer';
 import { describeEye } from '../../figures/words';
 import { acrossOf, sidesOf, withAcross } from '../../drawing/across';
-import { drawLines, drawSetting, projectionLines, sightlines, type DrawnLine } from './depth-drawing';
+import { drawLines, type DrawnLine, drawSetting, glassNoteY, projectionLines, sightlines } from './depth-drawing';
 import { followPointer } from '../../drawing/follow-pointer';
 import { type Held, pick } from './picking';
 import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
@@ -60,6 +60,7 @@ export class DepthView {
     const { x, y } = this.eye().at;
     return y > low.y - besideEyePx && x < low.x + besideEyePx ? high : low;
   });
+  protected readonly glassNoteY = computed(() => glassNoteY(this.setting().glass.to.y, this.lines()));
   protected readonly limits = computed(() => depthLimits(this.store.document()));
 
   protected readonly over = signal<Held | null>(null);
