@@ -8,6 +8,10 @@ import { QrCode } from './qr-code';
 const tickMs = 1000;
 const minuteMs = 60_000;
 
+/** Why nothing was heard of the server, as far as a page can tell. */
+const noAnswer = (online: boolean, origin: string) =>
+  online ? `The server at ${origin} does not answer: see whether it runs.` : 'This screen has no network: check its cable or wireless.';
+
 /** A screen without a wall: what to do, a code to type, and the same as a QR code. Read from across the room. */
 @Component({
   selector: 'oriel-pairing-screen',
@@ -25,10 +29,16 @@ export class PairingScreen {
   readonly paired = output();
 
   private readonly pairing = inject(Pairing);
-  private readonly origin = inject(DOCUMENT).location.origin;
+  private readonly document = inject(DOCUMENT);
+  private readonly origin = this.document.location.origin;
   private readonly nowMs = signal(performance.now());
 
   protected readonly trouble = computed(() => this.pairing.trouble() ?? this.unanswered());
+  protected readonly troubleWords = computed(() => {
+    const trouble = this.trouble();
+    const why = trouble?.offline ? noAnswer(this.document.defaultView?.navigator.onLine ?? true, this.origin) : (trouble?.failure.message ?? '');
+    return `${why} It is tried again by itself.`;
+  });
   protected readonly place = `${this.origin}/walls`;
   protected readonly ownAddress = isOwnAddress(this.origin);
   protected readonly code = computed(() => this.pairing.code()?.code ?? null);
