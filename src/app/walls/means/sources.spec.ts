@@ -1,5 +1,5 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
-import { errorsOf, exampleDepths, meansWords, sourcesOf, together } from './sources';
+import { errorsOf, exampleDepths, meansWords, sourcesOf, together, worthMeasuring } from './sources';
 
 const setUp = newWall('Landing');
 const measured = { ...setUp, camera: { ...setUp.camera, uncertainty: { hfovRad: 0.0367, pitchRad: 0.005, positionMm: 2 } } };
@@ -28,6 +28,13 @@ describe('what uncertainties mean', () => {
     expect(all).toBeLessThanOrEqual(Math.hypot(...each) + 1e-9);
     expect(all).toBeGreaterThan(Math.max(...each));
     expect(exampleDepths).toHaveLength(2);
+  });
+
+  it('says what is worth measuring next: of a new wall the turn, then what is left, then nothing', () => {
+    expect(worthMeasuring(setUp)).toBe('Turn counts most of what is only assumed: measure it in the step Camera.');
+    expect(worthMeasuring(measured)).toBe('Viewer counts most of what is only assumed: measure it in the step Viewer.');
+    const { ipdMm } = setUp.tuning;
+    expect(worthMeasuring({ ...measured, glass: { ...setUp.glass, uncertainty: 0.001 }, tuning: { ...setUp.tuning, ipdMm: { ...ipdMm, uncertainty: 1 } } })).toBe('');
   });
 
   it('asks to turn a camera that looks away', () => {

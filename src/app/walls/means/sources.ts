@@ -66,6 +66,17 @@ export function errorsOf({ glass, camera, zone }: WallSetUp, unsure: SetUpUncert
   }
 }
 
+/** In which step of the set-up each figure is measured. */
+const measuredIn: Readonly<Record<Source['key'], string>> = { glass: 'Glass', position: 'Camera', tilt: 'Camera', field: 'Camera', viewer: 'Viewer' };
+
+/** Of what nobody measured, that which counts most on the glass, and where it is measured; empty where all is measured, or the camera sees nothing. */
+export function worthMeasuring(setUp: WallSetUp): string {
+  const assumed = sourcesOf(setUp).filter((source) => source.assumed);
+  const counted = assumed.map((source) => ({ source, far: errorsOf(setUp, source.unsure)?.at(-1) ?? 0 }));
+  const most = counted.reduce((a, b) => (b.far > a.far ? b : a), { source: null as Source | null, far: 0 }).source;
+  return most ? `${most.name} counts most of what is only assumed: measure it in the step ${measuredIn[most.key]}.` : '';
+}
+
 /** A length on the glass: to a tenth of a mm, below that to a hundredth. */
 export const sayError = (mm: number): string => mm.toFixed(mm < 0.095 ? 2 : 1);
 

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { WallSetUp } from '@oriel/shared/contracts/wall-set-up';
-import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './sources';
+import { errorsOf, exampleDepths, sayError, sourcesOf, together, worthMeasuring } from './sources';
 
 /** The title block of a wall's drawing: what is not certain about it, and what each uncertainty means on the glass. */
 @Component({
@@ -42,6 +42,9 @@ import { errorsOf, exampleDepths, sayError, sourcesOf, together } from './source
       @if (blind()) {
         <p class="blind">The camera does not see the middle of the viewing zone: turn it there, or move the zone.</p>
       }
+      @if (next(); as words) {
+        <p class="next">{{ words }}</p>
+      }
       <p class="marginal">Standard uncertainties: about one time in three it is more.</p>
     </section>
   `,
@@ -58,6 +61,7 @@ export class UncertaintyBlock {
   );
   private readonly sum = computed(() => errorsOf(this.setUp(), together(this.sources())));
   protected readonly all = computed(() => said(this.sum()));
+  protected readonly next = computed(() => worthMeasuring(this.setUp()));
   protected readonly blind = computed(() => this.sum() === null);
 }
 
