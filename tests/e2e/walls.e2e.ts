@@ -2,6 +2,7 @@ import type { Page } from '@playwright/test';
 import type { Wall } from '@oriel/shared/contracts/walls';
 import { ask } from './asking';
 import { expect, test } from './fixtures';
+import { codeOn } from './walls/screen';
 import { field, hang, step, type, unfold } from './walls/set-up';
 
 const read = async (page: Page, id: string) => (await ask<{ wall: Wall }>(page, 'GET', `/api/walls/${id}`)).wall;
@@ -208,6 +209,26 @@ test('a screen is paired by its code, reports, falls silent in words, and is unp
   await page.getByRole('button', { name: `Remove ${name}` }).click();
   await expect(page).toHaveURL(/\/walls$/);
   await expect(shown).toHaveCount(0);
+  await context.close();
+});
+
+test('a screen’s QR code leads to its walls, and the one chosen has the code entered already', async ({ signedInPage, browser, baseURL }) => {
+  const page = await signedInPage('tuner');
+  const name = `Porch ${Date.now()}`;
+  const id = await hang(page, name);
+  const context = await browser.newContext({ baseURL });
+  const screen = await context.newPage();
+  await screen.goto('/wall');
+  const code = await codeOn(screen);
+  await expect(screen.getByRole('img', { name: new RegExp(`/walls\\?code=${code}$`) })).toBeVisible();
+  await page.goto(`/walls?code=${code}`);
+  await expect(page.getByText(`A screen shows the code ${code.slice(0, 3)} ${code.slice(3)}. Choose the wall it is to be.`)).toBeVisible();
+  await page.getByRole('link', { name, exact: true }).click();
+  await expect(page.getByLabel('Code on the screen')).toHaveValue(code);
+  await page.getByRole('button', { name: 'Pair', exact: true }).click();
+  await expect(page.getByText(/^Paired at/)).toBeVisible();
+  await expect(screen.getByText(`Nothing is chosen to be shown on ${name}.`)).toBeVisible();
+  await removeWall(page, id);
   await context.close();
 });
 

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type OnInit, computed, inject, input, signal } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
@@ -23,7 +23,10 @@ const askMs = 2000;
   styleUrl: './step.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class PairStep {
+export class PairStep implements OnInit {
+  /** What is to be entered already, where a screen's QR code led here. */
+  readonly code = input('');
+
   private readonly router = inject(Router);
   protected readonly keeper = inject(WallKeeper);
   protected readonly origin = inject(DOCUMENT).location.origin;
@@ -51,6 +54,11 @@ export class PairStep {
   constructor() {
     const asking = setInterval(() => void this.ask(), askMs);
     inject(DestroyRef).onDestroy(() => clearInterval(asking));
+  }
+
+  ngOnInit(): void {
+    this.form.controls.code.setValue(this.code());
+    this.again.set(this.code() !== '');
   }
 
   protected pair(): Promise<void> {

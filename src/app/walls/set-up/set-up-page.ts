@@ -38,6 +38,8 @@ export class SetUpPage {
   readonly wallId = input.required<string>();
   /** Which step is shown, in the address so that it can be gone back to. */
   readonly step = input<string>();
+  /** The code that a screen shows, where its QR code led here. */
+  readonly code = input<string>();
 
   protected readonly keeper = inject(WallKeeper);
   protected readonly spot = inject(MarkedSpot);

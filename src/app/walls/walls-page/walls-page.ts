@@ -1,7 +1,8 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type OnInit, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type OnInit, computed, inject, input, signal } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
+import { PairingCode } from '@oriel/shared/contracts/wall-pairing';
 import { createWall } from '@oriel/shared/contracts/walls';
 import { FailureNotice } from '../../core/failure-notice';
 import { Session } from '../../core/session';
@@ -26,6 +27,9 @@ const refreshMs = 10_000;
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class WallsPage implements OnInit {
+  /** The code that a screen shows, where its QR code led here. */
+  readonly code = input<string>();
+
   private readonly router = inject(Router);
   private readonly document = inject(DOCUMENT);
   private readonly list = inject(WallList);
@@ -36,6 +40,13 @@ export class WallsPage implements OnInit {
   protected readonly naming = signal(false);
   private readonly now = signal(new Date());
 
+  /** The same as it is shown there, in two halves; empty where it is none. */
+  protected readonly codeShown = computed(() => {
+    const code = PairingCode.safeParse(this.code() ?? '');
+    return code.success ? `${code.data.slice(0, 3)} ${code.data.slice(3)}` : '';
+  });
+  /** A wall is opened where its screen is paired while a screen waits for it. */
+  protected readonly opening = computed(() => (this.codeShown() ? { step: 'pair', code: this.code() } : {}));
   protected readonly walls = computed(() =>
     this.list.walls()?.map((wall) => {
       const { glass, camera, sceneId } = wall.setUp;
@@ -65,7 +76,7 @@ export class WallsPage implements OnInit {
   protected create(): Promise<void> {
     return this.creating.run(async () => {
       const wall = await this.list.create(this.form.getRawValue().name);
-      await this.router.navigate(['/walls', wall.id]);
+      await this.router.navigate(['/walls', wall.id], { queryParams: this.opening() });
     });
   }
 
