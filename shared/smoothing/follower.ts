@@ -49,152 +49,160 @@ interface AxisState {
  */
 export function createFollower(settings: FollowerSettings): Follower {
   requireEye(settings.homeEye, 'homeEye');
-  const { homeEye, drift, longestHorizonMs } = settings;
-  const predictorMs = { x: settings.predictor.acrossMs, y: settings.predictor.acrossMs, z: settings.predictor.alongMs };
-  const filter = createEyeFilter();
-  const limit = createSpeedLimit();
-  const axes: Record<Axis, AxisState> = {
-    x: createAxis(homeEye.x),
-    y: createAxis(homeEye.y),
-    z: createAxis(homeEye.z),
-  };
-  const wanted = { x: homeEye.x, y: homeEye.y, z: homeEye.z };
-  let presence: Presence = 'nobody';
-  /** Moments, ms; kept in one object, whose figures are changed in place. */
-  const run = { clockMs: NaN, sampledMs: -Infinity, lostMs: 0, easeRate: settlingRate(settings.returnMs) };
+  return new Pipeline(settings);
+}
+
+class Pipeline implements Follower {
+  presence: Presence = 'nobody';
+  private readonly predictorMs: Readonly<Record<Axis, number>>;
+  private readonly filter = createEyeFilter();
+  private readonly limit = createSpeedLimit();
+  private readonly axes: Readonly<Record<Axis, AxisState>>;
+  private readonly wanted: { x: number; y: number; z: number };
+  /** Moments, ms. */
+  private clockMs = NaN;
+  private sampledMs = -Infinity;
+  private lostMs = 0;
+  private easeRate: number;
+
+  constructor(private readonly settings: FollowerSettings) {
+    const { homeEye, predictor, returnMs } = settings;
+    this.predictorMs = { x: predictor.acrossMs, y: predictor.acrossMs, z: predictor.alongMs };
+    this.axes = { x: createAxis(homeEye.x), y: createAxis(homeEye.y), z: createAxis(homeEye.z) };
+    this.wanted = { x: homeEye.x, y: homeEye.y, z: homeEye.z };
+    this.easeRate = settlingRate(returnMs);
+  }
+
+  sample(eye: Point3, tMs: number): void {
+    requireEye(eye);
+    if (tMs <= this.sampledMs) return;
+    const appears = this.presence === 'nobody' || this.isAnother(eye, tMs);
+    if (appears) this.startAfresh();
+    this.presence = 'following';
+    this.sampledMs = tMs;
+    stepEyeFilter(this.filter, eye, tMs, this.settings.filter);
+    for (const axis of AXES)
+      stepDoubleExponential(this.axes[axis].predictor, this.filter[axis].value, tMs, this.predictorMs[axis]);
+    const across = this.moving(Math.hypot(this.slope('x'), this.slope('y')));
+    const along = this.moving(this.slope('z'));
+    for (const axis of AXES) {
+      const { predictor, ease, correction } = this.axes[axis];
+      const share = axis === 'z' ? along : across;
+      const now = predict(predictor, this.settings.lagShare * axisLagMs(this.filter, axis), this.predictorMs[axis]);
+      const level = predictor.once + share * (now - predictor.once);
+      this.redirect(axis, appears ? ease : correction, 'viewer', level, share * this.slope(axis), tMs);
+    }
+  }
+
+  lost(tMs: number): void {
+    if (this.presence !== 'following' || tMs < this.sampledMs) return;
+    if (Number.isNaN(this.clockMs)) this.clockMs = tMs;
+    this.hold();
+  }
+
+  at(tMs: number, out: { x: number; y: number; z: number }): void {
+    const { silenceMs, holdMs, greatestMmPerS, nearestMm } = this.settings;
+    if (this.presence === 'following' && tMs > this.sampledMs + silenceMs) {
+      this.advance(this.sampledMs + silenceMs);
+      this.hold();
+    }
+    if (this.presence === 'holding' && tMs > this.lostMs + holdMs) {
+      this.advance(this.lostMs + holdMs);
+      this.goHome();
+    }
+    this.advance(tMs);
+    for (const axis of AXES) {
+      const { ease, correction } = this.axes[axis];
+      this.wanted[axis] = this.goalNow(axis) + ease.p + correction.p;
+    }
+    stepSpeedLimit(this.limit, this.wanted, this.clockMs, greatestMmPerS);
+    out.x = this.limit.limited.x;
+    out.y = this.limit.limited.y;
+    out.z = Math.max(nearestMm, this.limit.limited.z);
+  }
 
   /** Lets the differences die away up to `tMs`. */
-  function advance(tMs: number): void {
-    const dtMs = tMs - run.clockMs;
+  private advance(tMs: number): void {
+    const dtMs = tMs - this.clockMs;
     if (dtMs > 0) {
       for (const axis of AXES) {
-        stepSettling(axes[axis].ease, dtMs, run.easeRate);
-        stepSettling(axes[axis].correction, dtMs, settlingRate(settings.correctionMs));
+        stepSettling(this.axes[axis].ease, dtMs, this.easeRate);
+        stepSettling(this.axes[axis].correction, dtMs, settlingRate(this.settings.correctionMs));
       }
     }
-    if (!(dtMs <= 0)) run.clockMs = tMs;
+    if (!(dtMs <= 0)) this.clockMs = tMs;
+  }
+
+  /** Forgets how the last viewer moved; the way to the new one is eased. */
+  private startAfresh(): void {
+    this.easeRate = settlingRate(this.settings.appearMs);
+    resetEyeFilter(this.filter);
+    for (const axis of AXES) this.axes[axis].predictor.started = false;
   }
 
   /** Gives an axis a new goal and adds what it jumps by to `into`. */
-  function redirect(axis: Axis, into: Settling, kind: Goal['kind'], level: number, slope: number, tMs: number): void {
-    const { goal } = axes[axis];
-    const { clockMs } = run;
-    const running = !Number.isNaN(clockMs);
-    const place = running ? goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) : 0;
-    const rate = running ? goalRate(goal, axis, run.clockMs, drift, longestHorizonMs) : 0;
+  private redirect(axis: Axis, into: Settling, kind: Goal['kind'], level: number, slope: number, tMs: number): void {
+    const { goal } = this.axes[axis];
+    const running = !Number.isNaN(this.clockMs);
+    const place = running ? this.goalNow(axis) : 0;
+    const rate = running ? this.goalRateNow(axis) : 0;
     goal.kind = kind;
     goal.level = level;
     goal.slope = slope;
     goal.tMs = tMs;
-    if (!running) return;
-    addJump(
-      into,
-      place - goalAt(goal, axis, run.clockMs, drift, longestHorizonMs),
-      rate - goalRate(goal, axis, run.clockMs, drift, longestHorizonMs),
-    );
+    if (running) addJump(into, place - this.goalNow(axis), rate - this.goalRateNow(axis));
   }
 
   /** Stops where the present motion runs out: an exponential stop ends v/w farther on. */
-  function hold(): void {
-    presence = 'holding';
-    run.easeRate = settlingRate(settings.holdMs);
+  private hold(): void {
+    this.presence = 'holding';
+    this.lostMs = this.clockMs;
+    this.easeRate = settlingRate(this.settings.holdMs);
     for (const axis of AXES) {
-      const { goal, ease, correction } = axes[axis];
-      const place = goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.p + correction.p;
-      const rate = goalRate(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.v + correction.v;
+      const { goal, ease, correction } = this.axes[axis];
+      const place = this.goalNow(axis) + ease.p + correction.p;
+      const rate = this.goalRateNow(axis) + ease.v + correction.v;
       correction.p = correction.v = 0;
-      ease.p = -rate / run.easeRate;
+      ease.p = -rate / this.easeRate;
       ease.v = rate;
       goal.kind = 'rest';
-      goal.level = place + rate / run.easeRate;
+      goal.level = place + rate / this.easeRate;
     }
   }
 
-  function goHome(): void {
-    presence = 'nobody';
-    run.easeRate = settlingRate(settings.returnMs);
-    for (const axis of AXES) redirect(axis, axes[axis].ease, 'home', homeEye[axis], 0, 0);
+  private goHome(): void {
+    this.presence = 'nobody';
+    this.easeRate = settlingRate(this.settings.returnMs);
+    for (const axis of AXES) this.redirect(axis, this.axes[axis].ease, 'home', this.settings.homeEye[axis], 0, 0);
   }
 
-  function slope(axis: Axis): number {
-    return slopeOf(axes[axis].predictor, predictorMs[axis]);
+  private goalNow(axis: Axis): number {
+    return goalAt(this.axes[axis].goal, axis, this.clockMs, this.settings.drift, this.settings.longestHorizonMs);
+  }
+
+  private goalRateNow(axis: Axis): number {
+    return goalRate(this.axes[axis].goal, axis, this.clockMs, this.settings.drift, this.settings.longestHorizonMs);
+  }
+
+  private slope(axis: Axis): number {
+    return slopeOf(this.axes[axis].predictor, this.predictorMs[axis]);
   }
 
   /** The share of a speed, mm/ms, that is believed: v2/(v2 + rest2), so that the noise of a still viewer is not carried ahead. */
-  function moving(speed: number): number {
+  private moving(speed: number): number {
     const square = (speed * 1000) ** 2;
-    return square > 0 ? square / (square + settings.restMmPerS ** 2) : 0;
+    return square > 0 ? square / (square + this.settings.restMmPerS ** 2) : 0;
   }
 
   /** Whether a sample is too far from where the filtered viewer should be by now to be the same one. */
-  function isAnother(eye: Point3, tMs: number): boolean {
+  private isAnother(eye: Point3, tMs: number): boolean {
     let square = 0;
     for (const axis of AXES) {
-      const { predictor } = axes[axis];
-      square += (eye[axis] - predict(predictor, tMs - predictor.tMs, predictorMs[axis])) ** 2;
+      const { predictor } = this.axes[axis];
+      square += (eye[axis] - predict(predictor, tMs - predictor.tMs, this.predictorMs[axis])) ** 2;
     }
-    return square > settings.jumpMm ** 2;
+    return square > this.settings.jumpMm ** 2;
   }
-
-  return {
-    get presence() {
-      return presence;
-    },
-
-    sample(eye, tMs) {
-      requireEye(eye);
-      if (tMs <= run.sampledMs) return;
-      const appears = presence === 'nobody' || isAnother(eye, tMs);
-      if (appears) {
-        run.easeRate = settlingRate(settings.appearMs);
-        resetEyeFilter(filter);
-        for (const axis of AXES) axes[axis].predictor.started = false;
-      }
-      presence = 'following';
-      run.sampledMs = tMs;
-      stepEyeFilter(filter, eye, tMs, settings.filter);
-      for (const axis of AXES) {
-        stepDoubleExponential(axes[axis].predictor, filter[axis].value, tMs, predictorMs[axis]);
-      }
-      const across = moving(Math.hypot(slope('x'), slope('y')));
-      const along = moving(slope('z'));
-      for (const axis of AXES) {
-        const { predictor, ease, correction } = axes[axis];
-        const share = axis === 'z' ? along : across;
-        const now = predict(predictor, settings.lagShare * axisLagMs(filter, axis), predictorMs[axis]);
-        const level = predictor.once + share * (now - predictor.once);
-        redirect(axis, appears ? ease : correction, 'viewer', level, share * slope(axis), tMs);
-      }
-    },
-
-    lost(tMs) {
-      if (presence !== 'following' || tMs < run.sampledMs) return;
-      if (Number.isNaN(run.clockMs)) run.clockMs = tMs;
-      run.lostMs = run.clockMs;
-      hold();
-    },
-
-    at(tMs, out) {
-      if (presence === 'following' && tMs > run.sampledMs + settings.silenceMs) {
-        advance(run.sampledMs + settings.silenceMs);
-        run.lostMs = run.clockMs;
-        hold();
-      }
-      if (presence === 'holding' && tMs > run.lostMs + settings.holdMs) {
-        advance(run.lostMs + settings.holdMs);
-        goHome();
-      }
-      advance(tMs);
-      for (const axis of AXES) {
-        const { goal, ease, correction } = axes[axis];
-        wanted[axis] = goalAt(goal, axis, run.clockMs, drift, longestHorizonMs) + ease.p + correction.p;
-      }
-      stepSpeedLimit(limit, wanted, run.clockMs, settings.greatestMmPerS);
-      out.x = limit.limited.x;
-      out.y = limit.limited.y;
-      out.z = Math.max(settings.nearestMm, limit.limited.z);
-    },
-  };
 }
 
 function createAxis(homeMm: number): AxisState {
