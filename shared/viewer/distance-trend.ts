@@ -1,6 +1,7 @@
 /*
  * Landmarks draw a near face a little too small and a far one a little too large, so that distance reads too long near and too short far.
- * Measured on three rendered heads that face the camera (1280 px and 60 degrees across), against 1 m:
+ * Measured on three rendered heads that face the camera (1280 px and 60 degrees across; npm run video:heads -- --path far, --who 0 to 2,
+ * npm run bench:tracking without this correction), against 1 m:
  *
  *     0.5 m  +0.6 +1.8 +0.6 %   0.6 m  +0.9 +1.4 +0.8 %   2 m  -0.8 -1.2 -0.8 %   3 m  -1.3 -2.6 -0.7 %   4 m  -1.4 -2.7 -1.2 %
  *
@@ -13,3 +14,19 @@ const POWER = 0.012;
 /** By how much to multiply a distance read from landmarks of someone whose eyes are so far apart, both in mm. */
 export const trendOfDistance = (readMm: number, eyeDistanceMm: number): number =>
   (readMm / eyeDistanceMm / NEUTRAL) ** POWER;
+
+/*
+ * Landmarks draw a turned head too small as well, the more so the smaller it is in the picture, so that its distance reads too long: on
+ * films of turning heads from two generators (npm run bench:tracking, segments yaw and mixed, read as perspective-place.ts does) by
+ *
+ *     0.15 (Z/Z0)^0.3 sin2 yaw,
+ *
+ * with the yaw that landmarks show, 27 degrees of 35. Yaw of 35 degrees at 0.6, 1 and 2 m so comes to 1.0 to 1.4, 1.4 to 2.2 and
+ * 1.4 to 2.7 % rms.
+ */
+const TURN_LOSES = 0.15;
+const TURN_POWER = 0.3;
+
+/** By how much to multiply the distance read of a head turned so far, as it looks from the camera. */
+export const trendOfTurn = (readMm: number, eyeDistanceMm: number, yawRad: number): number =>
+  1 - TURN_LOSES * (readMm / eyeDistanceMm / NEUTRAL) ** TURN_POWER * Math.sin(yawRad) ** 2;

@@ -42,6 +42,8 @@ export interface LandmarkEye {
   /** The head's turn in the camera's coordinates, nine numbers by rows, and as angles. */
   readonly headPose: Float64Array;
   readonly headAngles: HeadAngles;
+  /** How far the head looks turned from the camera, aside of which it may stand. */
+  apparentYawRad: number;
 }
 
 export function createLandmarkEye(model: FaceModel = createFaceModel()): LandmarkEye {
@@ -52,6 +54,7 @@ export function createLandmarkEye(model: FaceModel = createFaceModel()): Landmar
     inCamera: { x: 0, y: 0, z: 0 },
     headPose: new Float64Array(9),
     headAngles: { yawRad: 0, pitchRad: 0, rollRad: 0 },
+    apparentYawRad: 0,
   };
 }
 
@@ -86,5 +89,6 @@ export function eyeFromLandmarks(
   inCamera.y /= distanceFactor;
   inCamera.z /= distanceFactor;
   headAngles(headPose, out.headAngles);
+  out.apparentYawRad = Math.asin(Math.max(-1, Math.min(1, fit.rotation[6])));
   pointToGlass(camera, inCamera, out.eye);
 }

@@ -48,10 +48,15 @@ export const nearestTo = (
  * Looks closer and closer at a find until two looks agree on its size; null where they never do. The detectors misjudge what is small
  * in their picture (the distance between the eyes up to 1.8 times too large), and landmarks placed on a wrong size cling to it.
  */
-export function confirm(looks: Looks, picture: Picture, find: Detection): Detection | null {
+export function confirm(
+  looks: Looks,
+  picture: Picture,
+  find: Detection,
+  probability = CONFIRM_PROBABILITY,
+): Detection | null {
   let face = find;
   for (let look = 0; look < MOST_LOOKS; look++) {
-    const closer = nearestTo(face, looks.short(picture, closerLook(face), CONFIRM_PROBABILITY));
+    const closer = nearestTo(face, looks.short(picture, closerLook(face), probability));
     if (!closer) return null;
     const ratio = boxSize(closer) / boxSize(face);
     face = closer;

@@ -61,4 +61,26 @@ describe('FaceMeasure', () => {
     expect(second.eye).not.toBe(first.eye);
     expect(second.eyeInCamera.z / first.eyeInCamera.z).toBeCloseTo(2, 6);
   });
+
+  it('holds the distance where landmarks fail, for half a second: the eyes of a smeared face tell its direction alone', () => {
+    const measure = new FaceMeasure();
+    const { eyeInCamera, ipdPx } = measure.measure(landmarksAt(0, 0, 1500), 1, FRAME, SETTINGS, 0);
+    const smeared = { rightEye: { x: 700, y: 360 }, leftEye: { x: 760, y: 360 } };
+    const held = measure.measureGlimpse(smeared, 0.8, FRAME, SETTINGS, 400);
+    expect(held.eyeInCamera.z).toBe(eyeInCamera.z);
+    expect(held.ipdPx).toBe(ipdPx);
+    expect(held.eyeInCamera.x).toBeCloseTo((90 * eyeInCamera.z) / FOCAL_PX, 9);
+    const later = measure.measureGlimpse(smeared, 0.8, FRAME, SETTINGS, 501);
+    expect(later.eyeInCamera.z).toBeCloseTo((FOCAL_PX * 63) / 60, 9);
+  });
+
+  it('holds the distance of a face that the edge of the frame cuts: what is seen of it crowds together', () => {
+    const measure = new FaceMeasure();
+    const whole = measure.measure(landmarksAt(700, 0, 1500), 1, FRAME, SETTINGS, 0).eyeInCamera;
+    const crowded = landmarksAt(860, 0, 1520);
+    const cut = measure.measure(crowded, 1, FRAME, SETTINGS, 33).eyeInCamera;
+    expect(Math.max(...[234, 454].map((side) => crowded[3 * side]))).toBeGreaterThan(FRAME.width);
+    expect(cut.z).toBe(whole.z);
+    expect(new FaceMeasure().measure(crowded, 1, FRAME, SETTINGS, 33).eyeInCamera.z).not.toBe(whole.z);
+  });
 });

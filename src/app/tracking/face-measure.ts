@@ -1,13 +1,16 @@
 import { correctionForBlur, createBlurCorrection } from '@oriel/shared/viewer/blur-correction';
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
-import { trendOfDistance } from '@oriel/shared/viewer/distance-trend';
+import { trendOfDistance, trendOfTurn } from '@oriel/shared/viewer/distance-trend';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
 import { faceWidening } from '@oriel/shared/viewer/face-widening';
 import { leftEyeOf, rightEyeOf } from './face-landmarks';
 import type { Eyes } from './guard';
 import { eyeLineAngle } from './region';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
+
+/** A distance is held through frames that do not tell it for no longer than this. */
+const LONGEST_HELD_MS = 500;
 
 /**
  * From landmarks to the viewer's eye: distance and turn of the head from the fit of all landmarks, direction from the pixel midway between
@@ -16,6 +19,7 @@ import type { FaceSample, TrackerSettings } from './tracking-messages';
 export class FaceMeasure {
   private readonly result = createLandmarkEye();
   private readonly blur = createBlurCorrection();
+  private readonly held = { ipdPx: 0, zMm: 0, tMs: -Infinity };
   private camera: Camera | null = null;
   private settings: TrackerSettings | null = null;
 
@@ -38,6 +42,7 @@ export class FaceMeasure {
     const leftEyePx = leftEyeOf(landmarks);
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
     inCamera.z *= trendOfDistance(inCamera.z, settings.viewer.eyeDistanceMm);
+    inCamera.z *= trendOfTurn(inCamera.z, settings.viewer.eyeDistanceMm, this.result.apparentYawRad);
     inCamera.z *= correctionForBlur(this.blur, {
       tMs: timestampMs,
       xPx: eyePx.x,
@@ -47,6 +52,8 @@ export class FaceMeasure {
       widening: () => faceWidening(model, landmarks, fit),
       detailAlong,
     });
+    if (isCut(landmarks, frame) && this.holds(timestampMs)) inCamera.z = this.held.zMm;
+    else this.hold(fit.scalePx, inCamera.z, timestampMs);
     const mmPerPx = inCamera.z / focalPx(camera);
     inCamera.x = (eyePx.x - frame.width / 2) * mmPerPx;
     inCamera.y = (eyePx.y - frame.height / 2) * mmPerPx;
@@ -75,19 +82,35 @@ export class FaceMeasure {
   ): FaceSample {
     const camera = this.cameraFor(frame, settings);
     const { eyeDistanceMm, distanceFactor } = settings.viewer;
-    const f = focalPx(camera);
     const ipdPx = Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y);
-    const eyePx = { x: (rightEye.x + leftEye.x) / 2, y: (rightEye.y + leftEye.y) / 2 };
-    const z = distanceFromSize(f, eyeDistanceMm, ipdPx) / distanceFactor;
-    const eyeInCamera = {
-      x: ((eyePx.x - camera.widthPx / 2) * z) / f,
-      y: ((eyePx.y - camera.heightPx / 2) * z) / f,
-      z,
-    };
-    const eye = { x: 0, y: 0, z: 0 };
-    pointToGlass(camera, eyeInCamera, eye);
-    const head = { yawRad: 0, pitchRad: 0, rollRad: eyeLineAngle(rightEye, leftEye) };
-    return { rightEyePx: rightEye, leftEyePx: leftEye, eyePx, ipdPx, eye, eyeInCamera, head, belief };
+    const z = distanceFromSize(focalPx(camera), eyeDistanceMm, ipdPx) / distanceFactor;
+    return sampleOf(camera, { rightEye, leftEye }, ipdPx, z, belief);
+  }
+
+  /**
+   * What the detector's two eyes say where landmarks failed, as on a face smeared by its motion: its direction, at the distance that
+   * landmarks gave last; at the distance the eyes themselves tell where that is too long ago.
+   */
+  measureGlimpse(
+    eyes: Eyes,
+    belief: number,
+    frame: { readonly width: number; readonly height: number },
+    settings: TrackerSettings,
+    timestampMs: number,
+  ): FaceSample {
+    if (!this.holds(timestampMs)) return this.measureEyes(eyes, belief, frame, settings);
+    return sampleOf(this.cameraFor(frame, settings), eyes, this.held.ipdPx, this.held.zMm, belief);
+  }
+
+  private holds(tMs: number): boolean {
+    const ageMs = tMs - this.held.tMs;
+    return ageMs >= 0 && ageMs <= LONGEST_HELD_MS;
+  }
+
+  private hold(ipdPx: number, zMm: number, tMs: number): void {
+    this.held.ipdPx = ipdPx;
+    this.held.zMm = zMm;
+    this.held.tMs = tMs;
   }
 
   private cameraFor(
@@ -105,4 +128,30 @@ export class FaceMeasure {
     }
     return this.camera;
   }
+}
+
+/** The ends of the face: forehead, chin, and its sides (numbering of the MediaPipe face mesh). */
+const FACE_ENDS = [10, 152, 234, 454] as const;
+
+/** Whether the edge of the frame cuts the face: the landmarks then crowd into what is seen of it, and it reads too far away. */
+const isCut = (landmarks: Float64Array, frame: { readonly width: number; readonly height: number }): boolean =>
+  FACE_ENDS.some((end) => {
+    const x = landmarks[3 * end];
+    const y = landmarks[3 * end + 1];
+    return x < 0 || y < 0 || x > frame.width || y > frame.height;
+  });
+
+/** Someone seen by the eyes alone, `z` mm away and as if they faced the camera. */
+function sampleOf(camera: Camera, { rightEye, leftEye }: Eyes, ipdPx: number, z: number, belief: number): FaceSample {
+  const f = focalPx(camera);
+  const eyePx = { x: (rightEye.x + leftEye.x) / 2, y: (rightEye.y + leftEye.y) / 2 };
+  const eyeInCamera = {
+    x: ((eyePx.x - camera.widthPx / 2) * z) / f,
+    y: ((eyePx.y - camera.heightPx / 2) * z) / f,
+    z,
+  };
+  const eye = { x: 0, y: 0, z: 0 };
+  pointToGlass(camera, eyeInCamera, eye);
+  const head = { yawRad: 0, pitchRad: 0, rollRad: eyeLineAngle(rightEye, leftEye) };
+  return { rightEyePx: rightEye, leftEyePx: leftEye, eyePx, ipdPx, eye, eyeInCamera, head, belief };
 }

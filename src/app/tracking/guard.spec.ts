@@ -41,6 +41,22 @@ describe('Guard', () => {
     expect(looks(guard, 90, 5)).toEqual([1, 1, 1, 0, 0]);
   });
 
+  it('takes no alarm at a jump that was expected: a walker moves by most of an eye distance a frame', () => {
+    const guard = new Guard();
+    expect(looks(guard, 0, 4)).toEqual([1, 1, 1, 0]);
+    expect(guard.due(eyes(50), 5, 50, 0)).toBe(false);
+    expect(guard.due(eyes(50), 5, 0, 50)).toBe(true);
+  });
+
+  it('holds landmarks to less while their speed is not known', () => {
+    const guard = new Guard();
+    expect(guard.due(eyes(0))).toBe(true);
+    expect(guard.judge(eyes(0), seen(15))).toBe('clings');
+    looks(guard, 0, 3);
+    expect(guard.due(eyes(0))).toBe(false);
+    expect(guard.judge(eyes(0), seen(15))).toBe('holds');
+  });
+
   it('gives up at the second look in a row that sees no face, and looks again at once after the first', () => {
     const guard = new Guard();
     expect(guard.judge(eyes(0), undefined)).toBe('missed');

@@ -15,7 +15,7 @@ import { Guard, type Eyes } from './guard';
 import { Looks } from './looks';
 import type { Picture } from './picture';
 import { scaled, type Region } from './region';
-import { RegionPrediction } from './region-prediction';
+import { RegionPrediction, SMEARED_RATIO } from './region-prediction';
 
 /** The landmark model's belief from which a face is taken to be there. */
 const FACE_BELIEF = 0.5;
@@ -24,8 +24,23 @@ const GUARD_WIDENING = 2.2 / 1.5;
 const DETECTION_PROBABILITY = 0.5;
 /** A face farther from the middle of the region, as a share of its side, is somebody else's. */
 const SAME_FACE = 0.5;
-/** No face grows or shrinks by more from one frame to the next: at 4 m a second toward a camera half a metre away it would be 1.3. */
-const MOST_GROWN = 1.15;
+/**
+ * Landmarks in a region that is not of the face's own size are of a wrong scale, by a quarter of the difference (outside films of sudden
+ * changes): they are placed again, at most so many times. Someone coming at 1 m a second from 0.5 m grows by 1.07 a frame.
+ */
+const MOST_GROWN = 1.08;
+const SETTLED_RATIO = 1.02;
+const MOST_SETTLING = 3;
+/** Where landmarks fail, the detector's eyes will do for so many frames in a row: a walker smeared by a dim camera, not a back of a head. */
+const MOST_GLIMPSES = 10;
+/** And the face must be about as large as it was: the detector's box is 0.9 of the landmarks' region, and varies with blur. */
+const GLIMPSED_RATIO = 1.5;
+/** And no farther from where it should be than this share of the region's side. */
+const GLIMPSED_WITHIN = 0.3;
+/** For so many frames someone just lost, or not yet borne out by landmarks, is looked for where they should be by now. */
+const EXPECTED_FRAMES = 8;
+/** There, and on a face smeared by its motion, the detector may be less sure: somebody was seen a moment ago. */
+const EXPECTED_PROBABILITY = 0.35;
 
 /**
  * Frames from one look at everybody else to the next: while nobody else is known (the look is for newcomers and has two halves), and
@@ -43,6 +58,14 @@ interface Following {
   readonly sinceMs: number;
   readonly prediction: RegionPrediction;
   readonly guard: Guard;
+  /** Frames in a row in which only the detector saw them. */
+  glimpses: number;
+}
+
+/** Someone looked for where they should be by now, and for how many more frames. */
+interface Expected {
+  readonly viewer: Following;
+  framesLeft: number;
 }
 
 /**
@@ -57,6 +80,7 @@ export class Tracker {
   choice: ChoiceRule = CALM_CHOICE;
   private readonly acquisition = new Acquisition();
   private following: Following | null = null;
+  private expected: Expected | null = null;
   private belief = 0;
   private seen: Detection | null = null;
   private lookedAt: number | null = null;
@@ -75,9 +99,14 @@ export class Tracker {
     return this.looks.points;
   }
 
-  /** The eyes of the face followed where the last look was the detector's alone. */
+  /** The eyes of the face followed where the last look was the detector's alone: by choice, or because landmarks failed. */
   get detected(): Eyes | null {
     return this.seen;
+  }
+
+  /** Whether landmarks failed on a face that is followed by them, which the detector saw. */
+  get glimpsed(): boolean {
+    return this.seen !== null && this.looking.by === 'landmarks';
   }
 
   /** Whom the last look was at: a number of their own for as long as they are there; null while nobody is followed. */
@@ -103,14 +132,17 @@ export class Tracker {
     }
     this.following = null;
     if (viewer) this.acquisition.restart();
-    const found = this.turnToAnother(picture, timestampMs) || this.acquire(picture, timestampMs);
+    const found =
+      this.turnToAnother(picture, timestampMs) || this.lookAgain(picture, timestampMs) || this.acquire(picture, timestampMs);
+    if (found) this.expected = null;
+    else if (viewer) this.expected = { viewer, framesLeft: EXPECTED_FRAMES };
     this.lookedAt = found ? this.chosen.chosen : null;
     return found ? this.belief : null;
   }
 
   /** Forgets everybody, as at a change of camera. */
   forget(): void {
-    this.following = null;
+    this.following = this.expected = null;
     this.bystanders.clear();
     this.acquisition.restart();
   }
@@ -167,24 +199,52 @@ export class Tracker {
   private follow(viewer: Following, picture: Picture, timestampMs: number): boolean {
     const region = viewer.prediction.at(timestampMs);
     if (this.looking.by === 'detector') return this.detect(viewer, picture, region, timestampMs);
-    if (!this.place(picture, region) || (this.jumped(region) && !this.place(picture, regionOfLandmarks(this.points))))
-      return this.replace(viewer, picture, this.guardLook(picture, region), timestampMs);
+    if (!this.settle(picture, region, viewer.prediction.fast ? SMEARED_RATIO : MOST_GROWN)) {
+      const seen = this.guardLook(picture, region, EXPECTED_PROBABILITY);
+      return this.replace(viewer, picture, seen, timestampMs) || this.glimpse(viewer, seen, timestampMs);
+    }
     const eyes = this.eyes();
-    if (viewer.guard.due(eyes, this.looking.guardEvery)) {
+    const { latest } = viewer.prediction;
+    if (viewer.guard.due(eyes, this.looking.guardEvery, region.cx - latest.cx, region.cy - latest.cy)) {
       this.guarded = true;
-      const seen = this.guardLook(picture, regionOfLandmarks(this.points));
+      const seen = this.guardLook(picture, regionOfLandmarks(this.points), probabilityFor(viewer));
       const verdict = viewer.guard.judge(eyes, seen);
       if (verdict === 'lost') return false;
       if (verdict === 'clings') return this.replace(viewer, picture, seen, timestampMs);
     }
-    viewer.prediction.measure(regionOfLandmarks(this.points), timestampMs);
+    this.measured(viewer, timestampMs);
     return true;
   }
 
-  /** Whether the face was of another size than the region it was looked for in: its own size is then not measured rightly. */
-  private jumped(region: Region): boolean {
-    const ratio = regionOfLandmarks(this.points).size / region.size;
-    return ratio > MOST_GROWN || ratio < 1 / MOST_GROWN;
+  /** Takes in where the landmarks lie. */
+  private measured(viewer: Following, timestampMs: number): void {
+    viewer.glimpses = 0;
+    viewer.prediction.measure(regionOfLandmarks(this.points), timestampMs);
+  }
+
+  /** Goes on with what the detector saw of a face on which landmarks failed: where it is, not how large. */
+  private glimpse(viewer: Following, seen: Detection | undefined, timestampMs: number): boolean {
+    const { latest } = viewer.prediction;
+    const due = viewer.prediction.at(timestampMs);
+    if (!seen || seen.score < probabilityFor(viewer) || differInSize(landmarkRegion(seen), latest, GLIMPSED_RATIO)) return false;
+    if (Math.hypot(seen.cx - due.cx, seen.cy - due.cy) > GLIMPSED_WITHIN * due.size) return false;
+    if (++viewer.glimpses > MOST_GLIMPSES) return false;
+    this.take(seen);
+    viewer.prediction.measure({ ...latest, cx: seen.cx, cy: seen.cy }, timestampMs);
+    return true;
+  }
+
+  /** Places landmarks in this region, and again in their own until it is of the face's size; whether they are believed. */
+  private settle(picture: Picture, region: Region, mostGrown = MOST_GROWN): boolean {
+    let looked = region;
+    if (!this.place(picture, looked)) return false;
+    let ratio = mostGrown;
+    for (let look = 0; look < MOST_SETTLING && differInSize(regionOfLandmarks(this.points), looked, ratio); look++) {
+      looked = regionOfLandmarks(this.points);
+      if (!this.place(picture, looked)) return false;
+      ratio = SETTLED_RATIO;
+    }
+    return true;
   }
 
   private detect(viewer: Following, picture: Picture, region: Region, timestampMs: number): boolean {
@@ -202,39 +262,68 @@ export class Tracker {
 
   /** Places the landmarks of the viewer anew from a detection, confirmed; false where that fails. */
   private replace(viewer: Following, picture: Picture, seen: Detection | undefined, timestampMs: number): boolean {
-    const face = seen && confirm(this.looks, picture, seen);
-    if (!face || !this.place(picture, landmarkRegion(face))) return false;
+    const face = seen && confirm(this.looks, picture, seen, EXPECTED_PROBABILITY);
+    if (!face || !this.placeIn(picture, face)) return false;
     viewer.guard.replaced(this.eyes());
-    viewer.prediction.measure(regionOfLandmarks(this.points), timestampMs);
+    this.measured(viewer, timestampMs);
+    return true;
+  }
+
+  /**
+   * Places landmarks on a detected face, then in their own region: the detector's box is of another size, and scale depends on it. On a
+   * smeared face the first may be believed and the second not; then the first is taken.
+   */
+  private placeIn(picture: Picture, face: Detection): boolean {
+    const box = landmarkRegion(face);
+    return this.place(picture, box) && (this.settle(picture, regionOfLandmarks(this.points)) || this.place(picture, box));
+  }
+
+  /** Looks for someone lost a moment ago, or not yet borne out by landmarks, where they should be by now. */
+  private lookAgain(picture: Picture, timestampMs: number): boolean {
+    const { expected } = this;
+    if (!expected) return false;
+    if (expected.framesLeft-- === 0) {
+      this.expected = null;
+      return false;
+    }
+    const { viewer } = expected;
+    const seen = this.guardLook(picture, viewer.prediction.at(timestampMs), EXPECTED_PROBABILITY);
+    if (!seen) return false;
+    if (this.looking.by === 'detector') this.take(seen);
+    else if (!this.replace(viewer, picture, seen, timestampMs) && !this.glimpse(viewer, seen, timestampMs)) {
+      viewer.prediction.measure(landmarkRegion(seen), timestampMs);
+      return false;
+    }
+    this.chosen.chosen = viewer.id;
+    this.following = viewer;
     return true;
   }
 
   private acquire(picture: Picture, timestampMs: number): boolean {
     for (const face of this.acquisition.seek(this.looks, picture)) {
-      if (this.looking.by === 'detector') {
-        this.take(face);
-        this.begin(landmarkRegion(face), timestampMs);
-        return true;
+      if (this.looking.by === 'detector') this.take(face);
+      else if (!this.placeIn(picture, face)) {
+        // Not to be told of before landmarks bear them out: how far away they are is not known.
+        const viewer = { ...this.newcomer(landmarkRegion(face), timestampMs), glimpses: MOST_GLIMPSES };
+        this.expected ??= { viewer, framesLeft: EXPECTED_FRAMES };
+        continue;
       }
-      if (!this.place(picture, landmarkRegion(face))) continue;
-      // A second look in the landmarks' own region: the detector's box is of another size, and measured scale depends on it.
-      const region = regionOfLandmarks(this.points);
-      if (!this.place(picture, region)) continue;
-      this.begin(region, timestampMs).prediction.measure(regionOfLandmarks(this.points), timestampMs);
+      const region = this.looking.by === 'detector' ? landmarkRegion(face) : regionOfLandmarks(this.points);
+      this.following = this.newcomer(region, timestampMs);
+      this.chosen.chosen = this.following.id;
       return true;
     }
     return false;
   }
 
-  private begin(region: Region, timestampMs: number): Following {
-    const id = ++this.ids;
-    this.chosen.chosen = id;
-    return (this.following = {
-      id,
+  private newcomer(region: Region, timestampMs: number): Following {
+    return {
+      id: ++this.ids,
       sinceMs: timestampMs,
       prediction: new RegionPrediction(region, timestampMs),
       guard: new Guard(),
-    });
+      glimpses: 0,
+    };
   }
 
   private place(picture: Picture, region: Region): boolean {
@@ -243,8 +332,8 @@ export class Tracker {
   }
 
   /** The face in the middle of the region, not the one believed in most: that may be somebody's who is seen right beside it. */
-  private guardLook(picture: Picture, region: Region): Detection | undefined {
-    const face = nearestTo(region, this.looks.short(picture, scaled(region, GUARD_WIDENING), DETECTION_PROBABILITY));
+  private guardLook(picture: Picture, region: Region, probability = DETECTION_PROBABILITY): Detection | undefined {
+    const face = nearestTo(region, this.looks.short(picture, scaled(region, GUARD_WIDENING), probability));
     return face && Math.hypot(face.cx - region.cx, face.cy - region.cy) < SAME_FACE * region.size ? face : undefined;
   }
 
@@ -252,6 +341,12 @@ export class Tracker {
     return { rightEye: rightEyeOf(this.points), leftEye: leftEyeOf(this.points) };
   }
 }
+
+/** How sure the detector must be of someone followed. */
+const probabilityFor = ({ prediction }: Following): number => (prediction.fast ? EXPECTED_PROBABILITY : DETECTION_PROBABILITY);
+
+/** Whether one region is larger or smaller than the other by more than this ratio. */
+const differInSize = (a: Region, b: Region, ratio: number): boolean => a.size > b.size * ratio || a.size * ratio < b.size;
 
 /** The landmarks' region against the detector's box of the same face: measured on rendered heads at 1.5 and 1.9 m. */
 const BOX_TO_REGION = 1.67;
@@ -261,6 +356,7 @@ const followingOf = ({ id, sinceMs, face }: Bystander, timestampMs: number): Fol
   sinceMs,
   prediction: new RegionPrediction(landmarkRegion(face), timestampMs),
   guard: new Guard(),
+  glimpses: 0,
 });
 
 /** Someone as the choice knows them; off the axis in shares of the frame's width. */

@@ -129,6 +129,8 @@ export class TrackingSession {
     settings: TrackerSettings,
     timestampMs: number,
   ): FaceSample {
+    if (tracker.detected && tracker.glimpsed)
+      return this.measure.measureGlimpse(tracker.detected, belief, frame, settings, timestampMs);
     return tracker.detected
       ? this.measure.measureEyes(tracker.detected, belief, frame, settings)
       : this.measure.measure(tracker.points, belief, frame, settings, timestampMs, tracker.looks.detailAlong);
