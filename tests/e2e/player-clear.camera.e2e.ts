@@ -44,7 +44,7 @@ test('on a small glass a clear scene never tears, however far outside its zone t
   const eyeRead = async () => (await readOut.nth(3).textContent())!.split(',').map(Number);
   await expect.poll(async () => Math.abs((await eyeRead())[0])).toBeGreaterThan(40);
   // The figures are told anew twice a second.
-  await atRest(async () => (await eyeRead())[0], 2, 700);
+  await atRest(page, async () => (await eyeRead())[0], 2, 45);
   expect((await eyeRead())[1]).toBeGreaterThan(20);
 
   const onlyPicture = 'oriel-player > :not(.picture) { visibility: hidden !important; }';

@@ -32,7 +32,7 @@ async function shiftAfter(page: Page, act: () => Promise<unknown>): Promise<numb
   const begun = await shiftOf(page);
   await act();
   await expect.poll(async () => Math.abs((await shiftOf(page)) - begun)).toBeGreaterThan(1);
-  return atRest(() => shiftOf(page), 0.3);
+  return atRest(page, () => shiftOf(page), 0.3);
 }
 
 test('before the first play the set-up is offered; played as it is, the camera is asked for and nobody is seen', async ({ signedInPage, expectAccessible }) => {
@@ -253,7 +253,7 @@ test('18 times opened and left, nothing stays behind', async ({ signedInPage }) 
   };
   const settled = async () => {
     await expect.poll(() => page.workers()).toEqual([]);
-    await atRest(async () => (await measured()).nodes, 5);
+    await atRest(page, async () => (await measured()).nodes, 5);
     return measured();
   };
   for (let i = 0; i < 6; i++) await visit();
