@@ -22,6 +22,18 @@ describe('the database', () => {
     expect((await browser.ask('get', '/api/me')).body.account.id).toBe(id);
   });
 
+  it('that is lost in the midst of a transaction fails that transaction and nothing else', async () => {
+    const { db } = app;
+    const cut = db.transaction().execute(async (transaction) => {
+      const { rows } = await sql<{ pid: number }>`select pg_backend_pid() as pid`.execute(transaction);
+      await sql`select pg_terminate_backend(${rows[0].pid})`.execute(db);
+      await new Promise((resolve) => setTimeout(resolve, 200));
+      await sql`select 1`.execute(transaction);
+    });
+    await expect(cut).rejects.toThrow();
+    expect((await app.browser().ask('get', '/ready')).status).toBe(200);
+  });
+
   it('is migrated once, however many servers start together', async () => {
     const database = await createTestDatabase();
     await sql`drop schema public cascade`.execute(database.connection.db);

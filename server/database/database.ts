@@ -15,6 +15,8 @@ export function connect(databaseUrl: string, onLost: (error: Error) => void): Co
   const pool = new pg.Pool({ connectionString: databaseUrl, max: 12, connectionTimeoutMillis: 5_000 });
   // An idle connection that the server closes would otherwise end the process; the pool opens another.
   pool.on('error', onLost);
+  // So would one that is lost while a transaction waits for something else: its next query is told.
+  pool.on('connect', (client) => client.on('error', () => undefined));
   return { pool, db: new Kysely<Tables>({ dialect: new PostgresDialect({ pool }) }) };
 }
 

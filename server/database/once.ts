@@ -1,8 +1,7 @@
 import { sql } from 'kysely';
 import type { Database } from './database';
 
-/** Whether that was done already. */
-export const isReached = async (db: Database, name: string) =>
+const isReached = async (db: Database, name: string) =>
   (await db.selectFrom('milestone').select('name').where('name', '=', name).executeTakeFirst()) !== undefined;
 
 /** Does something once in the life of the database, by one server of several that start together; again, if it was cut off. */

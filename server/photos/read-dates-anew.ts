@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import type { Database } from '../database/database';
-import { isReached, once } from '../database/once';
+import { once } from '../database/once';
 import { defineJob } from '../jobs/job';
 import type { Jobs } from '../jobs/jobs';
 import { takenDateOfFile } from '../pictures/taken-date';
@@ -23,7 +23,6 @@ async function readDatesAnew(db: Database, storage: Storage): Promise<void> {
 
 /** Mends, once in the life of a database, the dates that were once shifted by EXIF's offset from UTC. */
 export async function readDatesAnewOnce(db: Database, storage: Storage, jobs: Jobs): Promise<void> {
-  if (await isReached(db, milestone)) return;
   await jobs.work(job, { run: () => once(db, milestone, () => readDatesAnew(db, storage)) });
   await jobs.send(job, {});
 }

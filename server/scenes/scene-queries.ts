@@ -26,9 +26,14 @@ const scenes = (db: Database) =>
 export const findScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
   scenes(db).where('scene.id', '=', id).executeTakeFirst();
 
-/** The scene, which nobody else can save until the transaction ends. */
-export const holdScene = (db: Database, id: string): Promise<SceneRow | undefined> =>
-  scenes(db).where('scene.id', '=', id).forUpdate('scene').executeTakeFirst();
+/**
+ * The scene, which nobody else can save until the transaction ends. Held first and then read: one statement that had to wait would see the new
+ * row beside the accounts it had found for the old one, and so nobody's name (PostgreSQL manual, 13.2.1).
+ */
+export async function holdScene(db: Database, id: string): Promise<SceneRow | undefined> {
+  await db.selectFrom('scene').select('id').where('id', '=', id).forUpdate().execute();
+  return findScene(db, id);
+}
 
 export const scenesOf = (db: Database, householdId: string, bin: boolean): Promise<SceneRow[]> =>
   scenes(db)

@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { sql } from 'kysely';
 import sharp from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Scene, type SceneDocument } from '@oriel/shared/contracts/scenes';
@@ -223,6 +224,20 @@ describe('saving', () => {
       document: { ...scene.document, name: 'Mine' },
     });
     expect(copy.body.scene).toMatchObject({ revision: 1, document: { name: 'Mine copy' } });
+  });
+
+  it('says who saved meanwhile even to one who waited for that save', async () => {
+    const scene = await create({ name: 'Waiting' });
+    const waiting = sql<{ n: number }>`select count(*)::int as n from pg_stat_activity where datname = current_database() and wait_event_type = 'Lock'`;
+    const { late } = await app.db.transaction().execute(async (transaction) => {
+      await transaction.updateTable('scene').set({ revision: 2, saved_by: other.id }).where('id', '=', scene.id).execute();
+      const late = save(scene, { ...scene.document, name: 'Late' });
+      await expect.poll(async () => (await waiting.execute(app.db)).rows[0].n).toBe(1);
+      return { late };
+    });
+    const refused = await late;
+    expect(refused.status).toBe(409);
+    expect(refused.body.detail).toMatchObject({ revision: 2, savedBy: 'Test person', savedById: other.id });
   });
 
   it('lets exactly one of many win who save at the same moment', async () => {

@@ -34,9 +34,11 @@ const walls = (db: Database) =>
 export const findWall = (db: Database, id: string): Promise<WallRow | undefined> =>
   walls(db).where('wall.id', '=', id).executeTakeFirst();
 
-/** The wall, which nobody else can change until the transaction ends. */
-export const holdWall = (db: Database, id: string): Promise<WallRow | undefined> =>
-  walls(db).where('wall.id', '=', id).forUpdate('wall').executeTakeFirst();
+/** The wall, which nobody else can change until the transaction ends. Held first and then read, as in `holdScene`. */
+export async function holdWall(db: Database, id: string): Promise<WallRow | undefined> {
+  await db.selectFrom('wall').select('id').where('id', '=', id).forUpdate().execute();
+  return findWall(db, id);
+}
 
 /** By name. */
 export const wallsOf = async (db: Database, householdId: string): Promise<WallRow[]> => {
