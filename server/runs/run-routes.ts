@@ -13,7 +13,7 @@ export const runRoutes =
       run: await runs.keep(body, { householdId, accountId }),
     }));
     mount(contract.readRun, ({ params }) => runs.read(params.runId));
-    mount(contract.renameRun, async ({ params, body }) => ({ run: await runs.rename(params.runId, body.name) }));
+    mount(contract.renameRun, async ({ params, body }) => ({ run: await runs.rename(params.runId, body.name, body.was) }));
     mount(contract.removeRun, async ({ params }) => {
       await runs.remove(params.runId);
       return {};

@@ -1,4 +1,5 @@
 import type { keepRun, RunHeader, RunSample } from '@oriel/shared/contracts/runs';
+import { sql } from 'kysely';
 import type * as z from 'zod';
 import type { Database } from '../database/database';
 import { saverOf } from '../database/revisions';
@@ -25,6 +26,15 @@ const wallNotHere = () =>
     {
       fields: { wallId: 'This wall is not here' },
     },
+  );
+
+const renamedMeanwhile = (name: string) =>
+  new DomainFailure(
+    409,
+    'renamed-meanwhile',
+    `Somebody else named this run “${name}” meanwhile.`,
+    'Nothing was overwritten. Save again to give it your name all the same.',
+    { detail: { name } },
   );
 
 const toHeader = ({ facts, ...row }: HeaderRow): RunHeader => ({
@@ -71,23 +81,29 @@ export function runService(db: Database) {
       return rows.map(toHeader);
     },
 
-    /** @throws wall-not-here (422) */
-    async keep({ name, wallId, samples, ...recorded }: NewRun, { householdId, accountId }: ActingMember): Promise<RunHeader> {
+    /** Once, however often it is sent; sent again by whoever recorded it with more samples, those are kept. @throws wall-not-here (422) */
+    async keep({ id, name, wallId, samples, ...recorded }: NewRun, { householdId, accountId }: ActingMember): Promise<RunHeader> {
       if (wallId) await requireWall(householdId, wallId);
       const facts: RunFacts = { ...recorded, durationMs: durationOf(samples), sampleCount: samples.length };
-      const { id } = await db
+      const recording = { facts: JSON.stringify(facts), samples: JSON.stringify(samples.map(compact)) };
+      await db
         .insertInto('run')
-        .values({
-          household_id: householdId,
-          wall_id: wallId,
-          name,
-          facts: JSON.stringify(facts),
-          samples: JSON.stringify(samples.map(compact)),
-          recorded_by: accountId,
-        })
-        .returning('id')
-        .executeTakeFirstOrThrow();
-      return header(id);
+        .values({ id, household_id: householdId, wall_id: wallId, name, recorded_by: accountId, ...recording })
+        .onConflict((same) =>
+          same
+            .column('id')
+            .doUpdateSet(recording)
+            .where('run.household_id', '=', householdId)
+            .where('run.recorded_by', '=', accountId)
+            .where(sql<number>`(run.facts->>'sampleCount')::int`, '<', samples.length),
+        )
+        .execute();
+      const kept = await headers(db)
+        .where('run.id', '=', id)
+        .where('run.household_id', '=', householdId)
+        .executeTakeFirst();
+      if (!kept) throw notFound();
+      return toHeader(kept);
     },
 
     async read(id: string): Promise<{ run: RunHeader; samples: RunSample[] }> {
@@ -97,9 +113,17 @@ export function runService(db: Database) {
       return { run: toHeader(rest), samples: samples.map(unfold) };
     },
 
-    async rename(id: string, name: string): Promise<RunHeader> {
-      await db.updateTable('run').set({ name }).where('id', '=', id).execute();
-      return header(id);
+    /** @throws renamed-meanwhile (409) */
+    async rename(id: string, name: string, was: string): Promise<RunHeader> {
+      const { numUpdatedRows } = await db
+        .updateTable('run')
+        .set({ name })
+        .where('id', '=', id)
+        .where('name', 'in', [was, name])
+        .executeTakeFirst();
+      const now = await header(id);
+      if (!numUpdatedRows) throw renamedMeanwhile(now.name);
+      return now;
     },
 
     async remove(id: string): Promise<void> {

@@ -26,6 +26,7 @@ const sample = (i: number, different: Partial<RunSample> = {}): RunSample => ({
   ...different,
 });
 const recorded = (count: number) => ({
+  id: randomUUID() as string,
   name: 'At rest',
   wallId: null as string | null,
   machine: 'Linux x86_64, 4 cores',
@@ -75,10 +76,34 @@ describe('runs', () => {
 
   it('are renamed and removed', async () => {
     const { run } = (await keep(recorded(2))).body;
-    const renamed = await tuner.browser.ask('patch', `/api/runs/${run.id}`, { name: ' Calmer ' });
+    const renamed = await tuner.browser.ask('patch', `/api/runs/${run.id}`, { name: ' Calmer ', was: run.name });
     expect(renamed.body.run).toEqual({ ...run, name: 'Calmer' });
     expect((await tuner.browser.ask('delete', `/api/runs/${run.id}`)).status).toBe(200);
     expect((await tuner.browser.ask('get', `/api/runs/${run.id}`)).status).toBe(404);
+  });
+
+  it('are kept once when sent again, whole, under the name they have meanwhile; nobody else’s is touched or told', async () => {
+    const body = { ...recorded(2), name: 'Once' };
+    const { run } = (await keep(body)).body;
+    await tuner.browser.ask('patch', `/api/runs/${run.id}`, { name: 'Named', was: 'Once' });
+    expect((await keep(body)).body.run).toEqual({ ...run, name: 'Named' });
+    expect((await list()).filter(({ id }) => id === body.id)).toHaveLength(1);
+    // Stored while it was still being recorded, and then as a whole.
+    const whole = (await keep({ ...recorded(9), id: body.id })).body.run;
+    expect([whole.sampleCount, (await keep(body)).body.run.sampleCount]).toEqual([9, 9]);
+    const foreign = (await app.household()).id;
+    const them = await app.signedIn('tuner', foreign);
+    expect((await keep({ ...recorded(2), id: body.id }, them, foreign)).status).toBe(404);
+  });
+
+  it('are not renamed over another’s name, unless once more; the same name twice is no quarrel', async () => {
+    const { run } = (await keep({ ...recorded(2), name: 'Seen' })).body;
+    const rename = (name: string, was: string) => tuner.browser.ask('patch', `/api/runs/${run.id}`, { name, was });
+    await rename('Hers', 'Seen');
+    const late = await rename('His', 'Seen');
+    expect([late.status, late.body.code, late.body.detail]).toEqual([409, 'renamed-meanwhile', { name: 'Hers' }]);
+    expect((await rename('Hers', 'Seen')).status).toBe(200);
+    expect((await rename('His', late.body.detail.name)).body.run.name).toBe('His');
   });
 
   it('belong to a wall of the household, and outlive it', async () => {
@@ -112,7 +137,7 @@ describe('runs', () => {
     const { run } = (await keep(recorded(2), them, foreign)).body;
     for (const method of ['get', 'patch', 'delete'] as const)
       expect(
-        (await tuner.browser.ask(method, `/api/runs/${run.id}`, method === 'patch' ? { name: 'Mine' } : undefined))
+        (await tuner.browser.ask(method, `/api/runs/${run.id}`, method === 'patch' ? { name: 'Mine', was: run.name } : undefined))
           .status,
       ).toBe(404);
   });

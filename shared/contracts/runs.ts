@@ -5,8 +5,8 @@ import { defineRoute, members } from './route';
 import { TrackerTuning } from './wall-set-up';
 
 /**
- * One frame of a run: when it was captured and received (ms, one clock), the eye as measured before smoothing (mm from the centre of the glass;
- * null where nobody was), and the time each stage took. Never a picture.
+ * One frame of a run: when it was captured and received (ms, one clock; the same where the browser does not tell when it was captured), the
+ * eye as measured before smoothing (mm from the centre of the glass; null where nobody was), and the time each stage took. Never a picture.
  */
 export const RunSample = z.object({
   capturedMs: z.number(),
@@ -52,13 +52,15 @@ export const listRuns = defineRoute({
   params: HouseholdParams,
   reply: z.object({ runs: z.array(RunHeader) }),
 });
-/** 422 `wall-not-here` for a wall of another household. */
+/** A run sent again under its id, its answer having been lost, is kept once. 422 `wall-not-here` for a wall of another household. */
 export const keepRun = defineRoute({
   method: 'POST',
   path: '/api/households/:householdId/runs',
   access: members('household', tuners),
   params: HouseholdParams,
   body: z.object({
+    /** Given where it was recorded. */
+    id: Id,
     name: Name,
     wallId: Id.nullable(),
     machine: z.string().max(300),
@@ -77,12 +79,13 @@ export const readRun = defineRoute({
   params: RunParams,
   reply: z.object({ run: RunHeader, samples: z.array(RunSample) }),
 });
+/** Only over the name that was seen: 409 `renamed-meanwhile`, whose `detail.name` is the newer one. */
 export const renameRun = defineRoute({
   method: 'PATCH',
   path: '/api/runs/:runId',
   access: members('run', tuners),
   params: RunParams,
-  body: z.object({ name: Name }),
+  body: z.object({ name: Name, was: z.string() }),
   reply: z.object({ run: RunHeader }),
 });
 export const removeRun = defineRoute({

@@ -21,6 +21,14 @@ describe('a run in figures', () => {
     expect(figures.foundShare).toBe(1);
   });
 
+  it('does not claim that frames came in no time where it is not known when they were captured', () => {
+    const unknown = run.map((sample) => ({ ...sample, capturedMs: sample.receivedMs }));
+    expect(figuresOf(unknown, usualTuning).arrivalMs).toEqual({ median: NaN, p95: NaN });
+    const first = run.map((sample, i) => (i < 60 ? unknown[i] : sample));
+    expect(figuresOf(first, usualTuning).arrivalMs.median).toBeCloseTo(40, 6);
+    expect(figuresOf(first, usualTuning).lagMs).toBeCloseTo(figuresOf(run, usualTuning).lagMs, 6);
+  });
+
   it('counts losses by how often, and the share of looks that found somebody', () => {
     const lost = run.slice(0, 100).map((sample, i) => (i % 10 === 5 || i % 10 === 6 ? { ...sample, eye: null } : sample));
     expect(figuresOf(lost, usualTuning).losses).toBe(10);

@@ -1,5 +1,6 @@
 import type { RunSample } from '../contracts/runs';
 import type { TrackerTuning } from '../contracts/wall-set-up';
+import { captureKnown, onOneClock } from './capture-time';
 import { followerSettingsOf } from './follower-settings-of';
 import { jitterMm } from './jitter';
 import { lagInMotionMs } from './lag';
@@ -17,7 +18,7 @@ export interface RunFigures {
   readonly detectMs: Spread;
   readonly landmarksMs: Spread;
   readonly totalMs: Spread;
-  /** From capture to the page. */
+  /** From capture to the page, of the samples whose capture is known. */
   readonly arrivalMs: Spread;
   /** How often somebody was lost. */
   readonly losses: number;
@@ -30,7 +31,8 @@ export interface RunFigures {
   readonly lagMs: number;
 }
 
-export function figuresOf(samples: readonly RunSample[], tuning: TrackerTuning): RunFigures {
+export function figuresOf(recorded: readonly RunSample[], tuning: TrackerTuning): RunFigures {
+  const samples = onOneClock(recorded);
   const of = (figure: (sample: RunSample) => number) => spreadOf(samples.map(figure));
   const known = laterKnown(samples);
   const still = stillStretches(known);
@@ -45,7 +47,7 @@ export function figuresOf(samples: readonly RunSample[], tuning: TrackerTuning):
     detectMs: of(({ detectMs }) => detectMs),
     landmarksMs: of(({ landmarksMs }) => landmarksMs),
     totalMs: of(({ totalMs }) => totalMs),
-    arrivalMs: of(({ capturedMs, receivedMs }) => receivedMs - capturedMs),
+    arrivalMs: spreadOf(recorded.filter(captureKnown).map(({ capturedMs, receivedMs }) => receivedMs - capturedMs)),
     losses: samples.filter(({ eye }, i) => i > 0 && eye === null && samples[i - 1].eye !== null).length,
     foundShare: samples.length ? found / samples.length : NaN,
     seenJitterMm: jitterMm(seen, still, 'across'),

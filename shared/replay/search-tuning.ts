@@ -1,5 +1,6 @@
 import type { TrackerTuning } from '../contracts/wall-set-up';
 import { followerSettingsOf } from './follower-settings-of';
+import { onOneClock } from './capture-time';
 import { excerptOf, replayExcerpt, type Excerpt } from './excerpt';
 import { jitterMm } from './jitter';
 import { laterKnown, type LaterKnown } from './later-known';
@@ -7,6 +8,7 @@ import { lagInMotionMs, strayInMotion } from './lag';
 import { leastOverGrid, type Dimension } from './least-over-grid';
 import type { Direction, ReplaySample } from './sample';
 import { movingStretches, stillStretches, totalMs, type Stretch } from './stretches';
+import { LEAST_JUDGED_MS } from './what-it-shows';
 import { costsIn, unbeaten, type Figures, type Wish } from './wishes';
 
 /** One setting and what it would have done with this run. */
@@ -28,9 +30,6 @@ export interface SearchResult {
   readonly best: Readonly<Record<Wish, TriedTuning>>;
 }
 
-/** Less than this of rest or of motion says nothing. */
-export const LEAST_JUDGED_MS = 1000;
-
 /** Thrown when a run has too little rest or motion; `message` says what to record. */
 export class TooLittleMotion extends Error {
   override readonly name = 'TooLittleMotion';
@@ -48,11 +47,12 @@ const HORIZONS_MS: Dimension = { coarse: [0, 60, 120, 200] };
  * keeps the one it has, since both share it). Of a long run an excerpt is replayed. @throws TooLittleMotion
  */
 export function searchTuning(
-  samples: readonly ReplaySample[],
+  run: readonly ReplaySample[],
   today: TrackerTuning,
   direction: Direction,
   progress: (triedSoFar: number) => void = () => undefined,
 ): SearchResult {
+  const samples = onOneClock(run);
   const known = laterKnown(samples);
   const still = stillStretches(known);
   const moving = movingStretches(known, direction);

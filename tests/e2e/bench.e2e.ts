@@ -1,7 +1,9 @@
 import { readFile } from 'node:fs/promises';
+import type { Page } from '@playwright/test';
 import { keepMadeUpRun, makeWall, wallNow } from './bench/household';
 import { expect, test } from './fixtures';
 
+const put = (page: Page, wish: string) => page.getByRole('button', { name: `Put ${wish} on` });
 const unique = () => Math.random().toString(36).slice(2, 8);
 
 test('only owners and tuners find the bench', async ({ signedInPage }) => {
@@ -23,31 +25,37 @@ test('a run is replayed through other settings, and the wished one put on the wa
   await page.goto(`/bench/runs/${runId}`);
   await expect(page.getByRole('heading', { name: 'From side to side' })).toBeVisible({ timeout: 60_000 });
   await page.getByRole('radio', { name: 'Calmer' }).click();
-  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  await put(page, 'calmer').click();
   await expect(page.getByText(`${wall.setUp.name} follows with this from now on.`)).toBeVisible();
+  await expect(page.getByText(/^Cutoff at rest, side to side: [\d.]+ Hz → [\d.]+ Hz$/)).toBeVisible();
   const after = await wallNow(page, wall.id);
   expect(after.revision).toBe(wall.revision + 1);
   expect(after.setUp.tuning.filter).not.toEqual(wall.setUp.tuning.filter);
   expect({ ...after.setUp, tuning: null }).toEqual({ ...wall.setUp, tuning: null });
+  await page.getByRole('button', { name: 'Go back to what it was' }).click();
+  await expect(page.getByText('follows as it did before')).toBeVisible();
+  expect((await wallNow(page, wall.id)).setUp).toEqual(wall.setUp);
+  await put(page, 'calmer').click();
+  await expect(page.getByText('from now on')).toBeVisible();
 
   expectErrors(/409 \(Conflict\)/);
   // Somebody else tunes the same wall from another page.
   const other = await signedInPage('owner');
   await other.goto(`/bench/runs/${runId}`);
-  await expect(other.getByRole('button', { name: 'Apply to the wall' })).toBeVisible({ timeout: 60_000 });
-  await other.getByRole('button', { name: 'Apply to the wall' }).click();
+  await expect(put(other, 'balanced')).toBeVisible({ timeout: 60_000 });
+  await put(other, 'balanced').click();
   await expect(other.getByText('from now on')).toBeVisible();
 
   await page.getByRole('radio', { name: 'Quicker' }).click();
-  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  await put(page, 'quicker').click();
   await expect(page.getByText('Their changes stay')).toBeVisible();
-  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 2);
-  await page.getByRole('button', { name: 'Apply to the wall' }).click();
+  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 4);
+  await put(page, 'quicker').click();
   await expect(page.getByText('from now on')).toBeVisible();
-  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 3);
+  expect((await wallNow(page, wall.id)).revision).toBe(wall.revision + 5);
 });
 
-test('runs are renamed, exported, compared and deleted', async ({ signedInPage }) => {
+test('runs are renamed, exported, compared and deleted', async ({ signedInPage, expectErrors }) => {
   const page = await signedInPage('tuner');
   await page.goto('/scenes');
   const [first, second] = [`=1+1 ${unique()}`, `Slow ${unique()}`];
@@ -73,21 +81,34 @@ test('runs are renamed, exported, compared and deleted', async ({ signedInPage }
   await page.getByRole('link', { name: 'Compare these two' }).click();
   await expect(page.getByRole('row', { name: /Capture to the page/ })).toContainText('40.0 / 40.0');
   await expect(page.getByRole('row', { name: /Capture to the page/ })).toContainText('120.0 / 120.0');
+  await expect(page.getByText('Both were recorded with the same settings.')).toBeVisible();
   await page.getByRole('link', { name: 'All runs' }).click();
 
+  // Somebody else names it meanwhile: that is said, and only a second press goes over it.
+  expectErrors(/409 \(Conflict\)/);
+  const other = await signedInPage('owner');
+  await other.goto('/bench/runs');
+  await other.getByRole('button', { name: `Rename ${second}` }).click();
   await page.getByRole('button', { name: `Rename ${second}` }).click();
+  const hers = `Hers ${unique()}`;
+  await other.getByLabel('Name of the run').fill(hers);
+  await other.getByRole('button', { name: 'Save the name' }).click();
+  await expect(other.getByRole('link', { name: hers, exact: true })).toBeVisible();
   const third = `Slower ${unique()}`;
   await page.getByLabel('Name of the run').fill(third);
   await page.getByRole('button', { name: 'Save the name' }).click();
-  await expect(page.getByRole('link', { name: third })).toBeVisible();
+  await expect(page.getByText(`Somebody else named this run “${hers}” meanwhile.`)).toBeVisible();
+  await expect(page.getByLabel('Name of the run')).toHaveValue(third);
+  await page.getByRole('button', { name: 'Save the name' }).click();
+  await expect(page.getByRole('link', { name: third, exact: true })).toBeVisible();
 
   await page.getByRole('button', { name: `Delete ${third}` }).click();
   await page.getByRole('button', { name: 'Keep' }).click();
-  await expect(page.getByRole('link', { name: third })).toBeVisible();
+  await expect(page.getByRole('link', { name: third, exact: true })).toBeVisible();
   await page.getByRole('button', { name: `Delete ${third}` }).click();
   await page.getByRole('button', { name: 'Delete now' }).click();
-  await expect(page.getByRole('link', { name: third })).toHaveCount(0);
+  await expect(page.getByRole('link', { name: third, exact: true })).toHaveCount(0);
   await page.reload();
-  await expect(page.getByRole('link', { name: first })).toBeVisible();
-  await expect(page.getByRole('link', { name: third })).toHaveCount(0);
+  await expect(page.getByRole('link', { name: first, exact: true })).toBeVisible();
+  await expect(page.getByRole('link', { name: third, exact: true })).toHaveCount(0);
 });

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import type { Page } from '@playwright/test';
 import { createWall, readWall, type Wall } from '@oriel/shared/contracts/walls';
 import { keepRun, type RunSample } from '@oriel/shared/contracts/runs';
@@ -20,6 +21,7 @@ export async function keepMadeUpRun(page: Page, name: string, wallId: string | n
     (s) => ({ ...s, ...stages }),
   );
   const body = {
+    id: randomUUID(),
     name,
     wallId,
     machine: 'made up',

@@ -13,6 +13,7 @@ import {
 } from '@angular/core';
 import type { Chart, ChartDataset } from 'chart.js';
 import { Light } from '../../core/light';
+import { drawTags, type Tag } from './draw-tags';
 import { inksOf, type Ink } from './inks';
 
 export interface ChartPoint {
@@ -26,6 +27,8 @@ export interface ChartLine {
   readonly ink: Ink;
   readonly points: readonly ChartPoint[];
   readonly as?: 'line' | 'dashed' | 'steps' | 'dots' | 'mark';
+  /** Written beside the first of its points. */
+  readonly tag?: string;
 }
 
 /** A chart in the hand of the house: few lines, no animation. What it shows is said in words beside it; `label` names it. */
@@ -47,11 +50,15 @@ export class LineChart {
   /** The ends of the scale where they are fixed, the lower one first; whole figures are written. Downward where the first is the greater. */
   readonly yRange = input<readonly [number, number] | null>(null);
 
+  /** The upper end of the scale at most: what is beyond runs off the top. */
+  readonly yMost = input<number | null>(null);
+
   private readonly canvas = viewChild.required<ElementRef<HTMLCanvasElement>>('canvas');
   private readonly light = inject(Light);
   private readonly window = inject(DOCUMENT).defaultView!;
   private readonly chart = signal<Chart | null>(null);
   private readonly systemLight = signal(0);
+  private tags: readonly Tag[] = [];
   private over = false;
 
   constructor() {
@@ -83,6 +90,7 @@ export class LineChart {
           events: [],
           plugins: { tooltip: { enabled: false } },
         },
+        plugins: [{ id: 'tags', afterDatasetsDraw: (chart) => drawTags(chart, this.tags) }],
       }),
     );
   }
@@ -111,15 +119,22 @@ export class LineChart {
       x: { type: 'linear', ...scale(this.xLabel()), ...(range ? { min: range[0], max: range[1] } : {}) },
       y: { type: 'linear', ...scale(this.yLabel()), ...this.upright(ticks) },
     };
+    this.tags = lines.flatMap(({ tag, points: [at], ink }) => (tag && at ? [{ words: tag, at, ink: inks[ink], paper: inks.sheet }] : []));
     chart.data.datasets = lines.map((line) => datasetOf(line, inks[line.ink], inks.sheet));
     chart.update('none');
   }
 
   private upright(ticks: object) {
     const range = this.yRange();
-    if (!range) return { min: 0, suggestedMax: this.yLeast() };
+    const most = this.yMost();
+    if (!range) return { min: 0, suggestedMax: this.yLeast(), ...(most === null ? {} : { max: Math.max(most, this.yLeast()) }) };
     const [min, max] = [Math.min(...range), Math.max(...range)];
-    return { min, max, reverse: range[0] > range[1], ticks: { ...ticks, stepSize: 1, maxTicksLimit: max - min + 1, precision: 0 } };
+    return {
+      min,
+      max,
+      reverse: range[0] > range[1],
+      ticks: { ...ticks, stepSize: 1, maxTicksLimit: max - min + 1, precision: 0, autoSkip: false },
+    };
   }
 }
 

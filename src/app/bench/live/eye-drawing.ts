@@ -9,6 +9,8 @@ const SHAPE = { width: 16, height: 9 };
 /** How far the drawing reaches where no viewing zone says it, and beyond one that does. */
 const USUAL_REACH_MM = 2500;
 const ROOM = 1.2;
+/** From one line of the scale to the next. */
+const SCALE_MM = 1000;
 
 /** Plan and section of the glass, the camera, the viewing zone and the eye, to one scale. Lengths in mm. */
 @Component({
@@ -26,22 +28,26 @@ const ROOM = 1.2;
               [attr.height]="zone.height"
             />
           }
+          @for (mark of view.scale; track mark.words) {
+            <path class="scale" [attr.d]="mark.line" />
+            <text [attr.x]="mark.at.x" [attr.y]="mark.at.y" [attr.font-size]="3.6 * view.unit">{{ mark.words }}</text>
+          }
           <path class="cone" [attr.d]="view.cone" />
           <path class="glass" [attr.d]="view.glass" />
           <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
           @for (other of view.others; track other.id) {
             <circle class="other" [attr.cx]="other.at.x" [attr.cy]="other.at.y" [attr.r]="1.8 * view.unit" />
-            <text [attr.x]="other.at.x + 3 * view.unit" [attr.y]="other.at.y" [attr.font-size]="5 * view.unit">{{ other.id }}</text>
+            <text [attr.x]="other.at.x + 3 * view.unit" [attr.y]="other.at.y" [attr.font-size]="4 * view.unit">person {{ other.id }}</text>
           }
           @if (view.eye; as eye) {
             <path class="sight" [attr.d]="view.sight" />
-            <circle class="eye" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
+            <circle class="eye followed" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
             @if (people().others.length) {
-              <text [attr.x]="eye.x + 3 * view.unit" [attr.y]="eye.y" [attr.font-size]="5 * view.unit">{{ people().followed }}</text>
+              <text [attr.x]="eye.x + 3 * view.unit" [attr.y]="eye.y" [attr.font-size]="4 * view.unit">person {{ people().followed }}, followed</text>
             }
           }
         </svg>
-        <figcaption class="marginal">{{ view.name }}{{ view.beyond ? '. The eye is beyond the drawing.' : '' }}</figcaption>
+        <figcaption class="marginal">{{ view.name }}: the bar is the glass, the dot on it the camera, the ring the eye that is followed.{{ view.beyond ? ' It is beyond the drawing.' : '' }}</figcaption>
       </figure>
     }
   `,
@@ -100,6 +106,11 @@ export class EyeDrawing {
       unit: reach / 80,
       box: boxOf(boxFrom, boxTo).join(' '),
       glass: `M${corner(-room.half, 0)} L${corner(room.half, 0)}`,
+      scale: Array.from({ length: Math.floor(reach / SCALE_MM) }, (_, i) => (i + 1) * SCALE_MM).map((z) => ({
+        line: `M${corner(-side, z)} L${corner(side, z)}`,
+        at: markPlace(place(-side, z), place(side, z), reach / 80),
+        words: `${z / SCALE_MM} m`,
+      })),
       lens: place(lens.across, lens.z),
       cone: `M${end(-lens.field / 2)} L${corner(lens.across, lens.z)} L${end(lens.field / 2)}`,
       zone: room.zone && rectangleOf(boxOf(place(room.zone[0], room.zone[2]), place(room.zone[1], room.zone[3]))),
@@ -110,6 +121,12 @@ export class EyeDrawing {
     };
   }
 }
+
+/** Where the words of a line of the scale stand: at its left end, just above it; beside it where it is upright. */
+const markPlace = (from: { x: number; y: number }, to: { x: number; y: number }, unit: number) => ({
+  x: Math.min(from.x, to.x) + unit,
+  y: Math.max(from.y, to.y) - unit,
+});
 
 interface Room {
   readonly half: number;

@@ -12,6 +12,9 @@ import { type Reading, SHOWN_MS } from './instruments';
       <h2>{{ shown.name }}</h2>
       <p class="figures">
         <span class="figure">{{ shown.figure }}</span> {{ shown.unit }}
+        @if (shown.standing; as standing) {
+          <span class="standing" [class]="standing.is">{{ standing.words }}</span>
+        }
       </p>
       <p class="spread figures">{{ shown.spread }}</p>
       <p class="marginal">{{ shown.good }}</p>
@@ -23,6 +26,7 @@ import { type Reading, SHOWN_MS } from './instruments';
         [xRange]="range"
         [yLabel]="shown.yLabel"
         [yLeast]="shown.yLeast"
+        [yMost]="shown.yMost ?? null"
         [yRange]="shown.yRange ?? null"
         xLabel="seconds; 0 is now"
       />
@@ -39,6 +43,13 @@ import { type Reading, SHOWN_MS } from './instruments';
             </li>
           }
         </ul>
+      }
+      @if (shown.steps) {
+        <ol class="marginal">
+          @for (step of shown.steps; track step.words) {
+            <li [class.now]="step.now">{{ step.words }}{{ step.now ? ': now' : '' }}</li>
+          }
+        </ol>
       }
     </div>
   `,

@@ -9,6 +9,12 @@ export const SHOWN_MS = 30_000;
 /** How many of the ladder's steps, from the finest on, place all landmarks. */
 const WITH_LANDMARKS = LADDER_STEPS.filter(({ looking }) => looking.by === 'landmarks').length;
 
+/** How a figure stands: with a word, and never by colour alone. */
+export interface Standing {
+  readonly is: 'good' | 'fair' | 'poor';
+  readonly words: string;
+}
+
 /** One instrument as it reads now. */
 export interface Reading {
   readonly name: string;
@@ -16,13 +22,29 @@ export interface Reading {
   readonly unit: string;
   /** Median and 95th percentile, in words; what to do where there is no figure. */
   readonly spread: string;
+  readonly standing: Standing | null;
   /** What is good in this trade. */
   readonly good: string;
   readonly lines: readonly ChartLine[];
   readonly yLabel: string;
   readonly yLeast: number;
+  /** What lies beyond runs off the top of the chart. */
+  readonly yMost?: number;
   readonly yRange?: readonly [number, number];
+  /** The steps of the ladder in words, where it is one. */
+  readonly steps?: readonly { readonly words: string; readonly now: boolean }[];
 }
+
+/** Up to where each is good, and from where on it is poor; why, is said beside each. */
+const LIMITS = {
+  trackedPerS: { good: 15, poor: 5 },
+  lookMs: { good: 33, poor: 67 },
+  latencyMs: { good: 50, poor: 100 },
+  jitterMm: { good: 1, poor: 3 },
+  frameMs: { good: 20, poor: 33 },
+};
+/** So long after the first look the camera's clock is known, or never will be. */
+const CLOCK_KNOWN_MS = 20_000;
 
 /** Every instrument, from the last half minute. */
 export function readingsOf(measures: Measures, nowMs: number): Reading[] {
@@ -34,6 +56,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
   const jitter = measures.drawnJitter.spread(since);
   const losses = measures.losses.count(since);
   const looks = measures.found.count(since);
+  const trackedPerS = 1000 / measures.trackingInterval.mean(since);
   const line = (label: string, ink: ChartLine['ink'], series: Measures['total']): ChartLine => ({
     label,
     ink,
@@ -43,35 +66,39 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
     {
       name: 'Tracking',
       // By the mean: looks that come in one after another after a pause do not make it quick.
-      ...inFigures(1000 / measures.trackingInterval.mean(since), 'a second', 0),
+      ...inFigures(trackedPerS, 'a second', 0),
       spread: spreadWords(tracking, 'ms between looks'),
+      standing: standingOf(-trackedPerS, { good: -LIMITS.trackedPerS.good, poor: -LIMITS.trackedPerS.poor }),
       good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
-      lines: [line('Tracking interval', 'ink', measures.trackingInterval)],
+      lines: [line('Tracking interval', 'ink', measures.trackingInterval), goodUpTo(1000 / LIMITS.trackedPerS.good)],
       yLabel: 'between looks, ms',
-      yLeast: 80,
+      ...scaleFor(tracking, 100),
     },
     {
       name: 'Time for one look',
       ...inFigures(total.median, 'ms', 1),
       spread: `${spreadWords(total, 'ms')}${total.median >= 0 ? `; crop ${ms(measures.crop.spread(since).median)}, detect ${ms(measures.detect.spread(since).median)}, landmarks ${ms(measures.landmarks.spread(since).median)}` : ''}`,
+      standing: standingOf(total.median, LIMITS.lookMs),
       good: 'Practice: under 33 ms a camera of 30 a second is looked at whole; beyond, frames are skipped.',
       lines: [
         line('Total', 'ink', measures.total),
         line('Landmarks', 'near', measures.landmarks),
         line('Detect', 'far', measures.detect),
         line('Crop', 'middle', measures.crop),
+        goodUpTo(LIMITS.lookMs.good),
       ],
       yLabel: 'time, ms',
-      yLeast: 20,
+      ...scaleFor(total, 40),
     },
     {
       name: 'Capture to drawing',
       ...inFigures(latency.median, 'ms', 0),
-      spread: spreadWords(latency, 'ms') || 'The camera’s own clock is known after a few seconds of following.',
-      good: 'Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk. Prediction makes good what is steady.',
-      lines: [line('Capture to drawing', 'ink', measures.latency)],
+      spread: spreadWords(latency, 'ms') || latencyUnknown(measures, nowMs),
+      standing: standingOf(latency.median, LIMITS.latencyMs),
+      good: 'Practice: under 50 ms prediction makes good well. Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk.',
+      lines: [line('Capture to drawing', 'ink', measures.latency), goodUpTo(LIMITS.latencyMs.good)],
       yLabel: 'delay, ms',
-      yLeast: 80,
+      ...scaleFor(latency, 80),
     },
     {
       name: 'Jitter at rest',
@@ -79,13 +106,15 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: spreadWords(jitter, 'mm', 2)
         ? `${spreadWords(jitter, 'mm', 2)}; before smoothing ${measures.seenJitter.spread(since).median.toFixed(2)}`
         : 'Stand still for two seconds.',
-      good: '1 mm of the eye moves a layer 100 mm behind the glass by 0.14 mm, seen from 600 mm: just under what the eye can tell.',
+      standing: standingOf(jitter.median, LIMITS.jitterMm),
+      good: 'Under 1 mm: that moves a layer 100 mm behind the glass by 0.14 mm, seen from 600 mm, just under what the eye can tell.',
       lines: [
         line('As drawn', 'ink', measures.drawnJitter),
         { ...line('As the camera saw it', 'pencil', measures.seenJitter), as: 'dashed' },
+        goodUpTo(LIMITS.jitterMm.good),
       ],
       yLabel: 'jitter, mm',
-      yLeast: 1,
+      ...scaleFor(jitter, 2),
     },
     {
       name: 'Losses',
@@ -94,6 +123,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: looks
         ? `${(100 * measures.found.mean(since)).toFixed(0)} % of ${looks} looks found somebody`
         : 'Nobody has been looked for yet.',
+      standing: looks ? (losses === 0 ? GOOD : losses < 3 ? FAIR : POOR) : null,
       good: 'Practice: someone who stays in view should never be lost. Better light helps first.',
       lines: [line('Somebody found', 'ink', measures.found)],
       yLabel: '1 found, 0 not',
@@ -103,10 +133,11 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       name: 'Frame interval of this page',
       ...inFigures(frame.median, 'ms', 1),
       spread: spreadWords(frame, 'ms'),
+      standing: standingOf(frame.median, LIMITS.frameMs),
       good: '17 ms is 60 a second. Practice: from 33 ms on motion is seen to stutter. The charts themselves cost a little.',
-      lines: [line('Frame interval', 'ink', measures.frameInterval)],
+      lines: [line('Frame interval', 'ink', measures.frameInterval), goodUpTo(LIMITS.frameMs.poor)],
       yLabel: 'between frames, ms',
-      yLeast: 50,
+      ...scaleFor(frame, 50),
     },
     ladderReading(measures, since, line('Step of the ladder', 'ink', measures.ladderStep)),
   ];
@@ -125,13 +156,46 @@ function ladderReading(measures: Measures, sinceMs: number, line: ChartLine): Re
     spread: Number.isFinite(steps.median)
       ? `median step ${steps.median}, 95 % at ${steps.p95} or finer; changes in half a minute: ${changes.length}${last ? `, the last one ${last.reason}` : ''}`
       : '',
+    standing: Number.isFinite(steps.median) ? ladderStanding(changes.length, ladder?.step ?? 0) : null,
     good: `Step ${FIRST_STEP + 1} is where it begins; 1 to ${WITH_LANDMARKS} place all landmarks, from ${WITH_LANDMARKS + 1} on the distance of a turned head is less sure. A step kept for long is good, one that changes every few seconds is not.`,
     lines: [{ ...line, as: 'steps' }],
     yLabel: 'step',
     yLeast: 0,
     yRange: [LADDER_STEPS.length, 1],
+    steps: LADDER_STEPS.map(({ words }, step) => ({ words, now: ladder?.step === step })),
   };
 }
+
+const GOOD: Standing = { is: 'good', words: 'good' };
+const FAIR: Standing = { is: 'fair', words: 'fair' };
+const POOR: Standing = { is: 'poor', words: 'poor' };
+
+const standingOf = (figure: number, { good, poor }: { good: number; poor: number }): Standing | null =>
+  Number.isFinite(figure) ? (figure <= good ? GOOD : figure < poor ? FAIR : POOR) : null;
+
+function ladderStanding(changes: number, step: number): Standing {
+  if (changes > 3) return { is: 'poor', words: 'restless' };
+  return step < WITH_LANDMARKS ? GOOD : FAIR;
+}
+
+/** A dashed line across the whole chart: below it is good. */
+const goodUpTo = (y: number): ChartLine => ({
+  label: `Good below ${Number(y.toFixed(0))}`,
+  ink: 'clear',
+  as: 'dashed',
+  points: [
+    { x: -SHOWN_MS / 1000, y },
+    { x: 0, y },
+  ],
+});
+
+/** So that one peak does not flatten all the rest. */
+const scaleFor = ({ p95 }: Spread, yLeast: number) => ({ yLeast, ...(p95 >= 0 ? { yMost: Math.max(yLeast, Math.ceil(2 * p95)) } : {}) });
+
+const latencyUnknown = ({ firstLookMs }: Measures, nowMs: number): string =>
+  nowMs - firstLookMs > CLOCK_KNOWN_MS
+    ? 'Not known here: this browser does not tell when a frame was captured. The mirror test measures the whole delay.'
+    : 'Known a few seconds after somebody is followed.';
 
 const ms = (figure: number) => figure.toFixed(1);
 

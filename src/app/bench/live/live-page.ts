@@ -10,6 +10,7 @@ import {
   untracked,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { FaceTracking } from '../../tracking/face-tracking';
 import { RecordRun } from '../runs/record-run';
@@ -31,7 +32,7 @@ const EYE_MS = 100;
 /** The bench, live: the camera of this screen, the eye in plan and section, and the instruments. */
 @Component({
   selector: 'oriel-live-page',
-  imports: [MatButton, CameraPicture, EyeDrawing, Instrument, RecordRun],
+  imports: [MatButton, RouterLink, CameraPicture, EyeDrawing, Instrument, RecordRun],
   providers: [FaceTracking, RunRecorder],
   templateUrl: './live-page.html',
   styleUrl: './live-page.scss',
@@ -53,6 +54,10 @@ export class LivePage {
   protected readonly ready = computed(
     () => this.tracking.state() === 'following' || this.tracking.state() === 'nobody',
   );
+  /** Whether there is no camera to be had. */
+  protected readonly without = computed(() => ['refused', 'no-camera', 'camera-busy', 'unsupported'].includes(this.tracking.state()));
+  /** Whether the camera was asked for on this page: before that there is nothing to show. */
+  protected readonly started = signal(false);
   protected readonly pictureShown = signal(false);
   protected readonly mm = (figure: number) => plainMm(figure, 0);
   protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));
@@ -90,6 +95,7 @@ export class LivePage {
   }
 
   protected start(): void {
+    this.started.set(true);
     void this.tracking.start(this.bench.subject().tracking);
   }
 

@@ -27,6 +27,8 @@ export class Measures {
   ladder: LadderState | null = null;
   /** The eye as it would be drawn for. */
   readonly drawnEye = { x: 0, y: 0, z: 1 };
+  /** When the first sample came; NaN before. */
+  firstLookMs = NaN;
   private readonly seenStill = new StillJitter();
   private readonly drawnStill = new StillJitter();
   private follower: Follower;
@@ -59,6 +61,7 @@ export class Measures {
   }
 
   sample({ found, eye, capturedMs, receivedMs, captureTimeKnown, timings }: EyeSample): void {
+    if (Number.isNaN(this.firstLookMs)) this.firstLookMs = receivedMs;
     if (!Number.isNaN(this.sampleMs)) this.trackingInterval.add(receivedMs, receivedMs - this.sampleMs);
     this.sampleMs = receivedMs;
     this.crop.add(receivedMs, timings.cropMs);

@@ -2,28 +2,37 @@ import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inj
 import { MatButton } from '@angular/material/button';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import type { MirrorDelay } from '@oriel/shared/mirror/mirror-delay';
-import { FailureNotice } from '../../core/failure-notice';
-import { Submission } from '../../core/submission';
+import type { TrackerTuning } from '@oriel/shared/contracts/walls';
 import { requestCamera } from '../../tracking/camera-request';
 import { CAMERAS } from '../../tracking/tracking-surroundings';
 import type { TrackingState } from '../../tracking/tracking-state';
 import { eachFrame, playTrack } from '../../tracking/video-frames';
-import { trackingWords } from '../live/tracking-words';
+import { trackingWords } from '../../tracking/tracking-words';
 import { BenchSubject } from '../subject/bench-subject';
+import { PutOnWall } from '../tuning/put-on-wall';
 import { Blink } from './blink';
 import { Brightness } from './brightness';
 
+/** `captureKnown` whether the browser told when frames were captured, and not only when they came. */
+interface Measured extends MirrorDelay {
+  readonly captureKnown: boolean;
+}
+
+/** Practice. */
+const USUAL_MS = { least: 50, most: 120, slow: 200 };
+
 type Step =
   | { readonly kind: 'before' }
+  | { readonly kind: 'asking' }
   | { readonly kind: 'without-camera'; readonly why: TrackingState }
   | { readonly kind: 'blinking' }
-  | { readonly kind: 'measured'; readonly delay: MirrorDelay }
+  | { readonly kind: 'measured'; readonly delay: Measured }
   | { readonly kind: 'not-seen'; readonly correlation: number };
 
 /** With a mirror before the camera the screen measures its own delay, from drawing to capture, and prediction is set by it. */
 @Component({
   selector: 'oriel-mirror-page',
-  imports: [MatButton, MatProgressBar, FailureNotice],
+  imports: [MatButton, MatProgressBar, PutOnWall],
   templateUrl: './mirror-page.html',
   styleUrl: './mirror-page.scss',
   host: { '(document:keydown.escape)': 'stop()' },
@@ -34,11 +43,9 @@ export class MirrorPage {
   private readonly document = inject(DOCUMENT);
   private readonly window = this.document.defaultView!;
   protected readonly bench = inject(BenchSubject);
-  protected readonly applying = new Submission();
   protected readonly step = signal<Step>({ kind: 'before' });
   protected readonly level = signal(0);
   protected readonly share = signal(0);
-  protected readonly said = signal<string | null>(null);
   protected readonly why = computed(() => {
     const step = this.step();
     return step.kind === 'without-camera' ? trackingWords[step.why] : null;
@@ -46,6 +53,16 @@ export class MirrorPage {
   protected readonly measured = computed(() => {
     const step = this.step();
     return step.kind === 'measured' ? step.delay : null;
+  });
+  protected readonly verdict = computed(() => {
+    const ms = this.measured()?.delayMs ?? 0;
+    if (ms > USUAL_MS.slow) return 'which is slow';
+    if (ms > USUAL_MS.most) return 'more than usual';
+    return ms < USUAL_MS.least ? 'less than usual' : 'as is usual';
+  });
+  protected readonly withDelay = computed(() => {
+    const displayDelayMs = Math.max(0, Math.round(this.measured()?.delayMs ?? 0));
+    return (tuning: TrackerTuning): TrackerTuning => ({ ...tuning, displayDelayMs });
   });
   private end: () => void = () => undefined;
   private attempt = 0;
@@ -57,8 +74,8 @@ export class MirrorPage {
   /** Only ever called by a press: nothing blinks unasked. */
   protected async start(): Promise<void> {
     this.release();
-    this.said.set(null);
     const attempt = this.attempt;
+    this.step.set({ kind: 'asking' });
     const answer = await requestCamera(this.cameras);
     const stale = attempt !== this.attempt;
     if (answer.given && stale) answer.stream.getTracks().forEach((track) => track.stop());
@@ -68,33 +85,18 @@ export class MirrorPage {
   }
 
   protected stop(): void {
-    if (this.step().kind !== 'blinking') return;
+    if (this.step().kind !== 'blinking' && this.step().kind !== 'asking') return;
     this.release();
     this.step.set({ kind: 'before' });
-  }
-
-  protected apply(): Promise<void> {
-    return this.applying.run(async () => {
-      const wall = this.bench.wall();
-      const delay = this.measured();
-      if (!wall || !delay) return;
-      const applied = await this.bench.apply(wall.id, (tuning) => ({
-        ...tuning,
-        displayDelayMs: Math.max(0, Math.round(delay.delayMs)),
-      }));
-      this.said.set(
-        applied.kind === 'saved'
-          ? `${wall.setUp.name} predicts ${Math.round(delay.delayMs)} ms ahead from now on.`
-          : `${applied.by} changed ${wall.setUp.name} meanwhile. Their changes stay; press again to set only the delay.`,
-      );
-    });
   }
 
   private blink(stream: MediaStream): void {
     const blink = new Blink();
     const brightness = new Brightness(this.document);
     const video = playTrack(stream.getVideoTracks()[0]);
-    const endFrames = eachFrame(video, (capturedMs) => {
+    let captureKnown = false;
+    const endFrames = eachFrame(video, (capturedMs, known) => {
+      captureKnown = known;
       const parts = brightness.of(video);
       if (parts) blink.see(capturedMs, parts);
     });
@@ -104,7 +106,7 @@ export class MirrorPage {
       const level = blink.levelAt(nowMs);
       if (level !== null) this.level.set(level);
       this.share.set(Math.floor(50 * blink.share(nowMs)) / 50);
-      if (blink.over(nowMs)) return this.finish(blink);
+      if (blink.over(nowMs)) return this.finish(blink, captureKnown);
       frame = this.window.requestAnimationFrame(draw);
     };
     this.end = () => {
@@ -116,10 +118,10 @@ export class MirrorPage {
     frame = this.window.requestAnimationFrame(draw);
   }
 
-  private finish(blink: Blink): void {
+  private finish(blink: Blink, captureKnown: boolean): void {
     this.release();
     const { delay, correlation } = blink.result();
-    this.step.set(delay ? { kind: 'measured', delay } : { kind: 'not-seen', correlation });
+    this.step.set(delay ? { kind: 'measured', delay: { ...delay, captureKnown } } : { kind: 'not-seen', correlation });
   }
 
   private release(): void {

@@ -5,6 +5,7 @@ import type { SearchResult } from '@oriel/shared/replay/search-tuning';
 /** What the page and the replay worker say to each other. */
 export interface SearchAsked {
   readonly samples: readonly ReplaySample[];
+  /** What the wall is tuned to. */
   readonly today: TrackerTuning;
 }
 

@@ -10,7 +10,6 @@ import {
   signal,
   untracked,
 } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatProgressBar } from '@angular/material/progress-bar';
@@ -25,6 +24,8 @@ import { RunsStore } from '../runs/runs-store';
 import { BenchSubject } from '../subject/bench-subject';
 import type { FromReplay, SearchAsked } from './replay-messages';
 import { REPLAY_WORKER } from './replay-worker';
+import { PutOnWall } from '../tuning/put-on-wall';
+import { captureKnown } from '@oriel/shared/replay/capture-time';
 import { TradeOff } from './trade-off';
 
 /** A run through other settings: what they cost and bring, and the wished one onto a wall by one press. */
@@ -32,7 +33,6 @@ import { TradeOff } from './trade-off';
   selector: 'oriel-replay-page',
   imports: [
     RouterLink,
-    MatButton,
     MatButtonToggle,
     MatButtonToggleGroup,
     MatFormField,
@@ -41,6 +41,7 @@ import { TradeOff } from './trade-off';
     MatOption,
     MatProgressBar,
     FailureNotice,
+    PutOnWall,
     TradeOff,
   ],
   templateUrl: './replay-page.html',
@@ -55,7 +56,6 @@ export class ReplayPage {
   private readonly makeWorker = inject(REPLAY_WORKER);
   protected readonly bench = inject(BenchSubject);
   protected readonly loading = new Submission();
-  protected readonly applying = new Submission();
   protected readonly wishes = wishes;
   protected readonly wish = signal<Wish>('balanced');
   protected readonly whole = signal<WholeRun | null>(null);
@@ -77,55 +77,39 @@ export class ReplayPage {
     computation: (usual, before) => this.bench.walls().find(({ id }) => id === before?.value)?.id ?? usual,
   });
   protected readonly wall = computed(() => this.bench.walls().find(({ id }) => id === this.wallId()) ?? null);
-  protected readonly said = signal<string | null>(null);
+  /** Whose setting is today's: the wall's, or that of the recording where no wall is chosen. */
+  protected readonly todayOf = signal('');
+  protected readonly captureUnknown = computed(() => this.whole()?.samples.every((sample) => !captureKnown(sample)) ?? false);
+  protected readonly putWords = computed(() => {
+    const wall = this.wall();
+    return wall ? `Put ${this.wish()} on ${wall.setUp.name}` : 'Choose a wall to put it on';
+  });
+  /** A wall's tuning with only what was searched changed. */
+  protected readonly wished = computed(() => {
+    const [both, wish] = [this.done(), this.wish()];
+    return (tuning: TrackerTuning): TrackerTuning => (both ? wishedOver(tuning, both, wish) : tuning);
+  });
   private worker: Worker | null = null;
 
   constructor() {
     effect(() => {
       if (this.runId()) untracked(() => void this.load());
     });
+    effect(() => {
+      const [whole, wallId] = [this.whole(), this.wallId()];
+      if (whole) untracked(() => this.search(whole, wallId));
+    });
     inject(DestroyRef).onDestroy(() => this.worker?.terminate());
   }
 
   protected load(): Promise<void> {
-    return this.loading.run(async () => {
-      const whole = await this.runs.read(this.runId());
-      this.whole.set(whole);
-      this.search(whole);
-    });
+    return this.loading.run(async () => this.whole.set(await this.runs.read(this.runId())));
   }
 
-  protected apply(): Promise<void> {
-    return this.applying.run(async () => {
-      const wallId = this.wallId();
-      if (!wallId) return;
-      this.said.set(null);
-      const name = this.wall()?.setUp.name ?? '';
-      const applied = await this.bench.apply(wallId, (tuning) => this.wishedOver(tuning));
-      this.said.set(
-        applied.kind === 'saved'
-          ? `${name} follows with this from now on.`
-          : `${applied.by} changed ${name} meanwhile. Their changes stay; nothing of yours is written yet. Press again to put only these settings over the newest.`,
-      );
-    });
-  }
-
-  /** A wall's tuning with only what was searched changed. */
-  private wishedOver(tuning: TrackerTuning): TrackerTuning {
-    const { across, along } = this.done()!;
-    const wish = this.wish();
-    const changed = { ...tuning, filter: { ...tuning.filter } };
-    if ('found' in across) {
-      const { tuning: best } = across.found.best[wish];
-      changed.filter.across = best.filter.across;
-      changed.longestHorizonMs = best.longestHorizonMs;
-    }
-    if ('found' in along) changed.filter.along = along.found.best[wish].tuning.filter.along;
-    return changed;
-  }
-
-  private search({ run, samples }: WholeRun): void {
+  private search({ run, samples }: WholeRun, wallId: string | null): void {
     this.worker?.terminate();
+    const wall = this.bench.walls().find(({ id }) => id === wallId);
+    this.todayOf.set(wall ? wall.setUp.name : 'the recording');
     this.answer.set({ type: 'progress', share: 0 });
     const worker = (this.worker = this.makeWorker());
     worker.onmessage = ({ data }: MessageEvent<FromReplay>) => {
@@ -133,7 +117,18 @@ export class ReplayPage {
       if (data.type !== 'progress') worker.terminate();
     };
     worker.onerror = () => this.answer.set({ type: 'failed' });
-    const asked: SearchAsked = { samples, today: run.tuning };
+    const asked: SearchAsked = { samples, today: wall?.setUp.tuning ?? run.tuning };
     worker.postMessage(asked);
   }
+}
+
+function wishedOver(tuning: TrackerTuning, { across, along }: FromReplay & { type: 'done' }, wish: Wish): TrackerTuning {
+  const changed = { ...tuning, filter: { ...tuning.filter } };
+  if ('found' in across) {
+    const { tuning: best } = across.found.best[wish];
+    changed.filter.across = best.filter.across;
+    changed.longestHorizonMs = best.longestHorizonMs;
+  }
+  if ('found' in along) changed.filter.along = along.found.best[wish].tuning.filter.along;
+  return changed;
 }

@@ -1,88 +1,39 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { SearchResult } from '@oriel/shared/replay/search-tuning';
 import { type Wish, wishes } from '@oriel/shared/replay/wishes';
+import { WELL_SHOWN } from '@oriel/shared/replay/what-it-shows';
+import { plainMm } from '../../figures/words';
 import { type ChartLine, LineChart } from '../charts/line-chart';
+import { differenceWords } from './difference-words';
 
 /** Jitter at rest against straying in motion, for one direction: the best there is, today's setting, and the one for a wish. */
 @Component({
   selector: 'oriel-trade-off',
   imports: [LineChart],
-  template: `
-    @let result = found();
-    <div>
-      <oriel-line-chart
-        [label]="words()"
-        [lines]="lines()"
-        [xRange]="xRange()"
-        xLabel="off in motion, as ms of the way"
-        yLabel="jitter at rest, mm"
-      />
-      <ul class="marginal">
-        <li><span class="dot open"></span>Nothing beats these</li>
-        <li><span class="dot today"></span>Today</li>
-        <li><span class="dot wished"></span>{{ title() }}</li>
-        <li><span class="dot other"></span>The other two wishes</li>
-      </ul>
-    </div>
-    <table>
-      <thead>
-        <tr>
-          <td></td>
-          <th scope="col">Today</th>
-          <th scope="col">{{ title() }}</th>
-        </tr>
-      </thead>
-      <tbody>
-        <tr class="large">
-          <th scope="row">Jitter at rest, mm</th>
-          <td class="figures">{{ result.today.jitterMm.toFixed(2) }}</td>
-          <td class="figures">{{ best().jitterMm.toFixed(2) }}</td>
-        </tr>
-        <tr class="large">
-          <th scope="row">Off in motion, ms</th>
-          <td class="figures">{{ result.today.strayMs.toFixed(0) }}</td>
-          <td class="figures">{{ best().strayMs.toFixed(0) }}</td>
-        </tr>
-        <tr>
-          <th scope="row">Lag in motion, ms</th>
-          <td class="figures">{{ result.today.lagMs.toFixed(0) }}</td>
-          <td class="figures">{{ best().lagMs.toFixed(0) }}</td>
-        </tr>
-        <tr>
-          <th scope="row">Cutoff at rest, Hz</th>
-          <td class="figures">{{ filterOf(result.today).minCutoffHz }}</td>
-          <td class="figures">{{ filterOf(best()).minCutoffHz }}</td>
-        </tr>
-        <tr>
-          <th scope="row">Beta</th>
-          <td class="figures">{{ filterOf(result.today).beta }}</td>
-          <td class="figures">{{ filterOf(best()).beta }}</td>
-        </tr>
-        @if (result.direction === 'across') {
-          <tr>
-            <th scope="row">Looks ahead at most, ms</th>
-            <td class="figures">{{ result.today.tuning.longestHorizonMs }}</td>
-            <td class="figures">{{ best().tuning.longestHorizonMs }}</td>
-          </tr>
-        }
-      </tbody>
-    </table>
-    <p class="marginal">
-      Judged on {{ seconds(result.stillMs) }} s of standing still and {{ seconds(result.movingMs) }} s of motion.
-      @if (alike()) {
-        No setting makes much of a difference in this run: what it strays and jitters comes from before the filter, as with few looks a second or a viewer who sways.
-      }
-    </p>
-  `,
+  templateUrl: './trade-off.html',
   styleUrl: './trade-off.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class TradeOff {
   readonly found = input.required<SearchResult>();
   readonly wish = input.required<Wish>();
+  /** Whose setting today's is. */
+  readonly todayOf = input('');
 
   protected readonly best = computed(() => this.found().best[this.wish()]);
-  protected readonly title = computed(() => this.wish()[0].toUpperCase() + this.wish().slice(1));
+  protected readonly title = computed(() => titled(this.wish()));
+  protected readonly brings = computed(() => differenceWords(this.found().today, this.best()));
+  protected readonly columns = computed(() => {
+    const { today, best } = this.found();
+    return [
+      { name: 'Today', of: today, wished: false },
+      ...wishes.map((wish) => ({ name: titled(wish), of: best[wish], wished: wish === this.wish() })),
+    ];
+  });
+  protected readonly roughly = computed(() => {
+    const { stillMs, movingMs, direction } = this.found();
+    return stillMs < WELL_SHOWN.stillMs || movingMs < (direction === 'across' ? WELL_SHOWN.acrossMs : WELL_SHOWN.alongMs);
+  });
   protected readonly words = computed(() => `Jitter at rest against straying in motion, ${this.found().direction}`);
   protected readonly lines = computed<ChartLine[]>(() => {
     const { curve, today } = this.found();
@@ -91,12 +42,14 @@ export class TradeOff {
     const wished = Object.values(this.found().best);
     const x = 1.5 * Math.max(60, today.strayMs, ...wished.map(({ strayMs }) => strayMs));
     const y = 1.2 * Math.max(0.5, today.jitterMm, ...wished.map(({ jitterMm }) => jitterMm));
-    const others = wishes.filter((wish) => wish !== this.wish()).map((wish) => point(this.found().best[wish]));
+    const others = wishes.filter((wish) => wish !== this.wish());
     const near = curve.map(point).filter((at) => at.x <= x && at.y <= y);
     return [
-      { label: this.title(), ink: 'near', points: [point(this.best())], as: 'mark' },
-      { label: 'Today', ink: 'ink', points: [point(today)], as: 'mark' },
-      { label: 'The other two wishes', ink: 'brass-line', points: others, as: 'mark' },
+      { label: this.title(), ink: 'near', points: [point(this.best())], as: 'mark', tag: titled(this.wish()) },
+      { label: 'Today', ink: 'ink', points: [point(today)], as: 'mark', tag: 'Today' },
+      ...others.map(
+        (wish): ChartLine => ({ label: titled(wish), ink: 'brass-line', points: [point(this.found().best[wish])], as: 'mark', tag: titled(wish) }),
+      ),
       { label: 'Nothing beats these', ink: 'brass-line', points: near, as: 'dots' },
       { label: 'Between them', ink: 'line', points: near },
     ];
@@ -116,7 +69,14 @@ export class TradeOff {
     return tuning.filter[this.found().direction];
   }
 
+  /** With a true minus, where it runs ahead. */
+  protected whole(ms: number): string {
+    return Number.isNaN(ms) ? '–' : plainMm(ms, 0);
+  }
+
   protected seconds(ms: number): string {
     return (ms / 1000).toFixed(0);
   }
 }
+
+const titled = (wish: Wish): string => wish[0].toUpperCase() + wish.slice(1);

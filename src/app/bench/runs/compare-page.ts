@@ -3,67 +3,16 @@ import { RouterLink } from '@angular/router';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { type ChartLine, LineChart } from '../charts/line-chart';
+import { tuningDifferences } from '../tuning/tuning-words';
 import { compared, overTime } from './compared';
+import { MachineWords } from './machine-words';
 import { RunsStore, type WholeRun } from './runs-store';
 
 /** Two runs beside each other: two settings, or two machines. */
 @Component({
   selector: 'oriel-compare-page',
-  imports: [RouterLink, FailureNotice, LineChart],
-  template: `
-    <p><a routerLink="/bench/runs">All runs</a></p>
-    <oriel-failure-notice [failure]="loading.failure()" [retryable]="true" (retry)="load()" />
-    @if (rows(); as shown) {
-      <div class="sides">
-        <table>
-          <caption class="marginal">
-            Two figures are median / 95th percentile.
-          </caption>
-          <thead>
-            <tr>
-              <td></td>
-              <th scope="col"><span class="stroke a"></span>{{ first()!.run.name }}</th>
-              <th scope="col"><span class="stroke b"></span>{{ second()!.run.name }}</th>
-            </tr>
-          </thead>
-          <tbody>
-            @for (row of shown; track row.name) {
-              <tr>
-                <th scope="row">{{ row.name }}</th>
-                <td class="figures">{{ row.a }}</td>
-                <td class="figures">{{ row.b }}</td>
-              </tr>
-            }
-            <tr>
-              <th scope="row">Machine</th>
-              <td class="marginal">{{ first()!.run.machine }}</td>
-              <td class="marginal">{{ second()!.run.machine }}</td>
-            </tr>
-          </tbody>
-        </table>
-        <div>
-          <h2>Between looks</h2>
-          <oriel-line-chart
-            label="Time between looks of both runs"
-            [lines]="intervals()"
-            xLabel="s"
-            yLabel="ms"
-            [yLeast]="60"
-          />
-          <h2>Time for one look</h2>
-          <oriel-line-chart
-            label="Time for one look of both runs"
-            [lines]="totals()"
-            xLabel="s"
-            yLabel="ms"
-            [yLeast]="20"
-          />
-        </div>
-      </div>
-    } @else if (!loading.failure()) {
-      <p role="status">Fetching both runs.</p>
-    }
-  `,
+  imports: [RouterLink, FailureNotice, LineChart, MachineWords],
+  templateUrl: './compare-page.html',
   styleUrl: './compare-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -80,8 +29,15 @@ export class ComparePage {
     const [first, second] = [this.first(), this.second()];
     return first && second && compared(first, second);
   });
-  protected readonly intervals = computed(() => this.overlaid('interval'));
-  protected readonly totals = computed(() => this.overlaid('totalMs'));
+  /** The settings the two were recorded with, where they differ. */
+  protected readonly settings = computed(() => {
+    const [first, second] = [this.first(), this.second()];
+    return first && second ? tuningDifferences(first.run.tuning, second.run.tuning) : [];
+  });
+  protected readonly charts = computed(() => [
+    { name: 'Between looks', good: 'Good: a steady line under 67 ms, which is 15 looks a second.', row: 'Between looks, ms', yLeast: 80, lines: this.overlaid('interval') },
+    { name: 'Time for one look', good: 'Good: under 33 ms, so that a camera of 30 a second is looked at whole.', row: 'One look, ms', yLeast: 40, lines: this.overlaid('totalMs') },
+  ].map((chart) => ({ ...chart, figures: this.rows()?.find(({ name }) => name === chart.row) })));
 
   constructor() {
     effect(() => {

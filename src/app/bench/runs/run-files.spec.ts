@@ -31,6 +31,12 @@ describe('a run as CSV (RFC 4180)', () => {
     );
   });
 
+  it('leaves out when a frame was captured where that is not known', () => {
+    const { run, samples } = whole('Hall');
+    const unknown = samples.map((sample) => ({ ...sample, capturedMs: sample.receivedMs }));
+    expect(csvOf({ run, samples: unknown })).toContain('\r\nHall,,33,,,,1,4,0,5\r\n');
+  });
+
   it.each([
     ['=HYPERLINK("x")', `"'=HYPERLINK(""x"")"`],
     ['+1', `'+1`],

@@ -44,6 +44,27 @@ describe('recording a run', () => {
     expect(recorder.count()).toBe(2);
   });
 
+  it('goes on where it was stopped, with half a second of nothing in place of the pause', () => {
+    recorder.start();
+    recorder.take(sample(1000));
+    recorder.frame(10);
+    recorder.stop();
+    recorder.take(sample(5000));
+    recorder.goOn();
+    recorder.frame(9000);
+    recorder.frame(9017);
+    recorder.take(sample(9000));
+    recorder.take(sample(9033));
+    const { samples, frameIntervalP95Ms } = recorder.stop();
+    expect(samples.map(({ capturedMs, receivedMs }) => [capturedMs, receivedMs])).toEqual([
+      [-40, 0],
+      [460, 500],
+      [493, 533],
+    ]);
+    expect(frameIntervalP95Ms).toBe(17);
+    expect(recorder.lately(100).map(({ receivedMs }) => receivedMs)).toEqual([500, 533]);
+  });
+
   it('is full after ten minutes, and takes no more', () => {
     recorder.start();
     recorder.take(sample(0));

@@ -5,6 +5,8 @@ import type { EyeSample } from '../../tracking/eye-sample';
 
 /** The longest run. */
 export const LONGEST_MS = 600_000;
+/** Where recording was stopped and gone on with, nothing is known for so long: the pause itself does not count. */
+const PAUSE_MS = 500;
 /** The count and the clock are shown this often. */
 const SHOWN_EVERY_MS = 250;
 
@@ -24,6 +26,7 @@ export class RunRecorder {
   private intervals: number[] = [];
   private frameMs = NaN;
   private startMs = NaN;
+  private paused = false;
   private shownMs = 0;
   private readonly running = signal(false);
   private readonly shown = signal({ count: 0, elapsedMs: 0 });
@@ -37,13 +40,23 @@ export class RunRecorder {
     this.samples = [];
     this.intervals = [];
     this.startMs = this.frameMs = NaN;
+    this.paused = false;
     this.shown.set({ count: 0, elapsedMs: 0 });
+    this.running.set(true);
+  }
+
+  /** Records on where it was stopped. */
+  goOn(): void {
+    this.frameMs = NaN;
+    this.paused = this.samples.length > 0;
     this.running.set(true);
   }
 
   take({ found, eye, capturedMs, receivedMs, timings }: EyeSample): void {
     if (!this.running() || this.samples.length >= runMaxSamples) return;
     if (Number.isNaN(this.startMs)) this.startMs = receivedMs;
+    if (this.paused) this.startMs = receivedMs - this.samples[this.samples.length - 1].receivedMs - PAUSE_MS;
+    this.paused = false;
     const elapsedMs = receivedMs - this.startMs;
     if (elapsedMs > LONGEST_MS) return this.show(LONGEST_MS);
     this.samples.push({
@@ -65,6 +78,12 @@ export class RunRecorder {
     if (!this.running()) return;
     if (!Number.isNaN(this.frameMs)) this.intervals.push(tMs - this.frameMs);
     this.frameMs = tMs;
+  }
+
+  /** The samples of the last `lengthMs`. */
+  lately(lengthMs: number): readonly RunSample[] {
+    const sinceMs = (this.samples[this.samples.length - 1]?.receivedMs ?? 0) - lengthMs;
+    return this.samples.slice(this.samples.findIndex(({ receivedMs }) => receivedMs >= sinceMs));
   }
 
   /** What there is so far. */

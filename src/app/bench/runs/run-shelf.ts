@@ -7,6 +7,7 @@ export type RunBody = BodyOf<typeof keepRun>;
 
 /** A run that is in this browser because the server does not have it yet. */
 export interface WaitingRun {
+  /** The run's own: the key it is kept under. */
   readonly id: string;
   readonly accountId: string;
   readonly householdId: string;
@@ -22,8 +23,8 @@ export class RunShelf {
   private database: Promise<IDBDatabase> | null = null;
 
   /** Keeps a run, over what was kept under its id. */
-  async keep(id: string, body: RunBody): Promise<void> {
-    const run: WaitingRun = { id, accountId: this.accountId(), householdId: this.session.householdId(), body };
+  async keep(body: RunBody): Promise<void> {
+    const run: WaitingRun = { id: body.id, accountId: this.accountId(), householdId: this.session.householdId(), body };
     await this.ask('readwrite', (runs) => runs.put(run));
   }
 

@@ -47,7 +47,7 @@ describe('the page of runs', () => {
       waiting,
       load: () => Promise.resolve(),
       remove: (id: string) => Promise.resolve(void removed.push(id)),
-      keep: (id: string) => Promise.resolve(void kept.push(id)),
+      keep: ({ id }: { id: string }) => Promise.resolve(void kept.push(id)),
     };
     TestBed.configureTestingModule({
       imports: [RunsPage],
@@ -80,6 +80,7 @@ describe('the page of runs', () => {
 
   it('shows what waits in this browser, and stores it once the network is back', async () => {
     const body = {
+      id: 'x',
       name: 'Cut off',
       wallId: null,
       machine: 'one',

@@ -20,6 +20,7 @@ import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
 import { BenchSubject } from '../subject/bench-subject';
 import { clockWords } from './clock-words';
+import { MachineWords } from './machine-words';
 import { csvOf, download, fileNameOf, jsonOf } from './run-files';
 import type { WaitingRun } from './run-shelf';
 import { RunsStore } from './runs-store';
@@ -27,7 +28,7 @@ import { RunsStore } from './runs-store';
 /** The household's runs: stored, renamed, exported, compared two by two, deleted; and those that still wait in this browser. */
 @Component({
   selector: 'oriel-runs-page',
-  imports: [ReactiveFormsModule, RouterLink, MatButton, MatCheckbox, TextField, FailureNotice],
+  imports: [ReactiveFormsModule, RouterLink, MatButton, MatCheckbox, TextField, FailureNotice, MachineWords],
   templateUrl: './runs-page.html',
   styleUrl: './runs-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -48,6 +49,8 @@ export class RunsPage implements OnInit {
   /** The run whose name is being typed, and the one whose deletion waits for a second press. */
   protected readonly renaming = signal<string | null>(null);
   protected readonly asked = signal<string | null>(null);
+  /** The run whose export or deletion did not succeed. */
+  protected readonly troubled = signal<string | null>(null);
   /** At most two, the one picked first first. */
   protected readonly picked = signal<readonly string[]>([]);
   protected readonly pair = computed(() =>
@@ -82,8 +85,14 @@ export class RunsPage implements OnInit {
   }
 
   protected startRenaming({ id, name }: RunHeader): void {
+    this.naming.failure.set(null);
     this.name.setValue(name);
     this.renaming.set(id);
+  }
+
+  protected stopRenaming(): void {
+    this.naming.failure.set(null);
+    this.renaming.set(null);
   }
 
   protected rename(runId: string): Promise<void> {
@@ -93,8 +102,18 @@ export class RunsPage implements OnInit {
     });
   }
 
+  protected ask(runId: string): void {
+    this.change.failure.set(null);
+    this.asked.set(runId);
+  }
+
+  protected keep(): void {
+    this.change.failure.set(null);
+    this.asked.set(null);
+  }
+
   protected remove(runId: string): Promise<void> {
-    return this.change.run(async () => {
+    return this.changing(runId, async () => {
       await this.runs.remove(runId);
       this.asked.set(null);
       this.pick(runId, false);
@@ -102,16 +121,24 @@ export class RunsPage implements OnInit {
   }
 
   protected export({ id, name }: RunHeader, as: 'csv' | 'json'): Promise<void> {
-    return this.change.run(async () => {
+    return this.changing(id, async () => {
       const whole = await this.runs.read(id);
       const text = as === 'csv' ? csvOf(whole) : jsonOf(whole);
       download(this.document, fileNameOf(name, as), text, as === 'csv' ? 'text/csv;charset=utf-8' : 'application/json');
     });
   }
 
+  private changing(runId: string, change: () => Promise<void>): Promise<void> {
+    if (this.change.busy()) return Promise.resolve();
+    this.troubled.set(runId);
+    return this.change.run(change);
+  }
+
   protected storeWaiting(): Promise<void> {
     return this.storing.run(async () => {
-      for (const { id, body } of this.runs.waiting()) await this.runs.keep(id, body);
+      const answers = await Promise.allSettled(this.runs.waiting().map(({ id, body }) => this.runs.keep({ ...body, id })));
+      const refused = answers.find((answer) => answer.status === 'rejected');
+      if (refused) throw refused.reason;
     });
   }
 

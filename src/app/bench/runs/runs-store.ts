@@ -41,24 +41,34 @@ export class RunsStore {
   }
 
   /** Puts a run on the shelf of this browser, where it stays until the server has it. Says whether the browser could keep it. */
-  shelve(id: string, body: RunBody): Promise<boolean> {
-    return this.shelf.keep(id, body).then(
+  shelve(body: RunBody): Promise<boolean> {
+    return this.shelf.keep(body).then(
       () => true,
       () => false,
     );
   }
 
   /** Sends a run to the server and takes it off the shelf. @throws ApiFailure; the run then still waits. */
-  async keep(id: string, body: RunBody): Promise<RunHeader> {
+  async keep(body: RunBody): Promise<RunHeader> {
     try {
-      const { run } = await this.api.call(keepRun, { params: this.here(), body });
-      await this.shelf.drop(id).catch(() => undefined);
-      this.known.update((runs) => runs && [run, ...runs]);
+      const run = await this.send(body);
+      await this.shelf.drop(body.id).catch(() => undefined);
+      this.known.update((runs) => runs && [run, ...runs.filter(({ id }) => id !== run.id)]);
       return run;
     } catch (error) {
       throw toApiFailure(error);
     } finally {
       await this.look();
+    }
+  }
+
+  /** A run whose wall was removed meanwhile is kept without it. */
+  private async send(body: RunBody): Promise<RunHeader> {
+    try {
+      return (await this.api.call(keepRun, { params: this.here(), body })).run;
+    } catch (error) {
+      if (body.wallId === null || toApiFailure(error).failure.code !== 'wall-not-here') throw error;
+      return this.send({ ...body, wallId: null });
     }
   }
 
@@ -71,14 +81,31 @@ export class RunsStore {
     return this.api.call(readRun, { params: { runId } });
   }
 
+  /** Over the name it has here. @throws ApiFailure `renamed-meanwhile`: it then has the newer name here, and the next time goes over that. */
   async rename(runId: string, name: string): Promise<void> {
-    const { run } = await this.api.call(renameRun, { params: { runId }, body: { name } });
-    this.known.update((runs) => runs?.map((own) => (own.id === runId ? run : own)) ?? null);
+    const was = this.known()?.find(({ id }) => id === runId)?.name ?? '';
+    try {
+      const { run } = await this.api.call(renameRun, { params: { runId }, body: { name, was } });
+      this.renamed(runId, run.name);
+    } catch (error) {
+      const { failure } = toApiFailure(error);
+      if (failure.code === 'renamed-meanwhile') this.renamed(runId, String(failure.detail?.['name']));
+      throw error;
+    }
   }
 
+  /** One that somebody else deleted meanwhile is gone all the same. */
   async remove(runId: string): Promise<void> {
-    await this.api.call(removeRun, { params: { runId } });
+    try {
+      await this.api.call(removeRun, { params: { runId } });
+    } catch (error) {
+      if (toApiFailure(error).status !== 404) throw error;
+    }
     this.known.update((runs) => runs?.filter(({ id }) => id !== runId) ?? null);
+  }
+
+  private renamed(runId: string, name: string): void {
+    this.known.update((runs) => runs?.map((own) => (own.id === runId ? { ...own, name } : own)) ?? null);
   }
 
   private here() {

@@ -22,7 +22,9 @@ export interface Subject {
 }
 
 /** What came of changing a wall's tuning: saved, or somebody saved the wall meanwhile and nothing was written. */
-export type Applied = { readonly kind: 'saved' } | { readonly kind: 'moved'; readonly by: string };
+export type Applied =
+  | { readonly kind: 'saved'; readonly before: TrackerTuning; readonly after: TrackerTuning }
+  | { readonly kind: 'moved'; readonly by: string };
 
 const chosenKey = 'oriel.bench';
 
@@ -61,10 +63,11 @@ export class BenchSubject {
     const wall = this.known().find(({ id }) => id === wallId);
     if (!wall) throw new Error(`No wall ${wallId} on the bench.`);
     const { setUp, revision } = wall;
+    const after = change(setUp.tuning);
     try {
-      const body = { revision, setUp: { ...setUp, tuning: change(setUp.tuning) } };
+      const body = { revision, setUp: { ...setUp, tuning: after } };
       this.replace((await this.api.call(saveWall, { params: { wallId }, body })).wall);
-      return { kind: 'saved' };
+      return { kind: 'saved', before: setUp.tuning, after };
     } catch (error) {
       const failure = toApiFailure(error);
       if (failure.failure.code !== 'revision-moved') throw failure;

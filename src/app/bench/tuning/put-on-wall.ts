@@ -1,0 +1,98 @@
+import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import { FailureNotice } from '../../core/failure-notice';
+import { Submission } from '../../core/submission';
+import { BenchSubject } from '../subject/bench-subject';
+import { takenBack } from './taken-back';
+import { tuningDifferences, type TuningDifference } from './tuning-words';
+
+interface Change {
+  readonly wallId: string;
+  readonly name: string;
+  readonly before: TrackerTuning;
+  readonly after: TrackerTuning;
+}
+
+type Outcome =
+  | { readonly kind: 'done'; readonly change: Change; readonly differences: readonly TuningDifference[] }
+  | { readonly kind: 'back'; readonly change: Change }
+  | { readonly kind: 'moved'; readonly name: string; readonly by: string };
+
+/** One press puts a setting on a wall; then it says what changed, and one more press goes back. */
+@Component({
+  selector: 'oriel-put-on-wall',
+  imports: [MatButton, FailureNotice],
+  template: `
+    <button matButton="filled" type="button" [disabled]="saving.busy() || !wallId()" (click)="put()">{{ words() }}</button>
+    @let now = outcome();
+    <div role="status">
+      @if (now?.kind === 'done') {
+        @if (now.differences.length) {
+          <p><strong>{{ now.change.name }} follows with this from now on.</strong> What changed:</p>
+          <ul class="figures">
+            @for (one of now.differences; track one.name) {
+              <li>{{ one.name }}: {{ one.before }} → {{ one.after }}</li>
+            }
+          </ul>
+        } @else {
+          <p>{{ now.change.name }} follows with this already: nothing changed.</p>
+        }
+      }
+      @if (now?.kind === 'back') {
+        <p>{{ now.change.name }} follows as it did before.</p>
+      }
+      @if (now?.kind === 'moved') {
+        <p>{{ now.by }} changed {{ now.name }} meanwhile. Their changes stay; nothing of yours is written yet. Press again to put only this over the newest.</p>
+      }
+    </div>
+    @if (now?.kind === 'done' && now.differences.length) {
+      <button matButton="outlined" type="button" [disabled]="saving.busy()" (click)="goBack(now.change)">Go back to what it was</button>
+    }
+    <oriel-failure-notice [failure]="saving.failure()" />
+  `,
+  styles: `
+    :host { display: grid; gap: 8px; justify-items: start; }
+    p { margin: 0; }
+    ul { margin: 4px 0 0; padding-left: 20px; }
+    oriel-failure-notice { width: 100%; }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PutOnWall {
+  readonly wallId = input.required<string | null>();
+  /** On the button. */
+  readonly words = input.required<string>();
+  readonly change = input.required<(tuning: TrackerTuning) => TrackerTuning>();
+
+  private readonly bench = inject(BenchSubject);
+  protected readonly saving = new Submission();
+  protected readonly outcome = signal<Outcome | null>(null);
+
+  protected put(): Promise<void> {
+    return this.save(this.wallId(), this.change(), (change) => ({
+      kind: 'done',
+      change,
+      differences: tuningDifferences(change.before, change.after),
+    }));
+  }
+
+  protected goBack({ wallId, before, after }: Change): Promise<void> {
+    return this.save(wallId, (now) => takenBack(now, before, after), (change) => ({ kind: 'back', change }));
+  }
+
+  private save(
+    wallId: string | null,
+    change: (tuning: TrackerTuning) => TrackerTuning,
+    outcome: (change: Change) => Outcome,
+  ): Promise<void> {
+    return this.saving.run(async () => {
+      if (!wallId) return;
+      const applied = await this.bench.apply(wallId, change);
+      const name = this.bench.walls().find(({ id }) => id === wallId)?.setUp.name ?? '';
+      this.outcome.set(
+        applied.kind === 'saved' ? outcome({ wallId, name, ...applied }) : { kind: 'moved', name, by: applied.by },
+      );
+    });
+  }
+}
