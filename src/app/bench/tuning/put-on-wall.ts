@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import type { TrackerTuning } from '@oriel/shared/contracts/walls';
 import { FailureNotice } from '../../core/failure-notice';
@@ -25,9 +25,8 @@ type Outcome =
   imports: [MatButton, FailureNotice],
   template: `
     <button matButton="filled" type="button" [disabled]="saving.busy() || !wallId()" (click)="put()">{{ words() }}</button>
-    @let now = outcome();
     <div role="status">
-      @if (now?.kind === 'done') {
+      @if (done(); as now) {
         @if (now.differences.length) {
           <p><strong>{{ now.change.name }} follows with this from now on.</strong> What changed:</p>
           <ul class="figures">
@@ -39,15 +38,15 @@ type Outcome =
           <p>{{ now.change.name }} follows with this already: nothing changed.</p>
         }
       }
-      @if (now?.kind === 'back') {
+      @if (back(); as now) {
         <p>{{ now.change.name }} follows as it did before.</p>
       }
-      @if (now?.kind === 'moved') {
+      @if (moved(); as now) {
         <p>{{ now.by }} changed {{ now.name }} meanwhile. Their changes stay; nothing of yours is written yet. Press again to put only this over the newest.</p>
       }
     </div>
-    @if (now?.kind === 'done' && now.differences.length) {
-      <button matButton="outlined" type="button" [disabled]="saving.busy()" (click)="goBack(now.change)">Go back to what it was</button>
+    @if (undoable(); as change) {
+      <button matButton="outlined" type="button" [disabled]="saving.busy()" (click)="goBack(change)">Go back to what it was</button>
     }
     <oriel-failure-notice [failure]="saving.failure()" />
   `,
@@ -67,7 +66,11 @@ export class PutOnWall {
 
   private readonly bench = inject(BenchSubject);
   protected readonly saving = new Submission();
-  protected readonly outcome = signal<Outcome | null>(null);
+  private readonly outcome = signal<Outcome | null>(null);
+  protected readonly done = computed(() => ofKind(this.outcome(), 'done'));
+  protected readonly back = computed(() => ofKind(this.outcome(), 'back'));
+  protected readonly moved = computed(() => ofKind(this.outcome(), 'moved'));
+  protected readonly undoable = computed(() => (this.done()?.differences.length ? this.done()!.change : null));
 
   protected put(): Promise<void> {
     return this.save(this.wallId(), this.change(), (change) => ({
@@ -96,3 +99,6 @@ export class PutOnWall {
     });
   }
 }
+
+const ofKind = <K extends Outcome['kind']>(outcome: Outcome | null, kind: K) =>
+  outcome?.kind === kind ? (outcome as Extract<Outcome, { kind: K }>) : null;
