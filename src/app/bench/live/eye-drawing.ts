@@ -47,9 +47,12 @@ const SCALE_MM = 1000;
             }
           }
         </svg>
-        <figcaption class="marginal">{{ view.name }}: the bar is the glass, the dot on it the camera, the ring the eye that is followed.{{ view.beyond ? ' It is beyond the drawing.' : '' }}</figcaption>
+        <figcaption class="marginal">{{ view.name }}{{ view.beyond ? '. The eye is beyond the drawing.' : '' }}</figcaption>
       </figure>
     }
+    <p class="legend marginal">
+      The bar is the glass, the dot on it the camera and its dashes what it sees, the brass ring the eye that is followed{{ subject().zone ? '; shaded, the viewing zone' : '' }}.
+    </p>
   `,
   styleUrl: '../../drawing/views.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

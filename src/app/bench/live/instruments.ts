@@ -37,11 +37,11 @@ export interface Reading {
 
 /** Up to where each is good, and from where on it is poor; why, is said beside each. */
 const LIMITS = {
-  trackedPerS: { good: 15, poor: 5 },
+  betweenLooksMs: { good: 1000 / 15, poor: 200 },
   lookMs: { good: 33, poor: 67 },
   latencyMs: { good: 50, poor: 100 },
   jitterMm: { good: 1, poor: 3 },
-  frameMs: { good: 20, poor: 33 },
+  frameMs: { good: 20, poor: 34 },
 };
 /** So long after the first look the camera's clock is known, or never will be. */
 const CLOCK_KNOWN_MS = 20_000;
@@ -68,9 +68,9 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       // By the mean: looks that come in one after another after a pause do not make it quick.
       ...inFigures(trackedPerS, 'a second', 0),
       spread: spreadWords(tracking, 'ms between looks'),
-      standing: standingOf(-trackedPerS, { good: -LIMITS.trackedPerS.good, poor: -LIMITS.trackedPerS.poor }),
+      standing: standingOf({ median: 1000 / trackedPerS, p95: tracking.p95 }, LIMITS.betweenLooksMs),
       good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
-      lines: [line('Tracking interval', 'ink', measures.trackingInterval), goodUpTo(1000 / LIMITS.trackedPerS.good)],
+      lines: [line('Tracking interval', 'ink', measures.trackingInterval), goodUpTo(LIMITS.betweenLooksMs.good)],
       yLabel: 'between looks, ms',
       ...scaleFor(tracking, 100),
     },
@@ -78,7 +78,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       name: 'Time for one look',
       ...inFigures(total.median, 'ms', 1),
       spread: `${spreadWords(total, 'ms')}${total.median >= 0 ? `; crop ${ms(measures.crop.spread(since).median)}, detect ${ms(measures.detect.spread(since).median)}, landmarks ${ms(measures.landmarks.spread(since).median)}` : ''}`,
-      standing: standingOf(total.median, LIMITS.lookMs),
+      standing: standingOf(total, LIMITS.lookMs),
       good: 'Practice: under 33 ms a camera of 30 a second is looked at whole; beyond, frames are skipped.',
       lines: [
         line('Total', 'ink', measures.total),
@@ -94,7 +94,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       name: 'Capture to drawing',
       ...inFigures(latency.median, 'ms', 0),
       spread: spreadWords(latency, 'ms') || latencyUnknown(measures, nowMs),
-      standing: standingOf(latency.median, LIMITS.latencyMs),
+      standing: standingOf(latency, LIMITS.latencyMs),
       good: 'Practice: under 50 ms prediction makes good well. Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk.',
       lines: [line('Capture to drawing', 'ink', measures.latency), goodUpTo(LIMITS.latencyMs.good)],
       yLabel: 'delay, ms',
@@ -106,7 +106,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       spread: spreadWords(jitter, 'mm', 2)
         ? `${spreadWords(jitter, 'mm', 2)}; before smoothing ${measures.seenJitter.spread(since).median.toFixed(2)}`
         : 'Stand still for two seconds.',
-      standing: standingOf(jitter.median, LIMITS.jitterMm),
+      standing: standingOf(jitter, LIMITS.jitterMm),
       good: 'Under 1 mm: that moves a layer 100 mm behind the glass by 0.14 mm, seen from 600 mm, just under what the eye can tell.',
       lines: [
         line('As drawn', 'ink', measures.drawnJitter),
@@ -133,7 +133,7 @@ export function readingsOf(measures: Measures, nowMs: number): Reading[] {
       name: 'Frame interval of this page',
       ...inFigures(frame.median, 'ms', 1),
       spread: spreadWords(frame, 'ms'),
-      standing: standingOf(frame.median, LIMITS.frameMs),
+      standing: standingOf(frame, LIMITS.frameMs),
       good: '17 ms is 60 a second. Practice: from 33 ms on motion is seen to stutter. The charts themselves cost a little.',
       lines: [line('Frame interval', 'ink', measures.frameInterval), goodUpTo(LIMITS.frameMs.poor)],
       yLabel: 'between frames, ms',
@@ -170,8 +170,12 @@ const GOOD: Standing = { is: 'good', words: 'good' };
 const FAIR: Standing = { is: 'fair', words: 'fair' };
 const POOR: Standing = { is: 'poor', words: 'poor' };
 
-const standingOf = (figure: number, { good, poor }: { good: number; poor: number }): Standing | null =>
-  Number.isFinite(figure) ? (figure <= good ? GOOD : figure < poor ? FAIR : POOR) : null;
+/** By the median; good in the middle and poor once in twenty is uneven. */
+function standingOf({ median, p95 }: Spread, { good, poor }: { readonly good: number; readonly poor: number }): Standing | null {
+  if (!Number.isFinite(median)) return null;
+  if (median > good) return median < poor ? FAIR : POOR;
+  return p95 < poor ? GOOD : { is: 'fair', words: 'uneven' };
+}
 
 function ladderStanding(changes: number, step: number): Standing {
   if (changes > 3) return { is: 'poor', words: 'restless' };
@@ -189,8 +193,11 @@ const goodUpTo = (y: number): ChartLine => ({
   ],
 });
 
-/** So that one peak does not flatten all the rest. */
-const scaleFor = ({ p95 }: Spread, yLeast: number) => ({ yLeast, ...(p95 >= 0 ? { yMost: Math.max(yLeast, Math.ceil(2 * p95)) } : {}) });
+/** So that one peak does not flatten all the rest; the end is a round figure. */
+function scaleFor({ p95 }: Spread, yLeast: number) {
+  const step = yLeast / 2;
+  return { yLeast, ...(p95 >= 0 ? { yMost: Math.max(yLeast, step * Math.ceil((1.5 * p95) / step)) } : {}) };
+}
 
 const latencyUnknown = ({ firstLookMs }: Measures, nowMs: number): string =>
   nowMs - firstLookMs > CLOCK_KNOWN_MS
