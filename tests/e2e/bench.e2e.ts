@@ -112,3 +112,62 @@ test('runs are renamed, exported, compared and deleted', async ({ signedInPage, 
   await expect(page.getByRole('link', { name: first, exact: true })).toBeVisible();
   await expect(page.getByRole('link', { name: third, exact: true })).toHaveCount(0);
 });
+
+const withoutCamera = {
+  refused: () => {
+    navigator.mediaDevices.getUserMedia = () => Promise.reject(new DOMException('', 'NotAllowedError'));
+  },
+  missing: () => {
+    navigator.mediaDevices.getUserMedia = () => Promise.reject(new DOMException('', 'NotFoundError'));
+  },
+  insecure: () => Object.defineProperty(window, 'isSecureContext', { value: false }),
+};
+const said = {
+  refused: 'The camera was refused.',
+  missing: 'No camera was found.',
+  insecure: 'This page cannot have a camera',
+};
+
+for (const why of ['refused', 'missing', 'insecure'] as const)
+  test(`a browser whose camera is ${why} is told so, and the runs are there all the same`, async ({ signedInPage }) => {
+    const page = await signedInPage('tuner');
+    await page.goto('/scenes');
+    const name = `Before ${unique()}`;
+    const runId = await keepMadeUpRun(page, name, null);
+    await page.addInitScript(withoutCamera[why]);
+    await page.goto('/bench/mirror');
+    await page.getByRole('button', { name: 'I hold the mirror: start' }).click();
+    await expect(page.getByText(said[why])).toBeVisible();
+    await expect(page.locator('.blinking')).toHaveCount(0);
+
+    await page.goto('/bench');
+    await page.getByRole('button', { name: 'Start the camera' }).click();
+    await expect(page.getByText(said[why])).toBeVisible();
+    await expect(page.getByRole('button', { name: 'Start recording' })).toBeDisabled();
+    await page.getByRole('link', { name: 'replay or compare them' }).click();
+    await page.getByRole('link', { name, exact: true }).click();
+    await expect(page).toHaveURL(new RegExp(runId));
+    await expect(page.getByRole('heading', { name: 'From side to side' })).toBeVisible({ timeout: 60_000 });
+  });
+
+test('a run too short to judge says so at replay too; a deletion that fails says so beside its run', async ({ signedInPage, expectErrors }) => {
+  const page = await signedInPage('tuner');
+  await page.goto('/scenes');
+  const name = `Short ${unique()}`;
+  const runId = await keepMadeUpRun(page, name, null, 40, 900);
+  await page.goto(`/bench/runs/${runId}`);
+  await expect(page.getByText('Nobody stands still in this run for long enough.').first()).toBeVisible();
+  await expect(page.getByRole('link', { name: 'Record another' }).first()).toBeVisible();
+
+  await page.goto('/bench/runs');
+  await page.getByRole('button', { name: `Delete ${name}` }).click();
+  expectErrors(/ERR_INTERNET_DISCONNECTED|Failed to load resource/);
+  await page.context().setOffline(true);
+  await page.getByRole('button', { name: 'Delete now' }).click();
+  await expect(page.getByRole('listitem').filter({ hasText: name }).getByRole('alert')).toContainText('cannot be reached');
+  await page.context().setOffline(false);
+  // Two presses in one breath are one deletion.
+  await page.getByRole('button', { name: 'Delete now' }).dblclick();
+  await expect(page.getByRole('link', { name, exact: true })).toHaveCount(0);
+  await expect(page.getByRole('alert')).toHaveCount(0);
+});

@@ -14,10 +14,10 @@ export async function makeWall(page: Page, name: string): Promise<Wall> {
 export const wallNow = async (page: Page, wallId: string): Promise<Wall> =>
   readWall.reply.parse(await ask(page, 'GET', readWall.path.replace(':wallId', wallId))).wall;
 
-/** Keeps a run of someone made up, who stands still and then walks. */
-export async function keepMadeUpRun(page: Page, name: string, wallId: string | null, lateMs = 40): Promise<string> {
+/** Keeps a run of someone made up, who stands still for six seconds and then walks. */
+export async function keepMadeUpRun(page: Page, name: string, wallId: string | null, lateMs = 40, untilMs = 14_000): Promise<string> {
   const stages = { cropMs: 1, detectMs: 2, landmarksMs: 6, totalMs: 9 };
-  const samples: RunSample[] = madeUpRun(standsThenWalks, { untilMs: 14_000, lateMs, across: 0.5, along: 5 }).map(
+  const samples: RunSample[] = madeUpRun(standsThenWalks, { untilMs, lateMs, across: 0.5, along: 5 }).map(
     (s) => ({ ...s, ...stages }),
   );
   const body = {

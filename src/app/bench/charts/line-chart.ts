@@ -119,7 +119,7 @@ export class LineChart {
       x: { type: 'linear', ...scale(this.xLabel()), ...(range ? { min: range[0], max: range[1] } : {}) },
       y: { type: 'linear', ...scale(this.yLabel()), ...this.upright(ticks) },
     };
-    this.tags = lines.flatMap(({ tag, points: [at], ink }) => (tag && at ? [{ words: tag, at, ink: inks[ink], paper: inks.sheet }] : []));
+    this.tags = lines.flatMap(({ tag, points: [at], ink }) => (tag && at ? [{ words: tag, at, ink: ink === 'brass-line' ? inks.pencil : inks[ink], paper: inks.sheet }] : []));
     chart.data.datasets = lines.map((line) => datasetOf(line, inks[line.ink], inks.sheet));
     chart.update('none');
   }

@@ -10,9 +10,19 @@ export interface ComparedRow {
   readonly good?: string;
   readonly a: string;
   readonly b: string;
+  /** Which is better, by a tenth and more; null where neither is. */
+  readonly better: 'a' | 'b' | null;
   /** Why a figure is not there. */
   readonly why?: string;
 }
+
+/** What a row is judged by, and whether less of it is better. */
+interface Judged<F> {
+  readonly by?: (figures: F) => number;
+  readonly more?: boolean;
+}
+
+const SHARE_NOTICED = 0.1;
 
 const COLUMNS = 300;
 const NOT_SHOWN = 'not shown';
@@ -25,29 +35,38 @@ const whyNoMotion = 'Nobody moves from side to side in it for long enough.';
 export function compared(a: WholeRun, b: WholeRun): ComparedRow[] {
   const [of, to] = [a, b].map(({ run, samples }) => figuresOf(samples, run.tuning));
   type Figures = typeof of;
-  const row = (name: string, say: (figures: Figures) => string, more: Omit<Partial<ComparedRow>, 'name'> = {}): ComparedRow => {
+  const row = (
+    name: string,
+    say: (figures: Figures) => string,
+    { good, why, by, more }: { good?: string; why?: string } & Judged<Figures> = {},
+  ): ComparedRow => {
     const said = { a: say(of), b: say(to) };
-    const { why, ...rest } = more;
-    return { name, ...rest, ...said, ...(why && Object.values(said).some((figure) => figure.startsWith('not ')) ? { why } : {}) };
+    const missing = Object.values(said).some((figure) => figure.startsWith('not '));
+    return { name, ...said, ...(good && { good }), ...(why && missing && { why }), better: by ? betterOf(by(of), by(to), more) : null };
   };
   const spread = (name: string, key: 'intervalMs' | 'cropMs' | 'detectMs' | 'landmarksMs' | 'totalMs', good?: string) =>
-    row(name, (figures) => spreadSaid(figures[key]), { good });
+    row(name, (figures) => spreadSaid(figures[key]), { good, by: (figures) => figures[key].median });
   return [
-    row('Tracked a second', ({ trackedPerS }) => said(trackedPerS, 1), { good: '15 and more; a desktop’s is 30 to 40' }),
+    row('Tracked a second', ({ trackedPerS }) => said(trackedPerS, 1), { good: '15 and more; a desktop’s is 30 to 40', by: ({ trackedPerS }) => trackedPerS, more: true }),
     spread('Between looks, ms', 'intervalMs', 'under 67'),
     spread('One look, ms', 'totalMs', 'under 33'),
     spread('of it crop, ms', 'cropMs'),
     spread('of it detect, ms', 'detectMs'),
     spread('of it landmarks, ms', 'landmarksMs'),
-    row('Capture to the page, ms', ({ arrivalMs }) => spreadSaid(arrivalMs, 'not known here'), { good: 'little, and steady', why: whyNoCapture }),
-    { name: 'Between frames drawn, ms', good: '17; from 33 on motion stutters', a: frames(a), b: frames(b) },
-    row('Jitter at rest as drawn, mm', ({ drawnJitterMm }) => said(drawnJitterMm, 2), { good: 'under 1', why: whyNoRest }),
-    row('Jitter at rest as seen, mm', ({ seenJitterMm }) => said(seenJitterMm, 2), { why: whyNoRest }),
-    row('Jitter of distance as seen, mm', ({ seenAlongJitterMm }) => said(seenAlongJitterMm, 1), { why: whyNoRest }),
-    row('Lag in motion as drawn, ms', ({ lagMs }) => said(lagMs, 0), { good: 'within 20 of nothing', why: whyNoMotion }),
-    row('Lost', ({ losses }) => `${losses} ${losses === 1 ? 'time' : 'times'}`, { good: 'never, while in view' }),
-    row('Looks that found somebody', ({ foundShare }) => `${said(100 * foundShare, 0)} %`),
+    row('Capture to the page, ms', ({ arrivalMs }) => spreadSaid(arrivalMs, 'not known here'), { good: 'little, and steady', why: whyNoCapture, by: ({ arrivalMs }) => arrivalMs.median }),
+    { name: 'Between frames drawn, ms', good: '17; from 33 on motion stutters', a: frames(a), b: frames(b), better: betterOf(a.run.frameIntervalP95Ms, b.run.frameIntervalP95Ms) },
+    row('Jitter at rest as drawn, mm', ({ drawnJitterMm }) => said(drawnJitterMm, 2), { good: 'under 1', why: whyNoRest, by: ({ drawnJitterMm }) => drawnJitterMm }),
+    row('Jitter at rest as seen, mm', ({ seenJitterMm }) => said(seenJitterMm, 2), { why: whyNoRest, by: ({ seenJitterMm }) => seenJitterMm }),
+    row('Jitter of distance as seen, mm', ({ seenAlongJitterMm }) => said(seenAlongJitterMm, 1), { why: whyNoRest, by: ({ seenAlongJitterMm }) => seenAlongJitterMm }),
+    row('Lag in motion as drawn, ms', ({ lagMs }) => said(lagMs, 0), { good: 'under 20', why: whyNoMotion, by: ({ lagMs }) => Math.abs(lagMs) }),
+    row('Lost', ({ losses }) => `${losses} ${losses === 1 ? 'time' : 'times'}`, { good: 'never, while in view', by: ({ losses }) => losses }),
+    row('Looks that found somebody', ({ foundShare }) => `${said(100 * foundShare, 0)} %`, { by: ({ foundShare }) => foundShare, more: true }),
   ];
+}
+
+function betterOf(a: number, b: number, more = false): 'a' | 'b' | null {
+  if (!(Math.abs(a - b) > SHARE_NOTICED * Math.max(a, b))) return null;
+  return a < b === more ? 'b' : 'a';
 }
 
 /** A figure of each sample over the run, in seconds. */

@@ -16,7 +16,7 @@ import { machineName } from './machine';
   `,
   styles: `
     :host { display: block; overflow-wrap: anywhere; }
-    summary { width: fit-content; cursor: pointer; list-style-position: outside; }
+    summary { width: fit-content; cursor: pointer; list-style-position: inside; }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
