@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, inj
 import { MatButton } from '@angular/material/button';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import type { MirrorDelay } from '@oriel/shared/mirror/mirror-delay';
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { requestCamera } from '../../tracking/camera-request';
 import { CAMERAS } from '../../tracking/tracking-surroundings';
 import type { TrackingState } from '../../tracking/tracking-state';

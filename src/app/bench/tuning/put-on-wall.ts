@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { BenchSubject } from '../subject/bench-subject';

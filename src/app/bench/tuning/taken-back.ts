@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 
 /** A tuning with what one change changed put back, and whatever else was changed since left as it is. */
 export function takenBack(now: TrackerTuning, before: TrackerTuning, after: TrackerTuning): TrackerTuning {

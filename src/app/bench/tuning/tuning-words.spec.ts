@@ -1,5 +1,5 @@
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { tuningDifferences } from './tuning-words';
 
 describe('what differs between two tunings', () => {

@@ -1,4 +1,4 @@
-import type { TrackerTuning } from '@oriel/shared/contracts/walls';
+import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 
 /** One setting in words: what it is, and how it stands. */
 interface Setting {
