@@ -1,5 +1,6 @@
 import type { Page } from '@playwright/test';
 import type { RendererName } from '../../src/app/player/renderer';
+import { framesPass } from './at-rest';
 import { openBench, type PictureSource } from './player/bench-page';
 import { centroid, pixelsOf } from './player/centroid';
 import { ground, markerScene, pictureOf } from './player/marker-scene';
@@ -57,9 +58,13 @@ for (const name of renderers) {
   });
 
   test(`${name} left while pictures are on their way shows none of them`, async ({ page }) => {
+    const underWay = { asked: 0, answered: 0 };
     await openBench(page, async (imageId, edge) => {
+      underWay.asked++;
       await new Promise((resolve) => setTimeout(resolve, 500));
-      return pictureOf(imageId, edge);
+      const picture = await pictureOf(imageId, edge);
+      underWay.answered++;
+      return picture;
     });
     const facts = await page.evaluate(
       ([name, scene]) => {
@@ -72,7 +77,9 @@ for (const name of renderers) {
       [name, scene] as const,
     );
     expect(facts).toMatchObject({ layers: 0, held: 0, pictureBytes: 0 });
-    await page.waitForTimeout(700);
+    expect(underWay.asked).toBeGreaterThan(0);
+    await expect.poll(() => underWay.answered).toBe(underWay.asked);
+    await framesPass(page, 12);
     expect(await page.evaluate(() => document.querySelectorAll('#host *').length)).toBe(0);
   });
 }

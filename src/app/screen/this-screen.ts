@@ -17,11 +17,6 @@ export class ThisScreen {
     this.kept.set(setUp);
   }
 
-  forget(): void {
-    localStorage.removeItem(storageKey);
-    this.kept.set(null);
-  }
-
   /** What is kept, if it can be understood and was measured on this screen. */
   private read(): ScreenSetUp | null {
     try {
