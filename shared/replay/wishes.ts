@@ -17,18 +17,21 @@ export interface Figures {
  *
  * So that the three are seen to differ, they follow from one another. Quicker strays least, and hardly minds jitter. Balanced weighs the
  * two by what is noticed, with four fifths of quicker's jitter at most; calmer strays least with three fifths of balanced's. Where not
- * even the calmest there is reaches that, half and nine tenths of the way to it will do. (The shares are practice: a difference that is seen.)
+ * even the calmest there is reaches that, half and nine tenths of the way to it will do. Where the calmest is calmer by less than a tenth,
+ * nobody would see it: nothing is asked then, for it could cost any lag. (The shares are practice: a difference that is seen.)
  */
 const NOTICED_STRAY_MS = 20;
 const NOTICED_JITTER_MM: Readonly<Record<Direction, number>> = { across: 1, along: 6 };
 const BALANCED = { share: 0.8, wayToCalmest: 0.5 };
 const CALMER = { share: 0.6, wayToCalmest: 0.9 };
 const HARDLY = 0.1;
+const SEEN_SHARE = 0.1;
 /** What is missing of the jitter to be reached outweighs whatever straying can bring. */
 const MUST = 1e6;
 
 /** The most jitter of a balanced setting after the quicker one, and of a calmer one after the balanced; `calmestMm` is the least there is. */
 export const mostJitterMm = (wish: 'balanced' | 'calmer', before: Figures, calmestMm: number): number => {
+  if (calmestMm > (1 - SEEN_SHARE) * before.jitterMm) return Infinity;
   const { share, wayToCalmest } = wish === 'balanced' ? BALANCED : CALMER;
   return Math.max(share * before.jitterMm, before.jitterMm - wayToCalmest * (before.jitterMm - calmestMm));
 };

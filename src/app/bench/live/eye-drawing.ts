@@ -37,22 +37,19 @@ const SCALE_MM = 1000;
           <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
           @for (other of view.others; track other.id) {
             <circle class="other" [attr.cx]="other.at.x" [attr.cy]="other.at.y" [attr.r]="1.8 * view.unit" />
-            <text [attr.x]="other.at.x + 3 * view.unit" [attr.y]="other.at.y" [attr.font-size]="4 * view.unit">person {{ other.id }}</text>
+            <text text-anchor="middle" [attr.x]="other.at.x" [attr.y]="other.at.y + 5.6 * view.unit" [attr.font-size]="4 * view.unit">person {{ other.id }}</text>
           }
           @if (view.eye; as eye) {
             <path class="sight" [attr.d]="view.sight" />
             <circle class="eye followed" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
             @if (people().others.length) {
-              <text [attr.x]="eye.x + 3 * view.unit" [attr.y]="eye.y" [attr.font-size]="4 * view.unit">person {{ people().followed }}, followed</text>
+              <text text-anchor="middle" [attr.x]="eye.x" [attr.y]="eye.y - 3.2 * view.unit" [attr.font-size]="4 * view.unit">person {{ people().followed }}</text>
             }
           }
         </svg>
         <figcaption class="marginal">{{ view.name }}{{ view.beyond ? '. The eye is beyond the drawing.' : '' }}</figcaption>
       </figure>
     }
-    <p class="legend marginal">
-      The bar is the glass, the dot on it the camera and its dashes what it sees, the brass ring the eye that is followed{{ subject().zone ? '; shaded, the viewing zone' : '' }}.
-    </p>
   `,
   styleUrl: '../../drawing/views.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -15,6 +15,9 @@ describe('two runs in figures', () => {
   it('says which is better where it is by a tenth and more', () => {
     expect(row(whole(40, 20), whole(40, 10), 'One look, ms')).toMatchObject({ a: '20.0 / 20.0', b: '10.0 / 10.0', better: 'b' });
     expect(row(whole(40, 10), whole(40, 10.5), 'One look, ms').better).toBeNull();
+    const uneven = whole(40, 8);
+    const peaks = { ...uneven, samples: uneven.samples.map((sample, i) => ({ ...sample, totalMs: i % 10 ? 8 : 90 })) };
+    expect(row(whole(40, 10), peaks, 'One look, ms').better).toBeNull();
     expect(row(whole(40, 10), whole(120, 10), 'Capture to the page, ms').better).toBe('a');
   });
 

@@ -18,7 +18,8 @@ export interface ComparedRow {
 
 /** What a row is judged by, and whether less of it is better. */
 interface Judged<F> {
-  readonly by?: (figures: F) => number;
+  /** Of several, none may contradict another. */
+  readonly by?: (figures: F) => number | Spread;
   readonly more?: boolean;
 }
 
@@ -45,7 +46,7 @@ export function compared(a: WholeRun, b: WholeRun): ComparedRow[] {
     return { name, ...said, ...(good && { good }), ...(why && missing && { why }), better: by ? betterOf(by(of), by(to), more) : null };
   };
   const spread = (name: string, key: 'intervalMs' | 'cropMs' | 'detectMs' | 'landmarksMs' | 'totalMs', good?: string) =>
-    row(name, (figures) => spreadSaid(figures[key]), { good, by: (figures) => figures[key].median });
+    row(name, (figures) => spreadSaid(figures[key]), { good, by: (figures) => figures[key] });
   return [
     row('Tracked a second', ({ trackedPerS }) => said(trackedPerS, 1), { good: '15 and more; a desktop’s is 30 to 40', by: ({ trackedPerS }) => trackedPerS, more: true }),
     spread('Between looks, ms', 'intervalMs', 'under 67'),
@@ -53,7 +54,7 @@ export function compared(a: WholeRun, b: WholeRun): ComparedRow[] {
     spread('of it crop, ms', 'cropMs'),
     spread('of it detect, ms', 'detectMs'),
     spread('of it landmarks, ms', 'landmarksMs'),
-    row('Capture to the page, ms', ({ arrivalMs }) => spreadSaid(arrivalMs, 'not known here'), { good: 'little, and steady', why: whyNoCapture, by: ({ arrivalMs }) => arrivalMs.median }),
+    row('Capture to the page, ms', ({ arrivalMs }) => spreadSaid(arrivalMs, 'not known here'), { good: 'little, and steady', why: whyNoCapture, by: ({ arrivalMs }) => arrivalMs }),
     { name: 'Between frames drawn, ms', good: '17; from 33 on motion stutters', a: frames(a), b: frames(b), better: betterOf(a.run.frameIntervalP95Ms, b.run.frameIntervalP95Ms) },
     row('Jitter at rest as drawn, mm', ({ drawnJitterMm }) => said(drawnJitterMm, 2), { good: 'under 1', why: whyNoRest, by: ({ drawnJitterMm }) => drawnJitterMm }),
     row('Jitter at rest as seen, mm', ({ seenJitterMm }) => said(seenJitterMm, 2), { why: whyNoRest, by: ({ seenJitterMm }) => seenJitterMm }),
@@ -64,7 +65,12 @@ export function compared(a: WholeRun, b: WholeRun): ComparedRow[] {
   ];
 }
 
-function betterOf(a: number, b: number, more = false): 'a' | 'b' | null {
+function betterOf(a: number | Spread, b: number | Spread, more = false): 'a' | 'b' | null {
+  if (typeof a === 'object' && typeof b === 'object') {
+    const [median, p95] = [betterOf(a.median, b.median), betterOf(a.p95, b.p95)];
+    return median && p95 && median !== p95 ? null : (median ?? p95);
+  }
+  if (typeof a === 'object' || typeof b === 'object') return null;
   if (!(Math.abs(a - b) > SHARE_NOTICED * Math.max(a, b))) return null;
   return a < b === more ? 'b' : 'a';
 }
