@@ -3,6 +3,12 @@ import { requireGlass } from './requirements';
 import type { PlacedLayer, SceneGeometry } from './scene-geometry';
 import type { Glass, Point3, ViewingZone } from './types';
 
+/**
+ * Shapes that differ by less are one: a screen's sides are told in whole mm, and a dark line along an edge is seen where a sliver of the picture
+ * that is cut off is not. Practice.
+ */
+const SAME_SHAPE = 0.005;
+
 /** A scene carried to another glass: the factor, and the fitted glass, which is the part of the other glass it fills. */
 export interface Retargeted<L extends PlacedLayer = PlacedLayer> {
   readonly factor: number;
@@ -16,7 +22,8 @@ export interface Retargeted<L extends PlacedLayer = PlacedLayer> {
  * A scene on another screen: glass, home eye, zone, layers and depths all scaled by one factor, which leaves every angle
  * and so the whole appearance as it was. The factor is that of the largest glass of the scene's own shape that fits
  * within the other one: the ratio of widths where the shapes agree ("scales with the width of the glass"), and of heights
- * where the other glass is the wider in shape. What remains of the other glass is outside the scene and is left dark.
+ * where the other glass is the wider in shape. What remains of the other glass is outside the scene and is left dark. Shapes that differ by
+ * less than half a per cent agree: the scene then covers the other glass, and reaches so little past two of its edges.
  * Other properties of the layers are kept.
  */
 export function retarget<L extends PlacedLayer>(
@@ -26,7 +33,8 @@ export function retarget<L extends PlacedLayer>(
   requireGlass(scene.glass);
   requireGlass(otherGlass);
   const { glass, homeEye, zone } = scene;
-  const factor = Math.min(otherGlass.widthMm / glass.widthMm, otherGlass.heightMm / glass.heightMm);
+  const [less, more] = [otherGlass.widthMm / glass.widthMm, otherGlass.heightMm / glass.heightMm].sort((a, b) => a - b);
+  const factor = more / less - 1 < SAME_SHAPE ? more : less;
   return {
     factor,
     glass: { widthMm: glass.widthMm * factor, heightMm: glass.heightMm * factor },

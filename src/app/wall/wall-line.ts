@@ -6,9 +6,21 @@ export interface WallSituation {
   readonly sceneChosen: boolean;
   /** Names of layers whose picture did not come. */
   readonly missing: readonly string[];
-  readonly tracking: TrackingState;
-  /** How long tracking has been in this state, ms. */
-  readonly trackingForMs: number;
+  /** Why nobody is followed for want of a camera, and for how long; null where one is looked through. */
+  readonly lack: CameraLack | null;
+  readonly nowMs: number;
+}
+
+/** What keeps the camera from a wall, and since when, ms. */
+export interface CameraLack {
+  readonly state: TrackingState;
+  readonly sinceMs: number;
+}
+
+/** A camera that is lacking is asked for again and again: while the browser is asked the lack is what it was. */
+export function lackAfter(before: CameraLack | null, state: TrackingState, nowMs: number): CameraLack | null {
+  if (!cameraWords[state]) return null;
+  return before && (state === 'asking' || state === before.state) ? before : { state, sinceMs: nowMs };
 }
 
 /** A camera that is plugged in again is back by itself: it is spoken of only after so long, and then left to the desk, ms. */
@@ -20,8 +32,9 @@ export function wallLine(now: WallSituation): string | null {
   if (!now.sceneChosen) return `Nothing is chosen to be shown on ${now.wallName}. Choose a scene for it at Walls.`;
   if (now.missing.length > 0)
     return `${now.missing.length === 1 ? 'A picture' : `${now.missing.length} pictures`} of this scene could not be loaded; they are tried again by themselves. Check this screen’s network.`;
-  if (now.trackingForMs < speaksAfterMs || now.trackingForMs > speaksUntilMs) return null;
-  return cameraWords[now.tracking] ?? null;
+  const lackedMs = now.lack ? now.nowMs - now.lack.sinceMs : 0;
+  if (!now.lack || lackedMs < speaksAfterMs || lackedMs > speaksUntilMs) return null;
+  return cameraWords[now.lack.state] ?? null;
 }
 
 const cameraWords: Partial<Record<TrackingState, string>> = {

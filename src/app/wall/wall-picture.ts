@@ -9,7 +9,7 @@ import { windowOnScreen } from '../player/window-on-screen';
 import { FaceTracking } from '../tracking/face-tracking';
 import type { TrackingState } from '../tracking/tracking-state';
 import { KeptShowing, type Showing } from './kept-showing';
-import { wallLine } from './wall-line';
+import { type CameraLack, lackAfter, wallLine } from './wall-line';
 import { type WallFacts, WallReporter } from './wall-reporter';
 import { WallStage } from './wall-stage';
 import { devicePxMmOn, followingOn, trackingOn } from './wall-tuning';
@@ -61,6 +61,10 @@ export class WallPicture {
   private readonly missing = signal<readonly string[]>([]);
   private readonly nowMs = signal(performance.now());
   private readonly trackingSince = linkedSignal<TrackingState, number>({ source: this.tracking.state, computation: () => performance.now() });
+  private readonly lack = linkedSignal<TrackingState, CameraLack | null>({
+    source: this.tracking.state,
+    computation: (state, previous) => lackAfter(previous?.value ?? null, state, performance.now()),
+  });
   private readonly setUp = computed<WallSetUp>(() => this.showing().setUp, { equal: same });
   protected readonly scene = computed<Scene | null>(() => this.showing().scene, { equal: same });
   private readonly played = computed(() => ({ scene: this.scene(), glass: this.setUp().glass, zone: this.setUp().zone, following: followingOn(this.setUp()) }), { equal: same });
@@ -71,8 +75,8 @@ export class WallPicture {
       wallName: this.setUp().name,
       sceneChosen: this.scene() !== null,
       missing: this.missing(),
-      tracking: this.tracking.state(),
-      trackingForMs: this.nowMs() - this.trackingSince(),
+      lack: this.lack(),
+      nowMs: this.nowMs(),
     }),
   );
 
