@@ -29,7 +29,7 @@ test('the camera’s tilt is measured by standing at a marked spot', async ({ si
   await expect(page.getByText('You are seen. Stand still and look at the glass.')).toBeVisible({ timeout: 60_000 });
   await expect(page.getByText(/^\d+ readings$/)).toBeVisible();
   await expect(page.getByText(/^Done, \d+ readings. You may move.$/)).toBeVisible({ timeout: 20_000 });
-  await expect(page.getByText(/^Turned [\d.]+° down \(±[\d.]+°\) and [\d.]+° to the right \(±[\d.]+°\)\.$/)).toBeVisible({ timeout: 60_000 });
+  await expect(page.getByText(/^Turned [\d.]+° down \(±[\d.]+°\) and [\d.]+° to the right \(±[\d.]+°\)\. That is ±[\d.]+ mm on the glass/)).toBeVisible({ timeout: 60_000 });
   await page.getByRole('button', { name: 'Take it' }).click();
   await unfold(page, 'Turned sideways, rolled, how sure');
   const sure = await figureOf(page, 'The turn is sure to within ±');

@@ -1,5 +1,5 @@
 import { newWall } from '@oriel/shared/contracts/new-wall';
-import { errorsOf, exampleDepths, meansWords, sourcesOf, together, worthMeasuring } from './sources';
+import { errorsOf, exampleDepths, meansWords, sourcesOf, together, worthMeasuring, worthWords } from './sources';
 
 const setUp = newWall('Landing');
 const measured = { ...setUp, camera: { ...setUp.camera, uncertainty: { hfovRad: 0.0367, pitchRad: 0.005, positionMm: 2 } } };
@@ -8,6 +8,11 @@ const sourceOf = (key: string) => sourcesOf(measured).find((source) => source.ke
 describe('what uncertainties mean', () => {
   it('is said in plain words: 0.0367 rad is 2.1 degrees (computed)', () => {
     expect(meansWords(measured, sourceOf('field'))).toMatch(/^±2.1° of view: ±\d\.\d+ mm on the glass for a layer 100 mm behind, ±\d\.\d+ mm for one 500 mm behind\.$/);
+  });
+
+  it('says of a measurement what it is worth before it is taken, as it will be said after', () => {
+    const taken = meansWords(measured, sourceOf('field'));
+    expect(worthWords(measured, { hfovRad: 0.0367 })).toBe(`That is ${taken.slice(taken.indexOf(': ') + 2)}`);
   });
 
   it('says so of what nobody measured', () => {
@@ -31,8 +36,8 @@ describe('what uncertainties mean', () => {
   });
 
   it('says what is worth measuring next: of a new wall the turn, then what is left, then nothing', () => {
-    expect(worthMeasuring(setUp)).toBe('Turn counts most of what is only assumed: measure it in the step Camera.');
-    expect(worthMeasuring(measured)).toBe('Viewer counts most of what is only assumed: measure it in the step Viewer.');
+    expect(worthMeasuring(setUp)).toBe('What is only assumed and counts most is the turn of the camera: measure it in the step Camera.');
+    expect(worthMeasuring(measured)).toBe('What is only assumed and counts most is the size of the viewer: measure it in the step Viewer.');
     const { ipdMm } = setUp.tuning;
     expect(worthMeasuring({ ...measured, glass: { ...setUp.glass, uncertainty: 0.001 }, tuning: { ...setUp.tuning, ipdMm: { ...ipdMm, uncertainty: 1 } } })).toBe('');
   });

@@ -31,11 +31,11 @@ export function sourcesOf({ glass, camera, tuning }: WallSetUp): Source[] {
   const field = uncertainty.hfovRad ?? unmeasured.hfovRad;
   const viewer = tuning.ipdMm.uncertainty / tuning.ipdMm.value;
   return [
-    { key: 'glass', name: 'Glass', words: `±${plainMm(scale * 100, 2)} % of its width`, assumed: glass.uncertainty === null, unsure: { ...CERTAIN, glassScale: scale } },
-    { key: 'position', name: 'Place of the lens', words: `±${plainMm(place)} mm of the lens`, assumed: uncertainty.positionMm === null, unsure: { ...CERTAIN, positionMm: place } },
-    { key: 'tilt', name: 'Turn', words: `±${plainMm(degrees(tilt), 2)}° of turn`, assumed: uncertainty.pitchRad === null, unsure: { ...CERTAIN, tiltRad: tilt } },
-    { key: 'field', name: 'Field of view', words: `±${plainMm(degrees(field), 2)}° of view`, assumed: uncertainty.hfovRad === null, unsure: { ...CERTAIN, hfovRad: field } },
-    { key: 'viewer', name: 'Viewer', words: `±${plainMm(viewer * 100)} % of distance`, assumed: isUsual(tuning), unsure: { ...CERTAIN, viewerScale: viewer } },
+    { key: 'glass', name: 'the size of the glass', words: `±${plainMm(scale * 100, 2)} % of its width`, assumed: glass.uncertainty === null, unsure: { ...CERTAIN, glassScale: scale } },
+    { key: 'position', name: 'the place of the lens', words: `±${plainMm(place)} mm of the lens`, assumed: uncertainty.positionMm === null, unsure: { ...CERTAIN, positionMm: place } },
+    { key: 'tilt', name: 'the turn of the camera', words: `±${plainMm(degrees(tilt), 2)}° of turn`, assumed: uncertainty.pitchRad === null, unsure: { ...CERTAIN, tiltRad: tilt } },
+    { key: 'field', name: 'the field of view', words: `±${plainMm(degrees(field), 2)}° of view`, assumed: uncertainty.hfovRad === null, unsure: { ...CERTAIN, hfovRad: field } },
+    { key: 'viewer', name: 'the size of the viewer', words: `±${plainMm(viewer * 100)} % of distance`, assumed: isUsual(tuning), unsure: { ...CERTAIN, viewerScale: viewer } },
   ];
 }
 
@@ -74,17 +74,27 @@ export function worthMeasuring(setUp: WallSetUp): string {
   const assumed = sourcesOf(setUp).filter((source) => source.assumed);
   const counted = assumed.map((source) => ({ source, far: errorsOf(setUp, source.unsure)?.at(-1) ?? 0 }));
   const most = counted.reduce((a, b) => (b.far > a.far ? b : a), { source: null as Source | null, far: 0 }).source;
-  return most ? `${most.name} counts most of what is only assumed: measure it in the step ${measuredIn[most.key]}.` : '';
+  return most ? `What is only assumed and counts most is ${most.name}: measure it in the step ${measuredIn[most.key]}.` : '';
 }
 
 /** A length on the glass: to a tenth of a mm, below that to a hundredth. */
 export const sayError = (mm: number): string => mm.toFixed(mm < 0.095 ? 2 : 1);
 
+/** "±0.4 mm on the glass for a layer 100 mm behind, ±1.7 mm for one 500 mm behind"; empty where the camera sees nothing. */
+function onGlass(setUp: WallSetUp, unsure: SetUpUncertainty): string {
+  const [near, far] = errorsOf(setUp, unsure)?.map(sayError) ?? [];
+  return near ? `±${near} mm on the glass for a layer ${exampleDepths[0]} mm behind, ±${far} mm for one ${exampleDepths[1]} mm behind` : '';
+}
+
+/** What a measurement is worth before it is taken: "On the glass that is ±0.4 mm for a layer 100 mm behind …". */
+export function worthWords(setUp: WallSetUp, unsure: Partial<SetUpUncertainty>): string {
+  const words = onGlass(setUp, { ...CERTAIN, ...unsure });
+  return words && `That is ${words}.`;
+}
+
 /** "±2.1° of view: ±0.4 mm on the glass for a layer 100 mm behind, ±1.7 mm for one 500 mm behind." */
 export function meansWords(setUp: WallSetUp, { words, unsure, assumed }: Source): string {
-  const errors = errorsOf(setUp, unsure);
-  if (!errors) return 'The camera does not see the middle of the viewing zone: turn it there, or move the zone.';
-  const [near, far] = errors.map(sayError);
-  const means = `±${near} mm on the glass for a layer ${exampleDepths[0]} mm behind, ±${far} mm for one ${exampleDepths[1]} mm behind`;
+  const means = onGlass(setUp, unsure);
+  if (!means) return 'The camera does not see the middle of the viewing zone: turn it there, or move the zone.';
   return assumed ? `Not measured. Taken as ${words}: ${means}.` : `${words}: ${means}.`;
 }

@@ -10,6 +10,7 @@ import { greyOf } from '../../calibration/grey-picture';
 import { enoughViews, fewestViews, isNewView } from '../../calibration/view-choice';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
+import { worthWords } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { LiveCamera } from './live-camera';
 
@@ -53,7 +54,7 @@ export class BoardMeasure {
   protected readonly result = computed(() => {
     const [field, lens] = [this.field(), this.lens()];
     if (!field || !lens) return '';
-    return `${plainMm(degrees(field.value), 2)}° ± ${plainMm(degrees(field.uncertainty), 2)}° across, corners met to ${plainMm(lens.rmsPx, 2)} px.`;
+    return `${plainMm(degrees(field.value), 2)}° ± ${plainMm(degrees(field.uncertainty), 2)}° across, corners met to ${plainMm(lens.rmsPx, 2)} px. ${worthWords(this.keeper.setUp()!, { hfovRad: field.uncertainty })}`;
   });
   protected readonly doubtful = computed(() => (this.lens()?.rmsPx ?? 0) > 1);
 

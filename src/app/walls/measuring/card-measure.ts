@@ -7,6 +7,7 @@ import { measured } from '@oriel/shared/viewer/measuring/uncertainty';
 import { FigureField } from '../../figures/figure-field';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
+import { worthWords } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { EdgeMarks, type EdgePlaces } from './edge-marks';
 import { LiveCamera } from './live-camera';
@@ -72,7 +73,7 @@ export class CardMeasure {
     const lens = this.lens();
     if (!lens) return '';
     const { hfovRad, behindFrontMm } = lens;
-    return `${plainMm(degrees(hfovRad.value))}° ± ${plainMm(degrees(hfovRad.uncertainty))}° across. The lens lies ${plainMm(behindFrontMm.value, 0)} ± ${plainMm(behindFrontMm.uncertainty, 0)} mm behind the front of the camera.`;
+    return `${plainMm(degrees(hfovRad.value))}° ± ${plainMm(degrees(hfovRad.uncertainty))}° across. The lens lies ${plainMm(behindFrontMm.value, 0)} ± ${plainMm(behindFrontMm.uncertainty, 0)} mm behind the front of the camera. ${worthWords(this.keeper.setUp()!, { hfovRad: hfovRad.uncertainty })}`;
   });
 
   constructor() {

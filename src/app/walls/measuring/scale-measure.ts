@@ -5,7 +5,7 @@ import { factorFromSpot } from '@oriel/shared/viewer/measuring/scale-from-spot';
 import { type Measured, measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
 import { plainMm } from '../../figures/words';
 import { FaceTracking } from '../../tracking/face-tracking';
-import { unmeasured } from '../means/sources';
+import { unmeasured, worthWords } from '../means/sources';
 import { limitsOf } from '../set-up/limits';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
@@ -60,7 +60,7 @@ export class ScaleMeasure {
     if (!k || !seen) return '';
     const percent = 100 * (k.value / seen.factor - 1);
     const off = Number(plainMm(percent)) === 0 ? 'at the right distance' : `${plainMm(Math.abs(percent))} % too ${percent > 0 ? 'far' : 'near'}`;
-    return `You were seen ${off}. Taken, distances are right to ±${plainMm((100 * k.uncertainty) / k.value)} %.`;
+    return `You were seen ${off}. Taken, distances are right to ±${plainMm((100 * k.uncertainty) / k.value)} %. ${worthWords(this.keeper.setUp()!, { viewerScale: k.uncertainty / k.value })}`;
   });
 
   protected async measure(): Promise<void> {

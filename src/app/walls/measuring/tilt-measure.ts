@@ -7,12 +7,15 @@ import { measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertain
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { FaceTracking } from '../../tracking/face-tracking';
-import { unmeasured } from '../means/sources';
+import { unmeasured, worthWords } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
 import { StandingView } from './standing-view';
+
+/** One figure stands for both: the less sure one. */
+const sureTo = ({ pitchRad, yawRad }: Tilt) => Math.max(pitchRad.uncertainty, yawRad.uncertainty);
 
 /** The camera's pitch and yaw from someone standing at the marked spot. Only with the wall's own camera on this computer. */
 @Component({
@@ -50,7 +53,7 @@ export class TiltMeasure {
     if (!tilt) return '';
     const said = (rad: number, positive: string, negative: string) => `${plainMm(Math.abs(degrees(rad)))}° ${rad >= 0 ? positive : negative}`;
     const { pitchRad, yawRad } = tilt;
-    return `Turned ${said(pitchRad.value, 'up', 'down')} (±${plainMm(degrees(pitchRad.uncertainty), 2)}°) and ${said(yawRad.value, 'to the right', 'to the left')} (±${plainMm(degrees(yawRad.uncertainty), 2)}°).`;
+    return `Turned ${said(pitchRad.value, 'up', 'down')} (±${plainMm(degrees(pitchRad.uncertainty), 2)}°) and ${said(yawRad.value, 'to the right', 'to the left')} (±${plainMm(degrees(yawRad.uncertainty), 2)}°). ${worthWords(this.keeper.setUp()!, { tiltRad: sureTo(tilt) })}`;
   });
 
   protected async measure(): Promise<void> {
@@ -67,7 +70,7 @@ export class TiltMeasure {
     this.keeper.camera({
       pitchRad: tilt.pitchRad.value,
       yawRad: tilt.yawRad.value,
-      uncertainty: { ...uncertainty, pitchRad: Math.max(tilt.pitchRad.uncertainty, tilt.yawRad.uncertainty) },
+      uncertainty: { ...uncertainty, pitchRad: sureTo(tilt) },
     });
     this.readings.set(null);
   }

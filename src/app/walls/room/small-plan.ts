@@ -28,7 +28,7 @@ const letterPx = 11.5;
     .zone { fill: var(--zone); }
     .cone { stroke: var(--brass-line); stroke-dasharray: 5 4; }
     .reach { stroke: var(--line); }
-    text { font-family: var(--sans); fill: var(--pencil); }
+    text { font-family: var(--sans); fill: var(--pencil); paint-order: stroke; stroke: var(--sheet); stroke-width: 4px; stroke-linejoin: round; vector-effect: non-scaling-stroke; }
     .glass { stroke: var(--ink); stroke-width: 3.4px; }
     .lens { fill: var(--ink); }
   `,
