@@ -21,7 +21,7 @@ import { BOARD, BOARD_HEIGHT_MM, BOARD_WIDTH_MM, blackOfBoard } from '@oriel/sha
         <rect [attr.x]="one.x" [attr.y]="one.y" [attr.width]="one.width" [attr.height]="one.height" shape-rendering="crispEdges" />
       }
       <path class="rule" [attr.d]="rule" />
-      <text x="204" [attr.y]="height + 9.5">200 mm; squares of {{ squareMm }} mm</text>
+      <text x="204" [attr.y]="height + 9.5">200 mm; squares {{ squareMm }} mm</text>
     </svg>
   `,
   styleUrl: './board-page.scss',
