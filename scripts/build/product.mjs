@@ -2,6 +2,7 @@ import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { mustRun } from '../command.mjs';
 import { inProject, root } from '../project.mjs';
 import { bundleServer } from './bundle-server.mjs';
+import { compressFiles } from './compress-files.mjs';
 import { sourcesHash } from './sources-hash.mjs';
 import { listWallFiles } from './wall-files.mjs';
 
@@ -32,5 +33,6 @@ export async function buildProduct(signal) {
     bundleServer(),
   ]);
   listWallFiles(inProject('dist', 'web'));
+  await compressFiles(inProject('dist', 'web'));
   writeFileSync(stamp, hash);
 }

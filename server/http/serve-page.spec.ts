@@ -1,6 +1,7 @@
 import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { gzipSync } from 'node:zlib';
 import express from 'express';
 import supertest from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -39,6 +40,21 @@ describe('the page and its headers', () => {
   it('keeps hashed files for good and others for no longer than they last', async () => {
     expect((await get('/main-ABCD1234.js')).get('Cache-Control')).toMatch(/immutable/);
     expect((await get('/model.json')).get('Cache-Control')).toBe('no-cache');
+  });
+
+  it('sends what the build compressed to whoever takes it, under the headers of the file itself', async () => {
+    const script = 'export const words = 1;';
+    await writeFile(join(app.parts.config.webDir, 'chunk-EFGH5678.js'), script);
+    await writeFile(join(app.parts.config.webDir, 'chunk-EFGH5678.js.gz'), gzipSync(script));
+    const ask = (encodings: string) => get('/chunk-EFGH5678.js', '*/*').set('Accept-Encoding', encodings);
+    for (const [encodings, sent] of [['gzip', 'gzip'], ['identity', undefined], ['br', undefined]] as const) {
+      const answer = await ask(encodings);
+      expect(answer.get('Content-Encoding'), encodings).toBe(sent);
+      expect(answer.get('Content-Type')).toMatch(/^(text|application)\/javascript/);
+      expect(answer.get('Cache-Control')).toMatch(/immutable/);
+      expect(answer.get('Vary')).toContain('Accept-Encoding');
+      expect(answer.text).toBe(script);
+    }
   });
 
   it('lets the one worker that runs OpenCV.js make functions from text, fetch nothing, and nobody else do so', async () => {

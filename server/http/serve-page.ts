@@ -1,6 +1,6 @@
 import type { ServerResponse } from 'node:http';
 import { extname, join } from 'node:path';
-import express, { Router } from 'express';
+import express, { Router, type RequestHandler } from 'express';
 import { notFound } from './failure';
 
 const immutable = /-[A-Z0-9]{8}\.(js|css)$/;
@@ -15,12 +15,8 @@ const boardWorkerPolicy = "default-src 'none'; script-src 'self' 'unsafe-eval'";
  */
 export function servePage(webDir: string): Router {
   const router = Router();
-  router.use(
-    express.static(webDir, {
-      index: false,
-      setHeaders,
-    }),
-  );
+  const files = express.static(webDir, { index: false, setHeaders });
+  router.use(compressed(files), files);
   router.get('/{*path}', (request, response, next) => {
     if (extname(request.path) || !request.accepts('html')) return next(notFound());
     response.setHeader('Cache-Control', 'no-cache');
@@ -29,7 +25,27 @@ export function servePage(webDir: string): Router {
   return router;
 }
 
-function setHeaders(response: ServerResponse, path: string): void {
+/** What the build compressed (scripts/build/compress-files.mjs) is sent so to whoever takes it; what it did not, as it is. */
+function compressed(files: RequestHandler): RequestHandler {
+  return (request, response, next) => {
+    const ending = extname(request.path);
+    const encoding = ending ? request.acceptsEncodings('br', 'gzip') : false;
+    if (ending) response.vary('Accept-Encoding');
+    if (!encoding) return next();
+    const asked = request.url;
+    request.url = asked.replace(request.path, `${request.path}.${encoding === 'br' ? 'br' : 'gz'}`);
+    response.type(ending).setHeader('Content-Encoding', encoding);
+    files(request, response, (error?: unknown) => {
+      request.url = asked;
+      response.removeHeader('Content-Encoding');
+      response.removeHeader('Content-Type');
+      next(error);
+    });
+  };
+}
+
+function setHeaders(response: ServerResponse, sent: string): void {
+  const path = sent.replace(/\.(br|gz)$/, '');
   response.setHeader('Cache-Control', immutable.test(path) ? 'public, max-age=31536000, immutable' : 'no-cache');
   if (path.endsWith(boardWorker)) response.setHeader('Content-Security-Policy', boardWorkerPolicy);
 }
