@@ -60,7 +60,10 @@ export class ScaleMeasure {
     if (!k || !seen) return '';
     const percent = 100 * (k.value / seen.factor - 1);
     const off = Number(plainMm(percent)) === 0 ? 'at the right distance' : `${plainMm(Math.abs(percent))} % too ${percent > 0 ? 'far' : 'near'}`;
-    return `You were seen ${off}. Taken, distances are right to ±${plainMm((100 * k.uncertainty) / k.value)} %. ${worthWords(this.keeper.setUp()!, { viewerScale: k.uncertainty / k.value })}`;
+    const seenWords = `You were seen ${off}.`;
+    if (!this.possible()) return seenWords;
+    const share = k.uncertainty / k.value;
+    return `${seenWords} Taken, distances are right to ±${plainMm(100 * share)} %. ${worthWords(this.keeper.setUp()!, { viewerScale: share })}`;
   });
 
   protected async measure(): Promise<void> {
