@@ -61,6 +61,7 @@ test('a screen that starts without a network shows its picture, and hears of cha
 });
 
 test('reports reach the desk, those of the time without a network too', async ({ page: screen, context, signedInPage, expectErrors }) => {
+  test.setTimeout(90_000);
   await screen.addInitScript(hurried);
   expectErrors(/ERR_INTERNET_DISCONNECTED/, /Failed to load resource/);
   const tuner = await signedInPage('tuner');
