@@ -7,7 +7,7 @@ import { tilesOf } from './tiles';
 /** A find may be this unsure, because every find is confirmed by a closer look. */
 const FIND_PROBABILITY = 0.3;
 /** What the closer look must be sure of. */
-const CONFIRM_PROBABILITY = 0.5;
+export const CONFIRM_PROBABILITY = 0.5;
 /** A closer look shows this many times the face's box: the short-range detector was trained on faces of about that share. */
 const ZOOM = 2.2;
 /** The size has settled when one closer look agrees with the one before within this ratio. */

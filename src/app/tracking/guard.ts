@@ -19,7 +19,7 @@ export interface Eyes {
 
 const distanceOf = ({ rightEye, leftEye }: Eyes): number => Math.hypot(leftEye.x - rightEye.x, leftEye.y - rightEye.y);
 
-const shifted = ({ rightEye, leftEye }: Eyes, dx: number, dy: number): Eyes => ({
+export const shifted = ({ rightEye, leftEye }: Eyes, dx: number, dy: number): Eyes => ({
   rightEye: { x: rightEye.x + dx, y: rightEye.y + dy },
   leftEye: { x: leftEye.x + dx, y: leftEye.y + dy },
 });
