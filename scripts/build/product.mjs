@@ -6,7 +6,8 @@ import { compressFiles } from './compress-files.mjs';
 import { sourcesHash } from './sources-hash.mjs';
 import { listWallFiles } from './wall-files.mjs';
 
-const stamp = inProject('dist', 'built-from');
+/** Within the page's folder, which a bare `ng build` empties: what that leaves is not the product, and is built anew. */
+const stamp = inProject('dist', 'web', '.built-from');
 const results = ['dist/web/index.html', 'dist/server/main.js'];
 
 /** Whether dist/ holds what today's sources give. */

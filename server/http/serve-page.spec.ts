@@ -1,7 +1,7 @@
 import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { gzipSync } from 'node:zlib';
+import { brotliCompressSync, gzipSync } from 'node:zlib';
 import express from 'express';
 import supertest from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -55,6 +55,18 @@ describe('the page and its headers', () => {
       expect(answer.get('Vary')).toContain('Accept-Encoding');
       expect(answer.text).toBe(script);
     }
+  });
+
+  it('sends a browser, which names gzip first, the smaller brotli', async () => {
+    const script = 'export const words = 2;';
+    const { webDir } = app.parts.config;
+    await writeFile(join(webDir, 'chunk-IJKL9012.js'), script);
+    await writeFile(join(webDir, 'chunk-IJKL9012.js.gz'), gzipSync(script));
+    await writeFile(join(webDir, 'chunk-IJKL9012.js.br'), brotliCompressSync(script));
+    const sent = async (encodings: string) =>
+      (await get('/chunk-IJKL9012.js', '*/*').set('Accept-Encoding', encodings).buffer(false)).get('Content-Encoding');
+    expect(await sent('gzip, deflate, br, zstd')).toBe('br');
+    expect(await sent('gzip, br;q=0')).toBe('gzip');
   });
 
   it('lets the one worker that runs OpenCV.js make functions from text, fetch nothing, and nobody else do so', async () => {

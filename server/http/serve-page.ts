@@ -29,11 +29,13 @@ export function servePage(webDir: string): Router {
 function compressed(files: RequestHandler): RequestHandler {
   return (request, response, next) => {
     const ending = extname(request.path);
-    const encoding = ending ? request.acceptsEncodings('br', 'gzip') : false;
-    if (ending) response.vary('Accept-Encoding');
+    if (!ending) return next();
+    response.vary('Accept-Encoding');
+    // Asked one by one: browsers name gzip first, and asked for the best of two would be sent what is larger.
+    const encoding = request.acceptsEncodings('br') || request.acceptsEncodings('gzip');
     if (!encoding) return next();
     const asked = request.url;
-    request.url = asked.replace(request.path, `${request.path}.${encoding === 'br' ? 'br' : 'gz'}`);
+    request.url = asked.replace(request.path, () => `${request.path}.${encoding === 'br' ? 'br' : 'gz'}`);
     response.type(ending).setHeader('Content-Encoding', encoding);
     files(request, response, (error?: unknown) => {
       request.url = asked;

@@ -10,12 +10,14 @@ import type { Storage } from '../storage/storage';
 const job = defineJob({ name: 'photo-dates', data: z.object({}), retries: 3, expiresAfterS: 3600, atOnce: 1 });
 const milestone = 'photo dates by the clock of the camera';
 
-/** Reads from every original again when it was taken. Photos whose file does not say keep the date they have. */
+/** Reads from every original again when it was taken. Photos whose file does not say, or cannot be read, keep the date they have. */
 async function readDatesAnew(db: Database, storage: Storage): Promise<void> {
   const photos = await db.selectFrom('photo').select(['id', 'sha256', 'taken_at']).execute();
   for (const { id, sha256, taken_at } of photos) {
-    // Purged meanwhile, or unreadable: the date stays.
-    const takenAt = await storage.withFile(originalKey(sha256), takenDateOfFile).catch(() => null);
+    const key = originalKey(sha256);
+    // Purged meanwhile: nothing to mend. Where the storage fails, so does the job, and is tried again.
+    if (!(await storage.exists(key))) continue;
+    const takenAt = await storage.withFile(key, (path) => takenDateOfFile(path).catch(() => null));
     if (takenAt && takenAt.getTime() !== taken_at.getTime())
       await db.updateTable('photo').set({ taken_at: takenAt }).where('id', '=', id).execute();
   }
