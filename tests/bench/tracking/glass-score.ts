@@ -9,7 +9,7 @@ import type { TrueFace, TruthFrame } from './truth';
  * drawn for the eye it gives.
  */
 export interface GlassScore {
-  /** Standard deviation of the drawn point where the truth stands still. */
+  /** Standard deviation of the drawn point where the truth has stood still for half a second: after a cut of the film the picture eases. */
   readonly glassRestSdMm: number | null;
   /** Drawn two frames after capture, how far from where it belongs for the eye that is truly there by then. */
   readonly glassErrorMmP50: number;
@@ -24,6 +24,9 @@ const PLACED_MM = 100;
 const FRAMES_TO_DRAW = 2;
 /** An eye nearer than this is a wrong find that no follower is given. */
 const NEAREST_MM = 100;
+/** What is drawn has come to rest by then, and what is left of a rest is judged where it is so many frames. */
+const EASED_S = 0.5;
+const FEWEST_AT_REST = 10;
 
 /** S = P z/(z + d) + E d/(z + d): where the point is drawn for this eye. */
 const drawn = ([x, y, z]: Eye): readonly [number, number] => {
@@ -57,7 +60,9 @@ export function scoreOnGlass(
     errors.push(Math.hypot(point[0] - x, point[1] - y));
   });
   if (errors.length === 0) return {};
-  const still = stillStretches(hits).map((stretch) => stretch.map((hit) => draws.get(hit)!));
+  const still = stillStretches(hits)
+    .map((stretch) => stretch.slice(Math.round(EASED_S * fps)).map((hit) => draws.get(hit)!))
+    .filter(({ length }) => length >= FEWEST_AT_REST);
   const along = (axis: 0 | 1): number => deviationWithin(still.map((stretch) => stretch.map((point) => point[axis])));
   return {
     glassRestSdMm: still.length > 0 ? rounded(Math.max(along(0), along(1))) : null,
