@@ -48,103 +48,140 @@ const CLOCK_KNOWN_MS = 20_000;
 
 /** Every instrument, from the last half minute. */
 export function readingsOf(measures: Measures, nowMs: number): Reading[] {
-  const since = nowMs - SHOWN_MS;
-  const frame = measures.frameInterval.spread(since);
-  const tracking = measures.trackingInterval.spread(since);
-  const total = measures.total.spread(since);
-  const latency = measures.latency.spread(since);
-  const jitter = measures.drawnJitter.spread(since);
-  const losses = measures.losses.count(since);
-  const looks = measures.found.count(since);
-  const trackedPerS = 1000 / measures.trackingInterval.mean(since);
-  const line = (label: string, ink: ChartLine['ink'], series: Measures['total']): ChartLine => ({
-    label,
-    ink,
-    points: series.points(since, nowMs),
-  });
+  const recent = { measures, sinceMs: nowMs - SHOWN_MS, nowMs };
   return [
-    {
-      name: 'Tracking',
-      // By the mean: looks that come in one after another after a pause do not make it quick.
-      ...inFigures(trackedPerS, 'a second', 0),
-      spread: spreadWords(tracking, 'ms between looks'),
-      standing: standingOf({ median: 1000 / trackedPerS, p95: tracking.p95 }, LIMITS.betweenLooksMs),
-      good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
-      lines: [line('Tracking interval', 'ink', measures.trackingInterval), goodUpTo(LIMITS.betweenLooksMs.good)],
-      yLabel: 'between looks, ms',
-      ...scaleFor(tracking, 100),
-    },
-    {
-      name: 'Time for one look',
-      ...inFigures(total.median, 'ms', 1),
-      spread: `${spreadWords(total, 'ms')}${total.median >= 0 ? `; crop ${ms(measures.crop.spread(since).median)}, detect ${ms(measures.detect.spread(since).median)}, landmarks ${ms(measures.landmarks.spread(since).median)}` : ''}`,
-      standing: standingOf(total, LIMITS.lookMs),
-      good: 'Practice: under 33 ms a camera of 30 a second is looked at whole; beyond, frames are skipped.',
-      lines: [
-        line('Total', 'ink', measures.total),
-        line('Landmarks', 'near', measures.landmarks),
-        line('Detect', 'far', measures.detect),
-        line('Crop', 'middle', measures.crop),
-        goodUpTo(LIMITS.lookMs.good),
-      ],
-      yLabel: 'time, ms',
-      ...scaleFor(total, 40),
-    },
-    {
-      name: 'Capture to drawing',
-      ...inFigures(latency.median, 'ms', 0),
-      spread: spreadWords(latency, 'ms') || latencyUnknown(measures, nowMs),
-      standing: standingOf(latency, LIMITS.latencyMs),
-      good: 'Practice: under 50 ms prediction makes good well. Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk.',
-      lines: [line('Capture to drawing', 'ink', measures.latency), goodUpTo(LIMITS.latencyMs.good)],
-      yLabel: 'delay, ms',
-      ...scaleFor(latency, 80),
-    },
-    {
-      name: 'Jitter at rest',
-      ...inFigures(jitter.median, 'mm', 2),
-      spread: spreadWords(jitter, 'mm', 2)
-        ? `${spreadWords(jitter, 'mm', 2)}; before smoothing ${measures.seenJitter.spread(since).median.toFixed(2)}`
-        : 'Stand still for two seconds.',
-      standing: standingOf(jitter, LIMITS.jitterMm),
-      good: 'Under 1 mm: that moves a layer 100 mm behind the glass by 0.14 mm, seen from 600 mm, just under what the eye can tell.',
-      lines: [
-        line('As drawn', 'ink', measures.drawnJitter),
-        { ...line('As the camera saw it', 'pencil', measures.seenJitter), as: 'dashed' },
-        goodUpTo(LIMITS.jitterMm.good),
-      ],
-      yLabel: 'jitter, mm',
-      ...scaleFor(jitter, 2),
-    },
-    {
-      name: 'Losses',
-      figure: looks ? String(losses) : '–',
-      unit: 'in half a minute',
-      spread: looks
-        ? `${(100 * measures.found.mean(since)).toFixed(0)} % of ${looks} looks found somebody`
-        : 'Nobody has been looked for yet.',
-      standing: looks ? (losses === 0 ? GOOD : losses < 3 ? FAIR : POOR) : null,
-      good: 'Practice: someone who stays in view should never be lost. Better light helps first.',
-      lines: [line('Somebody found', 'ink', measures.found)],
-      yLabel: '1 found, 0 not',
-      yLeast: 1,
-    },
-    {
-      name: 'Frame interval of this page',
-      ...inFigures(frame.median, 'ms', 1),
-      spread: spreadWords(frame, 'ms'),
-      standing: standingOf(frame, LIMITS.frameMs),
-      good: '17 ms is 60 a second. Practice: from 33 ms on motion is seen to stutter. The charts themselves cost a little.',
-      lines: [line('Frame interval', 'ink', measures.frameInterval), goodUpTo(LIMITS.frameMs.poor)],
-      yLabel: 'between frames, ms',
-      ...scaleFor(frame, 50),
-    },
-    ladderReading(measures, since, line('Step of the ladder', 'ink', measures.ladderStep)),
+    trackingReading(recent),
+    lookReading(recent),
+    latencyReading(recent),
+    jitterReading(recent),
+    lossesReading(recent),
+    frameReading(recent),
+    ladderReading(recent),
   ];
 }
 
+interface Recent {
+  readonly measures: Measures;
+  readonly sinceMs: number;
+  readonly nowMs: number;
+}
+
+const line = ({ sinceMs, nowMs }: Recent, label: string, ink: ChartLine['ink'], series: Measures['total']): ChartLine => ({
+  label,
+  ink,
+  points: series.points(sinceMs, nowMs),
+});
+
+function trackingReading(recent: Recent): Reading {
+  const { trackingInterval } = recent.measures;
+  const between = trackingInterval.spread(recent.sinceMs);
+  // By the mean: looks that come in one after another after a pause do not make it quick.
+  const meanMs = trackingInterval.mean(recent.sinceMs);
+  return {
+    name: 'Tracking',
+    ...inFigures(1000 / meanMs, 'a second', 0),
+    spread: spreadWords(between, 'ms between looks'),
+    standing: standingOf({ median: meanMs, p95: between.p95 }, LIMITS.betweenLooksMs),
+    good: 'Practice: about 4 a second is too slow to be believed, 15 is what a small computer should keep, 40 is a desktop’s.',
+    lines: [line(recent, 'Tracking interval', 'ink', trackingInterval), goodUpTo(LIMITS.betweenLooksMs.good)],
+    yLabel: 'between looks, ms',
+    ...scaleFor(between, 100),
+  };
+}
+
+function lookReading(recent: Recent): Reading {
+  const { total, landmarks, detect, crop } = recent.measures;
+  const look = total.spread(recent.sinceMs);
+  const median = (series: Measures['total']) => ms(series.spread(recent.sinceMs).median);
+  const parts = look.median >= 0 ? `; crop ${median(crop)}, detect ${median(detect)}, landmarks ${median(landmarks)}` : '';
+  return {
+    name: 'Time for one look',
+    ...inFigures(look.median, 'ms', 1),
+    spread: `${spreadWords(look, 'ms')}${parts}`,
+    standing: standingOf(look, LIMITS.lookMs),
+    good: 'Practice: under 33 ms a camera of 30 a second is looked at whole; beyond, frames are skipped.',
+    lines: [
+      line(recent, 'Total', 'ink', total),
+      line(recent, 'Landmarks', 'near', landmarks),
+      line(recent, 'Detect', 'far', detect),
+      line(recent, 'Crop', 'middle', crop),
+      goodUpTo(LIMITS.lookMs.good),
+    ],
+    yLabel: 'time, ms',
+    ...scaleFor(look, 40),
+  };
+}
+
+function latencyReading(recent: Recent): Reading {
+  const latency = recent.measures.latency.spread(recent.sinceMs);
+  return {
+    name: 'Capture to drawing',
+    ...inFigures(latency.median, 'ms', 0),
+    spread: spreadWords(latency, 'ms') || latencyUnknown(recent),
+    standing: standingOf(latency, LIMITS.latencyMs),
+    good: 'Practice: under 50 ms prediction makes good well. Changes of 15 ms are noticed in headsets (Mania 2004), some 20 ms on a desk.',
+    lines: [line(recent, 'Capture to drawing', 'ink', recent.measures.latency), goodUpTo(LIMITS.latencyMs.good)],
+    yLabel: 'delay, ms',
+    ...scaleFor(latency, 80),
+  };
+}
+
+function jitterReading(recent: Recent): Reading {
+  const { drawnJitter, seenJitter } = recent.measures;
+  const jitter = drawnJitter.spread(recent.sinceMs);
+  const words = spreadWords(jitter, 'mm', 2);
+  return {
+    name: 'Jitter at rest',
+    ...inFigures(jitter.median, 'mm', 2),
+    spread: words ? `${words}; before smoothing ${seenJitter.spread(recent.sinceMs).median.toFixed(2)}` : 'Stand still for two seconds.',
+    standing: standingOf(jitter, LIMITS.jitterMm),
+    good: 'Under 1 mm: that moves a layer 100 mm behind the glass by 0.14 mm, seen from 600 mm, just under what the eye can tell.',
+    lines: [
+      line(recent, 'As drawn', 'ink', drawnJitter),
+      { ...line(recent, 'As the camera saw it', 'pencil', seenJitter), as: 'dashed' },
+      goodUpTo(LIMITS.jitterMm.good),
+    ],
+    yLabel: 'jitter, mm',
+    ...scaleFor(jitter, 2),
+  };
+}
+
+function lossesReading(recent: Recent): Reading {
+  const { found } = recent.measures;
+  const losses = recent.measures.losses.count(recent.sinceMs);
+  const looks = found.count(recent.sinceMs);
+  return {
+    name: 'Losses',
+    figure: looks ? String(losses) : '–',
+    unit: 'in half a minute',
+    spread: looks
+      ? `${(100 * found.mean(recent.sinceMs)).toFixed(0)} % of ${looks} looks found somebody`
+      : 'Nobody has been looked for yet.',
+    standing: looks ? (losses === 0 ? GOOD : losses < 3 ? FAIR : POOR) : null,
+    good: 'Practice: someone who stays in view should never be lost. Better light helps first.',
+    lines: [line(recent, 'Somebody found', 'ink', found)],
+    yLabel: '1 found, 0 not',
+    yLeast: 1,
+  };
+}
+
+function frameReading(recent: Recent): Reading {
+  const frame = recent.measures.frameInterval.spread(recent.sinceMs);
+  return {
+    name: 'Frame interval of this page',
+    ...inFigures(frame.median, 'ms', 1),
+    spread: spreadWords(frame, 'ms'),
+    standing: standingOf(frame, LIMITS.frameMs),
+    good: '17 ms is 60 a second. Practice: from 33 ms on motion is seen to stutter. The charts themselves cost a little.',
+    lines: [line(recent, 'Frame interval', 'ink', recent.measures.frameInterval), goodUpTo(LIMITS.frameMs.poor)],
+    yLabel: 'between frames, ms',
+    ...scaleFor(frame, 50),
+  };
+}
+
 /** Counted from 1, the finest, which is drawn at the top. */
-function ladderReading(measures: Measures, sinceMs: number, line: ChartLine): Reading {
+function ladderReading(recent: Recent): Reading {
+  const { measures, sinceMs } = recent;
   const { ladder } = measures;
   const steps = measures.ladderStep.spread(sinceMs);
   const changes = ladder?.changes.filter(({ tMs }) => tMs >= sinceMs) ?? [];
@@ -158,7 +195,7 @@ function ladderReading(measures: Measures, sinceMs: number, line: ChartLine): Re
       : '',
     standing: Number.isFinite(steps.median) ? ladderStanding(changes.length, ladder?.step ?? 0) : null,
     good: `Step ${FIRST_STEP + 1} is where it begins; 1 to ${WITH_LANDMARKS} place all landmarks, from ${WITH_LANDMARKS + 1} on the distance of a turned head is less sure. A step kept for long is good, one that changes every few seconds is not.`,
-    lines: [{ ...line, as: 'steps' }],
+    lines: [{ ...line(recent, 'Step of the ladder', 'ink', measures.ladderStep), as: 'steps' }],
     yLabel: 'step',
     yLeast: 0,
     yRange: [LADDER_STEPS.length, 1],
@@ -199,8 +236,8 @@ function scaleFor({ p95 }: Spread, yLeast: number) {
   return { yLeast, ...(p95 >= 0 ? { yMost: Math.max(yLeast, step * Math.ceil((1.5 * p95) / step)) } : {}) };
 }
 
-const latencyUnknown = ({ firstLookMs }: Measures, nowMs: number): string =>
-  nowMs - firstLookMs > CLOCK_KNOWN_MS
+const latencyUnknown = ({ measures, nowMs }: Recent): string =>
+  nowMs - measures.firstLookMs > CLOCK_KNOWN_MS
     ? 'Not known here: this browser does not tell when a frame was captured. The mirror test measures the whole delay.'
     : 'Known a few seconds after somebody is followed.';
 
