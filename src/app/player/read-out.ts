@@ -44,6 +44,7 @@ const drawnBy: Readonly<Record<RendererName, string>> = { css: 'the processor', 
     dl { display: grid; grid-template-columns: auto auto; gap: 2px 18px; margin: 0; padding: 10px 12px; font-size: 12px; background: var(--sheet); border: 1px solid var(--line); border-radius: var(--corner); }
     dt { color: var(--pencil); }
     dd { margin: 0; text-align: right; font-variant-numeric: tabular-nums; min-width: 11ch; white-space: nowrap; }
+    @media (max-width: 600px) { dd { white-space: normal; } }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

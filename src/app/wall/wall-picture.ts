@@ -39,7 +39,7 @@ const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b)
   styles: `
     :host { position: absolute; inset: 0; overflow: hidden; color: var(--ink); }
     .picture { position: absolute; inset: 0; }
-    oriel-read-out { position: absolute; right: 24px; top: 24px; }
+    oriel-read-out { position: absolute; right: 24px; top: 24px; max-width: calc(100% - 48px); }
     p { position: absolute; inset: auto 0 4vmin; margin: 0 auto; width: fit-content; max-width: min(46em, 86%); padding: 10px 16px; font-size: clamp(14px, 2vmin, 24px); background: var(--sheet); border: 1px solid var(--line); border-radius: var(--corner); }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
