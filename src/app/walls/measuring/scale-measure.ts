@@ -2,12 +2,13 @@ import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@a
 import { MatButton } from '@angular/material/button';
 import { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { factorFromSpot } from '@oriel/shared/viewer/measuring/scale-from-spot';
-import { type Measured, measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
+import { type Measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
 import { plainMm } from '../../figures/words';
 import { FaceTracking } from '../../tracking/face-tracking';
-import { unmeasured, worthWords } from '../means/sources';
+import { worthWords } from '../means/sources';
 import { limitsOf } from '../set-up/limits';
 import { WallKeeper } from '../set-up/wall-keeper';
+import { lensOf } from './lens';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
@@ -46,9 +47,7 @@ export class ScaleMeasure {
   protected readonly factor = computed<Measured | null>(() => {
     const seen = this.seen();
     if (!seen) return null;
-    const { position, uncertainty } = this.keeper.setUp()!.camera;
-    const u = uncertainty.positionMm ?? unmeasured.positionMm;
-    const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
+    const lens = lensOf(this.keeper.setUp()!.camera);
     return factorFromSpot(seen.factor, steadyMeanOf(seen.ranges), lens, this.spot.measured());
   });
   protected readonly possible = computed(() => {

@@ -3,12 +3,13 @@ import { MatButton } from '@angular/material/button';
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { type Tilt, tiltFromSpot } from '@oriel/shared/viewer/measuring/tilt-from-spot';
-import { measured, steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
+import { steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { FaceTracking } from '../../tracking/face-tracking';
-import { unmeasured, worthWords } from '../means/sources';
+import { worthWords } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
+import { lensOf } from './lens';
 import { MarkedSpot } from './marked-spot';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
@@ -35,9 +36,7 @@ export class TiltMeasure {
   private readonly found = computed<{ tilt: Tilt | null; problem: string } | null>(() => {
     const readings = this.readings();
     if (!readings) return null;
-    const { position, uncertainty } = this.keeper.setUp()!.camera;
-    const u = uncertainty.positionMm ?? unmeasured.positionMm;
-    const lens = { x: measured(position.x, u), y: measured(position.y, u), z: measured(position.z, u) };
+    const lens = lensOf(this.keeper.setUp()!.camera);
     const axis = (of: (point: Point3) => number) => steadyMeanOf(readings.map(of));
     try {
       return { tilt: tiltFromSpot(lens, this.spot.measured(), { x: axis(({ x }) => x), y: axis(({ y }) => y), z: axis(({ z }) => z) }), problem: '' };
