@@ -1,4 +1,4 @@
-import { agreeing, sideByOthers, squarePx } from './glass-shape';
+import { agreeing, askFor, awaitedAfter, sideByOthers, squarePx, type Side } from './glass-shape';
 
 const fullHd = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080 };
 
@@ -25,5 +25,30 @@ describe('the shape of a glass', () => {
     expect(sideByOthers({ ...fullHd, heightPx: 1440 }, 'widthPx')).toBe(2562);
     expect(sideByOthers({ ...fullHd, widthMm: 600 }, 'heightMm')).toBe(337.5);
     expect(sideByOthers(fullHd, 'widthMm')).toBe(940.4);
+  });
+
+  describe('while figures are still to be typed', () => {
+    const after = (...typed: Side[]) => typed.reduce<readonly Side[]>(awaitedAfter, []);
+
+    it('asks for the other of the pair, with what it is by the rest: 600 * 9/16 = 337.5 (by hand)', () => {
+      const asked = askFor({ ...fullHd, widthMm: 600 }, after('widthMm'));
+      expect(asked?.words).toBe('Now the height. By the pixels it is 337.5 mm.');
+      expect(asked?.offer).toEqual({ words: 'Take 337.5 mm', part: { heightMm: 337.5 } });
+    });
+
+    it('offers nothing by a figure that is itself still to be typed', () => {
+      const asked = askFor({ ...fullHd, widthMm: 600, widthPx: 2560 }, after('widthMm', 'widthPx'));
+      expect(asked).toEqual({ words: 'Now the height and the number down.', offer: null });
+    });
+
+    it('offers the last one again: 2560 * 375/600 = 1600 (by hand)', () => {
+      const asked = askFor({ ...fullHd, widthMm: 600, heightMm: 375, widthPx: 2560 }, after('widthMm', 'widthPx', 'heightMm'));
+      expect(asked?.offer?.part).toEqual({ heightPx: 1600 });
+    });
+
+    it('asks nothing once all are typed, and no other figure because one is typed twice', () => {
+      expect(askFor(fullHd, after('widthPx', 'heightPx'))).toBeNull();
+      expect(after('widthMm', 'widthMm')).toEqual(['heightMm']);
+    });
   });
 });

@@ -4,7 +4,9 @@ export type Side = 'widthMm' | 'heightMm' | 'widthPx' | 'heightPx';
 type Sides = Pick<WallGlass, Side>;
 
 /** The figure that is read together with another. */
-export const partnerOf: Readonly<Record<Side, Side>> = { widthMm: 'heightMm', heightMm: 'widthMm', widthPx: 'heightPx', heightPx: 'widthPx' };
+const partnerOf: Readonly<Record<Side, Side>> = { widthMm: 'heightMm', heightMm: 'widthMm', widthPx: 'heightPx', heightPx: 'widthPx' };
+
+const names: Readonly<Record<Side, string>> = { widthMm: 'width', heightMm: 'height', widthPx: 'number across', heightPx: 'number down' };
 
 /** A rule is read to a millimetre or two; more than this is a side that was mistaken. */
 const sameShape = 0.01;
@@ -33,6 +35,32 @@ export function sideByOthers({ widthMm, heightMm, widthPx, heightPx }: Sides, si
     case 'heightPx':
       return Math.round((widthPx * heightMm) / widthMm);
   }
+}
+
+/** Which figures are still to be typed once this one was: the other of its pair, unless that is what was typed before. */
+export function awaitedAfter(before: readonly Side[], typed: Side): readonly Side[] {
+  if (before.includes(typed)) return before.filter((side) => side !== typed);
+  return before.includes(partnerOf[typed]) ? before : [...before, partnerOf[typed]];
+}
+
+/** What is asked for while figures are still to be typed. */
+export interface Asked {
+  readonly words: string;
+  /** What it is by the others; null while one of those is still to be typed too. */
+  readonly offer: Agreeing | null;
+}
+
+export function askFor(glass: Sides, awaited: readonly Side[]): Asked | null {
+  if (awaited.length === 0) return null;
+  const wanted = awaited.map((side) => `the ${names[side]}`).join(' and ');
+  if (awaited.length > 1) return { words: `Now ${wanted}.`, offer: null };
+  const [side] = awaited;
+  const isMm = side.endsWith('Mm');
+  const figure = `${sideByOthers(glass, side)} ${isMm ? 'mm' : 'px'}`;
+  return {
+    words: `Now ${wanted}. By the ${isMm ? 'pixels' : 'sides'} it is ${figure}.`,
+    offer: { words: `Take ${figure}`, part: { [side]: sideByOthers(glass, side) } },
+  };
 }
 
 /** What may be meant where they do not: the other side as the px have it, or the sides the other way round. */

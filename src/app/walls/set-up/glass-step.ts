@@ -8,14 +8,13 @@ import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-me
 import { ID1_WIDTH } from '@oriel/shared/viewer/measuring/two-distances';
 import { Means } from '../means/means';
 import { unmeasured } from '../means/sources';
-import { type Side, agreeing, partnerOf, sideByOthers, squarePx } from './glass-shape';
+import { type Side, agreeing, askFor, awaitedAfter, squarePx } from './glass-shape';
 import { limitsOf } from './limits';
 import { WallKeeper } from './wall-keeper';
 
 type Way = 'rule' | 'diagonal' | 'card';
 type Unit = 'in' | 'cm';
 
-const names: Readonly<Record<Side, string>> = { widthMm: 'width', heightMm: 'height', widthPx: 'number across', heightPx: 'number down' };
 const unitMm: Readonly<Record<Unit, number>> = { in: mmPerInch, cm: 10 };
 /** No screen is smaller: what is typed below it is a slip, 0 or centimetres (practice). */
 const leastSideMm = 10;
@@ -45,21 +44,14 @@ export class GlassStep {
   protected readonly diagonal = computed(() => diagonalOf(this.glass()) / unitMm[this.unit()]);
   protected readonly sureMm = computed(() => (this.glass().uncertainty ?? unmeasured.glassScale) * this.glass().widthMm);
   protected readonly pxMm = computed(() => this.glass().widthMm / this.window.screen.width);
-  /** The one figure of a pair that was typed so far, while the other is still as it was. */
-  private readonly onlyTyped = signal<Side | null>(null);
+  /** Figures whose other was typed, while they are still as they were. */
+  private readonly awaited = signal<readonly Side[]>([]);
   /** How well the rule was read, where somebody said so, mm. */
   private readonly ruledMm = signal<number>(usual.ruleMm);
   /** What would make sides and px agree; null where they do. */
   private readonly disagreeing = computed(() => (squarePx(this.glass()) ? null : agreeing(this.glass())));
-  /** While one figure of a pair is typed the other is not wrong yet: only asked for, with what it would be by the rest. */
-  protected readonly next = computed(() => {
-    const typed = this.onlyTyped();
-    if (!typed || !this.disagreeing()) return null;
-    const other = partnerOf[typed];
-    const figure = sideByOthers(this.glass(), other);
-    const unit = other.endsWith('Mm') ? 'mm' : 'px';
-    return { words: `Now the ${names[other]}. By the ${unit === 'mm' ? 'pixels' : 'sides'} it is ${figure} ${unit}.`, take: `Take ${figure} ${unit}`, part: { [other]: figure } };
-  });
+  /** While one figure of a pair is typed the other is not wrong yet: only asked for. */
+  protected readonly next = computed(() => (this.disagreeing() ? askFor(this.glass(), this.awaited()) : null));
   protected readonly odd = computed(() => (this.next() ? null : this.disagreeing()));
 
   protected byRule(side: 'widthMm' | 'heightMm', mm: number): void {
@@ -69,18 +61,20 @@ export class GlassStep {
 
   protected inPx(side: 'widthPx' | 'heightPx', px: number): void {
     this.typed(side);
-    this.keeper.glass({ [side]: Math.round(px) });
+    const part = { [side]: Math.round(px) };
+    if (squarePx({ ...this.glass(), ...part })) this.awaited.set([]);
+    this.keeper.glass(part);
   }
 
   private typed(side: Side): void {
-    this.onlyTyped.update((before) => (before === partnerOf[side] ? null : side));
+    this.awaited.update((before) => awaitedAfter(before, side));
   }
 
   /** One side alone is no measure of the glass: it counts as measured once both agree with the px. */
   protected agree(part: Partial<WallGlass>): void {
     const glass = { ...this.glass(), ...part };
     const square = squarePx(glass);
-    if (square) this.onlyTyped.set(null);
+    if (square) this.awaited.set([]);
     this.keeper.glass({ ...part, uncertainty: square ? this.ruledMm() / glass.widthMm : null });
   }
 
