@@ -50,6 +50,13 @@ export const rightEyeOf = (landmarks: Float64Array): PixelPoint => meanOf(landma
 /** The subject's left eye, the middle of its outline; frame pixels. */
 export const leftEyeOf = (landmarks: Float64Array): PixelPoint => meanOf(landmarks, LEFT_EYE_OUTLINE);
 
+/** The middle of the inner lips, above and below (numbering of the MediaPipe face mesh). */
+const [UPPER_LIP, LOWER_LIP] = [13, 14];
+
+/** How far apart the inner lips are, in space, frame pixels. */
+export const mouthOpening = (landmarks: Float64Array): number =>
+  Math.hypot(...[0, 1, 2].map((axis) => landmarks[3 * LOWER_LIP + axis] - landmarks[3 * UPPER_LIP + axis]));
+
 /**
  * The region to look at for these landmarks: their box taken along the eye line, so that it does not swell when the head rolls, made
  * square and enlarged.

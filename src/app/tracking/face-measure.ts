@@ -1,10 +1,10 @@
 import { correctionForBlur, createBlurCorrection } from '@oriel/shared/viewer/blur-correction';
 import { focalPx, pointToGlass, type Camera } from '@oriel/shared/viewer/camera';
 import { distanceFromSize } from '@oriel/shared/viewer/distance-from-size';
-import { trendOfDistance, trendOfTurn } from '@oriel/shared/viewer/distance-trend';
+import { trendOfDistance, trendOfMouth, trendOfTurn } from '@oriel/shared/viewer/distance-trend';
 import { createLandmarkEye, eyeFromLandmarks } from '@oriel/shared/viewer/eye-from-landmarks';
 import { faceWidening } from '@oriel/shared/viewer/face-widening';
-import { leftEyeOf, rightEyeOf } from './face-landmarks';
+import { leftEyeOf, mouthOpening, rightEyeOf } from './face-landmarks';
 import type { Eyes } from './guard';
 import { eyeLineAngle } from './region';
 import type { FaceSample, TrackerSettings } from './tracking-messages';
@@ -43,6 +43,7 @@ export class FaceMeasure {
     const eyePx = { x: (rightEyePx.x + leftEyePx.x) / 2, y: (rightEyePx.y + leftEyePx.y) / 2 };
     inCamera.z *= trendOfDistance(inCamera.z, settings.viewer.eyeDistanceMm);
     inCamera.z *= trendOfTurn(inCamera.z, settings.viewer.eyeDistanceMm, this.result.apparentYawRad);
+    inCamera.z *= trendOfMouth(mouthOpening(landmarks) / fit.scalePx, fit.rotation[8]);
     inCamera.z *= correctionForBlur(this.blur, {
       tMs: timestampMs,
       xPx: eyePx.x,
