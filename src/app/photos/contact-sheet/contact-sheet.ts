@@ -66,8 +66,8 @@ export class ContactSheet {
 
   constructor() {
     const destroyed = inject(DestroyRef);
+    const element = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
     afterNextRender(() => {
-      const element = this.scroller().nativeElement;
       const observer = new ResizeObserver(() => {
         this.widthPx.set(element.clientWidth);
         this.viewPx.set(element.clientHeight);
