@@ -247,6 +247,8 @@ test('a viewer’s scale is kept by name and used again', async ({ signedInPage 
   await expect(field(page, 'Between the eyes')).toHaveValue('61.5');
   await kept.getByRole('button', { name: `Forget the scale of ${name}` }).click();
   await expect(kept).toHaveCount(0);
+  // What is on its way would find no wall.
+  await expect(saved(page)).toContainText(/^Saved/);
   await removeWall(page, id);
 });
 
