@@ -1,4 +1,4 @@
-import type { Page } from '@playwright/test';
+import type { Locator, Page } from '@playwright/test';
 import { expect, test } from './fixtures';
 import { expectFieldMeasured, hang, step, type } from './walls/set-up';
 
@@ -31,6 +31,7 @@ test('the field of view is measured with a card held at two distances', async ({
       await hold.click();
       await expect(hold).toBeDisabled();
       await expect(hold).toBeEnabled({ timeout: 20_000 });
+      for (const picture of await part.getByRole('img').all()) expect(await isDrawn(picture), 'the held picture is seen before a line is moved').toBe(true);
       const edges = await edgesIn(page, shot);
       if (!edges || !isAt(edges, away)) continue;
       await mark(page, shot, 'Left', edges.left);
@@ -42,6 +43,13 @@ test('the field of view is measured with a card held at two distances', async ({
   await page.getByRole('button', { name: 'Take it' }).click();
   await expectFieldMeasured(page, fieldDegrees);
 });
+
+/** Whether every px of a canvas is painted. */
+const isDrawn = (canvas: Locator): Promise<boolean> =>
+  canvas.evaluate((element: HTMLCanvasElement) => {
+    const { data } = element.getContext('2d')!.getImageData(0, 0, element.width, element.height);
+    return data.every((value, i) => i % 4 !== 3 || value === 255);
+  });
 
 interface Edges {
   readonly left: number;

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, input, viewChild } from '@angular/core';
 import { type FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatError, MatFormField, MatHint, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
@@ -11,7 +11,7 @@ import { ownId } from './own-id';
   template: `
     <mat-form-field>
       <mat-label>{{ label() }}</mat-label>
-      <input matInput [formControl]="control()" [type]="type()" [autocomplete]="autocomplete()" [attr.list]="suggestions().length > 0 ? listId : null" />
+      <input #field matInput [formControl]="control()" [type]="type()" [autocomplete]="autocomplete()" [attr.list]="suggestions().length > 0 ? listId : null" />
       @if (suggestions().length > 0) {
         <datalist [id]="listId">
           @for (text of suggestions(); track text) {
@@ -37,4 +37,9 @@ export class TextField {
   /** What may well be meant; anything else may be typed too. */
   readonly suggestions = input<readonly string[]>([]);
   protected readonly listId = ownId('suggestions');
+  private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
+
+  focus(): void {
+    this.field().nativeElement.focus();
+  }
 }

@@ -3,6 +3,7 @@ import { MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
 import type { Glass, Point3, ViewingZone } from '@oriel/shared/projection/types';
 import { Icon } from '../../core/icon/icon';
+import { OpenedHeading } from '../../core/opened-heading';
 import { Term } from '../../core/term/term';
 import { eyeLimits } from '../commands/limits';
 import { creditScene, renameScene, scaleToGlass, setGlass, setHomeEye, setZone } from '../commands/setting-commands';
@@ -19,7 +20,7 @@ const zoneSides = ['leftMm', 'rightMm', 'lowestMm', 'highestMm', 'nearestMm', 'f
 /** The figures of the room a scene is drawn for: its name, glass, home eye and viewing zone. */
 @Component({
   selector: 'oriel-room-form',
-  imports: [FigureField, MatButton, Icon, Term],
+  imports: [FigureField, MatButton, Icon, OpenedHeading, Term],
   templateUrl: './room-form.html',
   styleUrl: './room-form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -6,7 +6,7 @@ import { type Source, meansWords, sourcesOf } from './sources';
 @Component({
   selector: 'oriel-means',
   template: `<p class="means figures" [class.assumed]="source()?.assumed" role="status">{{ words() }}</p>`,
-  styles: '.means { margin: 4px 0 0; font-size: 12.5px; line-height: 1.4; color: var(--brass-text); max-width: 52ch; } .assumed { color: var(--pencil); }',
+  styles: '.means { margin: 4px 0 0; font-size: 12.5px; line-height: 1.4; color: var(--pencil); max-width: 52ch; } .assumed { color: var(--brass-text); }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Means {

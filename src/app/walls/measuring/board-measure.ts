@@ -8,6 +8,7 @@ import { BoardFinder } from '../../calibration/board-finder';
 import type { BoardView, MeasuredLens } from '../../calibration/board-messages';
 import { greyOf } from '../../calibration/grey-picture';
 import { enoughViews, fewestViews, isNewView } from '../../calibration/view-choice';
+import { OpenedHeading } from '../../core/opened-heading';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { worthWords } from '../means/sources';
@@ -19,7 +20,7 @@ const pauseMs = 150;
 /** The field of view from several views of the printed board, gathered while it is moved before the camera. */
 @Component({
   selector: 'oriel-board-measure',
-  imports: [MatButton, RouterLink],
+  imports: [MatButton, RouterLink, OpenedHeading],
   providers: [LiveCamera, BoardFinder],
   templateUrl: './board-measure.html',
   styleUrl: './measure.scss',

@@ -4,6 +4,7 @@ import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
 import { A4_LENGTH, ID1_WIDTH, type Lens, lensFromTwoDistances } from '@oriel/shared/viewer/measuring/two-distances';
 import { measured } from '@oriel/shared/viewer/measuring/uncertainty';
+import { OpenedHeading } from '../../core/opened-heading';
 import { FigureField } from '../../figures/figure-field';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
@@ -31,7 +32,7 @@ const sizes = { card: ID1_WIDTH, sheet: A4_LENGTH } as const;
 /** The field of view by holding a card at two measured distances before the camera. */
 @Component({
   selector: 'oriel-card-measure',
-  imports: [MatButton, MatButtonToggle, MatButtonToggleGroup, FigureField, EdgeMarks],
+  imports: [MatButton, MatButtonToggle, MatButtonToggleGroup, FigureField, EdgeMarks, OpenedHeading],
   providers: [LiveCamera],
   templateUrl: './card-measure.html',
   styleUrl: './measure.scss',

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, type ElementRef, computed, effect, input, model, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, type ElementRef, afterRenderEffect, computed, input, model, signal, viewChild } from '@angular/core';
 
 type Edge = 'left' | 'right';
 
@@ -60,8 +60,9 @@ export class EdgeMarks {
   private readonly middle = computed(() => ({ x: this.places()[this.looked()], y: this.heightShare() * this.picture().height }));
 
   constructor() {
-    effect(() => this.whole().nativeElement.getContext('2d')?.drawImage(this.picture(), 0, 0));
-    effect(() => this.enlarge());
+    // A canvas that is given its size is emptied, so nothing is drawn before the template gave it.
+    afterRenderEffect({ write: () => void this.whole().nativeElement.getContext('2d')?.drawImage(this.picture(), 0, 0) });
+    afterRenderEffect({ write: () => this.enlarge() });
   }
 
   protected take(edge: Edge, event: PointerEvent): void {

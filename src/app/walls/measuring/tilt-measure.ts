@@ -1,19 +1,21 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { GeometryError } from '@oriel/shared/projection/geometry-error';
 import type { Point3 } from '@oriel/shared/projection/types';
 import { type Tilt, tiltFromSpot } from '@oriel/shared/viewer/measuring/tilt-from-spot';
 import { steadyMeanOf } from '@oriel/shared/viewer/measuring/uncertainty';
+import { OpenedHeading } from '../../core/opened-heading';
 import { plainMm } from '../../figures/words';
 import { degrees } from '../../screen/screen-measure';
 import { FaceTracking } from '../../tracking/face-tracking';
-import { worthWords } from '../means/sources';
+import { unmeasured, worthWords } from '../means/sources';
 import { WallKeeper } from '../set-up/wall-keeper';
 import { lensOf } from './lens';
 import { MarkedSpot } from './marked-spot';
+import { doubtOf } from './spot-doubt';
 import { SpotFields } from './spot-fields';
 import { Standing } from './standing';
 import { StandingView } from './standing-view';
+import { TakeResult } from './take-result';
 
 /** One figure stands for both: the less sure one. */
 const sureTo = ({ pitchRad, yawRad }: Tilt) => Math.max(pitchRad.uncertainty, yawRad.uncertainty);
@@ -21,7 +23,7 @@ const sureTo = ({ pitchRad, yawRad }: Tilt) => Math.max(pitchRad.uncertainty, ya
 /** The camera's pitch and yaw from someone standing at the marked spot. Only with the wall's own camera on this computer. */
 @Component({
   selector: 'oriel-tilt-measure',
-  imports: [MatButton, SpotFields, StandingView],
+  imports: [OpenedHeading, SpotFields, StandingView, TakeResult],
   providers: [FaceTracking, Standing],
   templateUrl: './tilt-measure.html',
   styleUrl: './measure.scss',
@@ -53,6 +55,13 @@ export class TiltMeasure {
     const said = (rad: number, positive: string, negative: string) => `${plainMm(Math.abs(degrees(rad)))}° ${rad >= 0 ? positive : negative}`;
     const { pitchRad, yawRad } = tilt;
     return `Turned ${said(pitchRad.value, 'up', 'down')} (±${plainMm(degrees(pitchRad.uncertainty), 2)}°) and ${said(yawRad.value, 'to the right', 'to the left')} (±${plainMm(degrees(yawRad.uncertainty), 2)}°). ${worthWords(this.keeper.setUp()!, { tiltRad: sureTo(tilt) })}`;
+  });
+
+  protected readonly doubt = computed(() => {
+    const [tilt, readings] = [this.tilt(), this.readings()];
+    if (!tilt || !readings) return '';
+    const stands = this.keeper.setUp()!.camera.uncertainty.pitchRad ?? unmeasured.tiltRad;
+    return doubtOf(readings, sureTo(tilt), stands, `±${plainMm(degrees(stands), 2)}°`);
   });
 
   protected async measure(): Promise<void> {

@@ -1,4 +1,4 @@
-import { agreeing, askFor, awaitedAfter, sideByOthers, squarePx, type Side } from './glass-shape';
+import { agreeing, askFor, awaitedAfter, ruledUncertainty, sideByOthers, squarePx, type Side } from './glass-shape';
 
 const fullHd = { widthMm: 941, heightMm: 529, widthPx: 1920, heightPx: 1080 };
 
@@ -25,6 +25,14 @@ describe('the shape of a glass', () => {
     expect(sideByOthers({ ...fullHd, heightPx: 1440 }, 'widthPx')).toBe(2562);
     expect(sideByOthers({ ...fullHd, widthMm: 600 }, 'heightMm')).toBe(337.5);
     expect(sideByOthers(fullHd, 'widthMm')).toBe(940.4);
+  });
+
+  it('counts as measured by a rule alone, and only once the sides agree with the px: 1 / 941 = 0.0010627 (by hand)', () => {
+    const assumed = { ...fullHd, uncertainty: null };
+    expect(ruledUncertainty(assumed, 1)).toBeCloseTo(0.0010627, 7);
+    expect(ruledUncertainty({ ...assumed, widthMm: 600 }, 1)).toBeNull();
+    expect(ruledUncertainty(assumed, null)).toBeNull();
+    expect(ruledUncertainty({ ...fullHd, uncertainty: 0.006 }, null)).toBe(0.006);
   });
 
   describe('while figures are still to be typed', () => {

@@ -16,6 +16,15 @@ export function squarePx({ widthMm, heightMm, widthPx, heightPx }: Sides): boole
   return Math.abs((widthMm / widthPx) / (heightMm / heightPx) - 1) <= sameShape;
 }
 
+/**
+ * How sure the width is once a figure was typed or taken, as a share of it. One side alone is no measure of the glass: it counts as measured
+ * once the sides that a rule gave agree with the px. Where no rule was held to it (null), a figure by the others leaves it as sure as it was.
+ */
+export function ruledUncertainty(glass: WallGlass, ruledMm: number | null): number | null {
+  if (ruledMm === null) return glass.uncertainty;
+  return squarePx(glass) ? ruledMm / glass.widthMm : null;
+}
+
 /** One figure changed, by which sides and px go together again. */
 export interface Agreeing {
   readonly words: string;

@@ -3,12 +3,13 @@ import { MatButton } from '@angular/material/button';
 import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
 import { WallGlass } from '@oriel/shared/contracts/wall-set-up';
 import { FigureField } from '../../figures/figure-field';
+import { plainMm } from '../../figures/words';
 import { CardOutline } from '../../screen/card-outline';
 import { diagonalOf, glassFromDiagonal, mmPerInch } from '../../screen/screen-measure';
 import { ID1_WIDTH } from '@oriel/shared/viewer/measuring/two-distances';
 import { Means } from '../means/means';
 import { unmeasured } from '../means/sources';
-import { type Side, agreeing, askFor, awaitedAfter, squarePx } from './glass-shape';
+import { type Side, agreeing, askFor, awaitedAfter, ruledUncertainty, squarePx } from './glass-shape';
 import { limitsOf } from './limits';
 import { WallKeeper } from './wall-keeper';
 
@@ -42,12 +43,13 @@ export class GlassStep {
 
   protected readonly glass = computed(() => this.keeper.setUp()!.glass);
   protected readonly diagonal = computed(() => diagonalOf(this.glass()) / unitMm[this.unit()]);
+  protected readonly size = computed(() => `The glass is then ${plainMm(this.glass().widthMm)} × ${plainMm(this.glass().heightMm)} mm.`);
   protected readonly sureMm = computed(() => (this.glass().uncertainty ?? unmeasured.glassScale) * this.glass().widthMm);
   protected readonly pxMm = computed(() => this.glass().widthMm / this.window.screen.width);
   /** Figures whose other was typed, while they are still as they were. */
   private readonly awaited = signal<readonly Side[]>([]);
-  /** How well the rule was read, where somebody said so, mm. */
-  private readonly ruledMm = signal<number>(usual.ruleMm);
+  /** How well the rule was read that gave the sides, mm; null where none was held to the glass here. */
+  private readonly ruledMm = signal<number | null>(null);
   /** What would make sides and px agree; null where they do. */
   private readonly disagreeing = computed(() => (squarePx(this.glass()) ? null : agreeing(this.glass())));
   /** While one figure of a pair is typed the other is not wrong yet: only asked for. */
@@ -55,37 +57,36 @@ export class GlassStep {
   protected readonly odd = computed(() => (this.next() ? null : this.disagreeing()));
 
   protected byRule(side: 'widthMm' | 'heightMm', mm: number): void {
+    this.ruledMm.update((known) => known ?? usual.ruleMm);
     this.typed(side);
     this.agree({ [side]: mm });
   }
 
   protected inPx(side: 'widthPx' | 'heightPx', px: number): void {
     this.typed(side);
-    const part = { [side]: Math.round(px) };
-    if (squarePx({ ...this.glass(), ...part })) this.awaited.set([]);
-    this.keeper.glass(part);
+    this.agree({ [side]: Math.round(px) });
   }
 
   private typed(side: Side): void {
     this.awaited.update((before) => awaitedAfter(before, side));
   }
 
-  /** One side alone is no measure of the glass: it counts as measured once both agree with the px. */
   protected agree(part: Partial<WallGlass>): void {
     const glass = { ...this.glass(), ...part };
-    const square = squarePx(glass);
-    if (square) this.awaited.set([]);
-    this.keeper.glass({ ...part, uncertainty: square ? this.ruledMm() / glass.widthMm : null });
+    if (squarePx(glass)) this.awaited.set([]);
+    this.keeper.glass({ ...part, uncertainty: ruledUncertainty(glass, this.ruledMm()) });
   }
 
   protected byDiagonal(length: number): void {
     const { widthPx: w, heightPx: h } = this.glass();
+    this.ruledMm.set(null);
     this.keeper.glass({ ...glassFromDiagonal(length * unitMm[this.unit()], w, h), uncertainty: usual.diagonalShare });
   }
 
   /** The page runs on the wall's own screen: a px of the page is one of the glass. */
   protected byCard(pxMm: number): void {
     const { screen, devicePixelRatio } = this.window;
+    this.ruledMm.set(null);
     this.keeper.glass({
       widthMm: screen.width * pxMm,
       heightMm: screen.height * pxMm,

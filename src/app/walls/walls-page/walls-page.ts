@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, type OnInit, computed, inject, input, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, Injector, type OnInit, afterNextRender, computed, inject, input, signal, viewChild } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
@@ -38,6 +38,8 @@ export class WallsPage implements OnInit {
   protected readonly loading = new Submission();
   protected readonly creating = new Submission(this.form);
   protected readonly naming = signal(false);
+  private readonly nameField = viewChild(TextField);
+  private readonly injector = inject(Injector);
   private readonly now = signal(new Date());
 
   /** The same as it is shown there, in two halves; empty where it is none. */
@@ -71,6 +73,11 @@ export class WallsPage implements OnInit {
 
   protected load(): Promise<void> {
     return this.loading.run(() => this.list.load().then(() => this.now.set(new Date())));
+  }
+
+  protected name(): void {
+    this.naming.set(true);
+    afterNextRender(() => this.nameField()?.focus(), { injector: this.injector });
   }
 
   protected create(): Promise<void> {
