@@ -20,6 +20,9 @@ test('the field of view is measured with a card held at two distances', async ({
   await hang(page);
   await step(page, 'Camera').click();
   await page.getByRole('button', { name: 'Measure it with a card' }).click();
+  const heading = page.getByRole('heading', { name: 'The field of view, with a card' });
+  await expect(heading).toBeFocused();
+  await expect(heading).toBeInViewport();
   await page.getByRole('button', { name: 'Start the camera' }).click();
   for (const shot of ['Near', 'Far'] as const) {
     const part = page.getByRole('region', { name: shot, exact: true });

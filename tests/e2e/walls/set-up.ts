@@ -20,6 +20,7 @@ export const figureOf = async (page: Page, name: string) => Number(await field(p
 export async function hang(page: Page, name = `Landing ${Date.now()}`): Promise<string> {
   await page.goto('/walls');
   await page.getByRole('button', { name: 'New wall' }).click();
+  await expect(page.getByLabel('Name of the wall')).toBeFocused();
   await page.getByLabel('Name of the wall').fill(name);
   await page.getByRole('button', { name: 'Set it up' }).click();
   await expect(page).toHaveURL(/\/walls\/[0-9a-f-]{36}/);

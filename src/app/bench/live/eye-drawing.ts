@@ -30,9 +30,11 @@ const SCALE_MM = 1000;
           }
           @for (mark of view.scale; track mark.words) {
             <path class="scale" [attr.d]="mark.line" />
-            <text [attr.x]="mark.at.x" [attr.y]="mark.at.y" [attr.font-size]="3.6 * view.unit">{{ mark.words }}</text>
           }
           <path class="cone" [attr.d]="view.cone" />
+          @for (mark of view.scale; track mark.words) {
+            <text class="over-lines" [attr.x]="mark.at.x" [attr.y]="mark.at.y" [attr.font-size]="3.6 * view.unit" [attr.stroke-width]="1.6 * view.unit">{{ mark.words }}</text>
+          }
           <path class="glass" [attr.d]="view.glass" />
           <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
           @for (other of view.others; track other.id) {

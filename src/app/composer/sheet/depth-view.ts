@@ -8,6 +8,7 @@ import { Viewer } from '../walk/viewer';
 import { describeEye } from '../../figures/words';
 import { acrossOf, sidesOf, withAcross } from '../../drawing/across';
 import { drawLines, type DrawnLine, drawSetting, glassNoteY, projectionLines, sightlines } from './depth-drawing';
+import { homeWordAt } from './home-word';
 import { followPointer } from '../../drawing/follow-pointer';
 import { type Held, pick } from './picking';
 import { drawnAt, drawnOnGlass, pointedAt } from '../../drawing/placing';
@@ -16,6 +17,8 @@ import { snapToRound, toMillimetre } from './snapping';
 
 /** So near to the eye its own words stand, px. */
 const besideEyePx = 90;
+/** A letter of the eye's words is about so wide, px. */
+const widePx = 5.8;
 
 /** Plan or section: the views in which depth is seen, and dragged. */
 @Component({
@@ -53,6 +56,15 @@ export class DepthView {
     const eye = this.viewer.eye();
     const at = drawnAt(this.frame(), { across: acrossOf(this.frame().view, eye), z: eye.z });
     return { at, words: `${this.viewer.atHome() ? 'home eye' : 'eye'} ${describeEye(eye)}` };
+  });
+  /** To which side of the eye its words stand, so that they stay on the paper. */
+  protected readonly eyeWordsLeft = computed(() => this.eye().at.x > this.frame().left + this.frame().width * 0.6);
+  protected readonly homeWord = computed(() => {
+    const { at, words } = this.eye();
+    const width = words.length * widePx;
+    const ring = { left: at.x - 9, top: at.y - 9, width: 18, height: 18 };
+    const beside = { left: this.eyeWordsLeft() ? at.x - 13 - width : at.x + 13, top: at.y + 8, width, height: 14 };
+    return homeWordAt(this.setting().home, this.plan() ? [ring, beside] : [ring]);
   });
   /** Out of the way of what is written beside the eye. */
   protected readonly zoneLabel = computed(() => {
