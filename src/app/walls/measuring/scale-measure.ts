@@ -25,7 +25,7 @@ const factorLimits = limitsOf(TrackerTuning.shape.scaleFactor);
   imports: [OpenedHeading, SpotFields, StandingView, TakeResult],
   providers: [FaceTracking, Standing],
   template: `
-    <h3 orielOpenedHeading>A viewer, by standing at a spot</h3>
+    <h2 orielOpenedHeading>A viewer, by standing at a spot</h2>
     <oriel-spot-fields />
     <p class="marginal">Measure the camera first: its field of view counts here as it is. This computer must have the wall’s camera; pictures are looked at on this page only, and not kept.</p>
     <oriel-standing-view (begin)="measure()" />
