@@ -9,6 +9,8 @@ export type WallRow = Selectable<Tables['wall']> & { saver: string | null };
 
 export const setUpOf = ({ set_up, scene_id }: Pick<WallRow, 'set_up' | 'scene_id'>): WallSetUp => ({
   ...set_up,
+  // Not there in what was stored before there was such a thing.
+  followingBefore: set_up.followingBefore ?? null,
   sceneId: scene_id,
 });
 

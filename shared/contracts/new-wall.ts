@@ -37,5 +37,6 @@ export const newWall = (name: string): WallSetUp => ({
   },
   zone: livingRoom('landscape').zone,
   tuning: usualTuning,
+  followingBefore: null,
   sceneId: null,
 });

@@ -80,12 +80,18 @@ export const TrackerTuning = z.object({
 });
 export type TrackerTuning = z.infer<typeof TrackerTuning>;
 
+/** How the picture follows, as far as the bench tunes it. */
+export const FollowingTuning = TrackerTuning.pick({ filter: true, displayDelayMs: true, longestHorizonMs: true });
+export type FollowingTuning = z.infer<typeof FollowingTuning>;
+
 export const WallSetUp = z.object({
   name: Name,
   glass: WallGlass,
   camera: WallCamera,
   zone: ZoneSchema,
   tuning: TrackerTuning,
+  /** How it followed before the bench last changed that: the way back. Null where nothing was changed, or it was gone back to. */
+  followingBefore: FollowingTuning.nullable().default(null),
   /** A scene of the same household; null while nothing is chosen. */
   sceneId: Id.nullable(),
 });

@@ -35,9 +35,9 @@ const DETECTOR_COST = DETECTOR_MS / (LANDMARKS_MS + DETECTOR_MS);
  * 10 or 11 a second of the step below. Plain wasm without SIMD is no step: where a browser lacks SIMD it is used throughout.
  */
 export const LADDER_STEPS: readonly LadderStep[] = [
-  { words: 'landmarks, each frame guarded', looking: { by: 'landmarks', guardEvery: 1, mostPerS: Infinity }, budgetMs: 55, cost: 1 },
-  { words: 'landmarks, every fifth frame guarded', looking: { by: 'landmarks', guardEvery: 5, mostPerS: Infinity }, budgetMs: 55, cost: guarded(5) },
-  { words: 'landmarks, every tenth frame guarded', looking: { by: 'landmarks', guardEvery: 10, mostPerS: Infinity }, budgetMs: 55, cost: guarded(10) },
+  { words: 'landmarks, checked at every frame', looking: { by: 'landmarks', guardEvery: 1, mostPerS: Infinity }, budgetMs: 55, cost: 1 },
+  { words: 'landmarks, checked every fifth frame', looking: { by: 'landmarks', guardEvery: 5, mostPerS: Infinity }, budgetMs: 55, cost: guarded(5) },
+  { words: 'landmarks, checked every tenth frame', looking: { by: 'landmarks', guardEvery: 10, mostPerS: Infinity }, budgetMs: 55, cost: guarded(10) },
   { words: 'landmarks, 20 a second, predicted between', looking: { by: 'landmarks', guardEvery: 10, mostPerS: 20 }, budgetMs: 55, cost: guarded(10) },
   { words: 'zoomed detector', looking: { by: 'detector', guardEvery: 1, mostPerS: Infinity }, budgetMs: 70, cost: DETECTOR_COST },
   { words: 'zoomed detector, 20 a second, predicted between', looking: { by: 'detector', guardEvery: 1, mostPerS: 20 }, budgetMs: 90, cost: DETECTOR_COST },

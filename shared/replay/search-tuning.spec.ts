@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { usualTuning } from '../contracts/new-wall';
 import { leastOverGrid } from './least-over-grid';
-import { searchTuning, TooLittleMotion, triedAtLeast } from './search-tuning';
+import { searchTuning, TooLittleMotion, triedAtLeast, tryTuning } from './search-tuning';
 import { madeUpRun, standsThenWalks } from './testing';
 import { mostJitterMm, unbeaten, wishes } from './wishes';
 
@@ -58,6 +58,14 @@ describe('tuning found in a run', () => {
   it('is the same every time, and quicker strays no more than today’s', () => {
     expect(searchTuning(run, usualTuning, 'across')).toEqual(across);
     expect(across.best.quicker.strayMs).toBeLessThanOrEqual(1.02 * across.today.strayMs);
+  });
+
+  it('judges a setting by itself as the search judged it', () => {
+    for (const tried of [across.today, across.best.calmer]) expect(tryTuning(run, tried.tuning, 'across')).toEqual(tried);
+  });
+
+  it('never looks farther ahead than a look and a frame of the screen can be old: 40 + 33 + 17 ms, which 120 ms covers', () => {
+    for (const wish of wishes) expect(across.best[wish].tuning.longestHorizonMs).toBeLessThanOrEqual(120);
   });
 
   it('marks three different points of the curve, each calmer than the one before by a share that is seen', () => {

@@ -52,12 +52,7 @@ export function searchTuning(
   direction: Direction,
   progress: (triedSoFar: number) => void = () => undefined,
 ): SearchResult {
-  const samples = onOneClock(run);
-  const known = laterKnown(samples);
-  const still = stillStretches(known);
-  const moving = movingStretches(known, direction);
-  requireEnough(still, moving, direction);
-  const judged: Judged = { ...excerptOf(samples, still, moving), known, direction };
+  const judged = judgedPart(run, direction);
   const costs = costsIn(direction);
   let asked = 0;
   const { tried, best } = leastOverGrid(
@@ -79,6 +74,10 @@ export function searchTuning(
   };
 }
 
+/** What one setting would have done with this run, in the figures of `searchTuning`. @throws TooLittleMotion */
+export const tryTuning = (run: readonly ReplaySample[], tuning: TrackerTuning, direction: Direction): TriedTuning =>
+  judge(judgedPart(run, direction), tuning, true);
+
 /** How many settings a search tries on the grid; refinement adds some forty. */
 export const triedAtLeast = (direction: Direction): number =>
   CUTOFFS_HZ.coarse.length * BETAS[direction].coarse.length * (direction === 'across' ? HORIZONS_MS.coarse.length : 1);
@@ -86,6 +85,15 @@ export const triedAtLeast = (direction: Direction): number =>
 interface Judged extends Excerpt {
   readonly known: LaterKnown;
   readonly direction: Direction;
+}
+
+function judgedPart(run: readonly ReplaySample[], direction: Direction): Judged {
+  const samples = onOneClock(run);
+  const known = laterKnown(samples);
+  const still = stillStretches(known);
+  const moving = movingStretches(known, direction);
+  requireEnough(still, moving, direction);
+  return { ...excerptOf(samples, still, moving), known, direction };
 }
 
 function judge(judged: Judged, tuning: TrackerTuning, withLag: boolean): TriedTuning {

@@ -31,7 +31,7 @@ test('live figures, landmarks on request, a run recorded while the network is go
   await expect(page.locator('video')).toHaveCount(0);
   await page.getByRole('button', { name: 'Start the camera' }).click();
   await expect(page.getByText('Following somebody.')).toBeVisible({ timeout: 60_000 });
-  await expect(page.getByText(/^person \d+$/)).toBeVisible();
+  await expect(page.getByText(/^\d+ s$/)).toBeVisible();
   const ladder = page.locator('oriel-instrument').filter({ has: page.getByRole('heading', { name: 'Ladder' }) });
   await expect(ladder).toContainText(/of 8: .*median step \d/);
   await expect(page.locator('video')).toHaveCount(0);

@@ -8,8 +8,10 @@ const unique = () => Math.random().toString(36).slice(2, 8);
 
 test('only owners and tuners find the bench', async ({ signedInPage }) => {
   const page = await signedInPage('viewer');
-  await page.goto('/bench');
-  await expect(page).toHaveURL(/\/scenes/);
+  for (const place of ['/bench', '/bench/runs']) {
+    await page.goto(place);
+    await expect(page.getByRole('heading', { name: 'The bench is for owners and tuners' })).toBeVisible();
+  }
   await expect(page.getByRole('link', { name: 'Bench' })).toHaveCount(0);
 });
 
@@ -31,7 +33,14 @@ test('a run is replayed through other settings, and the wished one put on the wa
   const after = await wallNow(page, wall.id);
   expect(after.revision).toBe(wall.revision + 1);
   expect(after.setUp.tuning.filter).not.toEqual(wall.setUp.tuning.filter);
-  expect({ ...after.setUp, tuning: null }).toEqual({ ...wall.setUp, tuning: null });
+  expect({ ...after.setUp, tuning: null, followingBefore: null }).toEqual({ ...wall.setUp, tuning: null });
+  // Today's figures follow at once, and a later visit still offers the way back and the wish.
+  const cutoffs = page.getByRole('row', { name: /^Cutoff at rest/ }).first();
+  const figures = async () => (await cutoffs.getByRole('cell').allTextContents()).map((text) => text.trim());
+  await expect.poll(async () => (await figures())[0]).toBe((await figures())[1]);
+  await page.reload();
+  await expect(page.getByRole('radio', { name: 'Calmer' })).toBeChecked({ timeout: 60_000 });
+  await expect(page.getByText('Before the bench last changed it')).toBeVisible();
   await page.getByRole('button', { name: 'Go back to what it was' }).click();
   await expect(page.getByText('follows as it did before')).toBeVisible();
   expect((await wallNow(page, wall.id)).setUp).toEqual(wall.setUp);

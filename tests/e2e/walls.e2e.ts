@@ -259,7 +259,7 @@ test('who may not tune sees the set-up and cannot change it', async ({ signedInP
   await page.goto('/walls');
   await expect(page.getByRole('button', { name: 'New wall' })).toHaveCount(0);
   await page.goto(`/walls/${id}`);
-  await expect(saved(page)).toHaveText('To look at');
+  await expect(saved(page)).toHaveText('View only');
   await expect(field(page, 'Width')).toHaveAttribute('readonly');
   await removeWall(tuner, id);
 });

@@ -1,15 +1,15 @@
 import { inject } from '@angular/core';
-import { type CanActivateFn, Router, type Routes } from '@angular/router';
+import type { CanMatchFn, Routes } from '@angular/router';
 import { Session } from '../core/session';
 import { BenchSubject } from './subject/bench-subject';
 
-/** The bench is for owners and tuners. */
-const forTuners: CanActivateFn = () => inject(Session).mayTune() || inject(Router).createUrlTree(['/scenes']);
+/** The bench is for owners and tuners; whoever else comes by its address is told so. */
+const forTuners: CanMatchFn = () => inject(Session).mayTune();
 
 export const benchRoutes: Routes = [
   {
     path: '',
-    canActivate: [forTuners],
+    canMatch: [forTuners],
     providers: [BenchSubject],
     loadComponent: () => import('./bench-page/bench-page').then((m) => m.BenchPage),
     children: [
@@ -37,4 +37,5 @@ export const benchRoutes: Routes = [
       },
     ],
   },
+  { path: '**', title: 'Bench · Oriel', loadComponent: () => import('./bench-page/not-for-you').then((m) => m.NotForYou) },
 ];

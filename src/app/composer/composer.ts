@@ -66,7 +66,7 @@ export class Composer {
   protected readonly ledgerOpen = signal(false);
   protected readonly saveState = this.keeper.autosave.state;
   protected readonly saveText = computed(() =>
-    this.store.readOnly() ? `Revision ${this.keeper.autosave.saved().revision}, to look at` : saveWords(this.saveState(), this.keeper.autosave.saved()),
+    this.store.readOnly() ? `Revision ${this.keeper.autosave.saved().revision}, view only` : saveWords(this.saveState(), this.keeper.autosave.saved()),
   );
   protected readonly trouble = computed(() => ['offline', 'failed', 'conflict'].includes(this.saveState().kind));
   protected readonly revision = computed(() => {

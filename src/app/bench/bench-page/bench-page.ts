@@ -1,7 +1,9 @@
 import { ChangeDetectionStrategy, Component, type OnInit, inject, input } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatOption, MatSelect } from '@angular/material/select';
-import { type IsActiveMatchOptions, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { type IsActiveMatchOptions, NavigationEnd, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import { filter, map, startWith } from 'rxjs';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
 import { BenchSubject } from '../subject/bench-subject';
@@ -23,6 +25,16 @@ export class BenchPage implements OnInit {
   readonly wall = input<string>();
 
   protected readonly bench = inject(BenchSubject);
+  private readonly router = inject(Router);
+  /** Whether what stands on the bench matters here: runs have their own wall. */
+  protected readonly choosing = toSignal(
+    this.router.events.pipe(
+      filter((event) => event instanceof NavigationEnd),
+      startWith(null),
+      map(() => !this.router.isActive('/bench/runs', hereAndBelow)),
+    ),
+    { requireSync: true },
+  );
   protected readonly loading = new Submission();
   protected readonly places = [
     { path: '/bench', word: 'Live', here: hereAlone },

@@ -39,13 +39,13 @@ const SCALE_MM = 1000;
           <circle class="lens" [attr.cx]="view.lens.x" [attr.cy]="view.lens.y" [attr.r]="view.unit" />
           @for (other of view.others; track other.id) {
             <circle class="other" [attr.cx]="other.at.x" [attr.cy]="other.at.y" [attr.r]="1.8 * view.unit" />
-            <text text-anchor="middle" [attr.x]="other.at.x" [attr.y]="other.at.y + 5.6 * view.unit" [attr.font-size]="4 * view.unit">person {{ other.id }}</text>
+            <text text-anchor="middle" [attr.x]="other.at.x" [attr.y]="other.at.y + 5.6 * view.unit" [attr.font-size]="4 * view.unit">another</text>
           }
           @if (view.eye; as eye) {
             <path class="sight" [attr.d]="view.sight" />
             <circle class="eye followed" [attr.cx]="eye.x" [attr.cy]="eye.y" [attr.r]="1.8 * view.unit" />
             @if (people().others.length) {
-              <text text-anchor="middle" [attr.x]="eye.x" [attr.y]="eye.y - 3.2 * view.unit" [attr.font-size]="4 * view.unit">person {{ people().followed }}</text>
+              <text text-anchor="middle" [attr.x]="eye.x" [attr.y]="eye.y - 3.2 * view.unit" [attr.font-size]="4 * view.unit">followed</text>
             }
           }
         </svg>

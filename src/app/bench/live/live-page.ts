@@ -22,7 +22,7 @@ import { EyeDrawing } from './eye-drawing';
 import { Instrument } from './instrument';
 import { readingsOf } from './instruments';
 import { Measures } from './measures';
-import { NOBODY, othersWords, peopleIn, type People } from './people';
+import { NOBODY, followedWords, othersWords, peopleIn, type People } from './people';
 import { isOn, trackingWords } from './tracking-words';
 
 /** The charts and the drawing are renewed this often: more is not read, and costs what is measured. */
@@ -46,6 +46,8 @@ export class LivePage {
   private readonly measures = new Measures(this.bench.subject().tuning);
   private readonly seen = signal<Point3 | null>(null);
   private readonly people = signal<People>(NOBODY);
+  /** Since when the one followed is the same; on the page's clock, ms. */
+  private readonly sinceMs = signal(0);
   private readonly renewed = signal(0);
   private eyeMs = 0;
 
@@ -63,6 +65,9 @@ export class LivePage {
   protected readonly eye = computed(() => (this.tracking.state() === 'following' ? this.seen() : null));
   protected readonly there = computed(() => (this.on() ? this.people() : NOBODY));
   protected readonly othersWords = computed(() => othersWords(this.there()));
+  protected readonly followedWords = computed(() =>
+    this.there().followed === null ? '–' : followedWords(Math.max(0, this.renewed() - this.sinceMs())),
+  );
   protected readonly readings = computed(() => readingsOf(this.measures, this.renewed() || performance.now()));
 
   constructor() {
@@ -72,7 +77,9 @@ export class LivePage {
       if (sample.receivedMs < this.eyeMs + EYE_MS) return;
       this.eyeMs = sample.receivedMs;
       this.seen.set(sample.found ? { ...sample.eye } : null);
-      this.people.set(peopleIn(sample));
+      const people = peopleIn(sample);
+      if (people.followed !== this.people().followed) this.sinceMs.set(sample.receivedMs);
+      this.people.set(people);
     });
     let frame = 0;
     const draw = (tMs: number) => {

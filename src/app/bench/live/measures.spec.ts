@@ -91,13 +91,13 @@ describe('the instruments', () => {
     for (let k = 0; k < 8; k++)
       measures.stand(nowMs - 2000 + 250 * k, {
         step: k < 4 ? 1 : 2,
-        words: 'landmarks, every tenth frame guarded',
+        words: 'landmarks, checked every tenth frame',
         lookedBy: 'landmarks',
         changes: k < 4 ? [] : [change],
       });
     const shown = reading('Ladder', { measures, nowMs });
     expect(shown.figure).toBe('3');
-    expect(shown.unit).toContain('every tenth frame guarded');
+    expect(shown.unit).toContain('checked every tenth frame');
     expect(shown.spread).toContain('changes in half a minute: 1, the last one looks took 60 ms');
     expect(shown.lines[0].points.map(({ y }) => y)).toEqual([2, 2, 2, 2, 3, 3, 3, 3]);
   });

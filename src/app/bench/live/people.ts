@@ -15,8 +15,15 @@ export const peopleIn = ({ found, viewer, others }: EyeSample): People => ({
   others: others.map(({ id, eye }) => ({ id, eye: { ...eye } })),
 });
 
-/** The others in words. */
+/** The others in words: how many, and how far off. Their numbers are the tracker's own and say nothing to anybody. */
 export function othersWords({ others }: People): string {
   if (others.length === 0) return 'nobody';
-  return others.map(({ id, eye }) => `person ${id} at ${(eye.z / 1000).toFixed(1)} m`).join(', ');
+  const distances = others.map(({ eye }) => `${(eye.z / 1000).toFixed(1)} m`).join(', ');
+  return `${others.length === 1 ? 'one more' : `${others.length} more`}, at ${distances}`;
+}
+
+/** For how long the same person has been followed. */
+export function followedWords(ms: number): string {
+  const seconds = Math.floor(ms / 1000);
+  return seconds < 60 ? `${seconds} s` : `${Math.floor(seconds / 60)} min ${seconds % 60} s`;
 }

@@ -10,6 +10,6 @@ export function differenceWords(today: Figures, other: Figures): string {
   const ms = other.strayMs - today.strayMs;
   const percent = Math.abs(Math.round(100 * share));
   const trembles = Math.abs(share) < ALIKE_SHARE ? 'trembles as today' : `trembles ${percent} % ${share < 0 ? 'less' : 'more'} than today`;
-  const strays = Math.abs(ms) < ALIKE_MS ? 'keeps up as well' : `is ${Math.abs(Math.round(ms))} ms ${ms < 0 ? 'nearer to' : 'farther from'} whoever moves`;
+  const strays = Math.abs(ms) < ALIKE_MS ? 'keeps up as well' : `keeps up ${Math.abs(Math.round(ms))} ms ${ms < 0 ? 'better' : 'less well'}`;
   return `${trembles}, and ${strays}`;
 }

@@ -1,7 +1,7 @@
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
 import { madeUpRun, standsThenWalks } from '@oriel/shared/replay/testing';
 import type { FromReplay } from './replay-messages';
-import { searchBoth } from './search-both';
+import { searchBoth, tryBoth } from './search-both';
 
 describe('searching both directions', () => {
   it('tells how far it has come, rising, and then both results', () => {
@@ -18,6 +18,17 @@ describe('searching both directions', () => {
     expect(shares).toEqual([...shares].sort((a, b) => a - b));
     const last = said[said.length - 1];
     expect(last.type === 'done' && 'found' in last.across && 'found' in last.along).toBe(true);
+  });
+
+  it('tries today’s setting alone as the search does, and gives nothing for a direction that is missing', () => {
+    const path = (tMs: number): [number, number, number] => [standsThenWalks(tMs)[0], 0, 1000];
+    const asked = { samples: madeUpRun(path, { untilMs: 10_000 }), today: usualTuning };
+    const said: FromReplay[] = [];
+    searchBoth(asked, (message) => said.push(message));
+    const last = said[said.length - 1];
+    const { across, along } = tryBoth(asked);
+    expect(last.type === 'done' && 'found' in last.across && last.across.found.today).toEqual(across);
+    expect(along).toBeNull();
   });
 
   it('says what to record where one direction is missing', () => {

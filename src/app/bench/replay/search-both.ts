@@ -1,12 +1,12 @@
-import { searchTuning, TooLittleMotion, triedAtLeast } from '@oriel/shared/replay/search-tuning';
+import { searchTuning, TooLittleMotion, triedAtLeast, tryTuning } from '@oriel/shared/replay/search-tuning';
 import type { Direction } from '@oriel/shared/replay/sample';
-import type { FromReplay, SearchAsked, Searched } from './replay-messages';
+import type { FromReplay, ReplayAsked, Searched, TriedBoth } from './replay-messages';
 
 /** Refinement tries about so many more than the grid. */
 const REFINED = 60;
 
 /** Searches both directions and tells how far it has come, in whole percent. */
-export function searchBoth({ samples, today }: SearchAsked, say: (message: FromReplay) => void): void {
+export function searchBoth({ samples, today }: Pick<ReplayAsked, 'samples' | 'today'>, say: (message: FromReplay) => void): void {
   const all = triedAtLeast('across') + triedAtLeast('along') + 2 * REFINED;
   let before = 0;
   let shown = 0;
@@ -26,4 +26,17 @@ export function searchBoth({ samples, today }: SearchAsked, say: (message: FromR
   const across = search('across');
   before = triedAtLeast('across') + REFINED;
   say({ type: 'done', across, along: search('along') });
+}
+
+/** Tries today's setting alone, in both directions. */
+export function tryBoth({ samples, today }: Pick<ReplayAsked, 'samples' | 'today'>): TriedBoth {
+  const tried = (direction: Direction) => {
+    try {
+      return tryTuning(samples, today, direction);
+    } catch (cause) {
+      if (cause instanceof TooLittleMotion) return null;
+      throw cause;
+    }
+  };
+  return { across: tried('across'), along: tried('along') };
 }

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { SearchResult } from '@oriel/shared/replay/search-tuning';
+import type { SearchResult, TriedTuning } from '@oriel/shared/replay/search-tuning';
 import { type Wish, wishes } from '@oriel/shared/replay/wishes';
 import { WELL_SHOWN } from '@oriel/shared/replay/what-it-shows';
 import { plainMm } from '../../figures/words';
@@ -17,16 +17,19 @@ import { differenceWords } from './difference-words';
 export class TradeOff {
   readonly found = input.required<SearchResult>();
   readonly wish = input.required<Wish>();
+  /** Today's setting where it was changed since the search. */
+  readonly now = input<TriedTuning | null>(null);
   /** Whose setting today's is. */
   readonly todayOf = input('');
 
+  protected readonly today = computed(() => this.now() ?? this.found().today);
   protected readonly best = computed(() => this.found().best[this.wish()]);
   protected readonly title = computed(() => titled(this.wish()));
-  protected readonly brings = computed(() => differenceWords(this.found().today, this.best()));
+  protected readonly brings = computed(() => differenceWords(this.today(), this.best()));
   protected readonly columns = computed(() => {
-    const { today, best } = this.found();
+    const { best } = this.found();
     return [
-      { name: 'Today', of: today, wished: false },
+      { name: 'Today', of: this.today(), wished: false },
       ...wishes.map((wish) => ({ name: titled(wish), of: best[wish], wished: wish === this.wish() })),
     ];
   });
@@ -36,7 +39,7 @@ export class TradeOff {
   });
   protected readonly words = computed(() => `Jitter at rest against straying in motion, ${this.found().direction}`);
   protected readonly lines = computed<ChartLine[]>(() => {
-    const { curve, today } = this.found();
+    const [{ curve }, today] = [this.found(), this.today()];
     const point = ({ strayMs, jitterMm }: { strayMs: number; jitterMm: number }) => ({ x: strayMs, y: jitterMm });
     // What lies far beyond the others would squeeze them into a corner.
     const wished = Object.values(this.found().best);

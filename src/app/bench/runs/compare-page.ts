@@ -5,6 +5,7 @@ import { Submission } from '../../core/submission';
 import { type ChartLine, LineChart } from '../charts/line-chart';
 import { tuningDifferences } from '../tuning/tuning-words';
 import { compared, overTime } from './compared';
+import { slowerWords } from './slower';
 import { MachineWords } from './machine-words';
 import { RunsStore, type WholeRun } from './runs-store';
 
@@ -28,6 +29,11 @@ export class ComparePage {
   protected readonly rows = computed(() => {
     const [first, second] = [this.first(), this.second()];
     return first && second && compared(first, second);
+  });
+  /** Where one run's machine was plainly slower. */
+  protected readonly slower = computed(() => {
+    const [first, second] = [this.first(), this.second()];
+    return first && second ? slowerWords(first, second) : '';
   });
   /** The settings the two were recorded with, where they differ. */
   protected readonly settings = computed(() => {

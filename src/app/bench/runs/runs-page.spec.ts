@@ -71,6 +71,14 @@ describe('the page of runs', () => {
     expect(removed).toEqual(['1']);
   });
 
+  it('ends renaming with Escape', async () => {
+    await press('Rename Hall');
+    const field = element().querySelector('form input')!;
+    field.dispatchEvent(new KeyboardEvent('keydown', { key: 'Escape', bubbles: true }));
+    await fixture.whenStable();
+    expect(element().querySelector('form')).toBeNull();
+  });
+
   it('compares the two that are ticked', async () => {
     for (const box of element().querySelectorAll<HTMLInputElement>('input[type=checkbox]')) box.click();
     await fixture.whenStable();

@@ -1,4 +1,4 @@
-import { Injectable, inject, signal } from '@angular/core';
+import { Injectable, computed, inject, signal } from '@angular/core';
 import {
   type RunHeader,
   type RunSample,
@@ -28,11 +28,14 @@ export class RunsStore {
   private readonly kept = signal<readonly WaitingRun[]>([]);
   /** Null until they were asked for. */
   readonly runs = this.known.asReadonly();
-  readonly waiting = this.kept.asReadonly();
+  /** What the server has does not wait, whatever this browser still keeps of it. */
+  readonly waiting = computed(() => this.kept().filter((run) => !this.isStored(run)));
 
   async load(): Promise<void> {
     await this.look();
     this.known.set((await this.api.call(listRuns, { params: this.here() })).runs);
+    // Sent, but the answer was lost on its way.
+    for (const run of this.kept()) if (this.isStored(run)) await this.shelf.drop(run.id).catch(() => undefined);
   }
 
   /** Finds what waits in this browser; a browser that keeps nothing has nothing waiting. */
@@ -102,6 +105,11 @@ export class RunsStore {
       if (toApiFailure(error).status !== 404) throw error;
     }
     this.known.update((runs) => runs?.filter(({ id }) => id !== runId) ?? null);
+  }
+
+  /** One that was recorded further since it was sent is not. */
+  private isStored({ id, body }: WaitingRun): boolean {
+    return this.known()?.some((run) => run.id === id && run.sampleCount >= body.samples.length) ?? false;
   }
 
   private renamed(runId: string, name: string): void {

@@ -66,10 +66,19 @@ describe('what stands on the bench', () => {
     expect(bench.subject().wallId).toBeNull();
   });
 
-  it('changes the tuning and nothing else', async () => {
+  it('changes the tuning and nothing else, but for keeping with the wall how it followed before', async () => {
     const { tuning } = wall.setUp;
+    const { filter, displayDelayMs, longestHorizonMs } = tuning;
     expect(await later(80)).toEqual({ kind: 'saved', before: tuning, after: { ...tuning, displayDelayMs: 80 } });
-    expect(server.wall.setUp).toEqual({ ...wall.setUp, tuning: { ...wall.setUp.tuning, displayDelayMs: 80 } });
+    const followingBefore = { filter, displayDelayMs, longestHorizonMs };
+    expect(server.wall.setUp).toEqual({ ...wall.setUp, tuning: { ...tuning, displayDelayMs: 80 }, followingBefore });
+  });
+
+  it('goes back on a later visit too', async () => {
+    await later(80);
+    await bench.load();
+    await bench.goBack('w');
+    expect(server.wall.setUp).toEqual(wall.setUp);
   });
 
   it('writes nothing over another’s save, tells whose it is, and the next press changes the newest', async () => {

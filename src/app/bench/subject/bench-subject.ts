@@ -1,6 +1,6 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
 import { usualTuning } from '@oriel/shared/contracts/new-wall';
-import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
+import type { TrackerTuning, WallSetUp } from '@oriel/shared/contracts/wall-set-up';
 import { type Wall, listWalls, readWall, saveWall } from '@oriel/shared/contracts/walls';
 import type { Glass, ViewingZone } from '@oriel/shared/projection/types';
 import { Api } from '../../core/api';
@@ -10,6 +10,7 @@ import { ThisScreen } from '../../screen/this-screen';
 import { trackingSetUp } from '../../screen/tracking-set-up';
 import type { TrackingSetUp } from '../../tracking/face-tracking';
 import { trackingOn } from '../../wall/wall-tuning';
+import { goneBack, tuned } from '../tuning/following-before';
 
 /** What stands on the bench: a wall's set-up and tuning, or those of this screen. */
 export interface Subject {
@@ -56,18 +57,26 @@ export class BenchSubject {
   }
 
   /**
-   * Changes a wall's tuning over the revision this page knows. Where somebody saved the wall meanwhile nothing is written, the newest is
-   * fetched, and applying once more changes that. @throws ApiFailure for anything else.
+   * Changes a wall's tuning over the revision this page knows, and keeps with the wall how it followed before. Where somebody saved the
+   * wall meanwhile nothing is written, the newest is fetched, and applying once more changes that. @throws ApiFailure for anything else.
    */
-  async apply(wallId: string, change: (tuning: TrackerTuning) => TrackerTuning): Promise<Applied> {
+  apply(wallId: string, change: (tuning: TrackerTuning) => TrackerTuning): Promise<Applied> {
+    return this.save(wallId, (setUp) => tuned(setUp, change));
+  }
+
+  /** Has a wall follow as it did before the bench last changed that; as `apply` does. */
+  goBack(wallId: string): Promise<Applied> {
+    return this.save(wallId, goneBack);
+  }
+
+  private async save(wallId: string, change: (setUp: WallSetUp) => WallSetUp): Promise<Applied> {
     const wall = this.known().find(({ id }) => id === wallId);
     if (!wall) throw new Error(`No wall ${wallId} on the bench.`);
-    const { setUp, revision } = wall;
-    const after = change(setUp.tuning);
+    const after = change(wall.setUp);
     try {
-      const body = { revision, setUp: { ...setUp, tuning: after } };
+      const body = { revision: wall.revision, setUp: after };
       this.replace((await this.api.call(saveWall, { params: { wallId }, body })).wall);
-      return { kind: 'saved', before: setUp.tuning, after };
+      return { kind: 'saved', before: wall.setUp.tuning, after: after.tuning };
     } catch (error) {
       const failure = toApiFailure(error);
       if (failure.failure.code !== 'revision-moved') throw failure;

@@ -3,12 +3,10 @@ import { MatButton } from '@angular/material/button';
 import type { TrackerTuning } from '@oriel/shared/contracts/wall-set-up';
 import { FailureNotice } from '../../core/failure-notice';
 import { Submission } from '../../core/submission';
-import { BenchSubject } from '../subject/bench-subject';
-import { takenBack } from './taken-back';
+import { type Applied, BenchSubject } from '../subject/bench-subject';
 import { tuningDifferences, type TuningDifference } from './tuning-words';
 
 interface Change {
-  readonly wallId: string;
   readonly name: string;
   readonly before: TrackerTuning;
   readonly after: TrackerTuning;
@@ -45,8 +43,16 @@ type Outcome =
         <p>{{ now.by }} changed {{ now.name }} meanwhile. Their changes stay; nothing of yours is written yet. Press again to put only this over the newest.</p>
       }
     </div>
-    @if (undoable(); as change) {
-      <button matButton="outlined" type="button" [disabled]="saving.busy()" (click)="goBack(change)">Go back to what it was</button>
+    @if (before().length) {
+      @if (!done()) {
+        <p>Before the bench last changed it, {{ wall()!.setUp.name }} followed otherwise:</p>
+        <ul class="figures">
+          @for (one of before(); track one.name) {
+            <li>{{ one.name }}: {{ one.before }}, now {{ one.after }}</li>
+          }
+        </ul>
+      }
+      <button matButton="outlined" type="button" [disabled]="saving.busy()" (click)="goBack()">Go back to what it was</button>
     }
     <oriel-failure-notice [failure]="saving.failure()" />
   `,
@@ -70,32 +76,32 @@ export class PutOnWall {
   protected readonly done = computed(() => ofKind(this.outcome(), 'done'));
   protected readonly back = computed(() => ofKind(this.outcome(), 'back'));
   protected readonly moved = computed(() => ofKind(this.outcome(), 'moved'));
-  protected readonly undoable = computed(() => (this.done()?.differences.length ? this.done()!.change : null));
+  protected readonly wall = computed(() => this.bench.walls().find(({ id }) => id === this.wallId()) ?? null);
+  /** What differs from how the wall followed before; the wall itself keeps that, so the way back is there on any later visit. */
+  protected readonly before = computed(() => {
+    const setUp = this.wall()?.setUp;
+    return setUp?.followingBefore ? tuningDifferences({ ...setUp.tuning, ...setUp.followingBefore }, setUp.tuning) : [];
+  });
 
   protected put(): Promise<void> {
-    return this.save(this.wallId(), this.change(), (change) => ({
+    return this.save((wallId) => this.bench.apply(wallId, this.change()), (change) => ({
       kind: 'done',
       change,
       differences: tuningDifferences(change.before, change.after),
     }));
   }
 
-  protected goBack({ wallId, before, after }: Change): Promise<void> {
-    return this.save(wallId, (now) => takenBack(now, before, after), (change) => ({ kind: 'back', change }));
+  protected goBack(): Promise<void> {
+    return this.save((wallId) => this.bench.goBack(wallId), (change) => ({ kind: 'back', change }));
   }
 
-  private save(
-    wallId: string | null,
-    change: (tuning: TrackerTuning) => TrackerTuning,
-    outcome: (change: Change) => Outcome,
-  ): Promise<void> {
+  private save(ask: (wallId: string) => Promise<Applied>, outcome: (change: Change) => Outcome): Promise<void> {
     return this.saving.run(async () => {
+      const wallId = this.wallId();
       if (!wallId) return;
-      const applied = await this.bench.apply(wallId, change);
+      const applied = await ask(wallId);
       const name = this.bench.walls().find(({ id }) => id === wallId)?.setUp.name ?? '';
-      this.outcome.set(
-        applied.kind === 'saved' ? outcome({ wallId, name, ...applied }) : { kind: 'moved', name, by: applied.by },
-      );
+      this.outcome.set(applied.kind === 'saved' ? outcome({ name, ...applied }) : { kind: 'moved', name, by: applied.by });
     });
   }
 }

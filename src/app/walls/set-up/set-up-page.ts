@@ -57,7 +57,7 @@ export class SetUpPage {
   protected readonly acting = new Submission();
   protected readonly saveState = this.keeper.autosave.state;
   protected readonly saveText = computed(() => {
-    if (!this.keeper.mayTune()) return 'To look at';
+    if (!this.keeper.mayTune()) return 'View only';
     if (Object.keys(this.keeper.problems()).length > 0) return 'Not saved: a figure needs another look';
     return saveWords(this.saveState(), this.keeper.autosave.saved());
   });

@@ -10,6 +10,7 @@ import { Submission } from '../../core/submission';
 import { TextField } from '../../core/text-field';
 import { accordingTo } from '../../core/zod-validator';
 import { FigureField } from '../../figures/figure-field';
+import { followingWords } from '../../figures/following-words';
 import { plainMm } from '../../figures/words';
 import { Means } from '../means/means';
 import { ScaleMeasure } from '../measuring/scale-measure';
@@ -39,6 +40,8 @@ export class ViewerStep implements OnInit {
   protected readonly ipd = limitsOf(shape.ipdMm.shape.value);
   protected readonly factor = limitsOf(shape.scaleFactor);
   protected readonly tuning = computed(() => this.keeper.setUp()!.tuning);
+
+  protected readonly follows = computed(() => followingWords(this.tuning()));
 
   protected readonly words = ({ ipdMm }: ViewerScale) => `${plainMm(ipdMm.value)} mm between the eyes, distances sure to ±${plainMm((100 * ipdMm.uncertainty) / ipdMm.value)} %`;
   protected readonly inUse = ({ ipdMm, scaleFactor }: ViewerScale) => ipdMm.value === this.tuning().ipdMm.value && scaleFactor === this.tuning().scaleFactor;
