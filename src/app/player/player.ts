@@ -10,7 +10,9 @@ import { FailureNotice } from '../core/failure-notice';
 import { Icon } from '../core/icon/icon';
 import { ThisScreen } from '../screen/this-screen';
 import { trackingSetUp } from '../screen/tracking-set-up';
+import { cameraOutlook } from '../tracking/camera-outlook';
 import { FaceTracking } from '../tracking/face-tracking';
+import type { TrackingState } from '../tracking/tracking-state';
 import { FollowingChoice } from './following-choice';
 import { keepAwake } from './keep-awake';
 import { type PlayerLine, type PlayerOffer, followingWords, lookingWords, offerWords, playerLine } from './player-words';
@@ -79,18 +81,24 @@ export class Player {
     });
   });
   /** What the switch says: whether a face is followed if it can be, and why it is not where it cannot. */
-  protected readonly followingSays = computed(() => followingWords(this.following.on(), this.tracking.state()));
+  protected readonly followingSays = computed(() => {
+    const state = this.tracking.state();
+    return followingWords(this.following.on(), state === 'off' || state === 'asking' ? (this.outlook() ?? state) : state);
+  });
   protected readonly lineSeen = computed(() => {
     const line = this.line();
     return line !== null && !(line.fades && this.faded().includes(line.about));
   });
 
+  /** What is known of the camera before it answers. */
+  private readonly outlook = signal<TrackingState | null>(null);
   private playing: Playing | null = null;
   private figuresTimer: ReturnType<typeof setInterval> | undefined;
 
   constructor() {
     const leaving = new AbortController();
     const awake = keepAwake(this.document);
+    void cameraOutlook(this.window.navigator).then((outlook) => this.outlook.set(outlook));
     const unwatch = this.tracking.watch(({ found, eye, capturedMs }) => {
       if (found) this.playing?.face(eye, capturedMs);
       else this.playing?.nobody(capturedMs);
