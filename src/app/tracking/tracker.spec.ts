@@ -87,6 +87,15 @@ describe('Tracker', () => {
     expect(look()).toBeNull();
   });
 
+  it('keeps the number of whoever walks to and fro for a minute without a gap', () => {
+    const numbers = Array.from({ length: 1800 }, (_, i) => {
+      const sway = Math.sin((2 * Math.PI * i) / 120);
+      room.face = { x: 320 + 150 * sway, y: 240, box: 90 + 15 * Math.cos((2 * Math.PI * i) / 200) };
+      return look() === null ? null : tracker.viewer;
+    });
+    expect(new Set(numbers)).toEqual(new Set([1]));
+  });
+
   it('takes no face of quite another size for the one it followed', () => {
     room.belief = 0.2;
     room.face!.box = 30;
