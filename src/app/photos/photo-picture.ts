@@ -17,7 +17,7 @@ import { addressOf } from '../core/api';
   `,
   styles: `
     :host { display: grid; grid-template: minmax(0, 1fr) / minmax(0, 1fr); place-items: center; width: 100%; height: 100%; overflow: hidden; background: var(--zone) center / 100% 100% no-repeat; }
-    img { width: 100%; height: 100%; object-fit: var(--fit, cover); opacity: 0; transition: opacity var(--ease); }
+    img { width: 100%; height: 100%; object-fit: cover; opacity: 0; transition: opacity var(--ease); }
     .here { opacity: 1; }
     span { padding: 8px; font-size: 12px; color: var(--pencil); text-align: center; }
   `,
