@@ -168,6 +168,7 @@ const places: Readonly<Record<string, Place>> = {
   'bench/runs': bench(() => '/bench/runs', 'Runs'),
   'bench/runs/:runId': bench((a) => `/bench/runs/${a}`, 'Nearer'),
   'bench/runs/compare': bench((a, b) => `/bench/runs/compare?a=${a}&b=${b}`, 'Capture to the page'),
+  'bench/**': plain('viewer', '/bench/runs', 'The bench is for owners and tuners'),
   'bench/mirror': bench(() => '/bench/mirror', 'The screen will blink.'),
 
   screen: {

@@ -5,6 +5,7 @@ import { BenchSubject } from './subject/bench-subject';
 
 /** The bench is for owners and tuners; whoever else comes by its address is told so. */
 const forTuners: CanMatchFn = () => inject(Session).mayTune();
+const forOthers: CanMatchFn = () => !inject(Session).mayTune();
 
 export const benchRoutes: Routes = [
   {
@@ -37,5 +38,5 @@ export const benchRoutes: Routes = [
       },
     ],
   },
-  { path: '**', title: 'Bench · Oriel', loadComponent: () => import('./bench-page/not-for-you').then((m) => m.NotForYou) },
+  { path: '**', title: 'Bench · Oriel', canMatch: [forOthers], loadComponent: () => import('./bench-page/not-for-you').then((m) => m.NotForYou) },
 ];
