@@ -2,20 +2,26 @@
 const BIN_MS = 1;
 /** Agreements needed before the clock is believed. */
 const LEAST_AGREEING = 10;
+/** A frame is answered after it was captured; the quickest of them within this. */
+const LONGEST_DELAY_MS = 1000;
 /** Most instants kept of each kind: three seconds of a fast camera. */
 const MOST_KEPT = 200;
 
 /**
  * Finds when frames were captured. A camera frame's timestamp is on a clock of its own; the same track played in a video element tells
  * when frames were captured on the page's clock, but not which. The commonest difference between the two, over all pairs, is that
- * between the clocks: the true pairs all share it, the false ones scatter or are fewer.
+ * between the clocks: the true pairs all share it, the false ones scatter or are fewer. An even camera's false pairs can agree too, a
+ * whole number of frames off; of those, none that would have a frame answered before it was captured, or long after, is believed.
  */
 export class CaptureClock {
   private readonly timestamps: number[] = [];
   private readonly captures: number[] = [];
+  /** The least by which an answer's time on the page's clock is beyond its frame's timestamp. */
+  private mostMs = Infinity;
 
-  /** A frame's own timestamp. */
-  noteFrame(timestampMs: number): void {
+  /** A frame's own timestamp, and when the page had what was seen in it. */
+  noteFrame(timestampMs: number, answeredMs: number): void {
+    this.mostMs = Math.min(this.mostMs, answeredMs - timestampMs);
     if (this.timestamps.length < MOST_KEPT) this.timestamps.push(timestampMs);
   }
 
@@ -28,6 +34,7 @@ export class CaptureClock {
   offsetMs(): number | null {
     const differences = this.captures
       .flatMap((capture) => this.timestamps.map((timestamp) => capture - timestamp))
+      .filter((difference) => difference <= this.mostMs && difference >= this.mostMs - LONGEST_DELAY_MS)
       .sort((a, b) => a - b);
     let first = 0;
     let best = { from: 0, count: 0 };

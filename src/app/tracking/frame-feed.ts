@@ -63,7 +63,7 @@ class StreamFeed implements FrameFeed {
   }
 
   answered(timestampMs: number): void {
-    if (this.learning) this.clock.noteFrame(timestampMs);
+    if (this.learning) this.clock.noteFrame(timestampMs, performance.now());
   }
 
   stop(): void {

@@ -54,7 +54,7 @@ function clockOffsetMs(looks: Seen['looks'], captures: readonly number[]): numbe
   const clock = new CaptureClock();
   const untilMs = captures.at(-1) ?? 0;
   for (const captureMs of captures) clock.noteCapture(captureMs);
-  for (const [timestampMs, receivedMs] of looks) if (receivedMs <= untilMs + CLOCK_SLACK_MS) clock.noteFrame(timestampMs);
+  for (const [timestampMs, receivedMs] of looks) if (receivedMs <= untilMs + CLOCK_SLACK_MS) clock.noteFrame(timestampMs, receivedMs);
   return clock.offsetMs();
 }
 
